@@ -1,0 +1,40 @@
+import tailwindcss from '@tailwindcss/vite';
+import react from '@vitejs/plugin-react';
+import { defineConfig } from 'vitest/config';
+
+/** One vitest project a kind of test; a test that hangs is cut, and none asserts speed. */
+const project = (name: string, testTimeout: number, extra: Record<string, unknown> = {}) => ({
+  extends: true as const,
+  test: {
+    name,
+    root: '.',
+    include: [`tests/${name}/**/*.test.{ts,tsx}`],
+    testTimeout,
+    hookTimeout: Math.max(testTimeout, 60_000),
+    execArgv: ['--import', 'tsx'],
+    ...extra,
+  },
+});
+
+export default defineConfig({
+  root: 'web',
+  plugins: [react(), tailwindcss()],
+  build: {
+    outDir: '../dist/web',
+    emptyOutDir: true,
+    manifest: true,
+    rollupOptions: { input: { app: 'web/index.html', watch: 'web/watch/main.tsx' } },
+  },
+  test: {
+    root: '.',
+    projects: [
+      project('crochet', 20_000),
+      project('outside', 20_000),
+      project('architecture', 30_000),
+      project('web', 10_000, { environment: 'jsdom' }),
+      project('migrations', 60_000),
+      project('api', 20_000, { maxWorkers: 2 }),
+      project('browser', 120_000, { fileParallelism: false }),
+    ],
+  },
+});
