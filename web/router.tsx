@@ -1,0 +1,40 @@
+import { type QueryClient } from '@tanstack/react-query';
+import { createBrowserRouter, type LoaderFunction, type RouteObject } from 'react-router-dom';
+import { type ComponentType } from 'react';
+import { AppShell } from './app/shell/app-shell.tsx';
+import { PageProblem } from './app/shell/page-problem.tsx';
+
+/** What a page file exports: `loader(client)` fills the cache, `Component` reads it, `ErrorBoundary` says what went wrong. */
+interface PageModule {
+  Component: ComponentType;
+  loader?: (client: QueryClient) => LoaderFunction;
+  ErrorBoundary?: ComponentType;
+}
+type Page = () => Promise<PageModule>;
+
+/** With the binding at the left: for people who have signed in. */
+const IN_THE_HOUSE: Record<string, Page> = {};
+
+/** Without it: covers and letters. */
+const AT_THE_DOOR: Record<string, Page> = {};
+
+const routes = (pages: Record<string, Page>, client: QueryClient): RouteObject[] =>
+  Object.entries(pages).map(([path, page]) => ({
+    path,
+    errorElement: <PageProblem />,
+    lazy: async () => {
+      const { loader, ...rest } = await page();
+      return loader ? { ...rest, loader: loader(client) } : rest;
+    },
+  }));
+
+/** The table of pages. Each is fetched when somebody goes there. */
+export const createRouter = (client: QueryClient) =>
+  createBrowserRouter([
+    ...routes(AT_THE_DOOR, client),
+    {
+      element: <AppShell />,
+      children: [{ errorElement: <PageProblem />, children: routes(IN_THE_HOUSE, client) }],
+    },
+    { path: '*', element: <PageProblem /> },
+  ]);
