@@ -1,0 +1,53 @@
+import { createServer } from 'node:http';
+import { createApp } from './app.ts';
+import { EnvError, readEnv, type Env } from './env.ts';
+import { orderlyEnd } from './http/shutdown.ts';
+import { closeDeps, openDeps } from './platform/deps.ts';
+import { NewerDatabase, refuseNewer } from './platform/migrations.ts';
+import { startWorker } from './worker.ts';
+
+/** A request that is not answered by then has its connection closed; statements in the database end before. */
+const REQUEST_MS = 15_000;
+/** Keeps a connection open a little longer than balancers do, so that they never send into a closing one. */
+const KEEP_ALIVE_MS = 65_000;
+
+async function serve(env: Env): Promise<void> {
+  const deps = openDeps(env);
+  await refuseNewer(deps.db);
+  const readiness = { accepting: true };
+  const server = createServer(createApp(deps, { readiness }));
+  server.headersTimeout = REQUEST_MS;
+  server.keepAliveTimeout = KEEP_ALIVE_MS;
+  const worker = env.worker ? await startWorker(deps) : null;
+
+  const end = orderlyEnd({
+    server,
+    readiness,
+    drainMs: env.drainMs,
+    cleanUps: [
+      ...(worker ? [{ name: 'worker', run: () => worker.stop() }] : []),
+      { name: 'connections', run: () => closeDeps(deps) },
+    ],
+    log: deps.log,
+    exit: (code) => process.exit(code),
+  });
+  process.on('SIGTERM', () => void end());
+  process.on('SIGINT', () => void end());
+
+  server.on('error', (err) => {
+    deps.log.fatal({ err }, 'the port cannot be used');
+    process.exit(1);
+  });
+  server.listen(env.port, env.host, () => {
+    deps.log.info({ address: server.address() }, 'listening');
+    process.send?.('listening');
+  });
+}
+
+try {
+  await serve(readEnv());
+} catch (err) {
+  if (!(err instanceof EnvError) && !(err instanceof NewerDatabase)) throw err;
+  console.error(`Roundelay does not start:\n${err.message}`);
+  process.exitCode = 1;
+}
