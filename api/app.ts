@@ -1,4 +1,6 @@
 import express, { Router, type Express, type Request } from 'express';
+import { accountRoutes } from './features/account/account.routes.ts';
+import { studioRoutes } from './features/studios/studios.routes.ts';
 import { noStore, securityHeaders } from './http/headers.ts';
 import { healthRoutes, type Readiness } from './http/health.ts';
 import { limit, READS, WRITES } from './http/limits.ts';
@@ -33,6 +35,7 @@ function countedCalls(deps: Deps): express.RequestHandler {
 function apiRoutes(deps: Deps): Router {
   const router = Router();
   router.use(noStore, sameOrigin(deps), readSession(deps), countedCalls(deps), express.json({ limit: JSON_LIMIT }));
+  router.use(accountRoutes(deps), studioRoutes(deps));
   router.use(noRoute, problemHandler(deps, personIdOf));
   return router;
 }

@@ -1,5 +1,6 @@
 import { pathToFileURL } from 'node:url';
 import { readEnv } from './env.ts';
+import { accountTasks } from './features/account/account.tasks.ts';
 import { sweepRequestKeys } from './http/idempotency.ts';
 import { sweepLimits } from './http/limits.ts';
 import { sweepSessions } from './http/session.ts';
@@ -11,6 +12,7 @@ import { mailTasks } from './platform/mail.ts';
 export function allTasks(deps: Deps): Tasks {
   return {
     ...mailTasks(deps),
+    ...accountTasks(deps),
     'sweep-housekeeping': async () => {
       const now = deps.clock.now();
       await sweepSessions(deps.db, now);
@@ -23,6 +25,7 @@ export function allTasks(deps: Deps): Tasks {
 /** What is done by the clock. */
 export const TIMETABLE: Timetable = {
   'sweep-housekeeping': '17 * * * *',
+  'sweep-tokens': '23 3 * * *',
 };
 
 /** Works off jobs until stopped. */
