@@ -2,6 +2,9 @@ import tailwindcss from '@tailwindcss/vite';
 import react from '@vitejs/plugin-react';
 import { defineConfig } from 'vitest/config';
 
+/** Brings up the database, storage and mailbox that tests share. */
+const HOUSE = ['tests/support/house.ts'];
+
 /** One vitest project a kind of test; a test that hangs is cut, and none asserts speed. */
 const project = (name: string, testTimeout: number, extra: Record<string, unknown> = {}) => ({
   extends: true as const,
@@ -23,7 +26,7 @@ export default defineConfig({
     outDir: '../dist/web',
     emptyOutDir: true,
     manifest: true,
-    rollupOptions: { input: { app: 'web/index.html', watch: 'web/watch/main.tsx' } },
+    rolldownOptions: { input: { app: 'web/index.html', watch: 'web/watch/main.tsx' } },
   },
   test: {
     root: '.',
@@ -31,10 +34,10 @@ export default defineConfig({
       project('crochet', 20_000),
       project('outside', 20_000),
       project('architecture', 30_000),
-      project('web', 10_000, { environment: 'jsdom' }),
-      project('migrations', 60_000),
-      project('api', 20_000, { maxWorkers: 2 }),
-      project('browser', 120_000, { fileParallelism: false }),
+      project('web', 10_000, { environment: 'jsdom', setupFiles: ['tests/support/quiet-console.ts'] }),
+      project('migrations', 60_000, { globalSetup: HOUSE }),
+      project('api', 20_000, { globalSetup: HOUSE, maxWorkers: 2 }),
+      project('browser', 120_000, { globalSetup: HOUSE, fileParallelism: false }),
     ],
   },
 });
