@@ -7,8 +7,12 @@ export const paths = {
   sheet: (patternId: string) => `/patterns/${patternId}/sheet`,
   editions: (patternId: string) => `/patterns/${patternId}/editions`,
   studio: () => '/studio',
+  openStudio: () => '/studio/open',
   account: () => '/account',
   signIn: (next?: string) => `/sign-in${next ? `?next=${encodeURIComponent(next)}` : ''}`,
-  signUp: () => '/sign-up',
+  signUp: (wants?: 'studio') => `/sign-up${wants ? `?for=${wants}` : ''}`,
+  confirm: () => '/confirm',
+  reset: () => '/reset',
+  invitation: () => '/invitation',
   forgotten: () => '/forgotten',
 } as const;
