@@ -1,34 +1,10 @@
 import { type LucideIcon } from 'lucide-react';
-import { type ButtonHTMLAttributes, type ReactNode, useId } from 'react';
-import { Link, type LinkProps } from 'react-router-dom';
+import { type ButtonHTMLAttributes, useId } from 'react';
 import { cx } from '../lib/class-names.ts';
+import { inside, look, shortcuts, type Look } from './button-look.tsx';
 import { Icon } from './icon.tsx';
-import { KeyCaps } from './key-cap.tsx';
 
-export type ButtonKind = 'plain' | 'primary' | 'quiet' | 'harm';
-export type ButtonSize = 'usual' | 'row' | 'player' | 'tall' | 'dock';
-
-interface Look {
-  kind?: ButtonKind;
-  size?: ButtonSize;
-  icon?: LucideIcon;
-  keys?: readonly string[];
-  children?: ReactNode;
-}
-
-const look = (kind: ButtonKind, size: ButtonSize, extra?: string) =>
-  cx('btn', kind !== 'plain' && `btn-${kind}`, size !== 'usual' && `btn-${size}`, extra);
-
-const inside = ({ icon, keys, children }: Look) => (
-  <>
-    {icon && <Icon of={icon} size={18} />}
-    {children}
-    {keys && <KeyCaps keys={keys} />}
-  </>
-);
-
-const shortcuts = (keys?: readonly string[]) =>
-  keys ? { 'aria-keyshortcuts': keys.join('+').replace('Ctrl', 'Control') } : {};
+export { type ButtonKind, type ButtonSize } from './button-look.tsx';
 
 export type ButtonProps = Look & {
   /** Why it cannot be pressed yet. It keeps the focus and its reason is read out; show the reason in words beside it too. */
@@ -65,23 +41,6 @@ export function Button({
         </span>
       )}
     </button>
-  );
-}
-
-/** A link that looks like a button. */
-export function LinkButton({
-  kind = 'plain',
-  size = 'usual',
-  icon,
-  keys,
-  className,
-  children,
-  ...rest
-}: Look & LinkProps) {
-  return (
-    <Link {...rest} {...shortcuts(keys)} className={look(kind, size, className)}>
-      {inside({ ...(icon ? { icon } : {}), ...(keys ? { keys } : {}), children })}
-    </Link>
   );
 }
 

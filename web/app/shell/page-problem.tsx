@@ -1,7 +1,8 @@
 import { isRouteErrorResponse, useLocation, useRevalidator, useRouteError } from 'react-router-dom';
 import { ProblemError, UnreachableError } from '../../lib/http.ts';
 import { paths } from '../../lib/paths.ts';
-import { Button, LinkButton } from '../../ui/button.tsx';
+import { Button } from '../../ui/button.tsx';
+import { LinkButton } from '../../ui/link-button.tsx';
 
 const statusOf = (error: unknown): number => {
   if (error instanceof ProblemError) return error.problem.status;
