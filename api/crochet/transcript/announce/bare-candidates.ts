@@ -1,0 +1,55 @@
+import { type Sentences } from '../sentences.ts';
+import { type Token } from '../tokens.ts';
+import { type Candidate } from './candidate.ts';
+import { announcementStart, startsClause } from './candidates.ts';
+import { isCounted, readNumberList } from './number-list.ts';
+
+const WORKING = 'SPDFE';
+
+/**
+ * A number at the head of a sentence with nothing counted after it may announce the line of that number: `Five, we're
+ * back to regular`, `13's easy`, `The tenth is for the ribbon`, `Fourth time around`, `6 to 9 is only sc`.
+ */
+export function bareCandidates(tokens: readonly Token[], i: number, sentences: Sentences): Candidate[] {
+  const token = tokens[i]!;
+  if (token.kind !== 'N' && token.kind !== 'O') return [];
+  if (token.isGuess || tokens[i - 1]?.kind === 'U' || tokens[i - 1]?.kind === '#') return [];
+  const list = readNumberList(tokens, i, true, true);
+  if (list === null) return [];
+  const next = tokens[list.end];
+  const isTime = token.kind === 'O' && next?.kind === 't';
+  const isCount = isCounted(tokens, list.end) && !(token.kind === 'O' && next?.text === 'places');
+  if (!isTime && (isCount || next?.kind === 'U' || next?.kind === 'E')) return [];
+  if (list.from === 1 && !tokens.slice(i, i + 14).some((one) => one.kind === 'V')) return [];
+  if (token.kind === 'O' && (Number(token.value) === 1 || next?.kind === 'H' || next?.kind === 'Z')) return [];
+  const strength = isTime ? 1.8 : strengthOf(tokens, i, list.end, list.to - list.from + 1, sentences);
+  if (strength <= 0) return [];
+  const at = announcementStart(tokens, i, sentences);
+  const base = { kind: 'line' as const, at, end: isTime ? list.end + 1 : list.end, mark: i, unit: null, needs: null };
+  return [{ ...base, lines: { type: 'named', from: list.from, to: list.to }, strength }];
+}
+
+function strengthOf(tokens: readonly Token[], i: number, end: number, many: number, sentences: Sentences): number {
+  const next = tokens[end]?.kind ?? '.';
+  const before = tokens[i - 1]?.kind ?? '.';
+  if (!worksSoon(tokens, end)) return many > 1 ? 0.4 : 0;
+  const isHead = startsClause(tokens, i);
+  const atSentence = i - sentences.startOf[i]! <= 3;
+  if (many > 2) return isHead ? 2 : 1.5;
+  if (many === 2) return isHead ? 1.2 : 0.7;
+  if (tokens[i]!.kind === 'O') return before === 'p' || !isHead ? 0.3 : 1.4;
+  if (!isHead) return 0;
+  if (next === 'v' || next === '=') return atSentence ? 1.3 : 0.9;
+  if (next === ',' || next === '.') return atSentence ? 0.9 : 0.45;
+  if (next === '&') return 0.2;
+  if ('aIw~c'.includes(next)) return atSentence ? 0.7 : 0.4;
+  return 0.2;
+}
+
+/** Whether work is spoken of within the next words. */
+function worksSoon(tokens: readonly Token[], from: number): boolean {
+  for (let i = from; i < Math.min(tokens.length, from + 22); i++) {
+    if (WORKING.includes(tokens[i]!.kind) || tokens[i]!.kind === 'N') return true;
+  }
+  return false;
+}

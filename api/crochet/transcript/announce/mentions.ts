@@ -1,0 +1,67 @@
+import { type Sentences } from '../sentences.ts';
+import { type Token } from '../tokens.ts';
+
+const MENTIONING = new Set([
+  'before',
+  'like',
+  'as',
+  'than',
+  'from',
+  'since',
+  'during',
+  'of',
+  'finished',
+  'recap',
+  'through',
+  'between',
+  'in between',
+  'at',
+  'when',
+  'where',
+  'while',
+  'around',
+  'above',
+  'below',
+  'under',
+  'under round',
+  'after',
+  'same',
+]);
+const REACHING = new Set([
+  'until',
+  'till',
+  'to the end of',
+  'finish with',
+  'finish on',
+  'up to',
+  'get to',
+  'gets you to',
+  'end with',
+  'takes you to',
+  'that takes you',
+]);
+const PAST = new Set(['was', 'were', 'had', 'did']);
+
+/**
+ * Whether a numbered round is only spoken of: a recap, a look back or ahead, a place on the work.
+ * @returns `until` where it is the last line that others are worked up to, `mention` where it is just spoken of, or null
+ */
+export function isMention(
+  tokens: readonly Token[],
+  i: number,
+  end: number,
+  sentences: Sentences,
+): 'until' | 'mention' | null {
+  let j = i - 1;
+  while (j >= 0 && (tokens[j]!.kind === 'a' || tokens[j]!.kind === '~') && i - j < 4) j -= 1;
+  const before = j >= sentences.startOf[i]! ? tokens[j] : undefined;
+  if (PAST.has(tokens[end]?.text ?? '')) return 'mention';
+  if (before === undefined) return null;
+  if (REACHING.has(before.text) || (before.text === 'with' && /^(?:finish|done|end)$/.test(tokens[j - 1]?.text ?? '')))
+    return 'until';
+  if (before.text === 'of' && /^(?:end|finish)$/.test(tokens[j - 1]?.text ?? '')) return 'until';
+  if (PAST.has(before.text)) return 'mention';
+  if (before.kind === 'b' || before.kind === 'R' || before.kind === 'n' || MENTIONING.has(before.text))
+    return 'mention';
+  return null;
+}

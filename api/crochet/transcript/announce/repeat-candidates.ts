@@ -1,0 +1,44 @@
+import { type Sentences } from '../sentences.ts';
+import { type Token } from '../tokens.ts';
+import { type Candidate } from './candidate.ts';
+import { announcementStart, startsClause } from './candidates.ts';
+
+/** `Next, increase in each`, `and the one after that is …`, `and around once more`. */
+export function oneMore(tokens: readonly Token[], i: number, sentences: Sentences): Candidate[] {
+  const token = tokens[i]!;
+  const next = tokens[i + 1];
+  const isNext = token.kind === 'X' && startsClause(tokens, i) && (next?.kind === ',' || next?.kind === 'v');
+  const isAround = token.kind === 'A' && /^(?:once|one|again)/.test(next?.text ?? '') && startsClause(tokens, i);
+  if (!isNext && !isAround) return [];
+  const at = announcementStart(tokens, i, sentences);
+  return [
+    { kind: 'line', at, end: i + 1, mark: i, unit: null, lines: { type: 'next', many: 1 }, strength: 0.7, needs: null },
+  ];
+}
+
+/** `repeat row two, two more times`, `until there are six of them`. */
+export function repeatCandidates(tokens: readonly Token[], i: number, sentences: Sentences): Candidate[] {
+  const start = Math.max(sentences.startOf[i]!, i - 14);
+  const before = tokens.slice(start, i);
+  const base = {
+    kind: 'line' as const,
+    at: announcementStart(tokens, start, sentences),
+    end: i + 1,
+    mark: start,
+    unit: null,
+    needs: null,
+  };
+  const number = before.findLast((one) => one.kind === 'N');
+  if (number === undefined) return [];
+  const hasLine = before.some((one) => one.kind === 'U');
+  if (tokens[i]!.kind === 't') {
+    const isMore = before.at(-1)?.kind === 'm';
+    const repeat = before.findIndex((one) => one.kind === 'R');
+    if (!isMore || !hasLine || repeat < 0) return [];
+    const at = announcementStart(tokens, start + repeat, sentences);
+    return [{ ...base, at, lines: { type: 'next', many: Number(number.value) }, strength: 1.8 }];
+  }
+  const until = before.findIndex((one) => one.text === 'until' || one.text === 'till');
+  if (until < 0 || !hasLine) return [];
+  return [{ ...base, lines: { type: 'until', last: Number(number.value) }, strength: 1.2 }];
+}

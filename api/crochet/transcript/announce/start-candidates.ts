@@ -1,0 +1,131 @@
+import { type Sentences } from '../sentences.ts';
+import { type Token } from '../tokens.ts';
+import { type Candidate } from './candidate.ts';
+import { announcementStart } from './candidates.ts';
+
+const NEAR = 34;
+/** What turns a start into a suggestion, a habit or another way. */
+const UNLESS = /\b(?:if|you may|you could|you can|or|every|each|when|whenever|isn't|counts?)\b/;
+const isIdle = (tokens: readonly Token[]) => UNLESS.test(tokens.map((one) => one.text).join(' '));
+
+/** What begins a piece without a number: a starting chain, a ring, a first row that is only described. */
+export function startCandidates(
+  tokens: readonly Token[],
+  sentences: Sentences,
+  numbered: readonly Candidate[],
+): readonly Candidate[] {
+  const found: Candidate[] = [];
+  tokens.forEach((token, i) => {
+    if (token.kind === 'C') found.push(...chainCandidate(tokens, i, sentences));
+    if (token.kind === 'V') found.push(...ringCandidate(tokens, i, sentences, numbered));
+    if (token.kind === 'H' || token.kind === 'K' || token.kind === 'U' || token.kind === 'S') {
+      found.push(...firstRow(tokens, i, sentences));
+    }
+  });
+  return found;
+}
+
+/** `chain eight`, `eight chains`, `a chain of seven`, `start by chaining twenty nine`. */
+function chainCandidate(tokens: readonly Token[], i: number, sentences: Sentences): Candidate[] {
+  const after = tokens[i + 1]?.kind === 'a' || tokens[i + 1]?.text === 'of' ? i + 2 : i + 1;
+  let number = tokens[after]?.kind === 'N' ? after : -1;
+  if (number < 0 && tokens[i - 1]?.kind === 'N') number = i - 1;
+  if (number < 0) {
+    for (let j = i + 1; j < Math.min(tokens.length, i + 4); j++) {
+      if (tokens[j]!.kind === 'N') {
+        number = j;
+        break;
+      }
+      if (!'a~w,'.includes(tokens[j]!.kind) || (tokens[j]!.kind === ',' && tokens[j + 1]?.kind !== '~')) break;
+    }
+  }
+  if (number < 0) return [];
+  const start = sentences.startOf[i]!;
+  const before = tokens.slice(Math.max(start, i - 9), i);
+  const n = Number(tokens[number]!.value);
+  if (n < 3 || isIdle(before)) return [];
+  const next = tokens[Math.max(i, number) + 1]?.kind ?? '.';
+  const isCountedSpace = tokens[Math.max(i, number) + 1]?.kind === 'Z';
+  if (isCountedSpace || before.some((one) => 'KSPD'.includes(one.kind)) || (n < 5 && next === 'T')) return [];
+  const lines = { type: 'chain' as const, n: correctedChain(tokens, Math.max(i, number) + 1, n) };
+  const at = announcementStart(tokens, Math.min(i, number), sentences);
+  return [
+    {
+      kind: 'foundation',
+      at,
+      end: Math.max(i, number) + 1,
+      mark: at,
+      unit: null,
+      lines,
+      strength: n < 4 ? 0.3 : 0.6,
+      needs: null,
+    },
+  ];
+}
+
+/** `chain twenty six, no, sorry, twenty seven`: the last number before the talk goes on. */
+function correctedChain(tokens: readonly Token[], from: number, n: number): number {
+  let value = n;
+  for (let i = from; i < Math.min(tokens.length, from + 12); i++) {
+    const token = tokens[i]!;
+    if (token.kind === '|' || token.kind === 'S' || token.kind === 'U') break;
+    if (token.kind === 'N' && tokens.slice(from, i).some((one) => one.kind === 'Y' || one.text === 'no'))
+      value = Number(token.value);
+  }
+  return value;
+}
+
+/** `six singles into a magic ring`: the first round, said by its ring. Where its number follows, both are one. */
+function ringCandidate(
+  tokens: readonly Token[],
+  i: number,
+  sentences: Sentences,
+  numbered: readonly Candidate[],
+): Candidate[] {
+  const start = sentences.startOf[i]!;
+  const end = sentences.endOf[i]!;
+  const near = tokens.slice(Math.max(start, i - 12), Math.min(end, i + 12));
+  if (isIdle(near)) return [];
+  const hasWork = near.some((one) => one.kind === 'N' || one.kind === 'S');
+  const at = i - start < 12 ? start : Math.max(start, i - 3);
+  const named = numbered.find(
+    (one) =>
+      one.lines.type === 'named' && one.lines.from === 1 && one.at >= at && one.at <= i + 14 && one.strength > 1.9,
+  );
+  const base = { kind: 'line' as const, at, unit: 'round' as const, needs: 'start' as const };
+  const lines = { type: 'named' as const, from: 1, to: 1 };
+  if (named !== undefined && named.at > at && hasWork)
+    return [{ ...base, end: named.end, mark: named.mark, lines, strength: named.strength + 0.2 }];
+  if (!hasWork) return [];
+  return [{ ...base, end: at, mark: at, lines, strength: 1.3 }];
+}
+
+/** Right after a starting chain: `slip stitch in the second chain from the hook`, `one row of slip stitch`. */
+function firstRow(tokens: readonly Token[], i: number, sentences: Sentences): Candidate[] {
+  const token = tokens[i]!;
+  const start = sentences.startOf[i]!;
+  const end = Math.min(sentences.endOf[i]!, i + NEAR);
+  const ahead = tokens.slice(Math.max(start, i - 10), end);
+  if (token.kind === 'U' && !/^(?:one|a|single|1|only)$/.test(tokens[i - 1]?.text ?? '')) return [];
+  if (token.kind === 'K' && tokens[i + 1]?.kind !== 'C' && tokens[i + 2]?.kind !== 'C' && tokens[i + 3]?.kind !== 'C')
+    return [];
+  if (
+    token.kind === 'S' &&
+    !ahead.some((one) => one.kind === 'E' || one.kind === 'A' || one.kind === 'C' || one.text === 'down')
+  )
+    return [];
+  if (!ahead.some((one) => one.kind === 'S') && token.kind !== 'U' && token.kind !== 'H') return [];
+  const at = i - start < 12 ? start : i;
+  return [
+    {
+      kind: 'line',
+      at,
+      end: at,
+      mark: at,
+      unit: String(token.value).startsWith('round') ? 'round' : null,
+      lines: { type: 'named', from: 1, to: 1 },
+      strength: token.kind === 'S' ? 0.7 : 0.9,
+      needs: 'chain',
+    },
+  ];
+}

@@ -1,0 +1,96 @@
+import { type Base } from './instruct/resolve.ts';
+import { spell, sumOf, type Unit } from './work/units.ts';
+
+/** A counted line of the piece as far as it is read, for what comes after it. */
+export interface ReadSoFar {
+  readonly from: number | null;
+  readonly to: number | null;
+  readonly units: readonly Unit[];
+  readonly base: number | null;
+  readonly said: number | null;
+  readonly verdict: 'agrees' | 'differs' | 'does-not-fit' | 'unread' | 'no-total';
+}
+
+/** What the words of the first line after a chain tell about where it begins and how far it goes. */
+export interface ChainStart {
+  readonly chains: number;
+  readonly isJoined: boolean;
+  readonly bothSides: boolean;
+  /** `third chain from the hook`. */
+  readonly nth: number | null;
+}
+
+/** The places that a starting chain offers. */
+export function basesOnChain({ chains, isJoined, bothSides, nth }: ChainStart): readonly Base[] {
+  if (isJoined)
+    return [
+      { n: chains, cost: 0 },
+      { n: chains - 1, cost: 1 },
+    ];
+  const around = 2 * (chains - 1) - 1;
+  const along = nth === null ? chains - 1 : chains - nth + 1;
+  const bases: Base[] = [
+    { n: along, cost: 0 },
+    { n: along + 1, cost: nth !== null && nth > 2 ? 0.1 : 1.2 },
+    { n: chains - 2, cost: nth === null ? 0.5 : 1 },
+    { n: chains - 3, cost: 1.4 },
+    { n: around, cost: bothSides ? 0 : 1 },
+    { n: 1, cost: 1.6 },
+  ];
+  return distinct(
+    bothSides ? [{ n: around, cost: 0 }, ...bases.map((base) => ({ ...base, cost: base.cost + 1 }))] : bases,
+  );
+}
+
+/** The places that a line leaves, the likeliest first: its stitches and chains, its stitches, its spaces and gaps. */
+export function basesAfter(line: ReadSoFar, namesSpaces: boolean): readonly Base[] {
+  const { makes } = sumOf(line.units);
+  const bases: Base[] = [];
+  if (line.verdict === 'unread') return line.said === null ? [] : [{ n: line.said, cost: 0 }];
+  if (line.verdict === 'does-not-fit') {
+    if (line.said !== null) bases.push({ n: line.said, cost: 0 });
+    bases.push({ n: makes, cost: line.said === null ? 0 : 0.6 });
+    return distinct(bases);
+  }
+  bases.push({ n: makes, cost: 0 });
+  if (line.verdict === 'differs' && line.said !== null) bases.push({ n: line.said, cost: 0.5 });
+  const words = spell(line.units);
+  const groups = words.filter((word) => word.startsWith('['));
+  const chains = words.filter((word) => word === 'ch').length;
+  const inner = groups.reduce((sum, word) => sum + (word.match(/ch(?:,ch)*/g)?.length ?? 0), 0);
+  const runs = chainRuns(words);
+  const shells = words.filter((word) => word.startsWith('[') || /^[3-9]/.test(word)).length;
+  const extra = namesSpaces ? 0 : 0.5;
+  if (inner > 0)
+    bases.push(
+      { n: makes + inner, cost: 0.2 + extra },
+      { n: inner, cost: 0.4 + extra },
+      { n: inner + runs, cost: 0.4 + extra },
+    );
+  if (chains > 0)
+    bases.push(
+      { n: makes - chains, cost: 0.9 },
+      { n: runs, cost: 0.5 + extra },
+      { n: makes - chains + runs, cost: 0.6 },
+    );
+  if (shells > 1)
+    bases.push(
+      { n: shells, cost: 0.7 + extra },
+      { n: shells + 1, cost: 0.8 + extra },
+      { n: shells + inner, cost: 0.6 + extra },
+      { n: 2 * shells, cost: 0.9 + extra },
+      { n: shells - 1, cost: 1 + extra },
+      { n: shells + 2, cost: 1 + extra },
+    );
+  return distinct(bases);
+}
+
+function chainRuns(words: readonly string[]): number {
+  return words.filter((word, n) => word === 'ch' && words[n - 1] !== 'ch').length;
+}
+
+function distinct(bases: readonly Base[]): readonly Base[] {
+  const best = new Map<number, number>();
+  for (const base of bases) if (base.n > 0) best.set(base.n, Math.min(base.cost, best.get(base.n) ?? Infinity));
+  return [...best].map(([n, cost]) => ({ n, cost })).sort((a, b) => a.cost - b.cost);
+}

@@ -1,0 +1,159 @@
+import { periodOf, type Unit } from '../work/units.ts';
+import { BARE } from './event.ts';
+import { type Element } from './roles.ts';
+
+/** A way in which the phrases of a line may belong together. Repeats still open carry `times: 0`. */
+export interface Assembly {
+  readonly units: readonly Unit[];
+  /** What speaks against it: 0 is what anybody would take it to mean. */
+  readonly cost: number;
+}
+
+interface Node {
+  readonly unit: Unit;
+  readonly sentence: number;
+}
+
+interface Partial {
+  readonly nodes: readonly Node[];
+  /** Nodes before this index are part of no later group, unless the whole line is repeated. */
+  readonly closed: number;
+  readonly corner: Unit | null;
+  readonly cost: number;
+}
+
+const MOST = 60;
+
+/** Puts phrases together in every likely way: which of them a repeat takes in, what stands in one place. */
+export function assemble(elements: readonly Element[]): readonly Assembly[] {
+  let partials: Partial[] = [{ nodes: [], closed: 0, corner: null, cost: 0 }];
+  elements.forEach((element, index) => {
+    const next = partials.flatMap((partial) => extend(partial, element, elements, index));
+    partials = next.sort((a, b) => a.cost - b.cost).slice(0, MOST);
+  });
+  return partials.map(({ nodes, cost }) => ({ units: nodes.map((node) => node.unit), cost }));
+}
+
+function extend(partial: Partial, element: Element, elements: readonly Element[], index: number): Partial[] {
+  const { sentence } = element;
+  switch (element.type) {
+    case 'unit':
+      return element.options.map((units, n) => ({
+        ...partial,
+        nodes: [...partial.nodes, ...units.map((unit) => ({ unit: element.fills ? open([unit]) : unit, sentence }))],
+        closed: element.fills ? partial.nodes.length + units.length : partial.closed,
+        cost: partial.cost + 0.4 * n,
+      }));
+    case 'plain':
+      return [partial];
+    case 'times':
+      return repeat(partial, element.n, sentence);
+    case 'around':
+      return repeat(partial, 0, sentence);
+    case 'oneplace':
+      return [gather(partial, sentence)];
+    case 'corner':
+      return corner(partial, elements, index);
+  }
+}
+
+function open(units: readonly Unit[]): Unit {
+  return { type: 'repeat', units, times: 0 };
+}
+
+/** Tries a repeat on the phrases of its own sentence, on all since the last repeat, and on the whole line. */
+function repeat(partial: Partial, times: number, sentence: number): Partial[] {
+  const { nodes, closed } = partial;
+  const openAlready = nodes.some(({ unit }) => unit.type === 'repeat' && unit.times === 0);
+  if (nodes.length === 0) return [{ ...partial, cost: partial.cost + (times > 0 ? 0.5 : 0) }];
+  if (closed >= nodes.length) {
+    const last = nodes.at(-1)!.unit;
+    const isEcho = times === 0 || openAlready || (last.type === 'repeat' && last.times === times);
+    if (isEcho) return [{ ...partial, cost: partial.cost + (times > 0 && !openAlready ? 0.2 : 0.1) }];
+  }
+  const starts = startsOf(nodes, closed, sentence);
+  return starts.flatMap(({ start, cost }) => {
+    const group = nodes.slice(start).map((node) => node.unit);
+    if (group.length === 0) return [];
+    const period = periodOf(group);
+    const before = nodes.slice(0, start);
+    const made = (units: readonly Unit[], extra: number): Partial => ({
+      ...partial,
+      nodes: [...before, { unit: { type: 'repeat', units, times }, sentence }],
+      closed: before.length + 1,
+      cost: partial.cost + cost + extra,
+    });
+    return period.length < group.length ? [made(period, 0), made(group, 1)] : [made(group, 0)];
+  });
+}
+
+function startsOf(nodes: readonly Node[], closed: number, sentence: number): { start: number; cost: number }[] {
+  const inSentence = nodes.findIndex((node, n) => n >= closed && node.sentence === sentence);
+  const likely = inSentence >= 0 ? inSentence : closed < nodes.length ? closed : 0;
+  const starts = new Map<number, number>([[likely, 0]]);
+  const add = (start: number, cost: number) => {
+    if (start >= 0 && start < nodes.length && !starts.has(start)) starts.set(start, cost);
+  };
+  add(closed, 0.5);
+  nodes.forEach((node, n) => {
+    if (n > 0 && n > closed && node.sentence !== nodes[n - 1]!.sentence) add(n, 0.6);
+  });
+  add(0, 0.9);
+  for (let n = closed; n < nodes.length && starts.size < 9; n++) add(n, 1.3);
+  return [...starts].map(([start, cost]) => ({ start, cost }));
+}
+
+/** Stitches and chains that were just said go into one place. */
+function gather(partial: Partial, sentence: number): Partial {
+  let start = partial.nodes.length;
+  while (
+    start > partial.closed &&
+    partial.nodes[start - 1]!.sentence === sentence &&
+    isSimple(partial.nodes[start - 1]!.unit)
+  )
+    start -= 1;
+  const units = partial.nodes.slice(start).map((node) => node.unit);
+  const one = onePlace(units);
+  if (one === null) return partial;
+  return { ...partial, nodes: [...partial.nodes.slice(0, start), { unit: one, sentence }] };
+}
+
+/** A corner: what is said right after it stands in it, or the corner told before comes again. */
+function corner(partial: Partial, elements: readonly Element[], index: number): Partial[] {
+  const run: Unit[] = [];
+  const { sentence } = elements[index]!;
+  for (let n = index + 1; n < elements.length; n++) {
+    const element = elements[n]!;
+    if (element.type !== 'unit' || element.fills || element.sentence > sentence + 40) break;
+    run.push(...element.options[0]!);
+    if (!isSimple(run.at(-1)!) || run.length > 3) break;
+  }
+  const told = run[1]?.type === 'chain' ? onePlace(run.slice(0, 3)) : null;
+  if (told !== null) return [partial];
+  const known = partial.nodes.find(({ unit }) => unit.type === 'oneplace')?.unit ?? partial.corner;
+  return known === null
+    ? [partial]
+    : [
+        { ...partial, nodes: [...partial.nodes, { unit: known, sentence }] },
+        { ...partial, cost: partial.cost + 0.5 },
+      ];
+}
+
+function isSimple(unit: Unit): boolean {
+  return unit.type === 'chain' || (unit.type === 'stitch' && unit.inOne === 1);
+}
+
+/** Unlike stitches, or stitches and chains, in one place; null where they are all alike or none. */
+export function onePlace(units: readonly Unit[]): Unit | null {
+  const parts = units.flatMap((unit) =>
+    unit.type === 'chain'
+      ? Array.from({ length: unit.many }, () => 'ch')
+      : unit.type === 'stitch'
+        ? Array.from({ length: unit.times }, () => unit.stitch)
+        : [],
+  );
+  if (units.length < 2 || parts.length < 2 || parts.length > 24) return null;
+  return parts.every((part) => part === parts[0]) && parts[0] !== BARE
+    ? { type: 'stitch', stitch: parts[0]!, inOne: parts.length, times: 1 }
+    : { type: 'oneplace', parts, times: 1 };
+}

@@ -1,0 +1,124 @@
+import { settleStitches } from '../work/settle.ts';
+import { spell, sumOf, type Unit } from '../work/units.ts';
+import { assemble } from './assemble.ts';
+import { type Event } from './event.ts';
+import { type Base, resolve } from './resolve.ts';
+import { castNumbers, type Casting, type Element } from './roles.ts';
+import { startingChains } from './starting-chain.ts';
+
+/** Where a line stands: what it may work into, and the stitch in hand. */
+export interface Setting {
+  readonly bases: readonly Base[];
+  readonly stitch: string;
+  readonly chainCounts: boolean | null;
+  /** Works of other lines that this one may be a copy of, with what speaks against it. */
+  readonly copies: readonly { readonly units: readonly Unit[]; readonly cost: number }[];
+  /** Whether words say that nothing is shaped. */
+  readonly isPlain: boolean;
+}
+
+/** One way to take a line, with its standing among the others. */
+export interface Choice {
+  readonly units: readonly Unit[];
+  readonly said: number | null;
+  readonly fit: 'fits' | 'misfit' | 'unknown';
+  readonly base: number | null;
+  readonly score: number;
+  /** How far ahead of the next different reading. */
+  readonly lead: number;
+}
+
+const FIT_GAIN = 4;
+const SAID_GAIN = 3;
+const LOST_REPEAT = 6;
+const SURE_TOTAL = 1.5;
+
+/** Weighs every way of taking the phrases of a line against the places there are and the totals that were said. */
+export function chooseWork(events: readonly Event[], setting: Setting): Choice | null {
+  const choices: Choice[] = [];
+  const hasTimes = events.some((event) => event.type === 'times');
+  for (const { kept, rest, cost } of prefixes(events)) {
+    const later = rest.filter((event) => event.type === 'number');
+    for (const casting of castNumbers(kept)) {
+      const idle = [...casting.idle, ...later];
+      for (const elements of startingChains(casting.elements, setting.chainCounts)) {
+        for (const assembly of assemble(elements.elements)) {
+          const before = casting.cost + cost + elements.cost + assembly.cost;
+          if (assembly.units.length > 0)
+            weigh(assembly.units, before, idle, setting, !hasTimes && isRepeatable(elements.elements), choices);
+        }
+      }
+    }
+  }
+  addWhole(events, setting, choices);
+  return best(choices);
+}
+
+function isRepeatable(elements: readonly Element[]): boolean {
+  return !elements.some((one) => one.type === 'unit' && one.fills);
+}
+
+/** The phrases of the first sentences, the rest being talk: needed where a line is told twice. */
+function prefixes(events: readonly Event[]): { kept: readonly Event[]; rest: readonly Event[]; cost: number }[] {
+  const out = [{ kept: events, rest: [] as readonly Event[], cost: 0 }];
+  const borders = events.flatMap((event, n) => (n > 0 && event.sentence !== events[n - 1]!.sentence ? [n] : []));
+  for (const border of borders.slice(0, 6)) {
+    const rest = events.slice(border);
+    const units = rest.filter((event) => event.type === 'unit').length;
+    if (units === 0 && !rest.some((event) => event.type === 'times' || event.type === 'around')) continue;
+    const times = rest.some((event) => event.type === 'times') ? LOST_REPEAT : 0;
+    out.push({ kept: events.slice(0, border), rest, cost: 0.6 + 0.35 * units + times });
+  }
+  return out;
+}
+
+/** Readings of the whole line at once: plain work, and copies of other lines. */
+function addWhole(events: readonly Event[], setting: Setting, choices: Choice[]): void {
+  const numbers = events.filter((event) => event.type === 'number');
+  const units = events.filter((event) => event.type === 'unit').length;
+  const times = events.some((event) => event.type === 'times') ? 3 : 0;
+  const plain: Unit = { type: 'repeat', units: [{ type: 'stitch', stitch: '?', inOne: 1, times: 1 }], times: 0 };
+  if (setting.isPlain) weigh([plain], 0.4 + units * 0.8 + times, numbers, setting, false, choices);
+  for (const copy of setting.copies)
+    weigh(copy.units, copy.cost + units * 0.6 + times, numbers, setting, true, choices);
+}
+
+function weigh(
+  units: readonly Unit[],
+  cost: number,
+  idle: Casting['idle'],
+  setting: Setting,
+  mayImply: boolean,
+  choices: Choice[],
+): void {
+  const settled = settleStitches(units, setting.stitch);
+  const totals = idle.filter((event) => event.asTotal >= SURE_TOTAL).map((event) => event.n);
+  for (const resolved of resolve(settled, setting.bases, totals, mayImply)) {
+    const { makes } = sumOf(resolved.units);
+    const said = saidTotal(idle, makes);
+    const fit = resolved.fit === 'fits' ? FIT_GAIN : resolved.fit === 'unknown' ? 1 : 0;
+    const agrees = said === makes ? SAID_GAIN : 0;
+    const score = fit + agrees - cost - resolved.cost;
+    choices.push({ units: resolved.units, said, fit: resolved.fit, base: resolved.base, score, lead: 0 });
+  }
+}
+
+/** The total among the numbers left over: one that equals the work, else the one said most like a total. */
+function saidTotal(idle: Casting['idle'], makes: number): number | null {
+  const equal = idle.find((event) => event.n === makes && event.asTotal > -0.3);
+  if (equal !== undefined) return makes;
+  const likely = idle.filter((event) => event.asTotal >= SURE_TOTAL && event.n > 2);
+  return likely.sort((a, b) => b.asTotal - a.asTotal)[0]?.n ?? null;
+}
+
+function best(choices: readonly Choice[]): Choice | null {
+  let first: Choice | null = null;
+  for (const choice of choices) if (first === null || choice.score > first.score + 1e-9) first = choice;
+  if (first === null) return null;
+  const spelled = spell(first.units).join(' ');
+  let second = -Infinity;
+  for (const choice of choices) {
+    if (choice.score > second && spell(choice.units).join(' ') !== spelled) second = choice.score;
+  }
+  return { ...first, lead: first.score - second };
+}

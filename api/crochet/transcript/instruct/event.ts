@@ -1,0 +1,27 @@
+import { type Unit } from '../work/units.ts';
+
+/** What a spoken phrase comes to, before it is known how the phrases of a line belong together. */
+export type Event = {
+  /** Token index at which it stands, and the sentence it is in. */
+  readonly at: number;
+  readonly end: number;
+  readonly sentence: number;
+} & (
+  | {
+      readonly type: 'unit';
+      readonly options: readonly (readonly Unit[])[];
+      readonly fills: boolean;
+    }
+  | {
+      readonly type: 'number';
+      readonly n: number;
+      readonly asTotal: number;
+      readonly asItem: number;
+      readonly asTimes: number;
+    }
+  | { readonly type: 'times'; readonly n: number }
+  | { readonly type: 'around' | 'oneplace' | 'corner' | 'plain' | 'correction' }
+);
+
+/** What stitch a bare number, an increase or a decrease is worked in. */
+export const BARE = '?';

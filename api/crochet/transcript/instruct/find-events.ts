@@ -1,0 +1,76 @@
+import { type Event } from './event.ts';
+import { type Made, RULES } from './grammar.ts';
+import { type Letters } from './letters.ts';
+
+/** Runs the grammar over the letters of an instruction. */
+export function findEvents(letters: Letters): readonly Event[] {
+  const events: Event[] = [];
+  for (let i = 0; i < letters.text.length;) {
+    const found = matchAt(letters, i);
+    if (found === null) {
+      const number = numberEvent(letters, i);
+      if (number !== null) events.push(number);
+      i += 1;
+      continue;
+    }
+    if (found.event !== null) events.push(found.event);
+    i += found.length;
+  }
+  return events;
+}
+
+function matchAt(letters: Letters, i: number): { event: Event | null; length: number } | null {
+  for (const { pattern, make } of RULES) {
+    pattern.lastIndex = i;
+    const text = pattern.exec(letters.text)?.[0];
+    if (text === undefined || text === '') continue;
+    const made = make(letters.tokens.slice(i, i + text.length), text);
+    if (made === null) continue;
+    const place = { at: letters.at[i]!, end: letters.at[i + text.length - 1]! + 1, sentence: letters.sentence[i]! };
+    const event = eventOf(made, place);
+    return { event, length: text.length };
+  }
+  return null;
+}
+
+function eventOf(made: Made, place: { at: number; end: number; sentence: number }): Event | null {
+  if (made.type === 'nothing') return null;
+  if (made.type === 'times') return { ...place, type: 'times', n: made.n };
+  if (made.type !== 'unit') return { ...place, type: made.type };
+  return { ...place, type: 'unit', options: made.options, fills: made.fills ?? false };
+}
+
+/** A number on its own may be a total, stitches of the kind in hand, a repeat, or talk; what stands beside it says how likely. */
+function numberEvent(letters: Letters, i: number): Event | null {
+  const token = letters.tokens[i]!;
+  if (token.kind !== 'N') return null;
+  const before = letters.text[i - 1] ?? '.';
+  const beforeThat = letters.text[i - 2] ?? '.';
+  const after = letters.text[i + 1] ?? '.';
+  const isAlone = '.|,'.includes(before) && '.|'.includes(after);
+  let asTotal = 0;
+  if (before === '=' || (before === 'w' && beforeThat === '=')) asTotal += 1.6;
+  if (isAlone) asTotal += before === ',' ? 1 : 1.5;
+  if (after === 'G' || after === '=') asTotal += 1.2;
+  if (after === 'E' || (after === 'w' && letters.text[i + 2] === 'E')) asTotal += 0.7;
+  if (before === 'c') asTotal += 1;
+  if ('.|'.includes(after)) asTotal += 0.4;
+  if (before === 'p' || after === 'w') asTotal -= 0.4;
+  if (token.isGuess) asTotal -= 1;
+  const asItem =
+    ('&,.|~pwFmYIg'.includes(before) ? 0.6 : 0) +
+    ('&,wF.'.includes(after) ? 0.6 : 0) -
+    (before === '=' ? 0.5 : 0) -
+    (after === 'G' ? 0.2 : 0);
+  const asTimes = after === 'R' || after === 'w' ? 0.8 : 0.2;
+  return {
+    type: 'number',
+    at: letters.at[i]!,
+    end: letters.at[i]! + 1,
+    sentence: letters.sentence[i]!,
+    n: Number(token.value),
+    asTotal,
+    asItem,
+    asTimes,
+  };
+}

@@ -1,0 +1,166 @@
+import { type Token } from '../tokens.ts';
+import { type Unit } from '../work/units.ts';
+import { BARE } from './event.ts';
+
+/** What a pattern makes of the tokens that it matched. */
+export type Made =
+  | {
+      readonly type: 'unit';
+      readonly options: readonly (readonly Unit[])[];
+      readonly fills?: boolean;
+    }
+  | { readonly type: 'times'; readonly n: number }
+  | { readonly type: 'around' | 'oneplace' | 'corner' | 'plain' | 'correction' | 'nothing' };
+
+interface Rule {
+  readonly pattern: RegExp;
+  readonly make: (matched: readonly Token[], letters: string) => Made | null;
+}
+
+const number = (tokens: readonly Token[], nth = 0): number =>
+  Number(tokens.filter((token) => token.kind === 'N')[nth]?.value ?? 1);
+const stitch = (tokens: readonly Token[], nth = 0): string =>
+  String(tokens.filter((token) => token.kind === 'S')[nth]?.value ?? BARE);
+const isPlural = (token: Token | undefined): boolean => token?.text.endsWith('s') ?? false;
+
+const st = (name: string, times: number, inOne = 1): Unit => ({ type: 'stitch', stitch: name, inOne, times });
+const tog = (name: string, many: number, times = 1): Unit => ({ type: 'together', stitch: name, many, times });
+const unit = (...units: Unit[]): Made => ({ type: 'unit', options: [units] });
+const either = (...options: Unit[][]): Made => ({ type: 'unit', options });
+const fills = (...units: Unit[]): Made => ({ type: 'unit', options: [units], fills: true });
+const nothing: Made = { type: 'nothing' };
+
+/**
+ * The grammar of a spoken instruction, over the letters of `lexicon/classes.ts`: the first rule that matches at a place
+ * is taken. What it leaves alone is talk, except numbers, which may be stitches, repeats or totals.
+ */
+export const RULES: readonly Rule[] = [
+  // repeats and ends
+  { pattern: /t[&,]?N(?![tS])/y, make: (m) => ({ type: 'times', n: number(m) }) },
+  { pattern: /NNt/y, make: (m) => ({ type: 'times', n: number(m, 1) }) },
+  { pattern: /(?:R|E|A)*[&,p]?N[Fm]?(?:t|o)(?:R|A|o)*/y, make: repeated },
+  {
+    pattern: /t(?:R|A)*/y,
+    make: (m) => (Number(m[0]!.value) > 1 ? { type: 'times', n: Number(m[0]!.value) } : nothing),
+  },
+  // several drawn into one
+  { pattern: /NSNT(?:IXN)?/y, make: (m) => unit(tog(stitch(m), number(m, 1), number(m))) },
+  { pattern: /SNT(?:[IA]?XN)?/y, make: (m) => unit(tog(stitch(m), number(m))) },
+  { pattern: /NST/y, make: (m) => unit(tog(stitch(m), number(m))) },
+  { pattern: /ST/y, make: (m) => unit(tog(stitch(m), 2)) },
+  { pattern: /[XOL]?N[GS]?T/y, make: (m) => (number(m) > 1 && number(m) < 8 ? unit(tog(BARE, number(m))) : null) },
+  { pattern: /ND/y, make: (m) => unit(tog(decName(m), 2, number(m))) },
+  { pattern: /SD(?![IE])/y, make: (m) => unit(tog(stitch(m), 2)) },
+  { pattern: /DIE[XOL]?N/y, make: (m) => unit(tog(decName(m), 2, number(m))) },
+  {
+    pattern: /DIE?[GZ]?/y,
+    make: (m) => (m.some((one) => one.kind === 'E') ? fills(tog(decName(m), 2)) : unit(tog(decName(m), 2))),
+  },
+  { pattern: /DA/y, make: (m) => fills(tog(decName(m), 2)) },
+  { pattern: /D/y, make: (m) => unit(tog(decName(m), 2)) },
+  // increases
+  { pattern: /PI?E[XOL]?N[GS]?/y, make: (m) => unit(st(BARE, number(m), 2)) },
+  { pattern: /PI[XOL]N[GS]?/y, make: (m) => unit(st(BARE, number(m), 2)) },
+  { pattern: /NP/y, make: (m) => unit(st(BARE, number(m), 2)) },
+  { pattern: /PI?EN?[GZ]?A?/y, make: () => fills(st(BARE, 1, 2)) },
+  { pattern: /IE[GZ]?,?P/y, make: () => fills(st(BARE, 1, 2)) },
+  { pattern: /PA/y, make: () => fills(st(BARE, 1, 2)) },
+  { pattern: /PI[XOLM]?N?[GZ]?/y, make: () => unit(st(BARE, 1, 2)) },
+  { pattern: /P/y, make: () => unit(st(BARE, 1, 2)) },
+  // chains and places passed over
+  { pattern: /K[OXLN]?C+[IH]?H?/y, make: () => nothing },
+  { pattern: /K[XO]?N[GCZS]?/y, make: (m) => unit({ type: 'skip', many: number(m) }) },
+  {
+    pattern: /K[XO]?[GCZS]?/y,
+    make: (m) => (m.some((one) => one.kind === 'C') ? nothing : unit({ type: 'skip', many: 1 })),
+  },
+  { pattern: /IE[XOL]?N?C/y, make: () => nothing },
+  { pattern: /(?:I|O|L|X|E|M)+C+H?/y, make: () => nothing },
+  { pattern: /C{1,2}N(?![StTDPG])/y, make: (m) => unit({ type: 'chain', many: number(m) }) },
+  { pattern: /C{1,2}N(?=S|G)/y, make: (m) => unit({ type: 'chain', many: number(m) }) },
+  { pattern: /NC(?!N)/y, make: (m) => unit({ type: 'chain', many: number(m) }) },
+  { pattern: /SC/y, make: (m) => (m[0]!.text === 'single' ? unit({ type: 'chain', many: 1 }) : null) },
+  // so many stitches, each in its own place
+  { pattern: /S[IE]*[XLO]?N[GSZC]?(?![tTD])/y, make: counted },
+  { pattern: /NSIE?[XLO]?N[GSZC]?(?![tTD])/y, make: eachInCounted },
+  { pattern: /[IE]+[XLO]?N[GZ],?S/y, make: (m) => (number(m) > 1 ? unit(st(stitch(m), number(m))) : null) },
+  // in every place
+  { pattern: /N?S[&,]?IB?E[GZSC]*A?/y, make: (m) => fills(st(stitch(m), 1, number(m))) },
+  { pattern: /NI?E[GZC]*A?/y, make: (m) => (number(m) < 6 ? fills(st(BARE, 1, number(m))) : null) },
+  { pattern: /IB?E[GZC]+[,]?N?S/y, make: (m) => fills(st(stitch(m), 1, number(m))) },
+  { pattern: /IB?E[GZC]+[,]?N(?![GtT])/y, make: (m) => (number(m) < 6 ? fills(st(BARE, 1, number(m))) : null) },
+  {
+    pattern: /E[GZ]?g[NP]/y,
+    make: (m) => (m.some((one) => one.kind === 'P') ? fills(st(BARE, 1, 2)) : fills(st(BARE, 1, number(m)))),
+  },
+  // several in one place
+  { pattern: /NS[&,]?I[XLOM]*N?[GZ]?/y, make: inOne },
+  { pattern: /NI[XLOM]*N?[GZ]?/y, make: inOne },
+  {
+    pattern: /I?[XLO]+[GC]?gN?[SP]?/y,
+    make: (m) => either([st(stitch(m), 1, m.some((one) => one.kind === 'P') ? 2 : number(m))]),
+  },
+  { pattern: /N[GS]gN(?=[^tT])/y, make: (m) => unit(st(BARE, number(m), number(m, 1))) },
+  { pattern: /I[XLOM]+[GZ]?,?&?NS/y, make: (m) => either([st(stitch(m), 1, number(m))], [st(stitch(m), number(m))]) },
+  { pattern: /I[XLOM]+[GZ]?,?&?N(?=[,.|&])/y, make: (m) => either([st(BARE, 1, number(m))]) },
+  { pattern: /I[XLOM]*Z/y, make: (m) => ({ type: m.at(-1)!.value === 'corner' ? 'corner' : 'nothing' }) },
+  { pattern: /Z/y, make: (m) => (m[0]!.value === 'corner' ? { type: 'corner' } : nothing) },
+  { pattern: /(?:E[,&]?)?I?(?:M|(?<=I)N)[GZ]/y, make: () => ({ type: 'oneplace' }) },
+  // plain lists
+  { pattern: /NS/y, make: (m) => unit(st(stitch(m), number(m))) },
+  { pattern: /S[&,]?(?:IB?[XLOM]*N?[GZ]?)/y, make: (m) => (m.length > 1 ? unit(st(stitch(m), 1)) : null) },
+  {
+    pattern: /E?[SF]+[&,]?E?A/y,
+    make: (m) => (m.some((one) => one.kind === 'S') ? fills(st(stitch(m), 1)) : { type: 'plain' }),
+  },
+  { pattern: /ES/y, make: (m) => fills(st(stitch(m), 1)) },
+  {
+    pattern: /S/y,
+    make: (m) => unit(st(stitch(m), 1)),
+  },
+  { pattern: /[RE]*A/y, make: () => ({ type: 'around' }) },
+  { pattern: /F/y, make: () => ({ type: 'plain' }) },
+  { pattern: /R/y, make: (m) => (m[0]!.value === 'again' ? { type: 'nothing' } : { type: 'around' }) },
+  { pattern: /Y/y, make: () => ({ type: 'correction' }) },
+  { pattern: /[IXLMEHGZ]+/y, make: () => nothing },
+];
+
+function decName(matched: readonly Token[]): string {
+  const value = matched.find((token) => token.kind === 'D')?.value;
+  return typeof value === 'string' ? value : BARE;
+}
+
+function repeated(matched: readonly Token[]): Made | null {
+  const times = matched.find((token) => token.kind === 't');
+  if (times !== undefined && Number(times.value) > 0) return null;
+  const n = number(matched);
+  return n > 0 ? { type: 'times', n } : null;
+}
+
+/** `single crochet in each of the next four`, `half double in seven stitches`; "in one" is a single place. */
+function counted(matched: readonly Token[], letters: string): Made | null {
+  if (!/[IE]/.test(letters)) return null;
+  return unit(st(stitch(matched), number(matched)));
+}
+
+/** `one single crochet in each of the next four`; `three in one` has that many in one place. */
+function eachInCounted(matched: readonly Token[], letters: string): Made {
+  const inEach = number(matched);
+  const places = number(matched, 1);
+  if (places === 1) return unit(st(stitch(matched), 1, inEach));
+  if (letters.includes('E') || inEach === 1) return unit(st(stitch(matched), places, inEach));
+  return inEach === places
+    ? unit(st(stitch(matched), places))
+    : either([st(stitch(matched), places, inEach)], [st(stitch(matched), inEach)]);
+}
+
+/** `two in the next`, `two trebles in the same stitch`; where the place is plural, one in each. */
+function inOne(matched: readonly Token[], letters: string): Made | null {
+  const many = number(matched);
+  const place = matched.at(-1)!;
+  if (place.kind === 'I' || (place.kind === 'Z' && !/[XLOMN]/.test(letters.slice(2)) && isPlural(place))) return null;
+  if (place.kind === 'G' && isPlural(place) && place.value !== 'loop') return unit(st(stitch(matched), many));
+  if (many === 1) return unit(st(stitch(matched), 1));
+  if (many > 12) return null;
+  return either([st(stitch(matched), 1, many)]);
+}

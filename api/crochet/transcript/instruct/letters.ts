@@ -1,0 +1,48 @@
+import { type Sentences } from '../sentences.ts';
+import { type Token } from '../tokens.ts';
+
+/** The tokens of an instruction without the little words, and one letter for each, so that patterns can run over it. */
+export interface Letters {
+  readonly text: string;
+  readonly tokens: readonly Token[];
+  /** Index of each in the whole row of tokens. */
+  readonly at: readonly number[];
+  readonly sentence: readonly number[];
+}
+
+const TAKES = new Set(['get', 'gets', 'takes', 'take', 'wants', 'has', 'receives', 'asks for', 'had']);
+const DROPPED = new Set<string>(['a', '~', '#']);
+
+/** @param skipped tokens that are no instruction: the announcement's own numbers, demonstrations, recaps */
+export function lettersOf(
+  tokens: readonly Token[],
+  from: number,
+  to: number,
+  sentences: Sentences,
+  skipped: (index: number) => boolean,
+): Letters {
+  const kept: Token[] = [];
+  const at: number[] = [];
+  const sentence: number[] = [];
+  let text = '';
+  for (let i = from; i < to; i++) {
+    const token = tokens[i]!;
+    if (skipped(i) || DROPPED.has(token.kind)) continue;
+    // "along the side" tells a place; "along" alone means to the end
+    const isPlace =
+      token.kind === 'A' && !token.text.includes(' ') && tokens[i + 1]?.kind === 'a' && tokens[i + 2]?.kind === 'w';
+    const letter = isPlace ? 'w' : letterOf(token);
+    if (letter === '') continue;
+    kept.push(token);
+    at.push(i);
+    sentence.push(sentences.startOf[i]!);
+    text += letter;
+  }
+  return { text, tokens: kept, at, sentence };
+}
+
+function letterOf(token: Token): string {
+  if (token.kind === 'v') return TAKES.has(token.text) ? 'g' : '';
+  if (token.kind === 'r' || token.kind === 'p') return 'p';
+  return token.kind;
+}

@@ -1,0 +1,65 @@
+import { type Unit } from '../work/units.ts';
+import { BARE, type Event } from './event.ts';
+
+/** An event whose part in the line is settled: numbers have become stitches, repeats, or nothing. */
+export type Element = { readonly sentence: number; readonly at: number } & (
+  | { readonly type: 'unit'; readonly options: readonly (readonly Unit[])[]; readonly fills: boolean }
+  | { readonly type: 'times'; readonly n: number }
+  | { readonly type: 'around' | 'oneplace' | 'corner' | 'plain' }
+);
+
+export interface Casting {
+  readonly elements: readonly Element[];
+  readonly cost: number;
+  /** Numbers that were given no part in the work and so may be totals. */
+  readonly idle: readonly Extract<Event, { type: 'number' }>[];
+}
+
+const MOST = 96;
+
+/** Gives each bare number a part (stitches, a repeat, none) in every likely way, likeliest first. */
+export function castNumbers(events: readonly Event[]): readonly Casting[] {
+  let castings: Casting[] = [{ elements: [], cost: 0, idle: [] }];
+  for (const event of events) {
+    if (event.type !== 'number') {
+      castings = castings.map((casting) => ({ ...casting, elements: [...casting.elements, settled(event)] }));
+      continue;
+    }
+    castings = castings
+      .flatMap((casting) => partsOf(casting, event))
+      .sort((a, b) => a.cost - b.cost)
+      .slice(0, MOST);
+  }
+  return castings;
+}
+
+function settled(event: Exclude<Event, { type: 'number' }>): Element {
+  const { sentence, at } = event;
+  if (event.type === 'unit') return { sentence, at, type: 'unit', options: event.options, fills: event.fills };
+  if (event.type === 'times') return { sentence, at, type: 'times', n: event.n };
+  return { sentence, at, type: event.type === 'correction' ? 'plain' : event.type };
+}
+
+function partsOf(casting: Casting, event: Extract<Event, { type: 'number' }>): Casting[] {
+  const { sentence, at, n } = event;
+  const idle: Casting = {
+    ...casting,
+    idle: [...casting.idle, event],
+    cost: casting.cost + (event.asTotal >= 1 ? 0 : 0.5),
+  };
+  const out = [idle];
+  if (n > 0 && event.asItem > -0.4 && n <= 120) {
+    const unit: Unit = { type: 'stitch', stitch: BARE, inOne: 1, times: n };
+    const element: Element = { sentence, at, type: 'unit', options: [[unit]], fills: false };
+    out.push({
+      ...casting,
+      elements: [...casting.elements, element],
+      cost: casting.cost + Math.max(0, 1.3 - event.asItem),
+    });
+  }
+  if (n > 1 && n <= 60 && casting.elements.length > 0 && event.asTotal < 2.5) {
+    const element: Element = { sentence, at, type: 'times', n };
+    out.push({ ...casting, elements: [...casting.elements, element], cost: casting.cost + 1.6 - event.asTimes });
+  }
+  return out;
+}

@@ -1,0 +1,47 @@
+/**
+ * What a stretch of speech is to the reader, each class one letter, so that grammar can be written as patterns over
+ * letters. `N` and `O` carry a number, `S` a stitch, `B` loops; the rest carry at most a shade.
+ */
+export const CLASSES = {
+  N: 'a number',
+  O: 'an ordinal (first is 1)',
+  L: 'the last',
+  X: 'the next, the other, the following',
+  S: 'a stitch',
+  C: 'chain',
+  K: 'skip',
+  P: 'increase',
+  D: 'decrease',
+  T: 'together',
+  I: 'in, into, under, over, through',
+  E: 'each, every, all',
+  M: 'the same',
+  G: 'stitch, place, hole, loop: what is worked into',
+  Z: 'space, gap, corner',
+  H: 'hook, as in “from the hook”',
+  t: 'times, lots, sets',
+  R: 'repeat, keep on',
+  A: 'around, across, to the end',
+  F: 'plain, straight, nothing added',
+  B: 'which loops',
+  V: 'a ring to begin in',
+  U: 'round or row',
+  '#': 'the word “number”',
+  '=': 'what something comes to',
+  y: 'how a stitch is made: yarn over, draw through',
+  Y: 'a correction',
+  c: 'count',
+  n: 'not',
+  '&': 'and, then',
+  v: 'is, goes, has',
+  a: 'the, a, your',
+  o: 'of those, of them',
+  m: 'more',
+  b: 'between',
+  '~': 'okay, so, now, um',
+  p: 'before, until, like: what makes a mention of a round',
+  r: 'through, to, up to: a range',
+  w: 'any other word',
+} as const;
+
+export type Class = keyof typeof CLASSES | ',' | '.' | '|';

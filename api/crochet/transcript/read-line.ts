@@ -1,0 +1,207 @@
+import { type Announced } from './announce/chain.ts';
+import { basesAfter, basesOnChain, type ReadSoFar } from './bases.ts';
+import { type Choice, chooseWork, type Setting } from './instruct/choose-work.ts';
+import { type Event } from './instruct/event.ts';
+import { findEvents } from './instruct/find-events.ts';
+import { lettersOf } from './instruct/letters.ts';
+import { withoutCorrected } from './instruct/prune.ts';
+import { type Base } from './instruct/resolve.ts';
+import { loopsOf } from './loops.ts';
+import { copiesFor, linesNamed } from './references.ts';
+import { type Sentences } from './sentences.ts';
+import { type Token } from './tokens.ts';
+import { sumOf, type Unit } from './work/units.ts';
+
+/** The whole talk, with what is known of it before lines are read. */
+export interface Talk {
+  readonly tokens: readonly Token[];
+  readonly sentences: Sentences;
+  readonly skipped: readonly boolean[];
+}
+
+/** A line to read: its announcement and the tokens up to what comes next. */
+export interface Stretch {
+  readonly announced: Announced;
+  readonly from: number;
+  readonly to: number;
+}
+
+/** What stands before a line: the lines of its piece, of all pieces, and how the piece goes. */
+export interface Before {
+  readonly piece: readonly ReadSoFar[];
+  readonly all: readonly (readonly ReadSoFar[])[];
+  readonly chains: number | null;
+  /** Where the piece's introduction begins, in which it may be told what the piece grows on. */
+  readonly introFrom: number;
+  readonly stitch: string;
+  readonly chainCounts: boolean | null;
+  readonly chainJoined: boolean;
+}
+
+export interface ReadLineResult extends ReadSoFar {
+  readonly loops: 'both' | 'back' | 'front';
+  readonly count: number | null;
+  readonly isRing: boolean;
+  readonly lead: number;
+  readonly score: number;
+  readonly events: readonly Event[];
+}
+
+/** Reads one announced line: its phrases, the places before it, and of all ways to take them the one that fits best. */
+export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): ReadLineResult {
+  const { tokens } = talk;
+  const { announced, from, to } = stretch;
+  const { candidate } = announced;
+  const isOut = (i: number) => talk.skipped[i] === true || (i >= candidate.mark && i < candidate.end);
+  const letters = lettersOf(tokens, from, to, talk.sentences, isOut);
+  const events = withoutCorrected(findEvents(letters), tokens);
+  const words = tokens.slice(from, to).filter((_, n) => !isOut(from + n));
+  const isRing = before.piece.length === 0 && before.chains === null && words.some((token) => token.kind === 'V');
+  const loops = loopsOf(tokens, from, to, (i) => talk.skipped[i] === true);
+  const bases = isRing ? [] : basesFor(talk, stretch, before, loops, words);
+  const named = linesNamed(tokens, from, to, announced.from ?? 0);
+  const setting: Setting = {
+    bases,
+    stitch: before.stitch,
+    chainCounts: chainRule(words) ?? before.chainCounts,
+    copies: copiesFor(tokens, from, to, named, before.piece),
+    isPlain: isPlainLine(words, events),
+  };
+  const choice = chooseWork(events, setting);
+  return result(choice, announced, bases, events, { loops, isRing });
+}
+
+function isPlainLine(words: readonly Token[], events: readonly Event[]): boolean {
+  const plain = words.some(
+    (token) =>
+      token.kind === 'F' || token.kind === 'E' || token.kind === 'A' || token.kind === 'B' || token.kind === 'M',
+  );
+  const shapes = events.some(
+    (event) => event.type === 'unit' && event.options[0]!.some((unit) => unit.type !== 'stitch' || unit.inOne > 1),
+  );
+  return !shapes && (plain || events.some((event) => event.type === 'unit'));
+}
+
+const COUNTED =
+  /\b(?:counts?|counting|stands? for|standing for|that is a stitch|that is your first|as a stitch|being the first|is a treble|included|that lad)\b/;
+const NOT_COUNTED =
+  /\b(?:(?:not|never|nobody|no|uncounted|isn't|doesn't|don't|won't)\b.{0,24}\b(?:count|counts|counted|stitch|anything)|ignore|which is nothing|that is nothing|uncounted|does nothing)\b/;
+
+/** What the words say of a starting chain: whether it counts as a stitch. */
+export function chainRule(words: readonly Token[]): boolean | null {
+  if (!words.some((token) => token.kind === 'C')) return null;
+  const text = words.map((token) => token.text).join(' ');
+  if (NOT_COUNTED.test(text)) return false;
+  return COUNTED.test(text) ? true : null;
+}
+
+function basesFor(
+  talk: Talk,
+  { announced, from, to }: Stretch,
+  before: Before,
+  loops: 'both' | 'back' | 'front',
+  words: readonly Token[],
+): readonly Base[] {
+  const { tokens } = talk;
+  const last = before.piece.at(-1);
+  const left =
+    loops === 'both'
+      ? null
+      : loopsLeft(tokens, last === undefined ? before.introFrom : announced.candidate.at, to, before);
+  if (left !== null) return [{ n: left, cost: 0 }];
+  if (last !== undefined)
+    return basesAfter(
+      last,
+      words.some((token) => token.kind === 'Z'),
+    );
+  if (before.chains === null) return [];
+  const text = tokens
+    .slice(from, to)
+    .map((token) => token.text)
+    .join(' ');
+  const nth = tokens.slice(from, to).findIndex((token, n) => token.kind === 'O' && tokens[from + n + 1]?.kind === 'C');
+  return basesOnChain({
+    chains: before.chains,
+    isJoined: before.chainJoined,
+    bothSides:
+      /\b(?:other side|underside|under side|bottom|back down|both sides|other edge|both edges|back along|coming back|coming home|up one side|goes all around the chain)\b/.test(
+        text,
+      ),
+    nth: nth < 0 ? null : Number(tokens[from + nth]!.value),
+  });
+}
+
+/** `the front loops left in round thirteen`: as many as that round had to work into. */
+function loopsLeft(tokens: readonly Token[], from: number, to: number, before: Before): number | null {
+  const text = tokens.slice(from, to);
+  if (
+    !text.some(
+      (token) => token.kind === 'B' || token.text === 'loops' || token.text === 'line' || token.text === 'fence',
+    )
+  )
+    return null;
+  const last = before.piece.at(-1);
+  for (let i = from; i < to; i++) {
+    if (tokens[i]!.kind !== 'U' || tokens[i + 1]?.kind !== 'N') continue;
+    const n = Number(tokens[i + 1]!.value);
+    const lines = last === undefined ? [...before.all].reverse().flat() : [...before.piece];
+    if (last !== undefined && n >= (last.to ?? 0)) continue;
+    const line = lines.find((one) => one.from !== null && one.from <= n && n <= (one.to ?? one.from));
+    if (line !== undefined) return line.base ?? sumOf(line.units).uses;
+  }
+  return null;
+}
+
+function result(
+  choice: Choice | null,
+  announced: Announced,
+  bases: readonly Base[],
+  events: readonly Event[],
+  rest: { loops: 'both' | 'back' | 'front'; isRing: boolean },
+): ReadLineResult {
+  const { from, to } = announced;
+  const heard = events.filter((event) => event.type === 'number').sort((a, b) => b.asTotal - a.asTotal)[0];
+  if (choice === null) {
+    const said = heard !== undefined && heard.asTotal >= 1.5 ? heard.n : null;
+    return {
+      ...rest,
+      from,
+      to,
+      units: [],
+      base: bases[0]?.n ?? null,
+      said,
+      verdict: 'unread',
+      count: null,
+      lead: 0,
+      score: 0,
+      events,
+    };
+  }
+  const { makes } = sumOf(choice.units);
+  const verdict =
+    choice.fit === 'misfit'
+      ? 'does-not-fit'
+      : choice.said === null
+        ? 'no-total'
+        : choice.said === makes
+          ? 'agrees'
+          : 'differs';
+  return {
+    ...rest,
+    from,
+    to,
+    units: choice.units,
+    base: choice.base,
+    said: choice.said,
+    verdict,
+    count: makes,
+    lead: choice.lead,
+    score: choice.score,
+    events,
+  };
+}
+
+/** Units of work in a chain line. */
+export function chainUnits(n: number): readonly Unit[] {
+  return [{ type: 'chain', many: n }];
+}

@@ -1,0 +1,193 @@
+import { type Announced } from './announce/chain.ts';
+import { type ReadSoFar } from './bases.ts';
+import { readMake, readPieceName } from './pieces.ts';
+import { chainRule, chainUnits, type ReadLineResult, readSpokenLine, type Talk } from './read-line.ts';
+import { linesNamed } from './references.ts';
+import { type SpokenStep } from './steps.ts';
+import { type Token } from './tokens.ts';
+import { spell, type Unit } from './work/units.ts';
+
+/** A line as it was read, with the tokens it stands on. */
+export type ReadEntry =
+  | {
+      readonly type: 'line';
+      readonly kind: 'foundation' | 'round' | 'row';
+      readonly at: number;
+      readonly to: number;
+      readonly announced: Announced;
+      readonly read: ReadLineResult;
+    }
+  | { readonly type: 'step'; readonly at: number; readonly to: number; readonly topic: string };
+
+export interface ReadPiece {
+  readonly name: string;
+  readonly make: number;
+  readonly worked: 'spiral' | 'joined' | 'rows';
+  readonly entries: readonly ReadEntry[];
+}
+
+/** Where a silence shows that the talk has moved on, in milliseconds. */
+const LONG_SILENCE = 7000;
+const INTRO = 110;
+
+interface Building {
+  name: string;
+  make: number;
+  unit: 'round' | 'row' | null;
+  entries: ReadEntry[];
+  lines: ReadSoFar[];
+  chains: number | null;
+  chainJoined: boolean;
+  introFrom: number;
+}
+
+/** Reads the announced lines one after another, each with what came before it, and puts the steps between them. */
+export function readPieces(
+  talk: Talk,
+  chain: readonly Announced[],
+  steps: readonly SpokenStep[],
+  silenceAfter: (token: Token) => number,
+): readonly ReadPiece[] {
+  const pieces: Building[] = [];
+  let chainCounts: boolean | null = null;
+  let stitch = 'sc';
+  let introFrom = 0;
+  chain.forEach((announced, n) => {
+    const { candidate } = announced;
+    const next = chain[n + 1]?.candidate.at ?? talk.tokens.length;
+    const between = steps.filter((step) => step.at >= candidate.end && step.at < next);
+    const firstStep = between.find((step) => step.at > candidate.end);
+    const to = endOfLine(talk, candidate.end, Math.min(next, firstStep?.at ?? next), silenceAfter);
+    if (announced.begins) {
+      const from = Math.max(introFrom, candidate.at - INTRO);
+      chainCounts = n === 0 ? chainRule(talk.tokens.slice(from, candidate.at)) : chainCounts;
+      pieces.push(beginPiece(talk, from, announced, next));
+    }
+    const piece = pieces.at(-1)!;
+    if (candidate.kind === 'foundation') {
+      const many = candidate.lines.type === 'chain' ? candidate.lines.n : 0;
+      piece.chains = many;
+      piece.chainJoined = /\b(?:slip stitch|slip stitches|join|circle|ring|hoop)\b/.test(
+        textOf(talk.tokens, candidate.end, next).slice(0, 160),
+      );
+      piece.entries.push({ type: 'line', kind: 'foundation', at: candidate.at, to, announced, read: foundation(many) });
+    } else {
+      chainCounts = chainRule(talk.tokens.slice(candidate.at, to)) ?? chainCounts;
+      const before = {
+        piece: piece.lines,
+        all: pieces.slice(0, -1).map((one) => one.lines),
+        chains: piece.chains,
+        introFrom: piece.introFrom,
+        stitch,
+        chainCounts,
+        chainJoined: piece.chainJoined,
+      };
+      piece.unit = candidate.unit ?? piece.unit;
+      const kind = candidate.unit ?? piece.unit ?? (piece.chains === null ? 'round' : 'row');
+      for (const read of readExpanded(talk, announced, to, before)) {
+        piece.lines.push(read);
+        piece.entries.push({ type: 'line', kind, at: candidate.at, to, announced, read });
+        stitch = mainStitch(read.units) ?? stitch;
+      }
+    }
+    for (const step of between) piece.entries.push({ type: 'step', at: step.at, to: step.end, topic: step.topic });
+    introFrom = Math.max(to, between.at(-1)?.end ?? 0);
+  });
+  return pieces.map(finish);
+}
+
+/** Several earlier lines named as a set give one line for each; otherwise the line is read as it stands. */
+function readExpanded(
+  talk: Talk,
+  announced: Announced,
+  to: number,
+  before: Parameters<typeof readSpokenLine>[2],
+): readonly ReadLineResult[] {
+  const { candidate, from, to: until } = announced;
+  const stretch = { announced, from: candidate.at, to };
+  const many = (until ?? 0) - (from ?? 0) + 1;
+  const named = many > 1 ? linesNamed(talk.tokens, candidate.at, to, from ?? 0) : [];
+  if (named.length < 2 || many % named.length !== 0) return [readSpokenLine(talk, stretch, before)];
+  const lines = [...before.piece];
+  const out: ReadLineResult[] = [];
+  for (let n = 0; n < many; n++) {
+    const model = lines.findLast(
+      (line) =>
+        line.from !== null && line.from <= named[n % named.length]! && named[n % named.length]! <= (line.to ?? 0),
+    );
+    if (model === undefined) return [readSpokenLine(talk, stretch, before)];
+    const whole = readSpokenLine(talk, stretch, before);
+    const line: ReadLineResult = {
+      ...whole,
+      ...model,
+      from: from! + n,
+      to: from! + n,
+      said: null,
+      verdict: 'no-total',
+      loops: 'both',
+      count: null,
+    };
+    lines.push(line);
+    out.push(line);
+  }
+  return out;
+}
+
+function beginPiece(talk: Talk, from: number, announced: Announced, next: number): Building {
+  const { candidate } = announced;
+  const upTo = Math.min(next, candidate.end + 24);
+  return {
+    name: readPieceName(talk.tokens, from, candidate.mark) ?? 'Piece',
+    make: readMake(talk.tokens, from, Math.max(candidate.mark, Math.min(upTo, candidate.mark)), talk.sentences),
+    unit: candidate.unit,
+    entries: [],
+    lines: [],
+    chains: null,
+    chainJoined: false,
+    introFrom: from,
+  };
+}
+
+function endOfLine(talk: Talk, from: number, to: number, silenceAfter: (token: Token) => number): number {
+  let hasWork = false;
+  for (let i = from; i < to; i++) {
+    const token = talk.tokens[i]!;
+    if (token.kind === '|' && hasWork && silenceAfter(token) > LONG_SILENCE) return i + 1;
+    if ('SPDFEBRM'.includes(token.kind)) hasWork = true;
+  }
+  return to;
+}
+
+function foundation(many: number): ReadLineResult {
+  return {
+    from: null,
+    to: null,
+    units: chainUnits(many),
+    base: null,
+    said: null,
+    verdict: 'no-total',
+    loops: 'both',
+    count: many,
+    isRing: false,
+    lead: 9,
+    score: 9,
+    events: [],
+  };
+}
+
+function mainStitch(units: readonly Unit[]): string | null {
+  const words = spell(units).filter((word) => /^(?:sc|hdc|dc|tr)$/.test(word));
+  return words[0] ?? null;
+}
+
+function finish(piece: Building): ReadPiece {
+  const text = piece.entries.some((entry) => entry.type === 'line' && entry.kind === 'row');
+  return { name: piece.name, make: piece.make, worked: text ? 'rows' : 'spiral', entries: piece.entries };
+}
+
+function textOf(tokens: readonly Token[], from: number, to: number): string {
+  return tokens
+    .slice(from, to)
+    .map((token) => token.text)
+    .join(' ');
+}

@@ -1,0 +1,69 @@
+import { STEPS } from './lexicon/steps.ts';
+import { type Sentences } from './sentences.ts';
+import { type Token } from './tokens.ts';
+
+/** Something done that adds no stitch, where it is said. */
+export interface SpokenStep {
+  readonly topic: string;
+  readonly at: number;
+  readonly end: number;
+}
+
+const AHEAD = 12;
+const IDLE = /\b(?:if|before|don't|do not|dinnae|never|when|unless|because|you can fasten|instead of|later|until|no)\b/;
+const LEADS = '~&vaOXIGrpw';
+
+/** Finds the steps among the tokens. Clauses of one kind that follow each other are one step. */
+export function findSteps(
+  tokens: readonly Token[],
+  sentences: Sentences,
+  skipped: readonly boolean[],
+): readonly SpokenStep[] {
+  const found: SpokenStep[] = [];
+  for (let i = 0; i < tokens.length; i++) {
+    if (skipped[i] === true || ',.|'.includes(tokens[i]!.kind)) continue;
+    const topic = topicAt(tokens, i, sentences);
+    if (topic === null || isIdle(tokens, i, sentences)) continue;
+    const last = found.at(-1);
+    if (last !== undefined && belongsTo(last, topic, i, sentences)) {
+      found[found.length - 1] = { ...last, end: i + 1 };
+      continue;
+    }
+    found.push({ topic, at: startOfStep(tokens, i, sentences), end: i + 1 });
+  }
+  return found;
+}
+
+/** A clause of the same kind close by, or any in the same sentence, goes on with the step before it. */
+function belongsTo(last: SpokenStep, topic: string, i: number, sentences: Sentences): boolean {
+  const sameSentence = sentences.startOf[i] === sentences.startOf[last.at];
+  if (sentences.isPunctuated && sameSentence) return true;
+  return last.topic === topic && (sameSentence || i - last.end < 16);
+}
+
+function topicAt(tokens: readonly Token[], i: number, sentences: Sentences): string | null {
+  const ahead: string[] = [];
+  for (let j = i; j < Math.min(tokens.length, sentences.endOf[i]!, i + AHEAD); j++) {
+    if (!',.|'.includes(tokens[j]!.kind)) ahead.push(tokens[j]!.text);
+  }
+  const text = ahead.join(' ');
+  return STEPS.find(({ words }) => words.test(text))?.topic ?? null;
+}
+
+function isIdle(tokens: readonly Token[], i: number, sentences: Sentences): boolean {
+  const start = Math.max(sentences.startOf[i]!, i - 6);
+  return IDLE.test(
+    tokens
+      .slice(start, i)
+      .map((token) => token.text)
+      .join(' '),
+  );
+}
+
+function startOfStep(tokens: readonly Token[], i: number, sentences: Sentences): number {
+  const start = sentences.startOf[i]!;
+  if (sentences.isPunctuated && i - start < 7) return start;
+  let at = i;
+  while (at > start && i - at < 5 && LEADS.replace('w', '').includes(tokens[at - 1]!.kind)) at -= 1;
+  return at;
+}

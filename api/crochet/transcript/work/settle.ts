@@ -1,0 +1,54 @@
+import { BARE } from '../instruct/event.ts';
+import { type Unit } from './units.ts';
+
+/** Names the stitch of bare numbers, increases and decreases: the one last named, else the first named after, else the one in hand. */
+export function settleStitches(units: readonly Unit[], inHand: string): readonly Unit[] {
+  let current = firstNamed(units) ?? inHand;
+  const visit = (unit: Unit): Unit => {
+    switch (unit.type) {
+      case 'stitch':
+      case 'together': {
+        const stitch = unit.stitch === BARE ? current : unit.stitch;
+        if (isFabric(stitch)) current = stitch;
+        return { ...unit, stitch };
+      }
+      case 'oneplace':
+        return { ...unit, parts: unit.parts.map((part) => (part === BARE ? current : part)) };
+      case 'repeat':
+        return { ...unit, units: unit.units.map(visit) };
+      default:
+        return unit;
+    }
+  };
+  return merged(units.map(visit));
+}
+
+const SPECIAL = new Set(['bobble', 'popcorn', 'puff', 'cluster', 'picot', 'slst']);
+const isFabric = (stitch: string): boolean => !SPECIAL.has(stitch);
+
+function firstNamed(units: readonly Unit[]): string | null {
+  for (const unit of units) {
+    const found =
+      unit.type === 'repeat'
+        ? firstNamed(unit.units)
+        : unit.type === 'oneplace'
+          ? (unit.parts.find((part) => part !== 'ch' && part !== BARE && isFabric(part)) ?? null)
+          : (unit.type === 'stitch' || unit.type === 'together') && unit.stitch !== BARE && isFabric(unit.stitch)
+            ? unit.stitch
+            : null;
+    if (found !== null) return found;
+  }
+  return null;
+}
+
+/** Two singles and one single are three; a repeat of once is what it holds. */
+function merged(units: readonly Unit[]): readonly Unit[] {
+  const out: Unit[] = [];
+  for (const unit of units) {
+    const last = out.at(-1);
+    if (unit.type === 'stitch' && last?.type === 'stitch' && last.stitch === unit.stitch && last.inOne === unit.inOne) {
+      out[out.length - 1] = { ...last, times: last.times + unit.times };
+    } else out.push(unit);
+  }
+  return out;
+}
