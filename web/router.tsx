@@ -13,10 +13,21 @@ interface PageModule {
 type Page = () => Promise<PageModule>;
 
 /** With the binding at the left: for people who have signed in. */
-const IN_THE_HOUSE: Record<string, Page> = {};
+const IN_THE_HOUSE: Record<string, Page> = {
+  '/account': () => import('./app/account-page.tsx'),
+  '/studio': () => import('./app/studio-page.tsx'),
+  '/studio/open': () => import('./app/open-studio-page.tsx'),
+};
 
 /** Without it: covers and letters. */
-const AT_THE_DOOR: Record<string, Page> = {};
+const AT_THE_DOOR: Record<string, Page> = {
+  '/sign-in': () => import('./app/sign-in-page.tsx'),
+  '/sign-up': () => import('./app/sign-up-page.tsx'),
+  '/confirm': () => import('./app/confirm-page.tsx'),
+  '/forgotten': () => import('./app/forgotten-page.tsx'),
+  '/reset': () => import('./app/reset-page.tsx'),
+  '/invitation': () => import('./app/invitation-page.tsx'),
+};
 
 const routes = (pages: Record<string, Page>, client: QueryClient): RouteObject[] =>
   Object.entries(pages).map(([path, page]) => ({
