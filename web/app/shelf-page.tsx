@@ -1,0 +1,64 @@
+import { useSuspenseQuery } from '@tanstack/react-query';
+import { Plus } from 'lucide-react';
+import { useState } from 'react';
+import { useNavigate, useSearchParams } from 'react-router-dom';
+import { ShelfPart } from '#contract/shelf';
+import { FindField } from '../features/shelf/find-field.tsx';
+import { NoStudio } from '../features/shelf/no-studio.tsx';
+import { ShelfRoom } from '../features/shelf/shelf-room.tsx';
+import { shelfQuery } from '../features/shelf/shelf.queries.ts';
+import { paths } from '../lib/paths.ts';
+import { signedInLoader, studioOf, useMe } from '../lib/session.ts';
+import { useKeys } from '../lib/use-keys.ts';
+import { LinkButton } from '../ui/link-button.tsx';
+import { PageProblem } from './shell/page-problem.tsx';
+import { TopStrip } from './shell/top-strip.tsx';
+
+const partIn = (search: URLSearchParams): ShelfPart => ShelfPart.catch('shelf').parse(search.get('part'));
+const TITLES: Readonly<Record<ShelfPart, string>> = { shelf: 'Shelf', archive: 'Archive', bin: 'Bin' };
+
+export const loader = signedInLoader(async (client, { request }, me) => {
+  const studio = studioOf(me);
+  if (!studio) return;
+  const part = partIn(new URL(request.url).searchParams);
+  await client.query({ ...shelfQuery(studio.studioId, part), staleTime: 'static' });
+});
+
+function howMany(count: number, isShelf: boolean): string {
+  if (count === 0) return isShelf ? 'no patterns yet' : 'nothing here';
+  return count === 1 ? '1 pattern' : `${count} patterns`;
+}
+
+/** The shelf of the studio somebody works in. */
+function StudioShelf({ studioId, name }: { studioId: string; name: string }) {
+  const [search] = useSearchParams();
+  const part = partIn(search);
+  const { data: shelf } = useSuspenseQuery(shelfQuery(studioId, part));
+  const [words, setWords] = useState('');
+  const navigate = useNavigate();
+  useKeys({ N: () => void navigate(paths.newPattern()) }, shelf.mayCreate);
+  const isEmpty = shelf.patterns.length === 0;
+  return (
+    <>
+      <TopStrip title={TITLES[part]} beside={`${name}, ${howMany(shelf.patterns.length, part === 'shelf')}`}>
+        {!isEmpty && <FindField value={words} onChange={setWords} />}
+        {!isEmpty && shelf.mayCreate && part === 'shelf' && (
+          <LinkButton kind="primary" icon={Plus} to={paths.newPattern()} aria-keyshortcuts="N">
+            New pattern
+          </LinkButton>
+        )}
+      </TopStrip>
+      <main className="flex grow flex-col">
+        <ShelfRoom key={part} studioId={studioId} part={part} words={words} />
+      </main>
+    </>
+  );
+}
+
+export function Component() {
+  const studio = studioOf(useMe());
+  if (!studio) return <NoStudio />;
+  return <StudioShelf key={studio.studioId} studioId={studio.studioId} name={studio.studioName} />;
+}
+
+export const ErrorBoundary = () => <PageProblem what="shelf" />;
