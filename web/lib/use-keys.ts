@@ -30,30 +30,27 @@ export function nameKey(event: KeyboardEvent): string {
 
 const TYPED_IN =
   'input:not([type=checkbox]):not([type=radio]):not([type=range]):not([type=button]), textarea, select, [contenteditable]';
-const CONTROLS = `${TYPED_IN}, button, a[href], input, summary, [role=button], [role=slider], [tabindex]:not([tabindex="-1"])`;
-const WHILE_TYPING = new Set(['Ctrl+Enter', 'Escape', 'Enter']);
-/** Keys that a focused control needs for itself. */
-const OF_CONTROLS = new Set([
-  'Space',
-  'Enter',
-  'ArrowUp',
-  'ArrowDown',
-  'ArrowLeft',
-  'ArrowRight',
-  'PageUp',
-  'PageDown',
-]);
+const PRESSED = 'button, a[href], input, summary, [role=button]';
+const STEERED = 'input, [role=slider], [role=toolbar] *, [role=menu] *, [role=radiogroup] *';
+const WHILE_TYPING = new Set(['Ctrl+Enter', 'Escape']);
+
+/** Whether the focused control needs the key for itself: Space and Enter press it, arrows steer it. */
+function isOwnKey(name: string, target: Element): boolean {
+  const base = name.replace('Shift+', '');
+  if (base === 'Space' || base === 'Enter') return target.matches(PRESSED);
+  return (base.startsWith('Arrow') || base.startsWith('Page')) && target.matches(STEERED);
+}
 
 function mayAct(name: string, target: Element | null, singleKeys: boolean): boolean {
   if (target?.closest('dialog[open]')) return false;
-  if (target?.matches(TYPED_IN)) return WHILE_TYPING.has(name) && name !== 'Enter';
-  if (OF_CONTROLS.has(name.replace('Shift+', '')) && target?.matches(CONTROLS)) return false;
+  if (target?.matches(TYPED_IN)) return WHILE_TYPING.has(name);
+  if (target && isOwnKey(name, target)) return false;
   return singleKeys || name.length > 1;
 }
 
 /**
  * Listens for keys anywhere on the page. While somebody types only Ctrl+Enter and Esc pass (Enter is the field's own);
- * Space and the arrows stay with a control that has the focus; nothing acts behind a dialog.
+ * Space and Enter press the control that has the focus, arrows steer it; nothing acts behind a dialog.
  */
 export function useKeys(map: KeyMap, isOn = true): void {
   const [singleKeys] = useSingleKeys();

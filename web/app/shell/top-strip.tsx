@@ -1,27 +1,66 @@
+import { ChevronLeft, EllipsisVertical } from 'lucide-react';
 import { type ReactNode } from 'react';
-import { NavLink } from 'react-router-dom';
+import { Link, NavLink } from 'react-router-dom';
 import { cx } from '../../lib/class-names.ts';
 import { paths } from '../../lib/paths.ts';
+import { PHONE, useMedia } from '../../lib/use-media.ts';
+import { Icon } from '../../ui/icon.tsx';
 
-/** The head of every page, 52 high: its title in Lora, what stands beside it, and at the right what can be done. */
-export function TopStrip({
-  title,
-  beside,
-  tabs,
-  children,
-}: {
+interface TopStripProps {
   title: ReactNode;
   beside?: ReactNode;
   tabs?: ReactNode;
+  /** How saving stands; shown also where the rest is behind the menu. */
+  saving?: ReactNode;
+  /** On a phone: tabs and controls go behind a menu, so that the work begins at once. */
+  isCompact?: boolean;
   children?: ReactNode;
-}) {
+}
+
+/** The head of every page, 52 high: its title in Lora, what stands beside it, and at the right what can be done. */
+export function TopStrip({ title, beside, tabs, saving, isCompact = false, children }: TopStripProps) {
+  const isPhone = useMedia(PHONE);
+  if (isPhone && isCompact) {
+    return (
+      <header className="relative flex min-h-[46px] items-center gap-x-2.5 border-b border-rule bg-chalk pl-1">
+        <Link to={paths.shelf()} aria-label="To the shelf" className="icon-btn">
+          <Icon of={ChevronLeft} size={22} />
+        </Link>
+        <h1 className="h-page min-w-0 truncate text-[18px]! leading-[22px]!">{title}</h1>
+        <div className="small text-walnut2">{beside}</div>
+        <div className="small ml-auto">{saving}</div>
+        <StripMenu>
+          {tabs}
+          {children}
+        </StripMenu>
+      </header>
+    );
+  }
   return (
     <header className="sticky top-0 z-20 flex min-h-[52px] flex-wrap items-center gap-x-4.5 border-b border-rule bg-chalk px-5 max-sm:px-3">
-      <h1 className="h-page max-sm:text-[18px] max-sm:leading-[22px]">{title}</h1>
+      <h1 className="h-page max-sm:text-[18px]! max-sm:leading-[22px]!">{title}</h1>
       {beside && <div className="text-walnut2">{beside}</div>}
       {tabs}
-      {children && <div className="ml-auto flex items-center gap-4.5 max-sm:gap-3">{children}</div>}
+      {(saving !== undefined || children !== undefined) && (
+        <div className="ml-auto flex min-h-[42px] flex-wrap items-center gap-x-4.5 gap-y-1 max-sm:gap-x-3">
+          {saving}
+          {children}
+        </div>
+      )}
     </header>
+  );
+}
+
+function StripMenu({ children }: { children: ReactNode }) {
+  return (
+    <details className="group">
+      <summary aria-label="More of this pattern" className="icon-btn cursor-pointer list-none">
+        <Icon of={EllipsisVertical} size={20} />
+      </summary>
+      <div className="absolute inset-x-0 top-full z-30 flex flex-wrap items-center gap-3 border-b border-edge bg-chalk px-4 py-3">
+        {children}
+      </div>
+    </details>
   );
 }
 

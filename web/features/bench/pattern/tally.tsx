@@ -1,0 +1,50 @@
+import { ArrowDown } from 'lucide-react';
+import { VerdictLabel } from '../../../parts/verdict-mark.tsx';
+import { Button, IconButton } from '../../../ui/button.tsx';
+import { tallyVerdicts } from '../desk/bench-count.ts';
+import { useDesk } from '../desk/use-desk.ts';
+import { walkFaults } from '../desk/walking.ts';
+
+/** How many lines came out how, worst first, and the way to the next that wants a look. */
+export function Tally() {
+  const desk = useDesk();
+  const tally = tallyVerdicts(desk.pattern.lines, desk.counts);
+  const n = desk.pattern.lines.length;
+  const left = tally.filter(({ verdict }) => verdict !== 'agrees').reduce((sum, one) => sum + one.n, 0);
+  return (
+    <div className="panel-head flex-wrap gap-x-5 gap-y-1 bg-chalk py-1 max-sm:min-h-11 max-sm:gap-x-3">
+      <b className="max-sm:hidden">
+        {n} {n === 1 ? 'line' : 'lines'}
+      </b>
+      <ul aria-label="Verdicts" className="contents">
+        {tally.map(({ verdict, n: many }) => (
+          <li key={verdict} className={verdict === 'agrees' || verdict === 'no-total' ? 'max-sm:hidden' : ''}>
+            <VerdictLabel verdict={verdict}>
+              {' '}
+              <b className="text-walnut">{many}</b>
+            </VerdictLabel>
+          </li>
+        ))}
+      </ul>
+      {left > 0 && (
+        <>
+          <Button
+            kind="quiet"
+            size="row"
+            keys={['N']}
+            className="ml-auto text-walnut2! max-sm:hidden"
+            onClick={() => walkFaults(desk)}
+          >
+            Next
+          </Button>
+          <IconButton
+            icon={ArrowDown}
+            label="Next line to look at"
+            className="ml-auto text-woad sm:hidden"
+            onClick={() => walkFaults(desk)}
+          />
+        </>
+      )}
+    </div>
+  );
+}
