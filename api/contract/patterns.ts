@@ -47,6 +47,8 @@ export type PatternHead = z.infer<typeof PatternHead>;
 /** The bench document: everything of a pattern, every list in its order (lines by piece, then place). */
 export const Pattern = PatternHead.extend({
   studioName: z.string(),
+  /** Who asked. */
+  me: z.object({ id: z.uuid(), name: z.string() }),
   mayEdit: z.boolean(),
   /** May bin, archive and change who sees it. */
   mayManage: z.boolean(),

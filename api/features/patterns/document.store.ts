@@ -1,0 +1,74 @@
+import type { Knex } from 'knex';
+import type { Evidence } from '#contract/rows';
+import type { PatternRecording } from '#contract/patterns';
+
+interface RecordingRow {
+  id: string;
+  number: number;
+  title: string;
+  public_url: string | null;
+  public_offset_ms: number;
+  duration_ms: number | null;
+  version: number;
+  clip_state: 'arriving' | 'ready' | null;
+  clip_type: string | null;
+  clip_bytes: number | null;
+  transcript_id: string | null;
+}
+
+/** The recordings of a pattern in their order, each with its clip and its newest transcript. */
+export async function listRecordings(db: Knex, patternId: string): Promise<PatternRecording[]> {
+  const { rows } = await db.raw<{ rows: RecordingRow[] }>(
+    `select r.id, pr.number, r.title, r.public_url, r.public_offset_ms, r.duration_ms, r.version,
+            o.state as clip_state, o.type as clip_type, o.bytes as clip_bytes,
+            (select t.id from transcripts t where t.recording_id = r.id order by t.number desc limit 1) as transcript_id
+       from pattern_recordings pr
+       join recordings r on r.id = pr.recording_id
+       left join objects o on o.id = r.clip_object_id and o.state in ('arriving', 'ready')
+      where pr.pattern_id = ? and pr.removed_at is null
+      order by pr.order_key, pr.number`,
+    [patternId],
+  );
+  return rows.map((row) => ({
+    id: row.id,
+    number: row.number,
+    title: row.title,
+    clip:
+      row.clip_state === null
+        ? null
+        : {
+            state: row.clip_state,
+            url: row.clip_state === 'ready' ? `/api/recordings/${row.id}/clip` : null,
+            type: row.clip_type ?? '',
+            bytes: row.clip_bytes ?? 0,
+          },
+    publicUrl: row.public_url,
+    publicOffsetMs: row.public_offset_ms,
+    durationMs: row.duration_ms,
+    transcriptId: row.transcript_id,
+    version: row.version,
+  }));
+}
+
+/** Where each line was heard, in the order of the recording; the words stand in the reading's own draft. */
+export async function listEvidence(db: Knex, patternId: string): Promise<Evidence[]> {
+  const { rows } = await db.raw<{ rows: Evidence[] }>(
+    `with heard as (
+       select r.id as reading_id, (w ->> 'firstWord')::int as first_word, (w ->> 'lastWord')::int as last_word,
+              min(w ->> 'words') as words
+         from (select distinct e.reading_id as id from line_evidence e join lines l on l.id = e.line_id
+                where l.pattern_id = :patternId) used
+         join readings r on r.id = used.id,
+              jsonb_path_query(r.draft, '$.pieces[*].lines[*].evidence[*]') as w
+        group by 1, 2, 3)
+     select e.id, e.line_id as "lineId", e.transcript_id as "transcriptId", e.role, e.first_word as "firstWord",
+            e.last_word as "lastWord", e.start_ms as "startMs", e.end_ms as "endMs", coalesce(h.words, '') as words
+       from line_evidence e
+       join lines l on l.id = e.line_id and l.deleted_at is null
+       left join heard h using (reading_id, first_word, last_word)
+      where l.pattern_id = :patternId
+      order by e.transcript_id, e.first_word, e.id`,
+    { patternId },
+  );
+  return rows;
+}
