@@ -1,5 +1,6 @@
 import express, { Router, type Express, type Request } from 'express';
 import { accountRoutes } from './features/account/account.routes.ts';
+import { recordingRoutes } from './features/recordings/recordings.routes.ts';
 import { studioRoutes } from './features/studios/studios.routes.ts';
 import { noStore, securityHeaders } from './http/headers.ts';
 import { healthRoutes, type Readiness } from './http/health.ts';
@@ -35,7 +36,7 @@ function countedCalls(deps: Deps): express.RequestHandler {
 function apiRoutes(deps: Deps): Router {
   const router = Router();
   router.use(noStore, sameOrigin(deps), readSession(deps), countedCalls(deps), express.json({ limit: JSON_LIMIT }));
-  router.use(accountRoutes(deps), studioRoutes(deps));
+  router.use(accountRoutes(deps), studioRoutes(deps), recordingRoutes(deps));
   router.use(noRoute, problemHandler(deps, personIdOf));
   return router;
 }
@@ -51,6 +52,8 @@ export function createApp(deps: Deps, options: AppOptions = {}): Express {
   const app = express();
   app.disable('x-powered-by');
   app.set('trust proxy', deps.env.trustedProxies);
+  // An ETag is a version here: only routes that have one give it.
+  app.set('etag', false);
   app.use(requestId, accessLog(deps, personIdOf), securityHeaders({ vite: deps.env.web === 'vite' }));
   app.use(healthRoutes(deps, options.readiness ?? { accepting: true }));
   app.use('/api', apiRoutes(deps));

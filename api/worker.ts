@@ -1,6 +1,7 @@
 import { pathToFileURL } from 'node:url';
 import { readEnv } from './env.ts';
 import { accountTasks } from './features/account/account.tasks.ts';
+import { recordingTasks } from './features/recordings/recordings.tasks.ts';
 import { sweepRequestKeys } from './http/idempotency.ts';
 import { sweepLimits } from './http/limits.ts';
 import { sweepSessions } from './http/session.ts';
@@ -13,6 +14,7 @@ export function allTasks(deps: Deps): Tasks {
   return {
     ...mailTasks(deps),
     ...accountTasks(deps),
+    ...recordingTasks(deps),
     'sweep-housekeeping': async () => {
       const now = deps.clock.now();
       await sweepSessions(deps.db, now);
@@ -26,6 +28,7 @@ export function allTasks(deps: Deps): Tasks {
 export const TIMETABLE: Timetable = {
   'sweep-housekeeping': '17 * * * *',
   'sweep-tokens': '23 3 * * *',
+  'sweep-storage': '41 * * * *',
 };
 
 /** Works off jobs until stopped. */

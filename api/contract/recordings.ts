@@ -55,6 +55,8 @@ export const ReadingSummary = z.object({
   /** Lines that wait for a look: differing, not fitting, not understood or without a total. */
   toLook: z.int(),
   unread: z.array(z.object({ quote: z.string(), atMs: z.int() })),
+  /** Set where nothing could be drafted, with the reason. */
+  notice: z.string().nullable(),
   /** Whether lines of the pattern come from it. */
   taken: z.boolean(),
 });

@@ -6,13 +6,6 @@ import { z } from 'zod';
 export const CLIP_BYTES = 8_000_000_000;
 /** A digest of this much from the start of a file is one of the four facts that say "the same file". */
 export const FIRST_BYTES = 1_048_576;
-/** Endings by which a clip is known, with the type it is served under. */
-export const CLIP_TYPES = {
-  '.mp4': 'video/mp4',
-  '.m4v': 'video/mp4',
-  '.webm': 'video/webm',
-  '.mov': 'video/quicktime',
-} as const;
 
 /** SHA-256 in lower-case hexadecimal. */
 export const Sha256 = z.string().regex(/^[0-9a-f]{64}$/, 'A SHA-256 has 64 hexadecimal digits.');

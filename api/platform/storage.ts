@@ -78,14 +78,19 @@ function isMissing(err: unknown): boolean {
 }
 
 async function ask<T>(work: (abortSignal: AbortSignal) => Promise<T>, withinMs: number): Promise<T> {
+  const cut = new AbortController();
+  // Stopped once the answer begins: the bytes of a clip may take as long as somebody watches it.
+  const timer = setTimeout(() => cut.abort(), withinMs);
   try {
-    return await work(AbortSignal.timeout(withinMs));
+    return await work(cut.signal);
   } catch (err) {
     if (isMissing(err)) throw err;
     if (err instanceof S3ServiceException && REFUSALS.has(err.name)) {
       throw new StorageRefused(err.name, { cause: err });
     }
     throw new StorageDown('object storage did not answer as it should', { cause: err });
+  } finally {
+    clearTimeout(timer);
   }
 }
 
