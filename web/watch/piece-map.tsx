@@ -1,0 +1,3 @@
+export function PieceMap() {
+  return null;
+}
