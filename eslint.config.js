@@ -25,6 +25,7 @@ export default defineConfig(
         clearInterval: 'readonly',
         fetch: 'readonly',
         AbortSignal: 'readonly',
+        performance: 'readonly',
       },
     },
   },

@@ -14,6 +14,8 @@ const KEEP_ALIVE_MS = 65_000;
 async function serve(env: Env): Promise<void> {
   const deps = openDeps(env);
   await refuseNewer(deps.db);
+  // The bucket may come later than the server: until then it is not ready, and says why in the log.
+  await deps.storage.prepare().catch((err: unknown) => deps.log.warn({ err }, 'no storage yet'));
   const readiness = { accepting: true };
   const server = createServer(createApp(deps, { readiness }));
   server.headersTimeout = REQUEST_MS;

@@ -26,6 +26,7 @@ export function securityHeaders(options: { readonly vite: boolean }): RequestHan
       },
     },
     strictTransportSecurity: { maxAge: 31_536_000, includeSubDomains: true },
+    frameguard: { action: 'deny' },
     referrerPolicy: { policy: 'strict-origin-when-cross-origin' },
     crossOriginResourcePolicy: { policy: 'same-origin' },
   });

@@ -1,5 +1,6 @@
 import { Router } from 'express';
 import type { Deps } from '../platform/deps.ts';
+import { noStore } from './headers.ts';
 import { pendingMigrations } from '../platform/migrations.ts';
 
 const WITHIN_MS = 1_500;
@@ -29,6 +30,7 @@ async function checkMigrations(deps: Deps): Promise<void> {
 /** `live`: the process runs. `ready`: it can do its work now. Strangers learn only that; the log says why not. */
 export function healthRoutes(deps: Deps, readiness: Readiness): Router {
   const router = Router();
+  router.use('/health', noStore);
   router.get('/health/live', (_req, res) => {
     res.json({ status: 'live' });
   });

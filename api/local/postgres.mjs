@@ -34,12 +34,16 @@ export function findPrograms() {
 
 const isRoot = () => process.getuid?.() === 0;
 
-/** Who runs the cluster: PostgreSQL refuses root, so root lends it the package's own user. */
-function owner() {
+/**
+ * Who runs the cluster in `dir`: PostgreSQL refuses root, so root lends it the package's own user. A cluster that is
+ * there already stays with whom it belongs to.
+ */
+function owner(dir) {
   if (!isRoot()) return { uid: process.getuid?.() ?? 0, gid: process.getgid?.() ?? 0 };
-  const line = readFileSync('/etc/passwd', 'utf8')
-    .split('\n')
-    .find((each) => each.startsWith('postgres:') || each.startsWith('nobody:'));
+  const there = statSync(path.join(dir, 'data'), { throwIfNoEntry: false });
+  if (there && there.uid !== 0) return { uid: there.uid, gid: there.gid };
+  const users = readFileSync('/etc/passwd', 'utf8').split('\n');
+  const line = ['postgres:', 'nobody:'].flatMap((name) => users.find((each) => each.startsWith(name)) ?? [])[0];
   const [, , uid, gid] = (line ?? '').split(':');
   if (uid === undefined || gid === undefined) throw new Error('there is no user "postgres" to run the cluster as');
   return { uid: Number(uid), gid: Number(gid) };
@@ -70,7 +74,7 @@ export function clusterDir(dir) {
 
 /** @param {Cluster} cluster @param {string} program @param {string[]} args */
 function run(cluster, program, args, options = {}) {
-  const { uid, gid } = owner();
+  const { uid, gid } = owner(cluster.dir);
   return execFileSync(path.join(cluster.bin, program), args, {
     // The present folder may be closed to the cluster's user.
     cwd: '/',
@@ -86,8 +90,7 @@ function run(cluster, program, args, options = {}) {
 const dataDir = (cluster) => path.join(cluster.dir, 'data');
 const socketDir = (cluster) => `/tmp/roundelay-pg-${cluster.port}`;
 
-function makeFolder(dir) {
-  const { uid, gid } = owner();
+function makeFolder(dir, { uid, gid }) {
   mkdirSync(dir, { recursive: true, mode: 0o700 });
   chownSync(dir, uid, gid);
 }
@@ -101,11 +104,11 @@ export function openCluster({ dir: wanted, port, test = false }) {
   const bin = findPrograms();
   if (bin === null) throw new Error("PostgreSQL's programs are not there");
   const dir = clusterDir(wanted);
-  makeFolder(dir);
+  makeFolder(dir, owner(dir));
   const passwordFile = path.join(dir, 'password');
   if (!existsSync(passwordFile)) {
     writeFileSync(passwordFile, randomBytes(18).toString('base64url'), { mode: 0o600 });
-    chownSync(passwordFile, owner().uid, owner().gid);
+    chownSync(passwordFile, owner(dir).uid, owner(dir).gid);
   }
   const cluster = { bin, dir, port, password: readFileSync(passwordFile, 'utf8'), test };
   if (!existsSync(path.join(dataDir(cluster), 'PG_VERSION'))) {
@@ -132,7 +135,7 @@ export function runningPort({ dir: wanted }) {
 
 /** @param {Cluster} cluster */
 export function startCluster(cluster) {
-  makeFolder(socketDir(cluster));
+  makeFolder(socketDir(cluster), owner(cluster.dir));
   const options = `-p ${cluster.port} -k ${socketDir(cluster)}`;
   // With a log file of its own pg_ctl returns at once; without, it would hold on to our output.
   const args = ['-D', dataDir(cluster), '-l', path.join(cluster.dir, 'log'), '-o', options, '-w', '-t', '30', 'start'];
