@@ -1,5 +1,4 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
-import { useNavigate } from 'react-router-dom';
 import { placesQuery, useSignOut } from '../features/account/account.queries.ts';
 import { PasswordPanel } from '../features/account/password-panel.tsx';
 import { PlacesPanel } from '../features/account/places-panel.tsx';
@@ -16,13 +15,11 @@ export const loader = signedInLoader((client) => client.query({ ...placesQuery, 
 export function Component() {
   const me = useMe();
   const { data: places } = useSuspenseQuery(placesQuery);
-  const navigate = useNavigate();
-  const signOut = useSignOut();
-  const leave = () => signOut.mutate(undefined, { onSuccess: () => void navigate(paths.signIn(), { replace: true }) });
+  const signOut = useSignOut(paths.signIn());
   return (
     <>
       <TopStrip title="Account" beside={me.name}>
-        <Button kind="quiet" onClick={leave}>
+        <Button kind="quiet" onClick={() => signOut.mutate()}>
           Sign out here
         </Button>
       </TopStrip>

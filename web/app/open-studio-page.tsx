@@ -23,7 +23,7 @@ export function Component() {
   return (
     <>
       <TopStrip title="Studio" beside="a new one" />
-      <main className="flex grow flex-col">
+      <main className="flex grow flex-col *:grow">
         <EmptyPaper title="Open a studio">
           <p>
             It holds your patterns and recordings. You are its owner, and can ask others in, as creators or editors.

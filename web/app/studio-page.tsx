@@ -59,7 +59,7 @@ export function Component() {
   return (
     <>
       <TopStrip title="Studio" />
-      <main className="grow">
+      <main className="flex grow flex-col *:grow">
         <EmptyPaper
           title="No studio yet"
           action={

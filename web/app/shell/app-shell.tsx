@@ -1,6 +1,9 @@
+import { useQuery } from '@tanstack/react-query';
 import { Outlet, ScrollRestoration, useLocation, useMatch } from 'react-router-dom';
 import { useEffect } from 'react';
 import { cx } from '../../lib/class-names.ts';
+import { initialsOf } from '../../features/studio/initials.tsx';
+import { sessionQuery } from '../../lib/session.ts';
 import { SkipLink } from '../../ui/skip-link.tsx';
 import { ToastProvider } from '../../ui/toast.tsx';
 import { Spine } from './spine.tsx';
@@ -21,10 +24,12 @@ function useLastBench(): string | null {
 export function AppShell() {
   const { pathname } = useLocation();
   const isBench = pathname.startsWith('/patterns/');
+  const { data } = useQuery(sessionQuery);
+  const person = data?.person;
   return (
     <ToastProvider>
       <SkipLink />
-      <Spine benchOf={useLastBench()} at={pathname} />
+      <Spine benchOf={useLastBench()} at={pathname} {...(person ? { initials: initialsOf(person.name) } : {})} />
       <div
         id="page"
         tabIndex={-1}

@@ -22,13 +22,13 @@ export function TopStrip({ title, beside, tabs, saving, isCompact = false, child
   const isPhone = useMedia(PHONE);
   if (isPhone && isCompact) {
     return (
-      <header className="relative flex min-h-[46px] items-center gap-x-2.5 border-b border-rule bg-chalk pl-1">
-        <Link to={paths.shelf()} aria-label="To the shelf" className="icon-btn">
+      <header className="relative flex min-h-[46px] flex-none items-center gap-x-2 border-b border-rule bg-chalk">
+        <Link to={paths.shelf()} aria-label="To the shelf" className="icon-btn -mr-2">
           <Icon of={ChevronLeft} size={22} />
         </Link>
         <h1 className="h-page min-w-0 truncate text-[18px]! leading-[22px]!">{title}</h1>
         <div className="small text-walnut2">{beside}</div>
-        <div className="small ml-auto">{saving}</div>
+        <div className="small ml-auto whitespace-nowrap">{saving}</div>
         <StripMenu>
           {tabs}
           {children}
@@ -37,12 +37,12 @@ export function TopStrip({ title, beside, tabs, saving, isCompact = false, child
     );
   }
   return (
-    <header className="sticky top-0 z-20 flex min-h-[52px] flex-wrap items-center gap-x-4.5 border-b border-rule bg-chalk px-5 max-sm:px-3">
+    <header className="sticky top-0 z-20 flex min-h-[52px] flex-none flex-wrap items-center gap-x-4.5 max-lg:gap-x-3 border-b border-rule bg-chalk px-5 max-sm:px-3">
       <h1 className="h-page max-sm:text-[18px]! max-sm:leading-[22px]!">{title}</h1>
       {beside && <div className="text-walnut2">{beside}</div>}
       {tabs}
       {(saving !== undefined || children !== undefined) && (
-        <div className="ml-auto flex min-h-[42px] flex-wrap items-center gap-x-4.5 gap-y-1 max-sm:gap-x-3">
+        <div className="ml-auto flex min-h-[42px] flex-wrap items-center gap-x-4.5 gap-y-1 max-lg:gap-x-2.5">
           {saving}
           {children}
         </div>
@@ -54,7 +54,7 @@ export function TopStrip({ title, beside, tabs, saving, isCompact = false, child
 function StripMenu({ children }: { children: ReactNode }) {
   return (
     <details className="group">
-      <summary aria-label="More of this pattern" className="icon-btn cursor-pointer list-none">
+      <summary aria-label="More of this pattern" className="icon-btn -ml-2 cursor-pointer list-none">
         <Icon of={EllipsisVertical} size={20} />
       </summary>
       <div className="absolute inset-x-0 top-full z-30 flex flex-wrap items-center gap-3 border-b border-edge bg-chalk px-4 py-3">
@@ -76,7 +76,7 @@ export function PatternTabs({ patternId }: { patternId: string }) {
   return (
     <nav
       aria-label="This pattern"
-      className="flex h-[52px] gap-7 sm:ml-5 max-sm:h-11 max-sm:w-full max-sm:gap-6 max-sm:overflow-x-auto"
+      className="flex h-[52px] gap-7 max-lg:gap-5 sm:ml-5 max-sm:h-11 max-sm:w-full max-sm:gap-6 max-sm:overflow-x-auto"
     >
       {TABS.map(([name, to]) => (
         <NavLink

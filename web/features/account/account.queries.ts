@@ -41,13 +41,13 @@ export function useSignIn() {
   };
 }
 
-export function useSignOut() {
-  const client = useQueryClient();
+/** Signs out and loads a page anew, so that nothing of what was read stays in this tab. */
+export function useSignOut(to = window.location.href) {
   return useMutation({
     mutationFn: () => send(Nothing, '/api/session', { method: 'DELETE' }),
     onSuccess: () => {
-      client.clear();
-      client.setQueryData(sessionQuery.queryKey, { person: null });
+      window.location.assign(to);
+      if (to === window.location.href) window.location.reload();
     },
   });
 }

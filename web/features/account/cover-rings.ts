@@ -90,6 +90,7 @@ export function coverRings(size: number): Cover {
     const bottom = from.r + Math.max(to.width, from.width) / 2 + 1;
     const top = to.r - to.width * 0.4;
     const spread = Math.min(0.5 * (to.span / to.count) * to.r, 0.42 * band);
+    const near = (angle: number, m: number, r: number) => m + Math.max(-spread / r, Math.min(spread / r, angle - m));
     let d = '';
     let [used, made] = [0, 0];
     for (const stitch of work) {
@@ -97,11 +98,11 @@ export function coverRings(size: number): Cover {
       if (stitch === 'i') {
         const m = (middle(made) + middle(made + 1)) / 2;
         d += `M${point(bottom, foot(used))}L${point(fork, m)}`;
-        for (const side of [-1, 1]) d += `M${point(fork, m)}L${point(top, m + (side * spread) / to.r)}`;
+        for (const k of [made, made + 1]) d += `M${point(fork, m)}L${point(top, near(middle(k), m, to.r))}`;
       } else if (stitch === 'd') {
         const m = middle(made);
         d += `M${point(fork, m)}L${point(top, m)}`;
-        for (const side of [-1, 1]) d += `M${point(bottom, m + (side * spread) / bottom)}L${point(fork, m)}`;
+        for (const k of [used, used + 1]) d += `M${point(bottom, near(foot(k), m, bottom))}L${point(fork, m)}`;
       } else if (isOpen) {
         d += `M${point(to.r - 0.46 * band, middle(made))}L${point(top, middle(made))}`;
       }
