@@ -33,6 +33,12 @@ export interface Work {
   readonly loops: Loops | null;
   /** `2sc` written in one piece in a series: an increase in most patterns, two stitches in a row in others. */
   readonly glued: boolean;
+  /** The count was said as a multiple (`inc × 6`), which at the end of a series may mean all of it. */
+  readonly multiplied: boolean;
+  /** A chain that stands between the groups of the line: `ch 1 between`. */
+  readonly between?: true;
+  /** Colour letter, where the line is told in colours (`A 4, B 2`). */
+  readonly colour?: string;
   /** For a starting chain: what the line says about it. */
   readonly counts?: ChainCounts | null;
 }
@@ -137,7 +143,7 @@ export interface Lay {
 export interface Step {
   readonly type: 'step';
   readonly span: Span;
-  readonly what: 'join' | 'turn' | 'no-turn' | 'ring' | 'leave' | 'colour' | 'finish' | 'marker' | 'do';
+  readonly what: 'join' | 'turn' | 'no-turn' | 'ring' | 'leave' | 'far' | 'colour' | 'finish' | 'marker' | 'do';
   /** For ring: chains joined into it; for leave: places left on purpose. */
   readonly n?: number;
   /** For a join: where it goes, which tells whether the starting chain counts. */

@@ -1,0 +1,65 @@
+import { type Totals } from '../language/tree.ts';
+import { type Tally } from './tally.ts';
+
+export type CountedWith = 'stitches' | 'chains' | 'spaces';
+
+/** How a total compares with what was made. `ways`: in which senses a plain number comes out right. */
+export interface Compared {
+  readonly equal: boolean;
+  /** False where the total counts something that cannot be compared (petals, points). */
+  readonly comparable: boolean;
+  readonly ways: readonly CountedWith[];
+}
+
+/** Senses in which a plain number equals what was made: stitches, stitches and chains, stitches and spaces. */
+export function waysOf(n: number, tally: Tally): CountedWith[] {
+  const ways: CountedWith[] = [];
+  if (n === tally.sts) ways.push('stitches');
+  if (tally.chains > 0 && (n === tally.sts + tally.chains || n === tally.sts + tally.chainsOutside))
+    ways.push('chains');
+  if (tally.spaces > 0 && n === tally.sts + tally.spaces) ways.push('spaces');
+  return ways;
+}
+
+/** Compares a total kind by kind, for one size (or one round). */
+export function compareTotals(totals: Totals, tally: Tally, index: number): Compared {
+  let equal = true;
+  let comparable = false;
+  let ways: CountedWith[] = [];
+  const kinds = Object.keys(totals);
+  for (const [kind, figures] of Object.entries(totals)) {
+    const n = figures[index] ?? figures[0];
+    if (n === undefined) continue;
+    if (kind === 'sts') {
+      ways = waysOf(n, tally);
+      comparable = true;
+      if (ways.length === 0) equal = false;
+      continue;
+    }
+    const worked = figureOf(kind, tally, kinds.length === 1);
+    if (worked === null) continue;
+    if (worked.loose && !worked.figures.includes(n)) continue;
+    comparable = true;
+    if (!worked.figures.includes(n)) equal = false;
+  }
+  return { equal: equal && comparable, comparable, ways };
+}
+
+/** What was made of a kind; several figures where it may be counted in several ways. Null: not to be compared. */
+function figureOf(kind: string, tally: Tally, alone: boolean): { figures: readonly number[]; loose: boolean } | null {
+  const strict = (...figures: number[]) => ({ figures, loose: false });
+  if (kind === 'ch') return strict(tally.chains, tally.chainsOutside);
+  if (kind === 'sp' || kind === 'gap') return strict(tally.spaces);
+  const space = /^ch-(\d+) sp$/.exec(kind);
+  if (space) return strict(tally.byLength[Number(space[1])] ?? 0);
+  if (kind === 'inc' || kind === 'dec' || kind === 'invdec') return null;
+  if (kind === 'corner') return tally.spaces === 4 ? strict(4) : null;
+  if (kind === 'group' || kind === 'shell') return { figures: [tally.groups], loose: true };
+  if (/^[A-Z]$/.test(kind)) return strict(tally.byColour[kind] ?? 0);
+  const own = tally.byStitch[kind];
+  if (own !== undefined) {
+    // `(24 sc)` under a line of several kinds may say all of its stitches.
+    return alone && own !== tally.sts ? { figures: [own, tally.sts], loose: false } : strict(own);
+  }
+  return alone ? strict(tally.sts) : strict(0);
+}

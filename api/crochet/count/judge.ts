@@ -1,0 +1,121 @@
+import { type LineTree, type ReadLine, type Totals } from '../language/tree.ts';
+import { compareTotals, type CountedWith } from './compare.ts';
+import { plainLeft } from './places.ts';
+import { mixtures, usualFor, type Choices } from './readings.ts';
+import { type Ask, type Verdict } from './result.ts';
+import { workLine, type LineWork, type Setting } from './work-line.ts';
+
+/** Totals given for a line: written (in the text or beside it) and spoken. */
+export interface Given {
+  readonly written: Totals | null;
+  readonly said: Totals | null;
+}
+
+/** A line worked and judged, for one size and one round. */
+export interface Judged {
+  readonly work: LineWork;
+  readonly choices: Choices;
+  readonly verdict: Verdict;
+  readonly ways: readonly CountedWith[];
+  readonly odd: readonly ('said' | 'written' | 'worked')[];
+  readonly asks: readonly Ask[];
+  /** The text did not tell a base, and the total was taken for it. */
+  readonly inferred: boolean;
+}
+
+/**
+ * Works a line under every reading its words leave open and takes the usual one, unless only another fits the places
+ * and the totals.
+ *
+ * @param index which figure of a total counts: the size, or the round of a range that lists one each.
+ */
+export function judgeLine(read: ReadLine, given: Given, setting: Setting, index: number): Judged {
+  const usual = usualFor(read.tree);
+  let best: Judged | null = null;
+  let bestScore = -1;
+  for (const choices of mixtures(read.tree, usual)) {
+    const judged = tryReading(read.tree, choices, given, setting, index);
+    const score = scoreOf(judged);
+    if (score > bestScore && isAllowed(choices, usual, judged, given, read.tree)) {
+      best = judged;
+      bestScore = score;
+    }
+    if (score === 3 && best === judged) break;
+  }
+  return best!;
+}
+
+function scoreOf(judged: Judged): number {
+  if (judged.verdict === 'agrees') return 3;
+  if (judged.verdict === 'no-total') return 2;
+  return judged.work.fits ? 1 : 0;
+}
+
+/** Readings that only a total can settle are not taken on the places alone. */
+function isAllowed(choices: Choices, usual: Choices, judged: Judged, given: Given, tree: LineTree): boolean {
+  if (choices === usual) return true;
+  const settled = judged.verdict === 'agrees';
+  const hasTotal = given.written !== null || given.said !== null;
+  if (choices.whole !== usual.whole) return settled || (!hasTotal && judged.work.fits && isRepeatedOften(judged));
+  if (choices.cut !== usual.cut) return settled && hasOpening(tree);
+  if (choices.chains !== usual.chains || choices.dec !== usual.dec) return settled;
+  return true;
+}
+
+/** A few stitches, over and over: nobody writes `2 sc, inc` under eighteen stitches and means it once. */
+const isRepeatedOften = (judged: Judged): boolean => judged.work.walk.length >= 6;
+
+/** Something is worked before the repeat, so that it may stop in the middle to meet it. */
+function hasOpening(tree: LineTree): boolean {
+  const works = tree.items.filter((item) => item.type === 'work' || item.type === 'group' || item.type === 'skip');
+  return works[0]?.type === 'work' && works.length > 1;
+}
+
+function tryReading(tree: LineTree, choices: Choices, given: Given, setting: Setting, index: number): Judged {
+  const work = workLine(tree, choices, setting);
+  if (work.endless) {
+    const inferred = inferBase(tree, choices, given, setting, index);
+    if (inferred) return inferred;
+  }
+  return { ...verdictOf(work, given, index), work, choices, asks: [], inferred: false };
+}
+
+/** Where the base is not known, the one base that gives the total. */
+function inferBase(tree: LineTree, choices: Choices, given: Given, setting: Setting, index: number): Judged | null {
+  const figures = (given.written ?? given.said)?.sts;
+  const total = figures?.[index] ?? figures?.[0];
+  if (total === undefined || total > 2000) return null;
+  for (let n = 1; n <= total * 2; n += 1) {
+    const work = workLine(tree, choices, { ...setting, left: plainLeft(n) });
+    if (!work.fits || work.tally.sts !== total) continue;
+    return {
+      ...verdictOf(work, given, index),
+      work: { ...work, base: null, uses: null },
+      choices,
+      asks: [],
+      inferred: true,
+    };
+  }
+  return null;
+}
+
+function verdictOf(work: LineWork, given: Given, index: number): Pick<Judged, 'verdict' | 'ways' | 'odd'> {
+  const written = given.written ? compareTotals(given.written, work.tally, index) : null;
+  const said = given.said ? compareTotals(given.said, work.tally, index) : null;
+  const ways = written?.ways ?? said?.ways ?? [];
+  const isWritten = written?.comparable ? written.equal : null;
+  const isSaid = said?.comparable ? said.equal : null;
+  if (!work.fits) return { verdict: 'does-not-fit', ways, odd: ['worked'] };
+  if (isWritten === null && isSaid === null) return { verdict: 'no-total', ways, odd: [] };
+  if (isWritten !== false && isSaid !== false) return { verdict: 'agrees', ways, odd: [] };
+  return { verdict: 'differs', ways, odd: oddOf(isWritten, isSaid, given) };
+}
+
+/** The total unlike the other two; where only two are given, or all three are unlike, all of them. */
+function oddOf(written: boolean | null, said: boolean | null, given: Given): ('said' | 'written' | 'worked')[] {
+  if (written === null) return ['said', 'worked'];
+  if (said === null) return ['written', 'worked'];
+  if (written !== said) return written ? ['said'] : ['written'];
+  const isSame = JSON.stringify(given.written) === JSON.stringify(given.said);
+  return isSame ? ['worked'] : ['said', 'written', 'worked'];
+}

@@ -1,0 +1,94 @@
+import { type Item, type Target } from '../language/tree.ts';
+import { type Named } from './places.ts';
+
+interface Found {
+  st: boolean;
+  ch: boolean;
+  gap: boolean;
+  sps: Target[];
+}
+
+/** Which kinds of places a line works into. Travelling and joining slip stitches and skips name none. */
+export function namedIn(items: readonly Item[]): Named {
+  const found: Found = { st: false, ch: false, gap: false, sps: [] };
+  const travels = travelling(items);
+  walk(items.slice(travels), found);
+  return found;
+}
+
+/** How many items at the start only travel: slip stitches before a starting chain. */
+export function travelling(items: readonly Item[]): number {
+  let n = 0;
+  let slips = 0;
+  for (const item of items) {
+    const isSlip = item.type === 'work' && item.stitch === 'slst' && item.times.type === 'n';
+    if (isSlip) slips += 1;
+    else if (item.type !== 'note' && item.type !== 'step' && item.type !== 'loops') break;
+    n += 1;
+  }
+  const next = items[n];
+  return slips > 0 && next?.type === 'work' && next.stitch === 'ch' ? n : 0;
+}
+
+function walk(items: readonly Item[], found: Found): void {
+  let local = false;
+  for (const item of items) {
+    if (item.type === 'group') {
+      if (item.into) note(item.into, found);
+      walk(
+        item.into
+          ? item.items.filter((inner) => inner.type === 'work' && inner.into !== null && inner.into.which !== 'same')
+          : item.items,
+        found,
+      );
+      local = false;
+    } else if (item.type === 'work') {
+      // What is worked into a chain just made goes on along that chain.
+      if (item.into?.which === 'hook') {
+        local = true;
+        continue;
+      }
+      if (item.stitch === 'ch' || item.stitch === 'picot') continue;
+      if (
+        local &&
+        !item.into?.stitch &&
+        (item.into === null || item.into.what === 'st' || item.into.what === 'ch') &&
+        item.times.type === 'n'
+      )
+        continue;
+      if (item.into) note(item.into, found);
+      else found.st = true;
+    } else if (item.type === 'skip') {
+      if (item.of?.what === 'sp') note(item.of, found);
+      else if (item.of?.which === 'every') found.st = true;
+    } else if (item.type === 'straight' || item.type === 'shaped') found.st = true;
+    if (item.type === 'work' && item.times.type === 'fill' && item.times.to) {
+      if (item.times.to.what === 'sp') note(item.times.to, found);
+    }
+  }
+}
+
+function note(target: Target, found: Found): void {
+  switch (target.what) {
+    case 'sp':
+      found.sps.push(target);
+      return;
+    case 'gap':
+      found.gap = true;
+      return;
+    case 'ch':
+      if (target.which !== 'hook') found.ch = true;
+      return;
+    case 'st-or-ch':
+      found.ch = true;
+      found.st = true;
+      return;
+    case 'ring':
+      return;
+    case 'other':
+      if (target.which !== 'same') found.st = true;
+      return;
+    default:
+      if (target.which !== 'same') found.st = true;
+  }
+}

@@ -1,0 +1,168 @@
+import { type Target } from '../language/tree.ts';
+
+/** One thing that a line leaves in its row: a stitch, or a run of chains. */
+export interface Made {
+  readonly kind: 'st' | 'chs';
+  readonly stitch: string;
+  /** Chains in the run; 0 for a stitch. */
+  readonly chains: number;
+  /** Places of the line before that it stands on. */
+  readonly on: readonly number[];
+  /** Stitches that stand together in one place share a group; its number, or -1. */
+  readonly group: number;
+  /** Number within its group, from 1, and the size of the group. */
+  readonly nth: number;
+  readonly size: number;
+  /** A run of chains that stands between stitches of one place (a corner). */
+  readonly inside: boolean;
+  readonly colour: string | null;
+}
+
+/** What a line leaves for the next. */
+export interface Left {
+  readonly made: readonly Made[];
+  readonly shape: 'ring' | 'row' | 'chain' | 'base';
+  /** Chains of a foundation, or joined into a ring, that are not worked yet. */
+  readonly chains: number;
+  /** Places left unworked by short rows, that come back. */
+  readonly unworked: number;
+  /** A turning chain made at the end of the line for the next one. */
+  readonly turningChain: number;
+  /** Stitches as counted in the line's total. */
+  readonly count: number | null;
+  /** Anything may be worked into it: a magic ring, or what is not known. */
+  readonly open: boolean;
+}
+
+export const NOTHING: Left = {
+  made: [],
+  shape: 'base',
+  chains: 0,
+  unworked: 0,
+  turningChain: 0,
+  count: null,
+  open: true,
+};
+
+/** A row of plain places of which only the number is known. */
+export function plainLeft(n: number): Left {
+  const made = Array.from({ length: Math.max(0, n) }, (_, i): Made => ({ ...PLAIN, on: [i] }));
+  return { ...NOTHING, made, count: n, open: false };
+}
+
+export const PLAIN: Made = {
+  kind: 'st',
+  stitch: 'st',
+  chains: 0,
+  on: [],
+  group: -1,
+  nth: 1,
+  size: 1,
+  inside: false,
+  colour: null,
+};
+
+/** A place of the line that is being worked. `counted`: of a kind that the line names. */
+export interface Place {
+  readonly kind: 'st' | 'sp' | 'ch' | 'gap';
+  readonly stitch: string;
+  readonly chains: number;
+  readonly group: number;
+  readonly nth: number;
+  readonly size: number;
+  readonly inside: boolean;
+  readonly counted: boolean;
+}
+
+/** The kinds of places that a line works into. */
+export interface Named {
+  readonly st: boolean;
+  readonly ch: boolean;
+  readonly gap: boolean;
+  readonly sps: readonly Target[];
+}
+
+/** Places along what the line before left, in working order, for a line that names these kinds. */
+export function placesOf(left: Left, named: Named): Place[] {
+  const places: Place[] = [];
+  const { made } = left;
+  const spaces = made.filter((one) => one.kind === 'chs');
+  const noSpaces = named.sps.length > 0 && spaces.length === 0 && !named.st;
+  const wantGaps = named.gap || noSpaces;
+  let gaps = 0;
+  made.forEach((one, i) => {
+    if (one.kind === 'st') places.push({ ...one, kind: 'st', counted: named.st });
+    else if (named.ch) {
+      for (let n = 0; n < one.chains; n += 1) places.push({ ...one, kind: 'ch', stitch: 'ch', counted: true });
+    } else places.push({ ...one, kind: 'sp', counted: named.sps.some((target) => isSpace(target, one, spaces)) });
+    const next = made[i + 1] ?? (left.shape === 'ring' ? made[0] : undefined);
+    if (wantGaps && next && isGap(one, next, made.length)) {
+      places.push({ ...PLAIN, kind: 'gap', counted: true });
+      gaps += 1;
+    }
+  });
+  // Spaces between groups are called gaps where there is a chain in each.
+  if (named.gap && gaps === 0)
+    return places.map((place) => (place.kind === 'sp' ? { ...place, kind: 'gap', counted: true } : place));
+  return places;
+}
+
+/** Whether a space is meant by `ch-2 sp`, `corner`, or any `sp`. */
+function isSpace(
+  target: Target,
+  space: Pick<Made, 'chains' | 'inside'>,
+  spaces: readonly Pick<Made, 'chains' | 'inside'>[],
+): boolean {
+  if (target.chains !== undefined) return space.chains === target.chains;
+  if (!target.corner) return true;
+  if (spaces.some((other) => other.inside)) return space.inside;
+  const longest = Math.max(...spaces.map((other) => other.chains));
+  return space.chains === longest;
+}
+
+/** Between two groups that stand in different places, or where a place was passed over. */
+function isGap(one: Made, next: Made, length: number): boolean {
+  if (one.kind !== 'st' || next.kind !== 'st' || length < 2) return false;
+  if (one.group >= 0 && one.group === next.group) return false;
+  if (one.size > 1 || next.size > 1) return true;
+  const from = one.on.at(-1);
+  const to = next.on[0];
+  return from !== undefined && to !== undefined && to - from > 1;
+}
+
+/** Whether a place is one that the target names. */
+export function isAt(place: Place, target: Target | null, places: readonly Place[]): boolean {
+  if (!target) return place.kind === 'st' || place.kind === 'ch';
+  switch (target.what) {
+    case 'sp':
+      if (place.kind === 'gap') return !places.some((other) => other.kind === 'sp');
+      return place.kind === 'sp' && isSpace(target, place, spacesOf(places));
+    case 'gap':
+      return place.kind === 'gap';
+    case 'ch':
+      return place.kind === 'ch' || (place.kind === 'sp' && !places.some((other) => other.kind === 'ch'));
+    case 'st-or-ch':
+      return place.kind === 'st' || place.kind === 'ch';
+    case 'group':
+      return place.kind === 'st' && place.size > 1 && place.nth === Math.ceil(place.size / 2);
+    case 'st':
+      if (target.corner) return place.kind === 'st' && place.size >= 3 && place.nth === Math.ceil(place.size / 2);
+      if (place.kind === 'ch') return !target.stitch;
+      return place.kind === 'st' && isStitch(place, target.stitch);
+    default:
+      return place.kind === 'st' || place.counted;
+  }
+}
+
+function spacesOf(places: readonly Place[]): readonly Place[] {
+  return places.filter((place) => place.kind === 'sp');
+}
+
+/** A place of which only the number is known may be any stitch. */
+export const isStitch = (place: Pick<Place, 'stitch'>, key: string | undefined): boolean =>
+  key === undefined ||
+  place.stitch === 'st' ||
+  place.stitch === key ||
+  place.stitch.startsWith(key) ||
+  place.stitch.endsWith(key) ||
+  key === 'st';

@@ -1,0 +1,333 @@
+import { type Span } from '../span.ts';
+import { type Item, type LineTree } from '../language/tree.ts';
+import { stitchOf } from '../stitches.ts';
+import { allItems, chainBase, foundationOf, ownChain, targetsIn, type FreeLoops } from './base.ts';
+import { namedIn, travelling } from './named.ts';
+import { pick, type Job } from './job.ts';
+import { perform, takeOne } from './perform.ts';
+import { NOTHING, placesOf, plainLeft, type Left, type Named, type Place } from './places.ts';
+import { shaped, type Choices } from './readings.ts';
+import { firstStitch, performStart, startOf, type ChainPolicy } from './start.ts';
+import { grouped, tallyOf, type Tally } from './tally.ts';
+import { Walker, type Step } from './walker.ts';
+
+/** What a line needs to know of the piece it stands in. */
+export interface Setting {
+  readonly left: Left;
+  readonly ring: boolean;
+  readonly size: number;
+  readonly policy: ChainPolicy;
+  readonly own: ReadonlyMap<string, readonly Item[]>;
+  /** What a bare `inc` is made of where the line names no stitch. */
+  readonly stitch: string;
+  readonly free: FreeLoops;
+  /** Rows of the piece so far, for work along its side. */
+  readonly rows: number;
+  /** A later line goes over what a short row leaves. */
+  readonly comesBack: boolean;
+  readonly label: number | null;
+}
+
+/** A line worked once, under one choice of what its words leave open. */
+export interface LineWork {
+  readonly fits: boolean;
+  readonly base: number | null;
+  readonly uses: number | null;
+  readonly short: number;
+  readonly over: number;
+  readonly fault: Span | null;
+  readonly tally: Tally;
+  readonly walk: readonly Step[];
+  readonly left: Left;
+  /** The base was not known and the line goes on until it runs out. */
+  readonly endless: boolean;
+  /** Whether a starting chain counts was settled by nothing. */
+  readonly chainUnsaid: boolean;
+  /** Loops worked into from behind or before, which leaves as many of the others free. */
+  readonly isFoundation: boolean;
+  /** All chains of the line stand in its own foundation. */
+  readonly lapsed: number;
+}
+
+/** Works a line on what the line before left. Pure; linear in the stitches made. */
+export function workLine(tree: LineTree, choices: Choices, setting: Setting): LineWork {
+  const foundation = foundationOf(tree.items, setting.size);
+  if (foundation) return foundationWork(foundation);
+  const items = shaped(tree, choices);
+  const loop = items.find((item) => item.type === 'group' && item.into?.what === 'loop');
+  if (loop?.type === 'group')
+    return onPlaces(loop.items, choices, { ...setting, left: loopBase(loop.into!.line ?? null, setting) }, 0, null);
+  const own = ownChain(items, setting.size);
+  const { left } = setting;
+  const isOnChain = left.chains > 0 && left.made.length === 0;
+  if (own && (left === NOTHING || left.open || isOnChain)) {
+    const base = chainBase(own.chains, items, false);
+    return onPlaces(items.slice(own.index + 1), choices, { ...setting, left: base.left }, base.hook, base.told);
+  }
+  if (isOnChain) {
+    const base = chainBase(left.chains, items, left.shape === 'ring');
+    return onPlaces(
+      items,
+      choices,
+      { ...setting, left: { ...base.left, turningChain: left.turningChain } },
+      base.hook,
+      base.told,
+    );
+  }
+  if (
+    left.open &&
+    allItems(items).some((item) => (item.type === 'work' || item.type === 'group') && item.into?.what === 'row-end') &&
+    setting.rows > 0
+  ) {
+    return onPlaces(items, choices, { ...setting, left: plainLeft(setting.rows) }, 0, null);
+  }
+  return onPlaces(items, choices, setting, 0, null);
+}
+
+function foundationWork(left: Left): LineWork {
+  const walk = Array.from({ length: left.chains }, (): Step => ({ stitch: 'ch', on: [], makes: 0, colour: null }));
+  const tally = { ...tallyOf([], walk), sts: left.chains };
+  return {
+    fits: true,
+    base: null,
+    uses: null,
+    short: 0,
+    over: 0,
+    fault: null,
+    tally,
+    walk,
+    left: { ...left, count: left.chains },
+    endless: false,
+    chainUnsaid: false,
+    isFoundation: true,
+    lapsed: 0,
+  };
+}
+
+function loopBase(line: number | null, setting: Setting): Left {
+  const free = line === null ? [...setting.free.values()].at(-1) : setting.free.get(line);
+  return free ? plainLeft(free.n) : NOTHING;
+}
+
+/** `with dc in 4th ch from hook` on a foundation: whether the chains passed over are a stitch. */
+function hookStart(
+  items: readonly Item[],
+  hook: number,
+  job: Job,
+  policy: ChainPolicy,
+): { stitch: string | null; extra: number; unsaid: boolean } {
+  const stitch = firstStitch(items);
+  const row = stitch ? stitchOf(stitch) : undefined;
+  const height = row?.height ?? 1;
+  if (!stitch || hook <= 2 || height < 2) return { stitch: null, extra: 0, unsaid: false };
+  const over = hook - 1 - height;
+  const spaces = allItems(items).flatMap((item) =>
+    item.type === 'work' && item.stitch === 'ch' && item.times.type === 'n' ? [item.times.n[0]!] : [],
+  );
+  const extra = over > 0 ? (spaces.find((n) => over === 2 * n || over === n) ?? 0) : 0;
+  const usual = (over >= 0 && height >= 3) || extra > 0;
+  const known = policy[stitch] ?? null;
+  const counts = extra > 0 ? true : (known ?? (job.choices.chain === 'usual' ? usual : !usual));
+  return {
+    stitch: counts && row?.family === 'plain' ? stitch : null,
+    extra: counts ? extra : 0,
+    unsaid: known === null && extra === 0,
+  };
+}
+
+function onPlaces(
+  items: readonly Item[],
+  choices: Choices,
+  setting: Setting,
+  hook: number,
+  told: number | null,
+): LineWork {
+  const { left } = setting;
+  const first = namedIn(items);
+  const named: Named =
+    choices.chains === 'places' && first.sps.length === 0 && first.st ? { ...first, ch: true } : first;
+  const wantsSkipped =
+    targetsIn(items).some((target) => target.which === 'skipped') &&
+    !allItems(items).some((item) => item.type === 'skip');
+  const base =
+    wantsSkipped && left.unworked > 0 ? { ...left, made: [...left.made, ...plainLeft(left.unworked).made] } : left;
+  const isOpen =
+    left.open ||
+    (hook === 0 &&
+      allItems(items).some((item) => (item.type === 'work' || item.type === 'group') && item.into?.what === 'ring'));
+  let places = isOpen ? [] : placesOf(base, named);
+  const travels = hook > 0 ? 0 : travelling(items);
+  let pointed = -1;
+  let at = 0;
+  if (travels > 0 && !isOpen) {
+    const standing = travelled(places, items.slice(0, travels), setting.size);
+    if (standing >= 0 && setting.ring) places = [...places.slice(standing), ...places.slice(0, standing)];
+    else at = standing;
+    pointed = standing < 0 ? -1 : setting.ring ? 0 : standing;
+  }
+  const walker = new Walker(places, isOpen);
+  if (pointed >= 0) {
+    walker.at = Math.max(0, at);
+    walker.pointed = pointed;
+  }
+  const body = items.slice(travels);
+  const job: Job = {
+    walker,
+    choices,
+    size: setting.size,
+    stitch: firstPlain(items) ?? setting.stitch,
+    named,
+    own: setting.own,
+    ring: setting.ring,
+    local: null,
+    marks: marksOf(items, places, setting.size),
+    endless: false,
+    turned: false,
+    turningChain: 0,
+    lastSlip: closingSlip(body),
+  };
+  const begun = begin(job, body, setting, hook, isOpen);
+  perform(job, begun.items, 0);
+  return finish(job, setting, told, begun.unsaid, isOpen);
+}
+
+function begin(
+  job: Job,
+  body: readonly Item[],
+  setting: Setting,
+  hook: number,
+  isOpen: boolean,
+): { items: readonly Item[]; unsaid: boolean } {
+  if (hook > 0) {
+    const start = hookStart(body, hook, job, setting.policy);
+    if (start.stitch) job.walker.stitch(start.stitch, []);
+    job.walker.chain(start.extra);
+    return { items: withoutSkips(body), unsaid: start.unsaid };
+  }
+  const start = startOf(body, 0, job, setting.policy, setting.left.turningChain);
+  if (!start) return { items: body, unsaid: false };
+  const after = body.slice(start.index);
+  if (start.stitch || start.extra > 0) performStart(job, start, after, isOpen);
+  return { items: after, unsaid: start.unsaid };
+}
+
+/** `skip first 3 ch` on a foundation has been reckoned with in its places already. */
+function withoutSkips(items: readonly Item[]): readonly Item[] {
+  const index = items.findIndex((item) => item.type === 'work' || item.type === 'group' || item.type === 'skip');
+  const first = items[index];
+  const isLead = first?.type === 'skip' && (first.of?.what === 'ch' || first.of?.which === 'first');
+  return isLead ? [...items.slice(0, index), ...items.slice(index + 1)] : items;
+}
+
+/** Index of the place that travelling slip stitches end on. */
+function travelled(places: readonly Place[], slips: readonly Item[], size: number): number {
+  const walker = new Walker(places, false);
+  for (const item of slips) {
+    if (item.type !== 'work') continue;
+    const n = item.times.type === 'n' ? pick(item.times.n, size) : 1;
+    for (let i = 0; i < n; i += 1) {
+      const target = item.into;
+      if (target && (target.which === 'centre' || target.which === 'nth') && target.of !== undefined) {
+        const nth = (place: Place) => (target.which === 'centre' ? Math.ceil(place.size / 2) : (target.n ?? 1));
+        const found = places.findIndex(
+          (place, index) => index >= walker.at && place.kind === 'st' && place.size > 1 && place.nth === nth(place),
+        );
+        if (found >= 0) {
+          walker.at = found + 1;
+          walker.last = found;
+        }
+        continue;
+      }
+      takeOne(
+        { walker } as Job,
+        target?.which === 'first' || target?.which === 'same'
+          ? { ...target, which: 'next', what: target.what === 'other' ? 'st' : target.what }
+          : target,
+        item,
+      );
+    }
+  }
+  return walker.last;
+}
+
+/** The first plain stitch named, which a bare `inc` or `dec` takes. */
+function firstPlain(items: readonly Item[]): string | null {
+  for (const item of allItems(items)) {
+    if (item.type !== 'work') continue;
+    const family = stitchOf(item.stitch)?.family;
+    if (family === 'plain') return item.stitch;
+    const together = /^([a-z]+?)\d+tog$/.exec(item.stitch);
+    if (together) return together[1]!;
+  }
+  return null;
+}
+
+/** A last slip stitch after everything: it finishes off and is no stitch of the line. */
+function closingSlip(items: readonly Item[]): Item | null {
+  const works = items.filter((item) => item.type === 'work' || item.type === 'group' || item.type === 'skip');
+  const last = works.at(-1);
+  const isSlip =
+    last?.type === 'work' &&
+    last.stitch === 'slst' &&
+    last.times.type === 'n' &&
+    last.times.n[0] === 1 &&
+    (last.into === null || last.into.what === 'st' || last.into.what === 'sp');
+  return isSlip &&
+    works.length > 1 &&
+    works.slice(0, -1).every((item) => item.type !== 'work' || item.stitch !== 'slst')
+    ? last
+    : null;
+}
+
+/** Markers stand where the maker put them; unknown, they are taken as evenly placed. */
+function marksOf(items: readonly Item[], places: readonly Place[], size: number): number[] {
+  let n = 0;
+  const visit = (list: readonly Item[], factor: number): void => {
+    for (const item of list) {
+      if (item.type === 'group') visit(item.items, factor * (item.times.type === 'n' ? pick(item.times.n, size) : 1));
+      else if (
+        item.type === 'work' &&
+        (item.into?.what === 'mark' || (item.times.type === 'fill' && item.times.to?.what === 'mark'))
+      )
+        n += factor;
+    }
+  };
+  visit(items, 1);
+  return Array.from({ length: Math.min(n, places.length) }, (_, i) => Math.floor(((i + 0.5) * places.length) / n));
+}
+
+function finish(job: Job, setting: Setting, told: number | null, chainUnsaid: boolean, isOpen: boolean): LineWork {
+  const { walker } = job;
+  const remaining = isOpen ? 0 : Math.max(0, walker.remaining() - walker.kept);
+  const isShortRow = remaining > 0 && job.turned && setting.comesBack;
+  const over = isShortRow ? 0 : remaining;
+  const made = grouped(walker.made, setting.ring);
+  const tally = tallyOf(made, walker.walk);
+  const turns = job.turned || !setting.ring;
+  const counted = walker.counted.at(-1) ?? 0;
+  const isBaseKnown = !isOpen;
+  const uses = isBaseKnown ? walker.uses + Math.min(walker.kept, walker.remaining()) : told;
+  return {
+    fits: walker.short === 0 && over === 0 && !walker.full,
+    base: isBaseKnown ? counted : told,
+    uses,
+    short: walker.short,
+    over,
+    fault: walker.fault,
+    tally,
+    walk: walker.walk,
+    left: {
+      made: turns ? made.toReversed() : made,
+      shape: setting.ring ? 'ring' : 'row',
+      chains: 0,
+      unworked: (isShortRow ? remaining : 0) + (setting.ring ? 0 : walker.kept),
+      turningChain: job.turningChain,
+      count: tally.sts,
+      open: false,
+    },
+    endless: job.endless,
+    chainUnsaid,
+    isFoundation: false,
+    lapsed: walker.walk.length,
+  };
+}

@@ -1,0 +1,254 @@
+import { type Group, type Item, type Sized, type Target, type Times } from './tree.ts';
+import { isMark, isPlain, isTimesSign, isWord, peek, spanFrom, take, takeAll, type Reading } from './reading.ts';
+import { readMultiple, readSized } from './amounts.ts';
+import { readTarget } from './target.ts';
+import { FILL, readFill, readTimes, times } from './times.ts';
+import { isGroupAfterAll, pushTotal, totalBetween } from './totals.ts';
+import { readChainCounts } from './works.ts';
+
+const ONCE: Times = { type: 'unsaid' };
+
+/** Whether anything among these makes or uses places. */
+export const hasWork = (items: readonly Item[]): boolean =>
+  items.some(
+    (item) =>
+      item.type === 'work' ||
+      item.type === 'skip' ||
+      item.type === 'shaped' ||
+      item.type === 'straight' ||
+      item.type === 'relative' ||
+      (item.type === 'group' && hasWork(item.items)),
+  );
+
+/** A bracket: a total, a remark, or a group with what its words behind it make of it. */
+export function readBracket(reading: Reading, limit: number, before: readonly Item[]): Item[] {
+  const open = reading.at;
+  const close = reading.closes.get(open);
+  if (close === undefined || close >= limit) {
+    reading.at += 1;
+    return [];
+  }
+  const kinds = totalBetween(reading, open + 1, close);
+  const isBareNumber = close === open + 2;
+  if (kinds && !isGroupAfterAll(reading, close) && (hasWork(before) || isBareNumber)) {
+    pushTotal(reading, kinds, { start: reading.lexes[open]!.start, end: reading.lexes[close]!.end });
+    reading.at = close + 1;
+    return [];
+  }
+  const counts = readChainCounts(reading);
+  if (counts) return [];
+  if (isRoundsRemark(reading, open, close)) {
+    reading.at = close + 1;
+    return [{ type: 'note', span: spanFrom(reading, open), text: 'rounds' }];
+  }
+  reading.at = open + 1;
+  const items = reading.readItems(reading, close);
+  reading.at = close + 1;
+  if (!hasWork(items)) return items;
+  const mark = reading.lexes[open]!.text as Group['mark'];
+  return [finishGroup(reading, open, items, mark, null)];
+}
+
+/** `(4 rounds)`: how many there are, which is no total. */
+function isRoundsRemark(reading: Reading, open: number, close: number): boolean {
+  return (
+    open + 2 < close && reading.lexes[open + 1]!.kind === 'num' && isWord(reading.lexes[open + 2]!, 'round', 'row')
+  );
+}
+
+/** What stands behind a group: the place it all goes into, or how often it is worked. */
+export function finishGroup(
+  reading: Reading,
+  from: number,
+  items: readonly Item[],
+  mark: Group['mark'],
+  stop: number | null,
+): Group {
+  const start = reading.at;
+  let into: Target | null = null;
+  let count: Times | null = null;
+  if (isMark(peek(reading), ',') || isMark(peek(reading), '-') || isMark(peek(reading), ';')) {
+    const ahead = peek(reading, 1);
+    if (
+      isWord(ahead, 'rep', 'around', 'across') ||
+      isPlain(ahead, 'all', 'both') ||
+      (isMark(peek(reading), '-') && isTimesSign(ahead))
+    )
+      reading.at += 1;
+  }
+  if (isPlain(peek(reading), 'all', 'both', 'worked')) reading.at += 1;
+  take(reading, 'work');
+  if (isWord(peek(reading), 'in', 'on') || isWord(peek(reading), 'corner', 'each')) {
+    take(reading, 'in', 'on');
+    const target = readTarget(reading);
+    if (target) {
+      into = target.target;
+      count = target.count ? times(target.count) : target.fill ? FILL : null;
+    }
+  }
+  const said = readGroupTimes(reading, mark);
+  if (into && said?.type === 'fill' && (count?.type === 'fill' || count === null)) count = said;
+  else count = said && count === null ? said : said && into && count ? count : (said ?? count);
+  if (!into && !count) reading.at = Math.max(start, reading.at);
+  return {
+    type: 'group',
+    span: spanFrom(reading, from),
+    items,
+    times: count ?? (into ? times([1]) : ONCE),
+    into,
+    mark,
+    stop,
+  };
+}
+
+/** `× 6`, `* 6`, `6 times`, `6`, `around`, `repeat …`. */
+function readGroupTimes(reading: Reading, mark: Group['mark']): Times | null {
+  const start = reading.at;
+  const fill = readFill(reading);
+  if (fill) {
+    // `around, 6 times` says one thing twice.
+    const after = reading.at;
+    const n = isMark(peek(reading), ',') ? null : readMultiple(reading);
+    if (n && fill === FILL) return times(n);
+    reading.at = after;
+    return fill;
+  }
+  if (isMark(peek(reading), '*') && peek(reading, 1).kind === 'num') {
+    reading.at += 1;
+    const n = readSized(reading);
+    take(reading, 'times');
+    if (n) return times(n);
+  }
+  const said = readTimes(reading);
+  if (said) {
+    if (said.type === 'rep' && mark !== '*') return times(said.n);
+    readFill(reading);
+    return said;
+  }
+  reading.at = start;
+  const bare = bareNumber(reading);
+  return bare ? times(bare) : null;
+}
+
+/** A number behind a closing bracket or star, and nothing after it that it could belong to. */
+function bareNumber(reading: Reading): Sized | null {
+  if (peek(reading).kind !== 'num') return null;
+  const next = peek(reading, 1);
+  const goesOn = next.kind === 'stitch' || isWord(next, 'st', 'in', 'round', 'row', 'more') || next.kind === 'word';
+  return goesOn ? null : readSized(reading);
+}
+
+/** Between stars, or from a star to `rep from *`. */
+export function readStars(reading: Reading, limit: number): Item[] {
+  const from = reading.at;
+  reading.at += 1;
+  const end = starEnd(reading, limit);
+  let stop: number | null = null;
+  const items: Item[] = [];
+  while (reading.at < end.at) {
+    const inner = innerStop(reading, end.at);
+    items.push(...reading.readItems(reading, inner ?? end.at));
+    if (inner !== null) {
+      stop = items.length;
+      reading.at = inner + 1;
+    }
+  }
+  reading.at = end.at;
+  if (end.kind === 'star') {
+    reading.at += 1;
+    const again = peek(reading, isMark(peek(reading), ',') || isMark(peek(reading), ';') ? 1 : 0);
+    if (!isWord(again, 'rep') && !hasWork(items)) return items;
+    if (isWord(again, 'rep') && (isMark(peek(reading), ',') || isMark(peek(reading), ';'))) reading.at += 1;
+  }
+  if (!hasWork(items)) return items;
+  const group = finishGroup(reading, from, lifted(items), '*', stop);
+  const last = items.at(-1);
+  const ownFill =
+    end.kind !== 'star' &&
+    group.times.type === 'unsaid' &&
+    last?.type === 'work' &&
+    last.times.type === 'fill' &&
+    !last.into;
+  const whole: Group = ownFill ? { ...group, times: last.times } : group;
+  return [withEnding(reading, whole)];
+}
+
+/** A star that was never closed takes the `around` of its last stitch for itself. */
+function lifted(items: readonly Item[]): readonly Item[] {
+  const last = items.at(-1);
+  if (items.length < 2 || last?.type !== 'work' || last.times.type !== 'fill' || last.into) return items;
+  return [...items.slice(0, -1), { ...last, times: times([1]) }];
+}
+
+/** `then from * to ** once`, `ending last rep at **`: one more pass that stops at the second mark. */
+function withEnding(reading: Reading, group: Group): Group {
+  const start = reading.at;
+  if (isMark(peek(reading), ',') || isMark(peek(reading), ';')) reading.at += 1;
+  if (isPlain(peek(reading), 'ending', 'end', 'finishing') || isWord(peek(reading), 'end')) {
+    const from = reading.at;
+    reading.at += 1;
+    takeAll(reading, 'last', 'the', 'rep', 'in', 'on', 'to');
+    if (isPlain(peek(reading), 'at')) reading.at += 1;
+    if (isMark(peek(reading), '**')) {
+      reading.at += 1;
+      return group;
+    }
+    reading.at = from;
+  }
+  takeAll(reading, 'and');
+  if (isPlain(peek(reading), 'then')) reading.at += 1;
+  take(reading, 'rep', 'work');
+  if (
+    isWord(peek(reading), 'from') &&
+    isMark(peek(reading, 1), '*') &&
+    isWord(peek(reading, 2), 'to') &&
+    isMark(peek(reading, 3), '**')
+  ) {
+    reading.at += 4;
+    take(reading, 'once');
+    const n = group.times.type === 'n' || group.times.type === 'rep' ? group.times.n : null;
+    if (n) return { ...group, times: { type: group.times.type === 'rep' ? 'rep' : 'n', n: n.map((k) => k + 1) } };
+    return group;
+  }
+  reading.at = start;
+  return { ...group, stop: null };
+}
+
+function innerStop(reading: Reading, end: number): number | null {
+  for (let at = reading.at; at < end; at += 1) if (isMark(reading.lexes[at]!, '**')) return at;
+  return null;
+}
+
+/** Where the group begun by a star ends: at the next star, at `rep`, or at the limit. */
+function starEnd(reading: Reading, limit: number): { at: number; kind: 'star' | 'rep' | 'open' } {
+  const doubled = isMark(reading.lexes[reading.at - 1]!, '**');
+  for (let at = reading.at; at < limit; at += 1) {
+    const lex = reading.lexes[at]!;
+    const close = isMark(lex, '(') || isMark(lex, '[') || isMark(lex, '{') ? reading.closes.get(at) : undefined;
+    if (close !== undefined && close < limit) {
+      at = close;
+      continue;
+    }
+    if (isMark(lex, doubled ? '**' : '*')) {
+      // `inc * 6` inside stars cannot be told from the closing star: a closing star it is.
+      return { at, kind: 'star' };
+    }
+    if (isWord(lex, 'rep') && !isMark(reading.lexes[at + 1]!, '(')) return { at, kind: 'rep' };
+  }
+  return { at: openEnd(reading, limit), kind: 'open' };
+}
+
+/** A star without a partner reaches to the total or to the step that ends the round. */
+function openEnd(reading: Reading, limit: number): number {
+  for (let at = reading.at; at < limit; at += 1) {
+    const lex = reading.lexes[at]!;
+    if (isWord(lex, 'join', 'turn')) return at;
+    if (isMark(lex, '(') || isMark(lex, '[')) {
+      const close = reading.closes.get(at);
+      if (close !== undefined && totalBetween(reading, at + 1, close) && !isGroupAfterAll(reading, close)) return at;
+      if (close !== undefined && close < limit) at = close;
+    }
+    if (isMark(lex, '=')) return at;
+  }
+  return limit;
+}

@@ -1,0 +1,217 @@
+import { isMark, isPlain, isWord } from './reading.ts';
+import { type Lex } from './lexer.ts';
+
+/** A label that begins a line: `Round 4:`, `R5–8`, `4th row.`, `Rnds 5 to 8`, `Row 2 (RS)`, `4)`. */
+export interface Label {
+  readonly kind: 'round' | 'row' | 'bare';
+  readonly from: number | null;
+  /** Null for an open range (`Rounds 9+`). */
+  readonly to: number | null;
+  /** Index of the first meaning behind the label. */
+  readonly after: number;
+  /** `next round`, `next 5 rows`: how many, where no number is given. */
+  readonly next: number;
+  readonly uncertain: boolean;
+}
+
+const at = (lexes: readonly Lex[], i: number): Lex => lexes[Math.min(i, lexes.length - 1)]!;
+
+/** The label at this index, or null. */
+export function readLabel(lexes: readonly Lex[], start: number): Label | null {
+  let i = start;
+  while (
+    isMark(at(lexes, i), '-') ||
+    isMark(at(lexes, i), '.') ||
+    isMark(at(lexes, i), '|') ||
+    isMark(at(lexes, i), '#')
+  )
+    i += 1;
+  return named(lexes, i) ?? ordinal(lexes, i) ?? next(lexes, i) ?? bare(lexes, i);
+}
+
+const isRoundWord = (lex: Lex): boolean => isWord(lex, 'round', 'row');
+
+/** `Round 4`, `Rnds 5-8`, `R4`, `R: 4`, `Row three`. */
+function named(lexes: readonly Lex[], start: number): Label | null {
+  let i = start;
+  if (at(lexes, i).kind === 'num' && isMark(at(lexes, i + 1), '.') && isRoundWord(at(lexes, i + 2))) i += 2;
+  const word = at(lexes, i);
+  const isR = isPlain(word, 'r', 'rn', 'rnd');
+  if (!isRoundWord(word) && !isR) return null;
+  i += 1;
+  if (isMark(at(lexes, i), '.') || isMark(at(lexes, i), ':') || isMark(at(lexes, i), '#')) i += 1;
+  const number = at(lexes, i);
+  if (number.kind !== 'num' || number.broken) return null;
+  const kind = isWord(word, 'row') ? 'row' : 'round';
+  return ranged(lexes, i, kind, word);
+}
+
+/** The number is at `i`; a range may follow it. */
+function ranged(lexes: readonly Lex[], i: number, kind: Label['kind'], word: Lex): Label {
+  const from = at(lexes, i).value;
+  let to: number | null = from;
+  let after = i + 1;
+  for (;;) {
+    const joint = at(lexes, after);
+    if (isMark(joint, '+') && !isNumber(at(lexes, after + 1))) {
+      to = null;
+      after += 1;
+      break;
+    }
+    const isTo =
+      isMark(joint, '-') ||
+      isWord(joint, 'to', 'through', 'and') ||
+      isMark(joint, ',') ||
+      isMark(joint, '+') ||
+      isMark(joint, '&') ||
+      isMark(joint, '/') ||
+      (isPlain(joint, 'a') && isNumber(at(lexes, after + 1)));
+    if (!isTo) break;
+    let j = after + 1;
+    while (isRoundWord(at(lexes, j)) || isPlain(at(lexes, j), 'r') || isWord(at(lexes, j), 'and', 'the')) j += 1;
+    const second = at(lexes, j);
+    if (!isNumber(second) || second.value <= (to ?? 0) || !endsRange(lexes, j, joint, word)) break;
+    to = second.value;
+    after = j + 1;
+    if (second.kind === 'ord' && isRoundWord(at(lexes, after))) after += 1;
+  }
+  return { kind, from, to, after: closing(lexes, after), next: 0, uncertain: false };
+}
+
+const isNumber = (lex: Lex): boolean => lex.kind === 'num' || lex.kind === 'ord';
+
+/** `Round 4 – 2 sc …` is one round: a count goes on with a stitch, a range with a mark. */
+function endsRange(lexes: readonly Lex[], j: number, joint: Lex, word: Lex): boolean {
+  const next = at(lexes, j + 1);
+  if (isWord(joint, 'to', 'through')) return true;
+  if (isMark(next, ':') || isMark(next, ')') || isMark(next, '=') || isMark(next, '.')) return true;
+  const plural = isPlural(word);
+  if (next.kind === 'stitch' || isWord(next, 'st', 'in')) return plural && joint.glued;
+  if (isMark(next, '-') || isMark(next, ',') || isMark(next, '(') || isMark(next, '+') || isMark(next, '&'))
+    return true;
+  if (isWord(next, 'and', 'to', 'times')) return !isWord(next, 'times');
+  return plural || joint.glued || next.kind === 'end';
+}
+
+/** `rounds`, `rnds`, `rows`: known from the length of the word as it stands. */
+const isPlural = (word: Lex): boolean => {
+  const length = word.end - word.start;
+  return isWord(word, 'row') ? length === 4 : length === 6 || length === 4 || word.end - word.start === 3;
+};
+
+/** What closes a label: a colon, stop, bracket, dash; `(RS)`, `(4 rounds)`; `incl`. */
+function closing(lexes: readonly Lex[], start: number): number {
+  let i = start;
+  for (;;) {
+    const lex = at(lexes, i);
+    if (isPlain(lex, 'incl', 'inclusive', 'rs', 'ws')) {
+      i += 1;
+      continue;
+    }
+    if ((isMark(lex, '(') || isMark(lex, '[')) && isRemark(lexes, i)) {
+      while (!isMark(at(lexes, i), ')') && !isMark(at(lexes, i), ']')) i += 1;
+      i += 1;
+      continue;
+    }
+    if (
+      isMark(lex, ':') ||
+      isMark(lex, ')') ||
+      isMark(lex, '.') ||
+      isMark(lex, '-') ||
+      isMark(lex, '|') ||
+      isMark(lex, '=') ||
+      isMark(lex, ',') ||
+      isMark(lex, ';') ||
+      isMark(lex, '>')
+    ) {
+      i += 1;
+      continue;
+    }
+    return i;
+  }
+}
+
+/** `(RS)`, `(right side)`, `(4 rounds)`, `(wrong side)`. */
+function isRemark(lexes: readonly Lex[], open: number): boolean {
+  for (let i = open + 1; i < open + 6; i += 1) {
+    const lex = at(lexes, i);
+    if (isMark(lex, ')') || isMark(lex, ']')) return i > open + 1;
+    if (
+      isPlain(lex, 'rs', 'ws', 'right', 'wrong') ||
+      isWord(lex, 'side', 'round', 'row') ||
+      (lex.kind === 'num' && isRoundWord(at(lexes, i + 1)))
+    )
+      continue;
+    return false;
+  }
+  return false;
+}
+
+/** `4th rnd:`, `2nd and 3rd rows`, `5th to 8th rnds incl`, `4 row:`, `4. row:`. */
+function ordinal(lexes: readonly Lex[], start: number): Label | null {
+  const first = at(lexes, start);
+  const isFirst = isWord(first, 'first') && isRoundWord(at(lexes, start + 1));
+  if (isFirst) {
+    const kind = isWord(at(lexes, start + 1), 'row') ? 'row' : 'round';
+    return { kind, from: 1, to: 1, after: closing(lexes, start + 2), next: 0, uncertain: false };
+  }
+  if (!isNumber(first)) return null;
+  let i = start + 1;
+  if (first.kind === 'num' && isMark(at(lexes, i), '.')) i += 1;
+  let to = first.value;
+  for (;;) {
+    const joint = at(lexes, i);
+    const isTo =
+      isMark(joint, '-') || isWord(joint, 'to', 'through', 'and') || isMark(joint, ',') || isMark(joint, '&');
+    if (!isTo || !isNumber(at(lexes, i + 1)) || at(lexes, i + 1).value <= to) break;
+    to = at(lexes, i + 1).value;
+    i += 2;
+  }
+  if (!isRoundWord(at(lexes, i))) return null;
+  // `4 rounds of sc` is work, not a label.
+  if (first.kind === 'num' && to === first.value && !isLabelEnd(at(lexes, i + 1))) return null;
+  const kind = isWord(at(lexes, i), 'row') ? 'row' : 'round';
+  return { kind, from: first.value, to, after: closing(lexes, i + 1), next: 0, uncertain: false };
+}
+
+const isLabelEnd = (lex: Lex): boolean => lex.kind === 'mark' && [':', '-', '.', ')', '=', '('].includes(lex.text);
+
+/** `Next round:`, `next 5 rows`. */
+function next(lexes: readonly Lex[], start: number): Label | null {
+  if (!isWord(at(lexes, start), 'next')) return null;
+  let i = start + 1;
+  let count = 1;
+  if (at(lexes, i).kind === 'num') {
+    count = at(lexes, i).value;
+    i += 1;
+  }
+  if (!isRoundWord(at(lexes, i))) return null;
+  const kind = isWord(at(lexes, i), 'row') ? 'row' : 'round';
+  return { kind, from: null, to: null, after: closing(lexes, i + 1), next: count, uncertain: false };
+}
+
+/** `4.`, `4)`, `4:`, `4 -`, `5) 8) sc`: a number alone. Never certain by itself. */
+function bare(lexes: readonly Lex[], start: number): Label | null {
+  const number = at(lexes, start);
+  if (number.kind !== 'num') return null;
+  let i = start + 1;
+  let to = number.value;
+  const joint = at(lexes, i);
+  if (isMark(joint, '-') || isWord(joint, 'to') || isMark(joint, ')')) {
+    const second = at(lexes, i + 1);
+    if (second.kind === 'num' && second.value > to && isLabelEnd(at(lexes, i + 2)) && !isMark(at(lexes, i + 2), '(')) {
+      to = second.value;
+      i += 2;
+    }
+  }
+  const end = at(lexes, i);
+  if (
+    !isMark(end, '.') &&
+    !isMark(end, ')') &&
+    !isMark(end, ':') &&
+    !(isMark(end, '-') && !end.glued) &&
+    !(isMark(end, '=') && to === number.value)
+  )
+    return null;
+  return { kind: 'bare', from: number.value, to, after: closing(lexes, i), next: 0, uncertain: true };
+}

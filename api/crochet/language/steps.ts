@@ -1,0 +1,170 @@
+import { type Item, type Step } from './tree.ts';
+import { isMark, isPlain, isSeparator, isWord, peek, spanFrom, take, takeAll, type Reading } from './reading.ts';
+
+/** Verbs that begin something done which adds no stitch; figures in such a clause are no counts. */
+const VERBS = new Set(
+  (
+    'stuff insert attach sew cut weave fasten finish fo change switch drop pick pull close tie embroider fold pinch ' +
+    'mark move put add secure start begin continue flatten hold remember note use gather tighten remove draw thread ' +
+    'block press hide bind trim glue pin position slide leave break rejoin introduce carry keep see repeat-for stitch-up ' +
+    'turn-inside lightly firmly filling fill shape attaching sewing stuffing changing counting photo picture pic ' +
+    'colour color yarn tail end invisible steam wash wind wrap push cinch burst separate lay pass-tail ends using ' +
+    'optional tip hint important if when you this these now-you safety eyes eye button buttons work-in measure measures ' +
+    'piece yarn-over right wrong rs ws loosely tightly lengthen approx approximately about it he she we i with cont ' +
+    'do-not-stuff skip-stuffing proceed assemble assembly'
+  ).split(' '),
+);
+
+const KIND: Readonly<Record<string, Step['what']>> = {
+  change: 'colour',
+  changing: 'colour',
+  switch: 'colour',
+  colour: 'colour',
+  color: 'colour',
+  introduce: 'colour',
+  fasten: 'finish',
+  fo: 'finish',
+  finish: 'finish',
+  cut: 'finish',
+  break: 'finish',
+  mark: 'marker',
+  move: 'marker',
+};
+
+/** Takes everything to the next comma, semicolon or full stop at this depth. Brackets inside are taken whole. */
+export function takeClause(reading: Reading, limit: number, stops: readonly string[] = [',', ';', '.']): void {
+  while (reading.at < limit) {
+    const lex = peek(reading);
+    if (lex.kind === 'mark' && stops.includes(lex.text)) return;
+    const close = isMark(lex, '(') || isMark(lex, '[') || isMark(lex, '{') ? reading.closes.get(reading.at) : undefined;
+    if (close !== undefined && close < limit && isTotalBracket(reading, reading.at, close)) return;
+    if (isMark(lex, '*') || isMark(lex, '**') || isMark(lex, '=')) return;
+    if (isMark(lex, '-') && !lex.glued && reading.lexes[reading.at + 1]!.kind === 'num') return;
+    reading.at = close !== undefined && close < limit ? close + 1 : reading.at + 1;
+  }
+}
+
+function isTotalBracket(reading: Reading, open: number, close: number): boolean {
+  return close - open >= 2 && reading.lexes[open + 1]!.kind === 'num' && close - open <= 6;
+}
+
+function step(reading: Reading, from: number, what: Step['what'], extra: Partial<Step> = {}): Step {
+  const span = spanFrom(reading, from);
+  return { type: 'step', span, what, text: textOf(reading, from), ...extra };
+}
+
+const textOf = (reading: Reading, from: number): string =>
+  reading.lexes
+    .slice(from, reading.at)
+    .map((lex) => lex.text)
+    .join(' ');
+
+/** A step that begins here, or null and nothing taken. */
+export function readStep(reading: Reading, limit: number): Item | null {
+  const from = reading.at;
+  const lex = peek(reading);
+  if (isWord(lex, 'not')) {
+    reading.at += 1;
+    const what = isWord(peek(reading), 'turn') ? 'no-turn' : isWord(peek(reading), 'join') ? 'do' : 'do';
+    takeClause(reading, limit);
+    return step(reading, from, what);
+  }
+  if (isWord(lex, 'turn')) {
+    reading.at += 1;
+    if (isPlain(peek(reading), 'over', 'work')) reading.at += 1;
+    return step(reading, from, 'turn');
+  }
+  if (isWord(lex, 'join')) return readJoin(reading, limit);
+  if (isWord(lex, 'marker', 'marked')) {
+    reading.at += 1;
+    takeClause(reading, limit);
+    return step(reading, from, 'marker');
+  }
+  if (isWord(lex, 'counts')) {
+    takeClause(reading, limit);
+    return step(reading, from, 'do');
+  }
+  if (lex.kind === 'word' && VERBS.has(lex.text)) {
+    if (lex.text === 'leave') return readLeave(reading, limit);
+    if (lex.text === 'with' || lex.text === 'using') return null;
+    reading.at += 1;
+    takeClause(reading, limit);
+    return step(reading, from, KIND[lex.text] ?? 'do');
+  }
+  return null;
+}
+
+/** `join`, `join with sl st to first dc`, `join to top of beg ch-3`. */
+function readJoin(reading: Reading, limit: number): Item {
+  const from = reading.at;
+  reading.at += 1;
+  let into: Step['into'] = 'unsaid';
+  const clause = reading.at;
+  takeClause(reading, limit);
+  const words = reading.lexes.slice(clause, reading.at);
+  if (words.some((lex) => isWord(lex, 'ring'))) return step(reading, from, 'ring');
+  const isTop =
+    words.some((lex) => isWord(lex, 'top', 'turningchain')) ||
+    words.some((lex) => lex.kind === 'stitch' && lex.text === 'ch');
+  if (isTop) into = 'chain';
+  else if (
+    words.some((lex) => isWord(lex, 'first')) &&
+    words.some((lex) => lex.kind === 'stitch' && lex.text !== 'slst')
+  )
+    into = 'stitch';
+  return step(reading, from, 'join', { into });
+}
+
+/** `leave last st unworked`, `leave 2 sts`; anything else left (`leave a long tail`) is only done. */
+function readLeave(reading: Reading, limit: number): Item {
+  const from = reading.at;
+  reading.at += 1;
+  takeAll(reading, 'the', 'last', 'next', 'remain');
+  const number = peek(reading);
+  const n = number.kind === 'num' ? number.value : 1;
+  const isPlaces =
+    number.kind === 'num'
+      ? isWord(peek(reading, 1), 'st', 'skipped') || peek(reading, 1).kind === 'stitch' || isSeparator(peek(reading, 1))
+      : isWord(number, 'st', 'skipped') || reading.lexes[reading.at - 1]!.text === 'last';
+  const isRest = isWord(reading.lexes[reading.at - 1]!, 'remain') && number.kind !== 'num';
+  takeClause(reading, limit);
+  return isPlaces ? step(reading, from, 'leave', { n: isRest ? -1 : n }) : step(reading, from, 'do');
+}
+
+/** `sl st in first sc`, `sl st to join`, `ss to top of 3 ch`: a slip stitch that joins a round. */
+export function readSlipJoin(reading: Reading, limit: number): Item | null {
+  const from = reading.at;
+  const lex = peek(reading);
+  if (lex.kind !== 'stitch' || lex.text !== 'slst') return null;
+  reading.at += 1;
+  const rest = reading.at;
+  if (isWord(peek(reading), 'join')) {
+    takeClause(reading, limit);
+    return step(reading, from, 'join', { into: joinPlace(reading, rest) });
+  }
+  if (take(reading, 'in', 'to')) {
+    takeAll(reading, 'the');
+    const place = peek(reading);
+    const isFirst = isWord(place, 'first', 'top', 'turningchain') || isChainTop(reading);
+    if (isWord(place, 'join', 'end') || (isFirst && !isWord(peek(reading, 1), 'sp'))) {
+      takeClause(reading, limit);
+      return step(reading, from, 'join', { into: joinPlace(reading, rest) });
+    }
+  }
+  reading.at = from;
+  return null;
+}
+
+/** `3rd ch of beg ch-3`, `top of ch 3`. */
+function isChainTop(reading: Reading): boolean {
+  const lex = peek(reading);
+  const isNth = lex.kind === 'ord' && peek(reading, 1).kind === 'stitch' && peek(reading, 1).text === 'ch';
+  return isNth && !isWord(peek(reading, 2), 'hook');
+}
+
+function joinPlace(reading: Reading, from: number): NonNullable<Step['into']> {
+  const words = reading.lexes.slice(from, reading.at);
+  if (words.some((lex) => isWord(lex, 'top', 'turningchain') || (lex.kind === 'stitch' && lex.text === 'ch')))
+    return 'chain';
+  return words.some((lex) => lex.kind === 'stitch' && lex.text !== 'slst') ? 'stitch' : 'unsaid';
+}

@@ -1,0 +1,383 @@
+import { type Loops, type Sized, type Target } from './tree.ts';
+import { readSized } from './amounts.ts';
+import { isMark, isPlain, isWord, peek, take, takeAll, type Reading } from './reading.ts';
+import { readNoun, type Noun } from './noun.ts';
+
+/** Where a stitch goes. `count` is a number of places said with it, `fill` that it goes on until the places run out. */
+export interface TargetRead {
+  readonly target: Target;
+  readonly count: Sized | null;
+  readonly fill: boolean;
+  readonly loops: Loops | null;
+  /** A second kind of place named with the first: `in each dc and ch-1 sp`. */
+  readonly also: Target | null;
+  /** Only the loops were named (`in BLO`), no place. */
+  readonly loopsOnly?: true;
+}
+
+const LOOPS: Readonly<Record<string, Loops>> = { blo: 'back', flo: 'front', third: 'third', bothloops: 'both' };
+
+/** Loops named here (`BLO`, `in back loop only`), or null and nothing taken. */
+export function readLoops(reading: Reading): Loops | null {
+  const lex = peek(reading);
+  const loops = lex.kind === 'w' ? LOOPS[lex.text] : undefined;
+  if (!loops) return null;
+  reading.at += 1;
+  while (isPlain(peek(reading), 'only') || isWord(peek(reading), 'loop', 'st')) reading.at += 1;
+  return loops;
+}
+
+/**
+ * What stands after `in`, `into`, `on`, `over`: the place or places worked into. Null, and nothing taken, where the
+ * words name no place.
+ *
+ * @example `in each of the next 6 sts` is what: st, which: next, count 6.
+ */
+export function readTarget(reading: Reading): TargetRead | null {
+  const start = reading.at;
+  const read = place(reading);
+  if (!read) {
+    reading.at = start;
+    return null;
+  }
+  qualifiers(reading);
+  return read;
+}
+
+function place(reading: Reading): TargetRead | null {
+  takeAll(reading, 'the', 'of');
+  const loops = readLoops(reading);
+  if (loops) {
+    const freed = freeLoops(reading, loops);
+    if (freed) return freed;
+    takeAll(reading, 'of', 'the', 'in');
+    const inner = place(reading);
+    return inner ? { ...inner, loops } : { ...plainTarget('st', 'next', null, false, loops), loopsOnly: true };
+  }
+  const lex = peek(reading);
+  if (lex.kind === 'ord') return ordinal(reading, lex.value);
+  if (lex.kind === 'num') return counted(reading, 'next');
+  if (isPlain(lex, 'it', 'there', 'that', 'them')) {
+    reading.at += 1;
+    return plainTarget('other', 'same');
+  }
+  if (isPlain(lex, 'all')) {
+    reading.at += 1;
+    const noun = readNoun(reading);
+    return noun ? fromNoun(noun, 'each', null, true) : null;
+  }
+  if (lex.kind === 'w') {
+    switch (lex.text) {
+      case 'same':
+        return same(reading);
+      case 'each':
+        return each(reading);
+      case 'next':
+        reading.at += 1;
+        takeAll(reading, 'the');
+        if (isWord(peek(reading), 'other')) return every(reading, 2, 1);
+        return counted(reading, 'next');
+      case 'remain':
+        reading.at += 1;
+        takeAll(reading, 'of', 'the');
+        return { ...counted(reading, 'each'), fill: true };
+      case 'first':
+        reading.at += 1;
+        return counted(reading, 'first');
+      case 'last':
+        reading.at += 1;
+        return counted(reading, 'last');
+      case 'centre':
+        reading.at += 1;
+        return centre(reading);
+      case 'marked':
+        reading.at += 1;
+        readNoun(reading);
+        return plainTarget('mark', 'next');
+      case 'marker':
+        reading.at += 1;
+        readNoun(reading);
+        return plainTarget('mark', 'next');
+      case 'skipped':
+        reading.at += 1;
+        readNoun(reading);
+        return plainTarget('st', 'skipped');
+      case 'top':
+        reading.at += 1;
+        takeAll(reading, 'of', 'the', 'first', 'next');
+        readNoun(reading);
+        return plainTarget('st', 'last');
+      case 'turningchain':
+        reading.at += 1;
+        if (reading.lexes[reading.at]?.kind === 'num' || isMark(peek(reading), '-'))
+          reading.at += isMark(peek(reading), '-') ? 2 : 1;
+        return plainTarget('st', 'last');
+      case 'side':
+        reading.at += 1;
+        takeAll(reading, 'of', 'the');
+        readNoun(reading);
+        return plainTarget('other', 'far');
+      case 'other':
+        return null;
+    }
+  }
+  const noun = readNoun(reading);
+  return noun ? fromNoun(noun, 'next', null, false) : null;
+}
+
+export function plainTarget(
+  what: Target['what'],
+  which: Target['which'],
+  count: Sized | null = null,
+  fill = false,
+  loops: Loops | null = null,
+): TargetRead {
+  return { target: { what, which }, count, fill, loops, also: null };
+}
+
+function fromNoun(noun: Noun, which: Target['which'], count: Sized | null, fill: boolean): TargetRead {
+  const { also, ...place } = noun;
+  return { target: { ...place, which }, count, fill, loops: null, also: also ? { ...also, which } : null };
+}
+
+/** `front loops left in R10`. */
+function freeLoops(reading: Reading, loops: Loops): TargetRead | null {
+  const start = reading.at;
+  let free = false;
+  while (
+    isPlain(peek(reading), 'left', 'free', 'unused', 'unworked', 'exposed', 'remaining') ||
+    isWord(peek(reading), 'remain', 'skipped', 'of', 'the', 'in', 'on', 'from')
+  ) {
+    if (!isWord(peek(reading), 'of', 'the', 'in', 'on', 'from')) free = true;
+    reading.at += 1;
+  }
+  if (isWord(peek(reading), 'round', 'row') || (isPlain(peek(reading), 'r') && peek(reading, 1).kind === 'num')) {
+    reading.at += 1;
+    const number = peek(reading);
+    if (number.kind === 'num') {
+      reading.at += 1;
+      return {
+        target: { what: 'loop', which: 'each', line: number.value },
+        count: null,
+        fill: true,
+        loops,
+        also: null,
+      };
+    }
+  }
+  if (free) return { target: { what: 'loop', which: 'each' }, count: null, fill: true, loops, also: null };
+  reading.at = start;
+  return null;
+}
+
+function same(reading: Reading): TargetRead {
+  reading.at += 1;
+  takeAll(reading, 'the', 'first', 'marked', 'corner');
+  const noun = readNoun(reading);
+  if (!noun && isPlain(peek(reading), 'place', 'one', 'spot', 'location')) reading.at += 1;
+  if (isWord(peek(reading), 'as', 'where') || isPlain(peek(reading), 'where')) {
+    reading.at += 1;
+    while (
+      isWord(peek(reading), 'the', 'join', 'last', 'of', 'turningchain', 'first', 'st', 'in', 'sp', 'top', 'loop') ||
+      isPlain(peek(reading), 'previous', 'prev', 'before', 'slip') ||
+      peek(reading).kind === 'stitch'
+    ) {
+      if (peek(reading).kind === 'stitch' && peek(reading).text !== 'slst' && peek(reading).text !== 'ch') {
+        reading.at += 1;
+        break;
+      }
+      reading.at += 1;
+      if (peek(reading).kind === 'num' || (isMark(peek(reading), '-') && peek(reading, 1).kind === 'num'))
+        reading.at += peek(reading).kind === 'num' ? 1 : 2;
+    }
+  }
+  const what =
+    noun?.what === 'sp' || noun?.what === 'gap'
+      ? noun.what
+      : noun?.what === 'st' || noun?.what === 'ch'
+        ? 'st'
+        : 'other';
+  return plainTarget(what, 'same');
+}
+
+function each(reading: Reading): TargetRead {
+  reading.at += 1;
+  takeAll(reading, 'of', 'the', 'each');
+  if (isWord(peek(reading), 'other')) return every(reading, 2, 1);
+  if (peek(reading).kind === 'ord') return every(reading, peek(reading).value, 1);
+  if (take(reading, 'next')) {
+    takeAll(reading, 'the', 'of');
+    return counted(reading, 'next');
+  }
+  if (take(reading, 'first')) return counted(reading, 'first');
+  if (take(reading, 'last')) return counted(reading, 'last');
+  if (take(reading, 'remain')) takeAll(reading, 'of', 'the');
+  if (take(reading, 'same')) takeAll(reading, 'the');
+  if (peek(reading).kind === 'num' && !isSpaceNumber(reading)) {
+    const n = peek(reading).value;
+    const read = counted(reading, 'next');
+    // `3 sc over every 4 row ends`: so many in so many, all along.
+    return read.target.what === 'row-end'
+      ? { ...read, target: { ...read.target, which: 'every', n }, count: null, fill: true }
+      : read;
+  }
+  const noun = readNoun(reading);
+  return fromNoun(noun ?? { what: 'st' }, 'each', null, true);
+}
+
+function every(reading: Reading, n: number, length: number): TargetRead {
+  reading.at += length;
+  const noun = readNoun(reading);
+  return {
+    target: { ...(noun ?? { what: 'st' }), which: 'every', n },
+    count: null,
+    fill: true,
+    loops: null,
+    also: null,
+  };
+}
+
+/** The number of a space (`2-ch sp`), not of places. */
+function isSpaceNumber(reading: Reading): boolean {
+  const skip = isMark(peek(reading, 1), '-') ? 2 : 1;
+  return (
+    isWord(peek(reading, skip), 'sp2') ||
+    (peek(reading, skip).kind === 'stitch' &&
+      peek(reading, skip).text === 'ch' &&
+      isWord(peek(reading, skip + 1), 'sp', 'loop') &&
+      peek(reading).value < 12)
+  );
+}
+
+function counted(reading: Reading, which: Target['which']): TargetRead {
+  takeAll(reading, 'the');
+  const isSpace = peek(reading).kind === 'num' && isSpaceNumber(reading);
+  const count = isSpace ? null : readSized(reading);
+  if (count && isMark(peek(reading), '-') && peek(reading, 1).kind === 'stitch') {
+    // `next 3-dc group`: one place.
+    reading.at += 1;
+    const noun = readNoun(reading);
+    return fromNoun(noun ?? { what: 'group' }, which, null, false);
+  }
+  takeAll(reading, 'of', 'the');
+  if (isWord(peek(reading), 'skipped')) {
+    reading.at += 1;
+    readNoun(reading);
+    return plainTarget('st', 'skipped', count);
+  }
+  if (peek(reading).kind === 'ord' && which === 'next') return { ...ordinal(reading, peek(reading).value), count };
+  if (isWord(peek(reading), 'centre')) {
+    reading.at += 1;
+    return centre(reading);
+  }
+  if (isWord(peek(reading), 'marked')) {
+    reading.at += 1;
+    readNoun(reading);
+    return plainTarget('mark', 'next', count);
+  }
+  const noun = readNoun(reading);
+  return fromNoun(noun ?? { what: 'st' }, which, count, false);
+}
+
+function ordinal(reading: Reading, n: number): TargetRead {
+  reading.at += 1;
+  const noun = readNoun(reading);
+  if (take(reading, 'hook'))
+    return { target: { what: 'ch', which: 'hook', n }, count: null, fill: false, loops: null, also: null };
+  if (isWord(peek(reading), 'of') || isWord(peek(reading), 'from')) {
+    const start = reading.at;
+    reading.at += 1;
+    takeAll(reading, 'the', 'next', 'each', 'same', 'first', 'last', 'of');
+    if (isWord(peek(reading), 'turningchain') || (peek(reading).kind === 'stitch' && peek(reading).text === 'ch')) {
+      readNoun(reading);
+      if (isWord(peek(reading), 'turningchain')) reading.at += 1;
+      return plainTarget('st', 'last');
+    }
+    const of = readNoun(reading);
+    if (of && (of.what === 'group' || of.corner === true || of.stitch !== undefined)) {
+      return {
+        target: { ...(noun ?? { what: 'st' }), which: 'nth', n, of: of.stitch ?? 'group' },
+        count: null,
+        fill: false,
+        loops: null,
+        also: null,
+      };
+    }
+    reading.at = start;
+  }
+  if (noun?.what === 'ch')
+    return { target: { what: 'ch', which: 'hook', n }, count: null, fill: false, loops: null, also: null };
+  return {
+    target: { ...(noun ?? { what: 'st' }), which: 'nth', n },
+    count: null,
+    fill: false,
+    loops: null,
+    also: null,
+  };
+}
+
+function centre(reading: Reading): TargetRead {
+  const noun = readNoun(reading);
+  const start = reading.at;
+  if (take(reading, 'of', 'from')) {
+    takeAll(reading, 'the', 'next', 'each', 'same', 'first');
+    const of = readNoun(reading);
+    if (of)
+      return {
+        target: { ...(noun ?? { what: 'st' }), which: 'centre', of: of.stitch ?? 'group' },
+        count: null,
+        fill: false,
+        loops: null,
+        also: null,
+      };
+    reading.at = start;
+  }
+  const base = noun ?? { what: 'st' as const };
+  return { target: { ...base, which: 'centre' }, count: null, fill: false, loops: null, also: null };
+}
+
+const OF_ROUND = new Set([
+  'previous',
+  'prev',
+  'preceding',
+  'below',
+  'prior',
+  'before',
+  'down',
+  'under',
+  'beneath',
+  'above',
+  'left',
+  'made',
+  'just',
+]);
+
+/** Words after a place that say again what is known: `of previous round`, `two rows below`, `around the post of`. */
+function qualifiers(reading: Reading): void {
+  for (;;) {
+    const start = reading.at;
+    takeAll(reading, 'of', 'from', 'in', 'on', 'the', 'same');
+    if (peek(reading).kind === 'num' && isWord(peek(reading, 1), 'round', 'row') && peek(reading, 2).kind === 'word')
+      reading.at += 2;
+    let named = false;
+    while (
+      (peek(reading).kind === 'word' && OF_ROUND.has(peek(reading).text)) ||
+      isWord(peek(reading), 'last', 'first')
+    ) {
+      named = true;
+      reading.at += 1;
+    }
+    if (isWord(peek(reading), 'round', 'row') && (named || start < reading.at)) {
+      reading.at += 1;
+      if (peek(reading).kind === 'num') reading.at += 1;
+      continue;
+    }
+    if (isPlain(peek(reading), 'r') && peek(reading, 1).kind === 'num' && start < reading.at) {
+      reading.at += 2;
+      continue;
+    }
+    if (named && peek(reading).kind !== 'stitch' && !isWord(peek(reading), 'st')) continue;
+    reading.at = start;
+    return;
+  }
+}
