@@ -32,7 +32,7 @@ export function TotalCell({
 }) {
   return (
     <span className={cx('block pr-[13px] text-right leading-[21px]!', VOICES[voice], className)}>
-      {odd ? <span className="boxed -mr-[7px]">{children}</span> : children}
+      <span className="block">{odd ? <span className="boxed -mr-[7px]">{children}</span> : children}</span>
     </span>
   );
 }

@@ -92,7 +92,10 @@ export function VerdictLabel({
   const isQuiet = follows !== undefined && verdict === 'agrees';
   return (
     <span
-      className={cx('inline-flex items-center gap-2 whitespace-nowrap', isQuiet ? 'text-walnut3' : COLOURS[verdict])}
+      className={cx(
+        'inline-flex items-center gap-2 align-middle whitespace-nowrap',
+        isQuiet ? 'text-walnut3' : COLOURS[verdict],
+      )}
     >
       <VerdictMark verdict={verdict} />
       <span>

@@ -25,13 +25,13 @@ export function LoadingRows({ rows = 6, label = 'Loading' }: { rows?: number; la
   );
 }
 
-/** Ruled paper with the first step on its first line. */
+/** Ruled paper with the first step on its first line; every line of words stands between two rules. */
 export function EmptyPaper({ title, children, action }: { title: string; children?: ReactNode; action?: ReactNode }) {
   return (
-    <section className="ruled-paper min-h-full px-6 py-12">
-      <h2 className="mb-1 font-serif text-[28px] leading-[46px] font-semibold">{title}</h2>
-      {children && <div className="max-w-[68ch] font-serif text-[16px] leading-[24px] text-walnut2">{children}</div>}
-      {action && <div className="mt-4">{action}</div>}
+    <section className="ruled-paper min-h-full px-6 pt-12">
+      <h2 className="font-serif text-[28px] leading-[48px] font-semibold">{title}</h2>
+      {children && <div className="max-w-[68ch] font-serif text-[16px] leading-[48px] text-walnut2">{children}</div>}
+      {action && <div className="flex min-h-12 items-center">{action}</div>}
     </section>
   );
 }

@@ -2,7 +2,7 @@ import { PanelRight } from 'lucide-react';
 import { type ReactNode, useRef, useState } from 'react';
 import { type Pattern } from '#contract/patterns';
 import { NARROW, PHONE, useMedia } from '../../lib/use-media.ts';
-import { Button } from '../../ui/button.tsx';
+import { IconButton } from '../../ui/button.tsx';
 import { useToast } from '../../ui/toast.tsx';
 import { BenchPhone } from './bench-phone.tsx';
 import { useCues } from './cues.queries.ts';
@@ -64,9 +64,14 @@ export function BenchRoom({
     <>
       <TermsSwitch />
       {isNarrow && (
-        <Button icon={PanelRight} aria-expanded={hasDrawer} onClick={() => setDrawer(!hasDrawer)}>
-          Ring map
-        </Button>
+        <IconButton
+          icon={PanelRight}
+          size={20}
+          label="Ring map and shape"
+          aria-expanded={hasDrawer}
+          className="btn px-2!"
+          onClick={() => setDrawer(!hasDrawer)}
+        />
       )}
       <KeysButton onPress={() => setKeys(true)} />
       <ProofButton />

@@ -47,7 +47,7 @@ export function ClipPicture({
           {children}
         </div>
       )}
-      {caption && (
+      {caption && isShown && (
         <p
           className="said pointer-events-none absolute inset-x-0 bottom-2 mx-auto max-w-[36em] px-3 text-center text-white"
           style={{ textShadow: '0 0 3px #1b2426, 0 0 3px #1b2426, 0 1px 2px #1b2426' }}

@@ -70,6 +70,10 @@ export function useNewDesk(bench: Bench, cuesByRecording: CuesByRecording, start
   const player = useNewPlayer();
   const lastMs = Math.max(recording?.durationMs ?? 0, captions.at(-1)?.endMs ?? 0, moments.at(-1)?.startMs ?? 0);
   useEffect(() => player.setDuration(lastMs), [player, lastMs]);
+  const [startMs] = useState(() => (startLineId ? mainMark(pattern.marks, startLineId)?.startMs : undefined));
+  useEffect(() => {
+    if (startMs !== undefined) player.request({ kind: 'seek', toMs: startMs });
+  }, [player, startMs]);
 
   return {
     bench,

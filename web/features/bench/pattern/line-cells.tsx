@@ -13,7 +13,11 @@ export const isRow = (line: Line) => isCounted(line.kind) || line.kind === 'foun
 
 export function SaidCell({ line, count }: { line: Line; count: LineCount | undefined }) {
   return (
-    <TotalCell voice="said" odd={count?.odd.includes('said') ?? false} className="double-before">
+    <TotalCell
+      voice="said"
+      odd={count?.odd.includes('said') ?? false}
+      className="double-before flex flex-col justify-center self-stretch"
+    >
       {isRow(line) && <Figures totals={line.said} />}
     </TotalCell>
   );
@@ -56,7 +60,7 @@ export function VerdictCell({
 }) {
   if (!count || !isCounted(line.kind)) return <span />;
   return (
-    <span className="pl-3 @max-[600px]:w-[28px] @max-[600px]:overflow-hidden">
+    <span className="flex items-center pl-3 @max-[600px]:w-[28px] @max-[600px]:overflow-hidden">
       <VerdictLabel verdict={count.verdict} follows={follows} />
     </span>
   );

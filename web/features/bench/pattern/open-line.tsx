@@ -70,7 +70,7 @@ export function OpenLine({
               totals={line.said}
               isOdd={count?.odd.includes('said') ?? false}
               readOnly={!mayEdit}
-              className="border-transparent! bg-transparent! px-[9px]! hover:border-edge!"
+              className="ml-auto block w-auto! min-w-11 border-transparent! bg-transparent! px-[9px]! hover:border-edge!"
               onChange={(said) => edit({ said: copyTotals(said) })}
             />
           )}
@@ -83,7 +83,7 @@ export function OpenLine({
               totals={count?.written ?? line.written}
               isOdd={count?.odd.includes('written') ?? false}
               readOnly={!mayEdit}
-              className="px-[9px]!"
+              className="ml-auto block w-auto! min-w-12 px-[9px]!"
               onChange={(written) => desk.bench.setWritten(line.id, copyTotals(written))}
             />
           )}

@@ -12,16 +12,18 @@ export function Tally() {
   const n = desk.pattern.lines.length;
   const left = tally.filter(({ verdict }) => verdict !== 'agrees').reduce((sum, one) => sum + one.n, 0);
   return (
-    <div className="panel-head flex-wrap gap-x-5 gap-y-1 bg-chalk py-1 max-sm:min-h-11 max-sm:gap-x-3">
+    <div className="panel-head flex-wrap gap-x-5 gap-y-1 bg-chalk py-1 max-sm:min-h-11 max-sm:gap-x-2 max-sm:px-3 max-sm:py-0 max-sm:tracking-[-0.1px]">
       <b className="max-sm:hidden">
         {n} {n === 1 ? 'line' : 'lines'}
       </b>
       <ul aria-label="Verdicts" className="contents">
         {tally.map(({ verdict, n: many }) => (
-          <li key={verdict} className={verdict === 'agrees' || verdict === 'no-total' ? 'max-sm:hidden' : ''}>
+          <li
+            key={verdict}
+            className={verdict === 'agrees' || verdict === 'no-total' ? 'max-sm:hidden' : 'max-sm:[&>span]:gap-1'}
+          >
             <VerdictLabel verdict={verdict}>
-              {' '}
-              <b className="text-walnut">{many}</b>
+              <b className="ml-1.5 text-walnut">{many}</b>
             </VerdictLabel>
           </li>
         ))}
@@ -40,7 +42,7 @@ export function Tally() {
           <IconButton
             icon={ArrowDown}
             label="Next line to look at"
-            className="ml-auto text-woad sm:hidden"
+            className="-mr-2 ml-auto min-w-9! text-woad sm:hidden"
             onClick={() => walkFaults(desk)}
           />
         </>

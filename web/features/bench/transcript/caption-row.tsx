@@ -9,6 +9,8 @@ export interface CaptionRowProps {
   senses: ReadonlyMap<number, WordSense>;
   isSpoken: boolean;
   isPast: boolean;
+  /** One caption at a time is a stop of the Tab key: the spoken one, which Page Up and Page Down walk. */
+  isStop: boolean;
   /** A line's moment begins here: its knot stands in the margin. */
   knot: 'chosen' | 'other' | null;
   /** The line in hand: its words are drawn stronger. */
@@ -21,7 +23,7 @@ export interface CaptionRowProps {
 
 /** A caption as it was spoken: its time goes there, its underlined words lead to the line they are evidence of. */
 export const CaptionRow = memo(function CaptionRow(props: CaptionRowProps) {
-  const { caption, senses, isSpoken, isPast, knot, found, onSeek } = props;
+  const { caption, senses, isSpoken, isPast, isStop, knot, found, onSeek } = props;
   return (
     <li
       data-caption={caption.id}
@@ -34,6 +36,7 @@ export const CaptionRow = memo(function CaptionRow(props: CaptionRowProps) {
     >
       <button
         type="button"
+        tabIndex={isStop ? 0 : -1}
         className="small self-start text-left leading-[22px]! text-walnut3 hover:text-woad max-sm:min-h-11"
         onClick={() => onSeek(caption.startMs)}
       >
@@ -66,7 +69,7 @@ const ROLES: Record<WordSense['role'], string> = {
 };
 
 /** Words of one sense: evidence is a button to its line, the rest goes to its place in the clip. */
-function StretchOfWords({ stretch, caption, lineId, onSeek, onSense }: { stretch: Stretch } & CaptionRowProps) {
+function StretchOfWords({ stretch, caption, isStop, lineId, onSeek, onSense }: { stretch: Stretch } & CaptionRowProps) {
   const text = stretch.words.map((word) => word.text).join(' ');
   const { sense } = stretch;
   const first = stretch.words[0];
@@ -77,19 +80,24 @@ function StretchOfWords({ stretch, caption, lineId, onSeek, onSense }: { stretch
       </span>
     );
   }
+  // A link, not a button: links break over lines as words do.
   return (
-    <button
-      type="button"
+    <a
+      href={`?line=${sense.lineId}`}
       title={ROLES[sense.role]}
+      tabIndex={isStop ? 0 : -1}
       className={cx(
-        'inline text-left hover:text-woad',
+        'hover:text-woad',
         sense.role === 'unread' ? 'tack' : 'border-b border-woad',
-        sense.lineId === lineId && sense.role !== 'unread' && 'border-b-2 bg-woadwash',
+        sense.lineId === lineId && sense.role !== 'unread' && 'border-b-2',
       )}
-      onClick={() => onSense(sense.lineId, momentOfWord(caption, first.text))}
+      onClick={(event) => {
+        event.preventDefault();
+        onSense(sense.lineId, momentOfWord(caption, first.text));
+      }}
     >
       {text}
-    </button>
+    </a>
   );
 }
 

@@ -20,7 +20,7 @@ export function NoTranscript({ cues }: { cues: Cues }) {
     );
   }
   return (
-    <div className="ruled-paper grow px-3.5 pt-3">
+    <div className="grow bg-sheet px-3.5 pt-3">
       <p className="font-serif text-[16px] leading-[24px]">
         {recording ? 'This recording has no transcript yet.' : 'No recording yet.'}
       </p>

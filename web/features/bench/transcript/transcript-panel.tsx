@@ -33,7 +33,7 @@ export function TranscriptPanel({
 
   const spokenAt = usePlayerState(player, (state) => lastBegun(captions, state.positionMs));
   const shownAt = hit ?? spokenAt;
-  const { isFollowing, follow, onScroll } = useFollow(list, captions[shownAt]?.id ?? null);
+  const { isFollowing, follow, byHand } = useFollow(list, captions[shownAt]?.id ?? null);
 
   const knots = useMemo(() => {
     const byCaption = new Map<number, string | null>();
@@ -80,7 +80,14 @@ export function TranscriptPanel({
                   Follow again
                 </button>
               ))}
-            <Button kind="quiet" size="row" icon={Search} keys={['/']} className="ml-auto" onClick={() => onFind(true)}>
+            <Button
+              kind="quiet"
+              size="row"
+              icon={Search}
+              keys={['/']}
+              className="ml-auto text-walnut2! [&>svg]:size-4"
+              onClick={() => onFind(true)}
+            >
               Find
             </Button>
           </>
@@ -92,7 +99,7 @@ export function TranscriptPanel({
       ) : (
         <ol
           ref={list}
-          onScroll={onScroll}
+          {...byHand}
           tabIndex={0}
           aria-label="What was said"
           className="relative min-h-0 grow overflow-y-auto bg-sheet py-2"
@@ -104,6 +111,7 @@ export function TranscriptPanel({
               senses={senses}
               isSpoken={i === spokenAt}
               isPast={i < spokenAt}
+              isStop={i === Math.max(0, spokenAt)}
               knot={knots.has(i) ? (knots.get(i) === lineId && lineId !== null ? 'chosen' : 'other') : null}
               lineId={lineId}
               found={hit === undefined ? null : i === hit ? 'here' : 'elsewhere'}
