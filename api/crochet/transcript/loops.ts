@@ -1,6 +1,6 @@
 import { type Token } from './tokens.ts';
 
-const LEFT = /\b(?:leave|leaving|left|see|standing|sticking|alone|loose|fence|stay|later|don't do anything)\b/;
+const LEFT = /\b(?:leave|leaving|left|see|standing|sticking|loose|later|don't do anything)\b/;
 
 /** The loops that a line is worked in: the first told, where they are not just spoken of as left for later. */
 export function loopsOf(

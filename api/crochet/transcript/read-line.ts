@@ -1,10 +1,11 @@
 import { type Announced } from './announce/chain.ts';
+import { readNumberList } from './announce/number-list.ts';
 import { basesAfter, basesOnChain, type ReadSoFar } from './bases.ts';
 import { type Choice, chooseWork, type Setting } from './instruct/choose-work.ts';
 import { type Event } from './instruct/event.ts';
 import { findEvents } from './instruct/find-events.ts';
 import { lettersOf } from './instruct/letters.ts';
-import { withoutCorrected } from './instruct/prune.ts';
+import { prune } from './instruct/prune.ts';
 import { type Base } from './instruct/resolve.ts';
 import { loopsOf } from './loops.ts';
 import { copiesFor, linesNamed } from './references.ts';
@@ -52,9 +53,10 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
   const { tokens } = talk;
   const { announced, from, to } = stretch;
   const { candidate } = announced;
-  const isOut = (i: number) => talk.skipped[i] === true || (i >= candidate.mark && i < candidate.end);
+  const names = namesOfLines(tokens, stretch);
+  const isOut = (i: number) => talk.skipped[i] === true || names.has(i) || (i >= candidate.mark && i < candidate.end);
   const letters = lettersOf(tokens, from, to, talk.sentences, isOut);
-  const events = withoutCorrected(findEvents(letters), tokens);
+  const events = prune(findEvents(letters), tokens);
   const words = tokens.slice(from, to).filter((_, n) => !isOut(from + n));
   const isRing = before.piece.length === 0 && before.chains === null && words.some((token) => token.kind === 'V');
   const loops = loopsOf(tokens, from, to, (i) => talk.skipped[i] === true);
@@ -62,16 +64,45 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
   const named = linesNamed(tokens, from, to, announced.from ?? 0);
   const setting: Setting = {
     bases,
-    stitch: before.stitch,
+    stitch: stitchNamed(words) ?? before.stitch,
     chainCounts: chainRule(words) ?? before.chainCounts,
     copies: copiesFor(tokens, from, to, named, before.piece),
-    isPlain: isPlainLine(words, events),
+    mayLeave: LEAVING.test(words.map((token) => token.text).join(' ')),
+    isPlain: isPlainLine(words, events, announced),
   };
   const choice = chooseWork(events, setting);
   return result(choice, announced, bases, events, { loops, isRing });
 }
 
-function isPlainLine(words: readonly Token[], events: readonly Event[]): boolean {
+/** Numbers that name lines and count nothing: `so that's 22 and 23`, `same as round 9`, `six in a ring, that's one`. */
+function namesOfLines(tokens: readonly Token[], { announced, from, to }: Stretch): ReadonlySet<number> {
+  const out = new Set<number>();
+  const first = announced.from ?? 0;
+  const last = announced.to ?? 0;
+  const isUnnumbered = announced.candidate.end === announced.candidate.at;
+  for (let i = from; i < to; i++) {
+    if (tokens[i]!.kind !== 'N' && tokens[i]!.kind !== 'O') continue;
+    const list = readNumberList(tokens, i, true);
+    const isOwn = list !== null && list.to > list.from && list.to === last && list.from >= first && list.from > 0;
+    const follows = tokens[i - 1]?.kind === 'U' || tokens[i - 1]?.kind === '#';
+    const value = Number(tokens[i]!.value);
+    const isNamed = follows && value <= last + 1;
+    const isTag = isUnnumbered && value === first && tokens[i - 1]?.kind !== 'E' && /[.,|]/.test(tokens[i + 1]?.kind ?? '.') && /^(?:is|'s|that is)$/.test(tokens[i - 1]?.text ?? '');
+    if (isOwn || isNamed || isTag) for (let j = i; j < (isOwn ? list.end : i + 1); j++) out.add(j);
+  }
+  return out;
+}
+
+const LEAVING = /\b(?:leave|leaving)\b.{0,12}\b(?:last|rest|alone|unworked|hat)\b|\bstop dead\b|\bjust the \w+\b|\bhalf the\b/;
+
+const FABRIC = new Set(['sc', 'hdc', 'dc', 'tr', 'slst']);
+
+function stitchNamed(words: readonly Token[]): string | null {
+  const named = words.filter((token) => token.kind === 'S' && FABRIC.has(String(token.value)));
+  return (named.find((token) => token.value !== 'slst') ?? named[0])?.value.toString() ?? null;
+}
+
+function isPlainLine(words: readonly Token[], events: readonly Event[], { from, to }: Announced): boolean {
   const plain = words.some(
     (token) =>
       token.kind === 'F' || token.kind === 'E' || token.kind === 'A' || token.kind === 'B' || token.kind === 'M',
@@ -79,7 +110,7 @@ function isPlainLine(words: readonly Token[], events: readonly Event[]): boolean
   const shapes = events.some(
     (event) => event.type === 'unit' && event.options[0]!.some((unit) => unit.type !== 'stitch' || unit.inOne > 1),
   );
-  return !shapes && (plain || events.some((event) => event.type === 'unit'));
+  return !shapes && (plain || from !== to || events.some((event) => event.type === 'unit'));
 }
 
 const COUNTED =

@@ -106,8 +106,10 @@ function readExpanded(
   const { candidate, from, to: until } = announced;
   const stretch = { announced, from: candidate.at, to };
   const many = (until ?? 0) - (from ?? 0) + 1;
+  const copied = from === 1 && many > 1 ? copiesOfPiece(talk, announced, to, before) : null;
+  if (copied !== null) return copied;
   const named = many > 1 ? linesNamed(talk.tokens, candidate.at, to, from ?? 0) : [];
-  if (named.length < 2 || many % named.length !== 0) return [readSpokenLine(talk, stretch, before)];
+  if (named.length < 2) return [readSpokenLine(talk, stretch, before)];
   const lines = [...before.piece];
   const out: ReadLineResult[] = [];
   for (let n = 0; n < many; n++) {
@@ -131,6 +133,20 @@ function readExpanded(
     out.push(line);
   }
   return out;
+}
+
+/** `rounds one through five of the pot over again`: the first lines of an earlier piece, one by one. */
+function copiesOfPiece(
+  talk: Talk,
+  { candidate, to: until }: Announced,
+  to: number,
+  before: Parameters<typeof readSpokenLine>[2],
+): readonly ReadLineResult[] | null {
+  if (!/\b(?:over again|as for|same as|as on|again|just like|like the)\b/.test(textOf(talk.tokens, candidate.at, to))) return null;
+  const model = before.all.findLast((lines) => lines.some((line) => line.from === 1) && (lines.at(-1)?.to ?? 0) >= until!);
+  if (model === undefined) return null;
+  const lines = model.filter((line) => line.from !== null && line.to! <= until!);
+  return lines.map((line) => ({ ...foundation(0), ...line, verdict: 'no-total', said: null, isRing: line.from === 1 }));
 }
 
 function beginPiece(talk: Talk, from: number, announced: Announced, next: number): Building {

@@ -4,6 +4,7 @@ import { chooseChain } from './announce/chain.ts';
 import { type Cue } from './cue.ts';
 import { type Draft } from './draft.ts';
 import { draftPieces } from './draft-pieces.ts';
+import { placeSilences } from './place-silences.ts';
 import { readPieces } from './read-pieces.ts';
 import { sentencesOf } from './sentences.ts';
 import { findSkipped } from './skipped.ts';
@@ -19,16 +20,20 @@ import { type Word, wordsOf } from './words.ts';
  * @param options.terms overrules the terms inferred from the talk
  */
 export function readTranscript(cues: readonly Cue[], options: { readonly terms?: Terms } = {}): Draft {
-  const words = wordsOf(cues);
-  const { tokens: heard, corrections } = tokensOf(words);
+  const spoken = wordsOf(cues);
+  const { tokens: heard, corrections } = tokensOf(spoken);
   const inferred = inferTerms(heard);
   const terms = options.terms ?? inferred.terms;
   const tokens = inUsTerms(heard, terms);
   const sentences = sentencesOf(tokens);
   const skipped = findSkipped(tokens, sentences);
-  const candidates = findCandidates(tokens, sentences).filter((one) => skipped[one.mark] !== true);
+  const candidates = findCandidates(tokens, sentences).filter(
+    (one) => !sentences.isPunctuated || skipped[one.mark] !== true,
+  );
   const chain = chooseChain(candidates, tokens);
   const steps = findSteps(tokens, sentences, skipped);
+  const moments = [...chain.map((one) => one.candidate.at), ...steps.map((step) => step.at)].sort((a, b) => a - b);
+  const words = placeSilences(spoken, moments.map((at) => tokens[at]!.first));
   const silenceAfter = (token: Token) => words[token.last + 1]?.silenceMs ?? 0;
   const pieces = readPieces({ tokens, sentences, skipped }, chain, steps, silenceAfter);
   return {

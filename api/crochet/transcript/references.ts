@@ -26,6 +26,10 @@ export function linesNamed(tokens: readonly Token[], from: number, to: number, b
 }
 
 function ordinalNamed(tokens: readonly Token[], i: number): { from: number; to: number; end: number } | null {
+  if (tokens[i]!.kind === 'N') {
+    const list = readNumberList(tokens, i, true, true);
+    return list !== null && /^(?:did|was|were)$/.test(tokens[list.end]?.text ?? '') ? list : null;
+  }
   if (tokens[i]!.kind !== 'O' || tokens[i + 1]?.kind !== 'U') return null;
   const n = numberAt(tokens, i)!;
   return { from: n, to: n, end: i + 2 };
@@ -44,23 +48,33 @@ export function copiesFor(
 ): readonly { units: readonly Unit[]; cost: number }[] {
   const out = named.flatMap((n) => {
     const line = earlier.findLast((one) => one.from !== null && one.from <= n && n <= (one.to ?? one.from));
-    return line === undefined ? [] : [{ units: asPattern(line), cost: 0.3 }];
+    return line === undefined ? [] : patternsOf(line).map((units, k) => ({ units, cost: 0.3 + 0.4 * k }));
   });
   const text = tokens
     .slice(from, to)
     .map((token) => token.text)
     .join(' ');
   const last = earlier.at(-1);
-  if (SAME.test(text) && last !== undefined && last.from !== null) out.push({ units: asPattern(last), cost: 0.9 });
+  if (SAME.test(text) && last !== undefined && last.from !== null) out.push(...patternsOf(last).map((units, k) => ({ units, cost: 0.9 + 0.4 * k })));
   return out;
 }
 
-/** One kind of stitch in every place is copied as such, whatever the number of places now. */
-function asPattern(line: ReadSoFar): readonly Unit[] {
+/** The ways to do a line again: as it was, and with its longest plain stretch as long as now fits. */
+function patternsOf(line: ReadSoFar): readonly (readonly Unit[])[] {
   const [unit] = line.units;
-  const isUniform =
-    line.units.length === 1 && (unit?.type === 'stitch' || unit?.type === 'together' || unit?.type === 'oneplace');
-  if (isUniform && unit.times > 1) return [{ type: 'repeat', units: [{ ...unit, times: 1 }], times: 0 }];
-  if (line.units.length === 1 && unit?.type === 'repeat') return [{ ...unit, times: 0 }];
-  return line.units;
+  const isUniform = unit?.type === 'stitch' || unit?.type === 'together' || unit?.type === 'oneplace';
+  if (line.units.length === 1 && isUniform && unit.times > 1) return [[open([{ ...unit, times: 1 }])]];
+  if (line.units.length === 1 && unit?.type === 'repeat') return [line.units, [{ ...unit, times: 0 }]];
+  const longest = line.units.reduce((best, one, n) => (plainLength(one) > plainLength(line.units[best]!) ? n : best), 0);
+  const stretch = line.units[longest];
+  if (stretch?.type !== 'stitch' || plainLength(stretch) < 2) return [line.units];
+  return [line.units, line.units.map((one, n) => (n === longest ? open([{ ...stretch, times: 1 }]) : one))];
+}
+
+function plainLength(unit: Unit): number {
+  return unit.type === 'stitch' && unit.inOne === 1 ? unit.times : 0;
+}
+
+function open(units: readonly Unit[]): Unit {
+  return { type: 'repeat', units, times: 0 };
 }

@@ -2,7 +2,7 @@ import { type Sentences } from './sentences.ts';
 import { type Token } from './tokens.ts';
 
 const RECAP =
-  /\b(?:that was|so round \w+ was|recap|to review|that there was|let us recall|where was i|so that was|did you notice|see how|if you (?:have|got|are)|if yours|if your|somebody just asked|short version|would mean)\b/;
+  /\b(?:that was|so round \w+ was|recap|to review|that there was|let us recall|where was i|so that was|did you notice|see how|if you (?:have|got|get|are at|are looking at) (?:\d+|\w+(?:teen|ty)|twelve|eleven|ten|nine|eight)|if yours|if your|somebody just asked|short version|would mean)\b/;
 const DEMONSTRATION =
   /\b(?:let me (?:show|do|demonstrate|slow)|i shall demonstrate|if you have never|if you never done|for anybody who|for anyone who|some of you asked|a half treble is|what is a|rehearse|permit me|quick clinic|my decrease|around here we call)\b/;
 
@@ -29,12 +29,18 @@ function markSentence(tokens: readonly Token[], start: number, end: number, out:
 }
 
 const REACH = 9;
+const BACK = 5;
 
 /** Without full stops only what stands close to "yarn over" is left out, up to the next announcement. */
 function markStretches(tokens: readonly Token[], start: number, end: number, out: boolean[]): void {
   for (let i = start; i < end; i++) {
-    if (tokens[i]!.kind !== 'y') continue;
-    for (let j = i; j > Math.max(start, i - REACH) && tokens[j]!.kind !== 'U'; j--) out[j] = true;
+    if (tokens[i]!.kind !== 'y' || !isShown(tokens, i)) continue;
+    for (let j = i; j > Math.max(start, i - BACK) && tokens[j]!.kind !== 'U'; j--) out[j] = true;
     for (let j = i; j < Math.min(end, i + REACH) && tokens[j]!.kind !== 'U'; j++) out[j] = true;
   }
+}
+
+/** One "pull up" may be part of a round; two close together show how a stitch is made. */
+function isShown(tokens: readonly Token[], i: number): boolean {
+  return tokens.slice(Math.max(0, i - 2 * REACH), i + 2 * REACH).filter((token) => token.kind === 'y').length > 1;
 }

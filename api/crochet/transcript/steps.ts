@@ -10,6 +10,8 @@ export interface SpokenStep {
 }
 
 const AHEAD = 12;
+/** Pulling a ring shut belongs to the first round. */
+const RING_REACH = 14;
 const IDLE = /\b(?:if|before|don't|do not|dinnae|never|when|unless|because|you can fasten|instead of|later|until|no)\b/;
 const LEADS = '~&vaOXIGrpw';
 
@@ -24,6 +26,7 @@ export function findSteps(
     if (skipped[i] === true || ',.|'.includes(tokens[i]!.kind)) continue;
     const topic = topicAt(tokens, i, sentences);
     if (topic === null || isIdle(tokens, i, sentences)) continue;
+    if (topic === 'finish' && tokens.slice(Math.max(0, i - RING_REACH), i).some((token) => token.kind === 'V')) continue;
     const last = found.at(-1);
     if (last !== undefined && belongsTo(last, topic, i, sentences)) {
       found[found.length - 1] = { ...last, end: i + 1 };
@@ -47,7 +50,8 @@ function topicAt(tokens: readonly Token[], i: number, sentences: Sentences): str
     if (!',.|'.includes(tokens[j]!.kind)) ahead.push(tokens[j]!.text);
   }
   const text = ahead.join(' ');
-  return STEPS.find(({ words }) => words.test(text))?.topic ?? null;
+  const bare = text.replace(/^(?:you|we|i) (?=put|tie|sew|cut)/, '');
+  return STEPS.find(({ words }) => words.test(bare))?.topic ?? null;
 }
 
 function isIdle(tokens: readonly Token[], i: number, sentences: Sentences): boolean {

@@ -57,7 +57,7 @@ export function tokensOf(words: readonly Word[]): Tokens {
     const mark = atoms[at - 1]!.breakAfter;
     if (mark !== '') tokens.push(breakToken(mark, atoms[at - 1]!.word));
   }
-  return { tokens, corrections };
+  return { tokens: withoutCounting(tokens), corrections };
 }
 
 function atomsOf(words: readonly Word[]): Atom[] {
@@ -197,4 +197,38 @@ function plain(kind: Class, value: string | number, text: string): Found['token'
 
 function breakToken(mark: ',' | '.' | '|', word: number): Token {
   return { kind: mark, value: 0, first: word, last: word, text: mark, split: null, isGuess: false };
+}
+
+/** `two, four, six … twelve` and `one, two, three, four` are counting aloud: what counts is the number reached. */
+function withoutCounting(tokens: readonly Token[]): readonly Token[] {
+  const out: Token[] = [];
+  for (let at = 0; at < tokens.length; ) {
+    const length = countingLength(tokens, at);
+    if (length === 0) {
+      out.push(tokens[at]!);
+      at += 1;
+      continue;
+    }
+    const last = tokens[at + length - 1]!;
+    out.push({ ...last, first: tokens[at]!.first, text: 'counted' });
+    at += length;
+  }
+  return out;
+}
+
+/** How many tokens a run of counting takes: three numbers or more in equal steps that begin with the step. */
+function countingLength(tokens: readonly Token[], at: number): number {
+  const first = tokens[at]!;
+  if (first.kind !== 'N' || tokens[at - 1]?.kind === 'U' || tokens[at - 1]?.kind === '#') return 0;
+  const step = Number(first.value);
+  let reached = step;
+  let end = at + 1;
+  for (;;) {
+    const next = tokens[end]?.kind === ',' ? end + 1 : end;
+    if (tokens[next]?.kind !== 'N' || Number(tokens[next]!.value) !== reached + step) break;
+    reached += step;
+    end = next + 1;
+  }
+  const many = reached / step;
+  return step > 0 && step < 11 && many >= (step === 1 ? 4 : 3) ? end - at : 0;
 }

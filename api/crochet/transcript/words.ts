@@ -9,6 +9,9 @@ export interface Word {
   readonly mark: '' | ',' | '.';
   /** Silence before the word, in milliseconds, as far as the cues show it. */
   readonly silenceMs: number;
+  /** Which cue it is from; the words of a paragraph have only roughly their own time. */
+  readonly cue: number;
+  readonly isInParagraph: boolean;
 }
 
 /** Nobody speaks slower than this for long, in characters a second; longer times hold a silence. */
@@ -25,7 +28,7 @@ export function wordsOf(cues: readonly Cue[]): readonly Word[] {
   const paragraphRate = speakingRate(cues);
   const words: Word[] = [];
   let spokenUntil: number | null = null;
-  for (const cue of cues) {
+  cues.forEach((cue, index) => {
     const texts = cue.text.split(/\s+/).filter((text) => /[\p{L}\p{N}]/u.test(text));
     const length = texts.reduce((sum, text) => sum + text.length + 1, 0);
     const rate = length > PARAGRAPH ? paragraphRate : SLOWEST;
@@ -36,10 +39,10 @@ export function wordsOf(cues: readonly Cue[]): readonly Word[] {
       passed += text.length + 1;
       const endMs = cue.startMs + (lasts * passed) / length;
       const silenceMs = spokenUntil === null ? 0 : Math.max(0, startMs - spokenUntil);
-      words.push({ text, startMs, endMs, mark: markAfter(text), silenceMs });
+      words.push({ text, startMs, endMs, mark: markAfter(text), silenceMs, cue: index, isInParagraph: length > PARAGRAPH });
       spokenUntil = endMs;
     }
-  }
+  });
   return words;
 }
 
@@ -57,3 +60,4 @@ function markAfter(text: string): Word['mark'] {
   if (/[.!?…]["'”’)\]]*$/.test(text)) return '.';
   return /[,;:–—]["'”’)\]]*$/.test(text) ? ',' : '';
 }
+

@@ -24,7 +24,8 @@ export function bareCandidates(tokens: readonly Token[], i: number, sentences: S
   if (token.kind === 'O' && (Number(token.value) === 1 || next?.kind === 'H' || next?.kind === 'Z')) return [];
   const strength = isTime ? 1.8 : strengthOf(tokens, i, list.end, list.to - list.from + 1, sentences);
   if (strength <= 0) return [];
-  const at = announcementStart(tokens, i, sentences);
+  const isTail = token.kind === 'O' && '.|'.includes(next?.kind ?? '.') && i - sentences.startOf[i]! < 24;
+  const at = isTail ? sentences.startOf[i]! : announcementStart(tokens, i, sentences);
   const base = { kind: 'line' as const, at, end: isTime ? list.end + 1 : list.end, mark: i, unit: null, needs: null };
   return [{ ...base, lines: { type: 'named', from: list.from, to: list.to }, strength }];
 }
@@ -33,12 +34,13 @@ function strengthOf(tokens: readonly Token[], i: number, end: number, many: numb
   const next = tokens[end]?.kind ?? '.';
   const before = tokens[i - 1]?.kind ?? '.';
   if (!worksSoon(tokens, end)) return many > 1 ? 0.4 : 0;
+  if (isResult(tokens, i)) return 0;
   const isHead = startsClause(tokens, i);
   const atSentence = i - sentences.startOf[i]! <= 3;
   if (many > 2) return isHead ? 2 : 1.5;
   if (many === 2) return isHead ? 1.2 : 0.7;
   if (tokens[i]!.kind === 'O') return before === 'p' || !isHead ? 0.3 : 1.4;
-  if (!isHead) return 0;
+  if (!isHead) return shortHead(tokens, i, sentences) ? 1 : before === '&' && next === 'v' ? 0.9 : tokens[i - 1]?.text === 'for' && '.,'.includes(next) ? 0.6 : 0;
   if (next === 'v' || next === '=') return atSentence ? 1.3 : 0.9;
   if (next === ',' || next === '.') return atSentence ? 0.9 : 0.45;
   if (next === '&') return 0.2;
@@ -52,4 +54,20 @@ function worksSoon(tokens: readonly Token[], from: number): boolean {
     if (WORKING.includes(tokens[i]!.kind) || tokens[i]!.kind === 'N') return true;
   }
   return false;
+}
+
+/** `Firing four.`: a sentence of two words that ends in the number. */
+function shortHead(tokens: readonly Token[], i: number, sentences: Sentences): boolean {
+  const start = sentences.startOf[i]!;
+  const isShort = i - start <= 2 && i > start && tokens[i + 1]?.kind === '.';
+  return isShort && tokens.slice(start, i).every((token) => 'w~'.includes(token.kind));
+}
+
+/** `down to eight`, `the other three`, `ten, two, four and eight`: numbers that come to something or are picked out. */
+function isResult(tokens: readonly Token[], i: number): boolean {
+  const before = tokens[i - 1];
+  if (before?.kind === 'X') return true;
+  if (before?.kind === '=' && !/^(?:that is|for|so|it is|its|so that is)$/.test(before.text)) return true;
+  const earlier = tokens[i - 2];
+  return before?.kind === ',' && earlier?.kind === 'N' && Number(earlier.value) + 1 !== Number(tokens[i]!.value);
 }

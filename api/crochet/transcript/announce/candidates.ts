@@ -40,11 +40,12 @@ function fromNamed(
   unit: 'round' | 'row',
   sentences: Sentences,
 ): Candidate[] {
+  const word = String(tokens[i]!.value);
   const mention = isMention(tokens, i, named.end, sentences);
-  const at = announcementStart(tokens, i, sentences);
+  const at = deedBefore(tokens, i, sentences) ?? announcementStart(tokens, i, sentences);
   const base = { kind: 'line' as const, at, end: named.end, mark: i, unit, needs: null };
-  if (mention === 'until') return [{ ...base, lines: { type: 'until', last: named.to }, strength: 1.2 }];
-  if (mention !== null) return [];
+  if (mention === 'until') return [{ ...base, at: untilStart(tokens, i, sentences), lines: { type: 'until', last: named.to }, strength: 1.2 }];
+  if (mention !== null || (word.endsWith('s') && named.from === named.to)) return [];
   const isFirst = startsClause(tokens, i);
   const split = tokens[named.end - 1]!.split;
   const out: Candidate[] = [
@@ -63,7 +64,7 @@ function fromBefore(tokens: readonly Token[], i: number, unit: 'round' | 'row', 
   while (j >= 0 && 'Fm~aS'.includes(tokens[j]!.kind) && i - j < 5) j -= 1;
   const before = tokens[j];
   if (before === undefined) return [];
-  const at = announcementStart(tokens, j, sentences);
+  const at = announcementStart(tokens, j, sentences, true);
   const base = { kind: 'line' as const, at, end: i + 1, mark: j, unit, needs: null };
   const isPast =
     /^(?:was|were)$/.test(tokens[i + 1]?.text ?? '') || /^(?:was|were|every|each)$/.test(tokens[j - 1]?.text ?? '');
@@ -84,7 +85,9 @@ function fromBefore(tokens: readonly Token[], i: number, unit: 'round' | 'row', 
   if (before.kind === 'X' && !plural) return [{ ...base, lines: { type: 'next', many: 1 }, strength: 2 }];
   if (before.kind === 'L' && !plural && tokens[j - 1]?.kind !== 'I')
     return [{ ...base, lines: { type: 'next', many: 1 }, strength: 1.1 }];
-  if (before.kind === 'N' && plural) return counted(tokens, i, j, base);
+  if (before.kind === 'N' && plural) return counted(tokens, i, j, base, sentences);
+  const isOne = before.kind === 'N' && Number(before.value) === 1 && /[Fm]/.test(kindsOf(tokens, j + 1, i));
+  if (isOne && !plural) return [{ ...base, lines: { type: 'next', many: 1 }, strength: 1 }];
   return [];
 }
 
@@ -93,6 +96,7 @@ function counted(
   i: number,
   j: number,
   base: Omit<Candidate, 'lines' | 'strength'>,
+  sentences: Sentences,
 ): Candidate[] {
   const many = Number(tokens[j]!.value);
   if (many < 2 || many > 200) return [];
@@ -101,6 +105,9 @@ function counted(
   const isResult =
     (tokens[j - 1]?.kind === '=' && !isFor) || tokens[j - 1]?.text === "'s" || tokens[j - 1]?.kind === 'p';
   if (isResult && !ahead) return [{ ...base, lines: { type: 'until', last: many }, strength: 0.6 }];
+  const isUntil = tokens.slice(Math.max(0, j - 5), j).some((one) => one.text === 'until' || one.text === 'till');
+  if (isUntil) return [{ ...base, at: untilStart(tokens, j, sentences), lines: { type: 'until', last: many }, strength: 1.2 }];
+  if (tokens[i + 1]?.text === 'of' && tokens[i + 2]?.kind === 'N') return [];
   const list = explicitAfter(tokens, i + 1, many);
   if (list !== null)
     return [{ ...base, end: list.end, lines: { type: 'named', from: list.from, to: list.to }, strength: 3 }];
@@ -137,11 +144,35 @@ function ordinalsBefore(tokens: readonly Token[], j: number): { at: number; from
   return { at, from };
 }
 
+function kindsOf(tokens: readonly Token[], from: number, to: number): string {
+  return tokens.slice(from, to).map((token) => token.kind).join('');
+}
+
+/** `row two, row three, row two, row three, till you have ten`: announced by the first row named. */
+function untilStart(tokens: readonly Token[], i: number, sentences: Sentences): number {
+  const from = Math.max(sentences.startOf[i]!, i - DEED_REACH);
+  const first = kindsOf(tokens, from, i - 2).search(/[UR]/);
+  return announcementStart(tokens, first < 0 ? i : from + first, sentences);
+}
+
+const DEED_REACH = 18;
+
+/** `repeat row two, two more times, so that's rows three and four` is announced by its deed, not by the numbers at its end. */
+function deedBefore(tokens: readonly Token[], i: number, sentences: Sentences): number | null {
+  const lead = tokens.slice(Math.max(0, i - 3), i).map((token) => token.text).join(' ');
+  if (!/\b(?:that is|that 's)$/.test(lead)) return null;
+  for (let j = i - 1; j >= Math.max(0, i - DEED_REACH); j--) {
+    const isDeed = tokens[j]!.kind === 'R' && tokens[j]!.value === 0 && kindsOf(tokens, j, i).includes('U');
+    if (isDeed) return announcementStart(tokens, j, sentences);
+  }
+  return null;
+}
+
 /** `Number 4.`, `now number three fills the troughs`. */
 function numberWord(tokens: readonly Token[], i: number, sentences: Sentences): Candidate[] {
   if (tokens[i - 1]?.kind === 'U') return [];
   const named = readNumberList(tokens, i + 1, false);
-  if (named === null || isCounted(tokens, named.end)) return [];
+  if (named === null || named.from === 1 || isCounted(tokens, named.end)) return [];
   return [
     {
       kind: 'line',
@@ -156,22 +187,29 @@ function numberWord(tokens: readonly Token[], i: number, sentences: Sentences): 
   ];
 }
 
-const FAR = 14;
+const FAR = 18;
 const LEADS = '~&v=apIXmr';
 
 /** The first words of an announcement: its sentence's start where that is near, else the little words before it. */
-export function announcementStart(tokens: readonly Token[], i: number, sentences: Sentences): number {
+export function announcementStart(
+  tokens: readonly Token[],
+  i: number,
+  sentences: Sentences,
+  withTurning = false,
+): number {
   const start = sentences.startOf[i]!;
   if (i - start <= FAR && sentences.isPunctuated) return start;
   let at = i;
   while (at > start && i - at < 5 && LEADS.includes(tokens[at - 1]!.kind)) at -= 1;
-  return i - start <= 5 ? start : at;
+  const turns = withTurning && /^[~&a=,]*[CR][^USPDV]*$/.test(kindsOf(tokens, start, i));
+  const isNear = i - start <= 5 || (i - start <= FAR && turns);
+  return isNear ? start : at;
 }
 
 /** Whether only little words stand between a break and the token. */
 export function startsClause(tokens: readonly Token[], i: number): boolean {
   let at = i - 1;
-  while (at >= 0 && i - at < 8 && '~&v=apIXr'.includes(tokens[at]!.kind)) at -= 1;
+  while (at >= 0 && i - at < 8 && '~&v=apIXLr'.includes(tokens[at]!.kind)) at -= 1;
   return at < 0 || ['.', ',', '|'].includes(tokens[at]!.kind);
 }
 

@@ -25,6 +25,9 @@ const RESTART_COST = 0.9;
 const CHAIN_REACH = 70;
 const STATES_KEPT = 4;
 const CHAINS_KEPT = 3;
+const OWN_RING = 22;
+/** Weak announcements are taken only where they join others. */
+const TAKING_COST = 0.45;
 
 /**
  * Chooses among the candidates the chain that fits best: numbers that go on or begin again, strong announcements
@@ -75,7 +78,7 @@ function options(
       for (const before of candidate.needs === 'start' ? [] : open) {
         out.push(go(candidate, before, 1, lines.to, candidate.strength + 1.6));
       }
-      if (isFree(top, candidate))
+      if (isFree(top, candidate) && !isOwnRing(top, candidate, tokens))
         out.push(begin(candidate, top, lines.to, candidate.strength - restartCost(top, candidate, tokens)));
     }
     for (let gap = 0; gap <= 3; gap++) {
@@ -111,6 +114,14 @@ function relative(candidate: Candidate, before: State): State[] {
   return [];
 }
 
+/** A ring named within the first round is that round's own, and begins no other piece. */
+function isOwnRing(top: State, candidate: Candidate, tokens: readonly Token[]): boolean {
+  if (candidate.needs !== 'start' || top.announced?.from !== 1) return false;
+  const { at, end } = top.announced.candidate;
+  const since = candidate.at - end;
+  return since < OWN_RING || (since < 2 * OWN_RING && !tokens.slice(at, candidate.at).some((token) => token.kind === 'V'));
+}
+
 /** Whether the candidate's words come after those of the line before. */
 function isFree(before: State, candidate: Candidate): boolean {
   return before.announced === null || candidate.end > before.announced.candidate.end;
@@ -119,7 +130,7 @@ function isFree(before: State, candidate: Candidate): boolean {
 function go(candidate: Candidate, before: State, from: number, to: number, gain: number): State {
   return {
     to,
-    score: before.score + gain,
+    score: before.score + gain - TAKING_COST,
     announced: { candidate, from, to, begins: before.announced === null },
     before,
     chainAt: null,

@@ -53,14 +53,14 @@ export function isMention(
   sentences: Sentences,
 ): 'until' | 'mention' | null {
   let j = i - 1;
-  while (j >= 0 && (tokens[j]!.kind === 'a' || tokens[j]!.kind === '~') && i - j < 4) j -= 1;
+  while (j >= 0 && 'a~'.includes(tokens[j]!.kind) && !MENTIONING.has(tokens[j]!.text) && i - j < 4) j -= 1;
   const before = j >= sentences.startOf[i]! ? tokens[j] : undefined;
   if (PAST.has(tokens[end]?.text ?? '')) return 'mention';
   if (before === undefined) return null;
   if (REACHING.has(before.text) || (before.text === 'with' && /^(?:finish|done|end)$/.test(tokens[j - 1]?.text ?? '')))
     return 'until';
   if (before.text === 'of' && /^(?:end|finish)$/.test(tokens[j - 1]?.text ?? '')) return 'until';
-  if (PAST.has(before.text)) return 'mention';
+  if (PAST.has(before.text) || PAST.has(tokens[j - 1]?.text ?? '')) return 'mention';
   if (before.kind === 'b' || before.kind === 'R' || before.kind === 'n' || MENTIONING.has(before.text))
     return 'mention';
   return null;

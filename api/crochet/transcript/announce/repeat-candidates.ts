@@ -3,13 +3,19 @@ import { type Token } from '../tokens.ts';
 import { type Candidate } from './candidate.ts';
 import { announcementStart, startsClause } from './candidates.ts';
 
+/** `in the next one, a single`: a place, and no line. */
+function isPlace(tokens: readonly Token[], i: number): boolean {
+  return tokens[i - 1]?.kind === 'I' || (tokens[i - 1]?.kind === 'a' && tokens[i - 2]?.kind === 'I');
+}
+
 /** `Next, increase in each`, `and the one after that is …`, `and around once more`. */
 export function oneMore(tokens: readonly Token[], i: number, sentences: Sentences): Candidate[] {
   const token = tokens[i]!;
   const next = tokens[i + 1];
-  const isNext = token.kind === 'X' && startsClause(tokens, i) && (next?.kind === ',' || next?.kind === 'v');
+  const isAfter = token.text === 'one after that' && next?.kind === 'v';
+  const isNext = token.kind === 'X' && !isPlace(tokens, i) && startsClause(tokens, i) && (next?.kind === ',' || next?.kind === 'v');
   const isAround = token.kind === 'A' && /^(?:once|one|again)/.test(next?.text ?? '') && startsClause(tokens, i);
-  if (!isNext && !isAround) return [];
+  if (!isNext && !isAround && !isAfter) return [];
   const at = announcementStart(tokens, i, sentences);
   return [
     { kind: 'line', at, end: i + 1, mark: i, unit: null, lines: { type: 'next', many: 1 }, strength: 0.7, needs: null },
@@ -30,7 +36,7 @@ export function repeatCandidates(tokens: readonly Token[], i: number, sentences:
   };
   const number = before.findLast((one) => one.kind === 'N');
   if (number === undefined) return [];
-  const hasLine = before.some((one) => one.kind === 'U');
+  const hasLine = before.some((one, n) => one.kind === 'U' && before.slice(0, n).some((early) => early.kind === 'R'));
   if (tokens[i]!.kind === 't') {
     const isMore = before.at(-1)?.kind === 'm';
     const repeat = before.findIndex((one) => one.kind === 'R');
@@ -39,6 +45,6 @@ export function repeatCandidates(tokens: readonly Token[], i: number, sentences:
     return [{ ...base, at, lines: { type: 'next', many: Number(number.value) }, strength: 1.8 }];
   }
   const until = before.findIndex((one) => one.text === 'until' || one.text === 'till');
-  if (until < 0 || !hasLine) return [];
+  if (until < 0) return [];
   return [{ ...base, lines: { type: 'until', last: Number(number.value) }, strength: 1.2 }];
 }

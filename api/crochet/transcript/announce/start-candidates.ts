@@ -6,7 +6,8 @@ import { announcementStart } from './candidates.ts';
 const NEAR = 34;
 /** What turns a start into a suggestion, a habit or another way. */
 const UNLESS = /\b(?:if|you may|you could|you can|or|every|each|when|whenever|isn't|counts?)\b/;
-const isIdle = (tokens: readonly Token[]) => UNLESS.test(tokens.map((one) => one.text).join(' '));
+const textOf = (tokens: readonly Token[]): string => tokens.map((one) => one.text).join(' ');
+const isIdle = (tokens: readonly Token[]): boolean => UNLESS.test(textOf(tokens));
 
 /** What begins a piece without a number: a starting chain, a ring, a first row that is only described. */
 export function startCandidates(
@@ -41,9 +42,12 @@ function chainCandidate(tokens: readonly Token[], i: number, sentences: Sentence
   }
   if (number < 0) return [];
   const start = sentences.startOf[i]!;
-  const before = tokens.slice(Math.max(start, i - 9), i);
+  const before = tokens.slice(Math.max(start, i - 13), i);
   const n = Number(tokens[number]!.value);
-  if (n < 3 || isIdle(before)) return [];
+  const rest = textOf(tokens.slice(i, i + 10));
+  const lead = tokens[Math.min(i, number) - 1]?.text ?? '';
+  const isSpace = /\b(?:stands?|standing|secretly|as a stitch)\b/.test(rest) || lead === "'s" || lead === 'that is';
+  if (n < 4 || isIdle(before) || isSpace || joinsStitch(tokens, Math.max(i, number) + 1)) return [];
   const next = tokens[Math.max(i, number) + 1]?.kind ?? '.';
   const isCountedSpace = tokens[Math.max(i, number) + 1]?.kind === 'Z';
   if (isCountedSpace || before.some((one) => 'KSPD'.includes(one.kind)) || (n < 5 && next === 'T')) return [];
@@ -57,10 +61,17 @@ function chainCandidate(tokens: readonly Token[], i: number, sentences: Sentence
       mark: at,
       unit: null,
       lines,
-      strength: n < 4 ? 0.3 : 0.6,
+      strength: 0.6,
       needs: null,
     },
   ];
+}
+
+/** `four chain and a treble at its foot`: a chain that goes on into stitches begins no piece. */
+function joinsStitch(tokens: readonly Token[], after: number): boolean {
+  let i = after;
+  while (tokens[i]?.kind === '&' || tokens[i]?.kind === 'a') i += 1;
+  return i > after && tokens[i]?.kind === 'S' && tokens[i]!.value !== 'slst';
 }
 
 /** `chain twenty six, no, sorry, twenty seven`: the last number before the talk goes on. */
@@ -85,7 +96,7 @@ function ringCandidate(
   const start = sentences.startOf[i]!;
   const end = sentences.endOf[i]!;
   const near = tokens.slice(Math.max(start, i - 12), Math.min(end, i + 12));
-  if (isIdle(near)) return [];
+  if (isIdle(tokens.slice(Math.max(start, i - 10), i + 2))) return [];
   const hasWork = near.some((one) => one.kind === 'N' || one.kind === 'S');
   const at = i - start < 12 ? start : Math.max(start, i - 3);
   const named = numbered.find(

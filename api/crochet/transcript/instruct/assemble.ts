@@ -1,3 +1,4 @@
+import { settleStitches } from '../work/settle.ts';
 import { periodOf, type Unit } from '../work/units.ts';
 import { BARE } from './event.ts';
 import { type Element } from './roles.ts';
@@ -25,19 +26,21 @@ interface Partial {
 const MOST = 60;
 
 /** Puts phrases together in every likely way: which of them a repeat takes in, what stands in one place. */
-export function assemble(elements: readonly Element[]): readonly Assembly[] {
+export function assemble(spoken: readonly Element[]): readonly Assembly[] {
+  const elements = gatherPlaces(spoken);
   let partials: Partial[] = [{ nodes: [], closed: 0, corner: null, cost: 0 }];
-  elements.forEach((element, index) => {
-    const next = partials.flatMap((partial) => extend(partial, element, elements, index));
+  for (const element of elements) {
+    const next = partials.flatMap((partial) => extend(partial, element));
     partials = next.sort((a, b) => a.cost - b.cost).slice(0, MOST);
-  });
+  }
   return partials.map(({ nodes, cost }) => ({ units: nodes.map((node) => node.unit), cost }));
 }
 
-function extend(partial: Partial, element: Element, elements: readonly Element[], index: number): Partial[] {
+function extend(partial: Partial, element: Element): Partial[] {
   const { sentence } = element;
   switch (element.type) {
     case 'unit':
+      if (element.reaches) return [reach(partial, element.options[0]!, sentence)];
       return element.options.map((units, n) => ({
         ...partial,
         nodes: [...partial.nodes, ...units.map((unit) => ({ unit: element.fills ? open([unit]) : unit, sentence }))],
@@ -45,6 +48,7 @@ function extend(partial: Partial, element: Element, elements: readonly Element[]
         cost: partial.cost + 0.4 * n,
       }));
     case 'plain':
+    case 'here':
       return [partial];
     case 'times':
       return repeat(partial, element.n, sentence);
@@ -53,8 +57,16 @@ function extend(partial: Partial, element: Element, elements: readonly Element[]
     case 'oneplace':
       return [gather(partial, sentence)];
     case 'corner':
-      return corner(partial, elements, index);
+      return corner(partial, sentence);
   }
+}
+
+/** `single crochet in the second chain, and on until you have fourteen`: fourteen with the first. */
+function reach(partial: Partial, units: readonly Unit[], sentence: number): Partial {
+  const last = partial.nodes.at(-1)?.unit;
+  const isStart = last?.type === 'stitch' && last.times === 1 && last.inOne === 1;
+  const kept = isStart ? partial.nodes.slice(0, -1) : partial.nodes;
+  return { ...partial, nodes: [...kept, ...units.map((unit) => ({ unit, sentence }))] };
 }
 
 function open(units: readonly Unit[]): Unit {
@@ -73,8 +85,11 @@ function repeat(partial: Partial, times: number, sentence: number): Partial[] {
   }
   const starts = startsOf(nodes, closed, sentence);
   return starts.flatMap(({ start, cost }) => {
-    const group = nodes.slice(start).map((node) => node.unit);
-    if (group.length === 0) return [];
+    if (start >= nodes.length) return [];
+    const group = settleStitches(
+      nodes.slice(start).map((node) => node.unit),
+      BARE,
+    );
     const period = periodOf(group);
     const before = nodes.slice(0, start);
     const made = (units: readonly Unit[], extra: number): Partial => ({
@@ -118,25 +133,41 @@ function gather(partial: Partial, sentence: number): Partial {
   return { ...partial, nodes: [...partial.nodes.slice(0, start), { unit: one, sentence }] };
 }
 
-/** A corner: what is said right after it stands in it, or the corner told before comes again. */
-function corner(partial: Partial, elements: readonly Element[], index: number): Partial[] {
-  const run: Unit[] = [];
-  const { sentence } = elements[index]!;
-  for (let n = index + 1; n < elements.length; n++) {
+/** What is said right after a place was named stands in it: stitches, a chain and stitches become one unit. */
+function gatherPlaces(elements: readonly Element[]): readonly Element[] {
+  const out: Element[] = [];
+  for (let n = 0; n < elements.length; n++) {
     const element = elements[n]!;
-    if (element.type !== 'unit' || element.fills || element.sentence > sentence + 40) break;
-    run.push(...element.options[0]!);
-    if (!isSimple(run.at(-1)!) || run.length > 3) break;
+    const one = element.type === 'corner' || element.type === 'here' ? placeAfter(elements, n) : null;
+    if (one === null) {
+      out.push(element);
+      continue;
+    }
+    const run = elements.slice(n + 1, n + 4);
+    const apart = run.flatMap((each) => (each.type === 'unit' ? each.options[0]! : []));
+    const options = element.type === 'corner' ? [[one]] : [[one], apart];
+    out.push({ ...run[0]!, type: 'unit', options, fills: false, reaches: false });
+    n += 3;
   }
-  const told = run[1]?.type === 'chain' ? onePlace(run.slice(0, 3)) : null;
-  if (told !== null) return [partial];
+  return out;
+}
+
+function placeAfter(elements: readonly Element[], n: number): Unit | null {
+  const run = elements.slice(n + 1, n + 4).flatMap((element) =>
+    element.type === 'unit' && !element.fills && element.options[0]!.length === 1 ? [element.options[0]![0]!] : [],
+  );
+  const isPlace = run.length === 3 && run[0]!.type === 'stitch' && run[1]!.type === 'chain' && run[2]!.type === 'stitch';
+  return isPlace && run.every(isSimple) ? onePlace(run) : null;
+}
+
+/** A corner named alone is the corner told before, once more. */
+function corner(partial: Partial, sentence: number): Partial[] {
   const known = partial.nodes.find(({ unit }) => unit.type === 'oneplace')?.unit ?? partial.corner;
-  return known === null
-    ? [partial]
-    : [
-        { ...partial, nodes: [...partial.nodes, { unit: known, sentence }] },
-        { ...partial, cost: partial.cost + 0.5 },
-      ];
+  if (known === null) return [partial];
+  return [
+    { ...partial, nodes: [...partial.nodes, { unit: known, sentence }] },
+    { ...partial, cost: partial.cost + 0.5 },
+  ];
 }
 
 function isSimple(unit: Unit): boolean {

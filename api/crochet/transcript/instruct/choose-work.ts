@@ -13,6 +13,8 @@ export interface Setting {
   readonly chainCounts: boolean | null;
   /** Works of other lines that this one may be a copy of, with what speaks against it. */
   readonly copies: readonly { readonly units: readonly Unit[]; readonly cost: number }[];
+  /** Whether places are left on purpose. */
+  readonly mayLeave: boolean;
   /** Whether words say that nothing is shaped. */
   readonly isPlain: boolean;
 }
@@ -61,16 +63,19 @@ function isRepeatable(elements: readonly Element[]): boolean {
 /** The phrases of the first sentences, the rest being talk: needed where a line is told twice. */
 function prefixes(events: readonly Event[]): { kept: readonly Event[]; rest: readonly Event[]; cost: number }[] {
   const out = [{ kept: events, rest: [] as readonly Event[], cost: 0 }];
-  const borders = events.flatMap((event, n) => (n > 0 && event.sentence !== events[n - 1]!.sentence ? [n] : []));
+  const borders = events.flatMap((event, n) => (n > 0 && (event.sentence !== events[n - 1]!.sentence || isExplained(event)) ? [n] : []));
   for (const border of borders.slice(0, 6)) {
     const rest = events.slice(border);
     const units = rest.filter((event) => event.type === 'unit').length;
     if (units === 0 && !rest.some((event) => event.type === 'times' || event.type === 'around')) continue;
+    const explained = isExplained(rest[0]!);
     const times = rest.some((event) => event.type === 'times') ? LOST_REPEAT : 0;
-    out.push({ kept: events.slice(0, border), rest, cost: 0.6 + 0.35 * units + times });
+    out.push({ kept: events.slice(0, border), rest, cost: explained ? 0.4 + times : 0.6 + 0.35 * units + times });
   }
   return out;
 }
+
+const isExplained = (event: Event): boolean => event.type === 'unit' && event.explains;
 
 /** Readings of the whole line at once: plain work, and copies of other lines. */
 function addWhole(events: readonly Event[], setting: Setting, choices: Choice[]): void {
@@ -93,7 +98,7 @@ function weigh(
 ): void {
   const settled = settleStitches(units, setting.stitch);
   const totals = idle.filter((event) => event.asTotal >= SURE_TOTAL).map((event) => event.n);
-  for (const resolved of resolve(settled, setting.bases, totals, mayImply)) {
+  for (const resolved of resolve(settled, setting.bases, totals, { mayImply, mayLeave: setting.mayLeave })) {
     const { makes } = sumOf(resolved.units);
     const said = saidTotal(idle, makes);
     const fit = resolved.fit === 'fits' ? FIT_GAIN : resolved.fit === 'unknown' ? 1 : 0;
@@ -105,7 +110,7 @@ function weigh(
 
 /** The total among the numbers left over: one that equals the work, else the one said most like a total. */
 function saidTotal(idle: Casting['idle'], makes: number): number | null {
-  const equal = idle.find((event) => event.n === makes && event.asTotal > -0.3);
+  const equal = idle.find((event) => event.n === makes && event.asTotal > (makes < 3 ? 1 : -0.9));
   if (equal !== undefined) return makes;
   const likely = idle.filter((event) => event.asTotal >= SURE_TOTAL && event.n > 2);
   return likely.sort((a, b) => b.asTotal - a.asTotal)[0]?.n ?? null;

@@ -11,6 +11,10 @@ export type Event = {
       readonly type: 'unit';
       readonly options: readonly (readonly Unit[])[];
       readonly fills: boolean;
+      /** The number is reached with what came before: `until you have fourteen`. */
+      readonly reaches: boolean;
+      /** Said to explain what went before: `so that's your chain three plus eleven more`. */
+      readonly explains: boolean;
     }
   | {
       readonly type: 'number';
@@ -20,7 +24,7 @@ export type Event = {
       readonly asTimes: number;
     }
   | { readonly type: 'times'; readonly n: number }
-  | { readonly type: 'around' | 'oneplace' | 'corner' | 'plain' | 'correction' }
+  | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'plain' | 'correction' }
 );
 
 /** What stitch a bare number, an increase or a decrease is worked in. */

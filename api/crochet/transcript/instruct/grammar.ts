@@ -8,9 +8,10 @@ export type Made =
       readonly type: 'unit';
       readonly options: readonly (readonly Unit[])[];
       readonly fills?: boolean;
+      readonly reaches?: boolean;
     }
   | { readonly type: 'times'; readonly n: number }
-  | { readonly type: 'around' | 'oneplace' | 'corner' | 'plain' | 'correction' | 'nothing' };
+  | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'plain' | 'correction' | 'nothing' };
 
 interface Rule {
   readonly pattern: RegExp;
@@ -29,16 +30,23 @@ const unit = (...units: Unit[]): Made => ({ type: 'unit', options: [units] });
 const either = (...options: Unit[][]): Made => ({ type: 'unit', options });
 const fills = (...units: Unit[]): Made => ({ type: 'unit', options: [units], fills: true });
 const nothing: Made = { type: 'nothing' };
+const SPECIAL = new Set(['bobble', 'popcorn', 'puff', 'cluster', 'picot']);
 
 /**
  * The grammar of a spoken instruction, over the letters of `lexicon/classes.ts`: the first rule that matches at a place
  * is taken. What it leaves alone is talk, except numbers, which may be stitches, repeats or totals.
  */
 export const RULES: readonly Rule[] = [
+  // up to a number, or to the last few
+  { pattern: /R?w?C?p=NS?(?![tT])/y, make: (m) => ({ type: 'unit', options: [[st(stitch(m), number(m))]], reaches: true }) },
+  { pattern: /N?S[IE]*[GZ]?p+LN?[GZ]?(?!T)/y, make: (m) => fills(st(stitch(m), 1)) },
+  { pattern: /A?p+LN?[GZ]?(?!T)/y, make: () => fills(st(BARE, 1)) },
+  { pattern: /N?S[IwG]{0,3}IES/y, make: (m) => fills(st(stitch(m), 1, number(m))) },
+  { pattern: /SIOCH?[,&]*IECA?/y, make: (m) => fills(st(stitch(m), 1)) },
   // repeats and ends
   { pattern: /t[&,]?N(?![tS])/y, make: (m) => ({ type: 'times', n: number(m) }) },
   { pattern: /NNt/y, make: (m) => ({ type: 'times', n: number(m, 1) }) },
-  { pattern: /(?:R|E|A)*[&,p]?N[Fm]?(?:t|o)(?:R|A|o)*/y, make: repeated },
+  { pattern: /(?:R|E|A)*[&,p]?N[Fm]?(?:t|o(?=[.,|&=AR]|$))(?:R|A|o)*/y, make: repeated },
   {
     pattern: /t(?:R|A)*/y,
     make: (m) => (Number(m[0]!.value) > 1 ? { type: 'times', n: Number(m[0]!.value) } : nothing),
@@ -69,11 +77,14 @@ export const RULES: readonly Rule[] = [
   { pattern: /P/y, make: () => unit(st(BARE, 1, 2)) },
   // chains and places passed over
   { pattern: /K[OXLN]?C+[IH]?H?/y, make: () => nothing },
+  { pattern: /NCK/y, make: () => nothing },
+  { pattern: /K[OL](?![GZNS])/y, make: () => nothing },
   { pattern: /K[XO]?N[GCZS]?/y, make: (m) => unit({ type: 'skip', many: number(m) }) },
   {
     pattern: /K[XO]?[GCZS]?/y,
     make: (m) => (m.some((one) => one.kind === 'C') ? nothing : unit({ type: 'skip', many: 1 })),
   },
+  { pattern: /I[XL]C+,?&?NS/y, make: (m) => unit(st(stitch(m), 1, number(m))) },
   { pattern: /IE[XOL]?N?C/y, make: () => nothing },
   { pattern: /(?:I|O|L|X|E|M)+C+H?/y, make: () => nothing },
   { pattern: /C{1,2}N(?![StTDPG])/y, make: (m) => unit({ type: 'chain', many: number(m) }) },
@@ -85,6 +96,7 @@ export const RULES: readonly Rule[] = [
   { pattern: /NSIE?[XLO]?N[GSZC]?(?![tTD])/y, make: eachInCounted },
   { pattern: /[IE]+[XLO]?N[GZ],?S/y, make: (m) => (number(m) > 1 ? unit(st(stitch(m), number(m))) : null) },
   // in every place
+  { pattern: /N?SE/y, make: (m) => (/^(?:ever|each)/.test(m.at(-1)!.text) ? fills(st(stitch(m), 1, number(m))) : null) },
   { pattern: /N?S[&,]?IB?E[GZSC]*A?/y, make: (m) => fills(st(stitch(m), 1, number(m))) },
   { pattern: /NI?E[GZC]*A?/y, make: (m) => (number(m) < 6 ? fills(st(BARE, 1, number(m))) : null) },
   { pattern: /IB?E[GZC]+[,]?N?S/y, make: (m) => fills(st(stitch(m), 1, number(m))) },
@@ -103,7 +115,8 @@ export const RULES: readonly Rule[] = [
   { pattern: /N[GS]gN(?=[^tT])/y, make: (m) => unit(st(BARE, number(m), number(m, 1))) },
   { pattern: /I[XLOM]+[GZ]?,?&?NS/y, make: (m) => either([st(stitch(m), 1, number(m))], [st(stitch(m), number(m))]) },
   { pattern: /I[XLOM]+[GZ]?,?&?N(?=[,.|&])/y, make: (m) => either([st(BARE, 1, number(m))]) },
-  { pattern: /I[XLOM]*Z/y, make: (m) => ({ type: m.at(-1)!.value === 'corner' ? 'corner' : 'nothing' }) },
+  { pattern: /I[XLOM]*Z/y, make: (m) => ({ type: m.at(-1)!.value === 'corner' ? 'corner' : 'here' }) },
+  { pattern: /I[XLOM]*[GN][,&]/y, make: () => ({ type: 'here' }) },
   { pattern: /Z/y, make: (m) => (m[0]!.value === 'corner' ? { type: 'corner' } : nothing) },
   { pattern: /(?:E[,&]?)?I?(?:M|(?<=I)N)[GZ]/y, make: () => ({ type: 'oneplace' }) },
   // plain lists

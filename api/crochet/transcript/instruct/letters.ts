@@ -25,12 +25,16 @@ export function lettersOf(
   const at: number[] = [];
   const sentence: number[] = [];
   let text = '';
+  let isReason = false;
   for (let i = from; i < to; i++) {
     const token = tokens[i]!;
-    if (skipped(i) || DROPPED.has(token.kind)) continue;
+    if (',.|'.includes(token.kind)) isReason = false;
+    if (/^(?:because|cause|although|unless)$/.test(token.text)) isReason = true;
+    const isManner = token.kind === 'F' && text.endsWith('N') && tokens[i + 1]?.kind === 'S';
+    if (skipped(i) || isReason || isManner || DROPPED.has(token.kind)) continue;
     // "along the side" tells a place; "along" alone means to the end
     const isPlace =
-      token.kind === 'A' && !token.text.includes(' ') && tokens[i + 1]?.kind === 'a' && tokens[i + 2]?.kind === 'w';
+      token.kind === 'A' && !token.text.includes(' ') && tokens[i + 1]?.kind === 'a' && 'wCGZS'.includes(tokens[i + 2]?.kind ?? '.');
     const letter = isPlace ? 'w' : letterOf(token);
     if (letter === '') continue;
     kept.push(token);

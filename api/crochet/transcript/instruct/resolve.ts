@@ -13,6 +13,12 @@ export interface Resolved {
   readonly cost: number;
 }
 
+/** What may be taken for granted: that phrases are repeated though nobody says so, that places are left. */
+export interface Allowance {
+  readonly mayImply: boolean;
+  readonly mayLeave: boolean;
+}
+
 const IMPLIED_COST = 1.2;
 
 /**
@@ -23,10 +29,10 @@ export function resolve(
   units: readonly Unit[],
   bases: readonly Base[],
   totals: readonly number[],
-  mayImply: boolean,
+  may: Allowance,
 ): readonly Resolved[] {
   const opens = distinctOpens(units);
-  if (opens.length === 0) return closed(units, bases, mayImply);
+  if (opens.length === 0) return closed(units, bases, may);
   return opens.flatMap((index) => {
     const kept = units.filter((unit, n) => n === index || !isOpen(unit));
     const at = kept.findIndex(isOpen);
@@ -49,13 +55,14 @@ function distinctOpens(units: readonly Unit[]): number[] {
   });
 }
 
-function closed(units: readonly Unit[], bases: readonly Base[], mayImply: boolean): Resolved[] {
+function closed(units: readonly Unit[], bases: readonly Base[], may: Allowance): Resolved[] {
   const { uses } = sumOf(units);
   if (bases.length === 0) return [{ units, fit: 'unknown', base: null, cost: 0 }];
   const fit = bases.find((base) => base.n === uses);
   if (fit !== undefined) return [{ units, fit: 'fits', base: fit.n, cost: fit.cost }];
+  if (may.mayLeave && uses < bases[0]!.n) return [{ units, fit: 'fits', base: bases[0]!.n, cost: 0.2 }];
   const out: Resolved[] = [{ units, fit: 'misfit', base: bases[0]!.n, cost: 0 }];
-  if (!mayImply || uses === 0) return out;
+  if (!may.mayImply || uses === 0) return out;
   for (const base of bases.slice(0, 3)) {
     if (base.n % uses === 0 && base.n > uses) {
       const whole: Unit = { type: 'repeat', units, times: base.n / uses };

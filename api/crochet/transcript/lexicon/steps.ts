@@ -43,7 +43,7 @@ export const STEPS: readonly { readonly topic: string; readonly words: RegExp }[
   {
     topic: 'finish',
     words:
-      /^(?:fasten (?:it |that |this )?off|fasten the|finish (?:it |that )?off|cut (?:it|the|your|that|a|this|off)\b|cut (?=and|tuck)|break (?:off )?(?:the|your|it|off)\b|snip\b|tie (?:it|that) off|close (?:it|that|up)\b|you know how to close|cinch\b|draw (?:it|the|up)\b.{0,12}(?:up|tight|in|through)|pull (?:it|up|the) .{0,16}(?:closed|shut|tight|hole)|weave (?:in|it|the)\b|hide (?:that|the|your|both|it)\b|bury\b|leave (?:yourself |me )?(?:a|enough)\b.{0,14}(?:tail|sew)|long tail|(?:a )?tail cut|tuck\b|leave the end|leave a (?:good )?tail|run it through|darn\b|knot the end|okay now cut|then cut that|off with the)/,
+      /^(?:fasten (?:it |that |this )?off|fasten the|finish (?:it |that )?off|cut (?:it|the|your|that|a|this|off)\b|cut (?=and|tuck)|break (?:off )?(?:the|your|it|off)\b|snip\b|tie (?:it|that) off|close (?:it|that|up)\b|you know how to close|cinch\b|draw (?:it|the|up)\b.{0,12}(?:up|tight|in|through)|pull (?:it|up|the) .{0,16}(?:closed|hole)|weave (?:in|it|the)\b|hide (?:that|the|your|both|it)\b|bury\b|leave (?:yourself |me )?(?:a|enough)\b.{0,14}(?:tail|sew)|long tail|(?:a )?tail cut|tuck\b|leave the end|leave a (?:good )?tail|run it through|darn\b|knot the end|okay now cut|then cut that|off with the)/,
   },
   {
     topic: 'surface',

@@ -1,0 +1,62 @@
+import { type Word } from './words.ts';
+
+/** A silence at a paragraph's end longer than this may belong before a line that is announced inside it. */
+const MOVABLE_MS = 2500;
+const SLACK_MS = 2000;
+
+/**
+ * Moves the silences of paragraphs to where people fall silent: before a line is announced. A paragraph's time only says
+ * when it begins. Where the next begins with an announcement, or so late that the silence must have ended this one,
+ * nothing is moved; else the silence lies before the last line announced inside.
+ * @param announced indices of words at which a line or a step is announced, ascending
+ */
+export function placeSilences(words: readonly Word[], announced: readonly number[]): readonly Word[] {
+  const out = [...words];
+  const usualMs = usualLength(words);
+  let first = 0;
+  for (let next = 1; next < out.length; next++) {
+    const word = out[next]!;
+    if (word.cue === out[next - 1]!.cue) continue;
+    const at = placeFor(out, first, next, announced, usualMs);
+    if (at !== null) shift(out, at, next);
+    first = next;
+  }
+  return out;
+}
+
+/** How long paragraphs usually last before a new one is begun: nearly the shortest. */
+function usualLength(words: readonly Word[]): number {
+  const starts = words.filter((word, n) => n === 0 || word.cue !== words[n - 1]!.cue);
+  const lengths = starts
+    .slice(1)
+    .map((word, n) => word.startMs - starts[n]!.startMs)
+    .sort((a, b) => a - b);
+  return lengths[Math.floor(lengths.length / 10)] ?? 0;
+}
+
+function placeFor(
+  words: readonly Word[],
+  first: number,
+  next: number,
+  announced: readonly number[],
+  usualMs: number,
+): number | null {
+  const word = words[next]!;
+  if (!words[first]!.isInParagraph || word.silenceMs < MOVABLE_MS) return null;
+  if (announced.some((at) => at >= next && at <= next + 4)) return null;
+  let sentence = next - 1;
+  while (sentence > first && words[sentence - 1]!.mark !== '.') sentence -= 1;
+  const lastSentenceMs = words[next - 1]!.endMs - words[sentence]!.startMs;
+  if (word.startMs - words[first]!.startMs > usualMs + lastSentenceMs + SLACK_MS) return null;
+  return announced.findLast((at) => at < next && at > first) ?? null;
+}
+
+function shift(words: Word[], at: number, next: number): void {
+  const by = words[next]!.silenceMs;
+  for (let i = at; i < next; i++) {
+    const word = words[i]!;
+    const silenceMs = i === at ? word.silenceMs + by : word.silenceMs;
+    words[i] = { ...word, startMs: word.startMs + by, endMs: word.endMs + by, silenceMs };
+  }
+  words[next] = { ...words[next]!, silenceMs: 0 };
+}
