@@ -1,5 +1,4 @@
 import { Router } from 'express';
-import { z } from 'zod';
 import {
   Invitation,
   InvitationCreate,
@@ -14,10 +13,11 @@ import {
   StudioList,
   StudioPeople,
 } from '#contract/studios';
+import { idIn } from '../../http/asking.ts';
 import { idempotent } from '../../http/idempotency.ts';
 import { CREATING, limit } from '../../http/limits.ts';
 import { ifMatchVersion, sendVersioned } from '../../http/preconditions.ts';
-import { answer, AppError } from '../../http/problem.ts';
+import { answer } from '../../http/problem.ts';
 import { signedIn, startSession } from '../../http/session.ts';
 import type { Deps } from '../../platform/deps.ts';
 import {
@@ -29,13 +29,6 @@ import {
 } from './invitations.service.ts';
 import { changeRole, listPeople, removeMember } from './members.service.ts';
 import { editStudio, listStudios, openStudio, showStudio } from './studios.service.ts';
-
-/** What is no id names nothing. @throws AppError not-found */
-function idIn(params: Readonly<Record<string, string | string[] | undefined>>, name: string): string {
-  const read = z.uuid().safeParse(params[name]);
-  if (!read.success) throw new AppError('not-found');
-  return read.data.toLowerCase();
-}
 
 /** Studios, their people, and the invitations that let people in. */
 export function studioRoutes(deps: Deps): Router {
@@ -54,44 +47,44 @@ export function studioRoutes(deps: Deps): Router {
 
   router.get('/studios/:studioId', async (req, res) => {
     const who = signedIn(req);
-    const studio = await showStudio(deps.db, who, idIn(req.params, 'studioId'));
+    const studio = await showStudio(deps.db, who, idIn(req, 'studioId'));
     sendVersioned(res, answer(Studio, studio), studio.version);
   });
 
   router.patch('/studios/:studioId', async (req, res) => {
     const who = signedIn(req);
-    const studioId = idIn(req.params, 'studioId');
+    const studioId = idIn(req, 'studioId');
     const studio = await editStudio(deps.db, who, studioId, StudioEdit.parse(req.body), ifMatchVersion(req));
     sendVersioned(res, answer(Studio, studio), studio.version);
   });
 
   router.get('/studios/:studioId/members', async (req, res) => {
     const who = signedIn(req);
-    res.json(answer(StudioPeople, await listPeople(deps, who, idIn(req.params, 'studioId'))));
+    res.json(answer(StudioPeople, await listPeople(deps, who, idIn(req, 'studioId'))));
   });
 
   router.patch('/studios/:studioId/members/:personId', async (req, res) => {
     const who = signedIn(req);
     const { role } = MemberEdit.parse(req.body);
-    await changeRole(deps.db, who, idIn(req.params, 'studioId'), idIn(req.params, 'personId'), role);
+    await changeRole(deps.db, who, idIn(req, 'studioId'), idIn(req, 'personId'), role);
     res.status(204).end();
   });
 
   router.delete('/studios/:studioId/members/:personId', async (req, res) => {
     const who = signedIn(req);
-    await removeMember(deps, who, idIn(req.params, 'studioId'), idIn(req.params, 'personId'));
+    await removeMember(deps, who, idIn(req, 'studioId'), idIn(req, 'personId'));
     res.status(204).end();
   });
 
   router.post('/studios/:studioId/invitations', limit(deps, CREATING), async (req, res) => {
     const who = signedIn(req);
-    const invitation = await invite(deps, who, idIn(req.params, 'studioId'), InvitationCreate.parse(req.body));
+    const invitation = await invite(deps, who, idIn(req, 'studioId'), InvitationCreate.parse(req.body));
     res.status(201).json(answer(Invitation, invitation));
   });
 
   router.delete('/studios/:studioId/invitations/:invitationId', async (req, res) => {
     const who = signedIn(req);
-    await takeBackInvitation(deps, who, idIn(req.params, 'studioId'), idIn(req.params, 'invitationId'));
+    await takeBackInvitation(deps, who, idIn(req, 'studioId'), idIn(req, 'invitationId'));
     res.status(204).end();
   });
 
