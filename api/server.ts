@@ -35,6 +35,8 @@ async function serve(env: Env): Promise<void> {
   });
   process.on('SIGTERM', () => void end());
   process.on('SIGINT', () => void end());
+  // The one who started it is gone.
+  process.on('disconnect', () => void end());
 
   server.on('error', (err) => {
     deps.log.fatal({ err }, 'the port cannot be used');

@@ -118,18 +118,20 @@ async function startDatabase() {
 }
 
 async function startStorage() {
-  const port = await choosePort('storage');
-  settings.S3_ENDPOINT = `http://127.0.0.1:${port}`;
+  settings.S3_ENDPOINT = `http://127.0.0.1:${ports.storage}`;
   await keep('storage-fake', [built('storage-fake'), path.join(DATA, 's3')]);
-  return told('storage', port);
+  return told('storage', ports.storage);
 }
 
 async function startMailbox() {
-  const smtp = await choosePort('smtp');
-  const page = await choosePort('mailbox');
-  settings.SMTP_URL = `smtp://127.0.0.1:${smtp}`;
-  await keep('mailbox', [built('mailbox'), String(smtp), String(page)]);
-  return told('mailbox', page);
+  settings.SMTP_URL = `smtp://127.0.0.1:${ports.smtp}`;
+  await keep('mailbox', [built('mailbox'), String(ports.smtp), String(ports.mailbox)]);
+  return told('mailbox', ports.mailbox);
+}
+
+async function migrateTables() {
+  await runProcess(child('migrate', [built('migrate'), path.join(ROOT, 'dist/migrations')]));
+  return 'up to date';
 }
 
 const seeded = () => (existsSync(SEEDED) ? JSON.parse(readFileSync(SEEDED, 'utf8')) : null);
@@ -196,9 +198,8 @@ async function main() {
   await step('server', async () => ((await buildServer()) ? 'built' : 'unchanged'));
   if (!DEV) await step('pages', async () => ((await buildWeb()) ? 'built' : 'unchanged'));
   await step('database', startDatabase);
-  await step('storage', startStorage);
-  await step('mailbox', startMailbox);
-  await step('tables', () => runProcess(child('migrate', [built('migrate'), path.join(ROOT, 'dist/migrations')])));
+  for (const name of ['storage', 'smtp', 'mailbox']) await choosePort(name);
+  await Promise.all([step('storage', startStorage), step('mailbox', startMailbox), step('tables', migrateTables)]);
   await step('demo', seedOnce);
   await step('roundelay', startServer);
   farewell();
