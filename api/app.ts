@@ -1,5 +1,6 @@
 import express, { Router, type Express, type Request } from 'express';
 import { accountRoutes } from './features/account/account.routes.ts';
+import { patternRoutes } from './features/patterns/patterns.routes.ts';
 import { recordingRoutes } from './features/recordings/recordings.routes.ts';
 import { studioRoutes } from './features/studios/studios.routes.ts';
 import { noStore, securityHeaders } from './http/headers.ts';
@@ -36,7 +37,7 @@ function countedCalls(deps: Deps): express.RequestHandler {
 function apiRoutes(deps: Deps): Router {
   const router = Router();
   router.use(noStore, sameOrigin(deps), readSession(deps), countedCalls(deps), express.json({ limit: JSON_LIMIT }));
-  router.use(accountRoutes(deps), studioRoutes(deps), recordingRoutes(deps));
+  router.use(accountRoutes(deps), studioRoutes(deps), patternRoutes(deps), recordingRoutes(deps));
   router.use(noRoute, problemHandler(deps, personIdOf));
   return router;
 }
