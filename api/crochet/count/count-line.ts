@@ -160,6 +160,7 @@ function runPasses(
   const perRound = around.sizes === 1 && figures !== undefined && figures.length === passes.length && passes.length > 1;
   const none: Given = { written: null, said: null };
   let verdict: Verdict = 'no-total';
+  let isEven = false;
   passes.forEach((pass, i) => {
     const setting: Setting = {
       left,
@@ -174,16 +175,17 @@ function runPasses(
       label: pass.n,
     };
     const isLast = i === passes.length - 1;
-    let one = judgeLine(
-      pass.read,
-      perRound || isLast || passes.length === 1 ? given : none,
-      setting,
-      perRound ? i : size,
-    );
-    if (!isLast && !perRound) {
-      const total = judgeLine(pass.read, given, setting, size);
-      if (total.verdict === 'agrees' || (total.work.tally.sts === total.work.base && total.verdict !== 'does-not-fit'))
-        one = total;
+    // Where every round is the same, its total is that of each; where they shape, of the last.
+    const isGiven = perRound || isLast || isEven;
+    const one = judgeLine(pass.read, isGiven ? given : none, setting, perRound ? i : size);
+    if (i === 0 && passes.length > 1)
+      isEven = one.work.tally.sts === one.work.base && passes.every((other) => other.read === pass.read);
+    if (i === 0 && isEven) {
+      const again = judgeLine(pass.read, given, setting, perRound ? i : size);
+      judged.push(again);
+      verdict = worse(verdict, again.verdict);
+      left = again.work.left;
+      return;
     }
     judged.push(one);
     verdict = worse(verdict, one.verdict);

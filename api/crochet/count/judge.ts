@@ -31,6 +31,7 @@ export interface Judged {
  */
 export function judgeLine(read: ReadLine, given: Given, setting: Setting, index: number): Judged {
   const usual = usualFor(read.tree);
+  const most = given.written || given.said ? 3 : 2;
   let best: Judged | null = null;
   let bestScore = -1;
   for (const choices of mixtures(read.tree, usual)) {
@@ -40,7 +41,7 @@ export function judgeLine(read: ReadLine, given: Given, setting: Setting, index:
       best = judged;
       bestScore = score;
     }
-    if (score === 3 && best === judged) break;
+    if (score === most && best === judged) break;
   }
   return best!;
 }
@@ -59,6 +60,7 @@ function isAllowed(choices: Choices, usual: Choices, judged: Judged, given: Give
   if (choices.whole !== usual.whole) return settled || (!hasTotal && judged.work.fits && isRepeatedOften(judged));
   if (choices.cut !== usual.cut) return settled && hasOpening(tree);
   if (choices.chains !== usual.chains || choices.dec !== usual.dec) return settled;
+  if (choices.pair !== usual.pair) return settled || given.written === null;
   return true;
 }
 

@@ -9,6 +9,14 @@ export function messageOf(judged: Judged, verdict: Verdict): string | null {
     if (work.over > 0 && work.base !== null) return `${work.base - work.over} used, ${work.over} left over.`;
     return 'There are more stitches here than a line can have.';
   }
-  if (verdict === 'differs') return `Works out to ${work.tally.sts}.`;
+  if (verdict === 'differs') return `Works out to ${wordsOf(judged)}.`;
   return null;
+}
+
+/** What was made, in figures: by colour where the line is told in colours. */
+function wordsOf({ work }: Judged): string {
+  const colours = Object.entries(work.tally.byColour);
+  return colours.length > 0
+    ? colours.map(([colour, n]) => `${String(n)} ${colour}`).join(', ')
+    : String(work.tally.sts);
 }

@@ -1,6 +1,27 @@
 import { type Item, type Target } from '../language/tree.ts';
 import { type Named } from './places.ts';
 
+/** All places aimed at; null is the next stitch. */
+export function aimsIn(items: readonly Item[]): (Target | null)[] {
+  const aims: (Target | null)[] = [];
+  for (const item of items) {
+    if (item.type === 'group' && !item.into) aims.push(...aimsIn(item.items));
+    else if (item.type === 'work' || item.type === 'group') {
+      if (item.type === 'work' && (item.stitch === 'ch' || item.stitch === 'picot')) continue;
+      if (item.into?.which === 'first' || item.into?.which === 'same' || item.into?.what === 'ring') continue;
+      aims.push(
+        item.into && item.into.which !== 'hook'
+          ? item.into.which === 'nth' && item.into.of === undefined
+            ? { ...item.into, which: 'next' }
+            : item.into
+          : null,
+      );
+    } else if (item.type === 'straight' || item.type === 'shaped') aims.push(null);
+    else if (item.type === 'skip' && item.of?.what === 'sp') aims.push(item.of);
+  }
+  return aims;
+}
+
 interface Found {
   st: boolean;
   ch: boolean;
@@ -32,7 +53,7 @@ export function travelling(items: readonly Item[]): number {
 
 function walk(items: readonly Item[], found: Found): void {
   let local = false;
-  for (const item of items) {
+  for (const [i, item] of items.entries()) {
     if (item.type === 'group') {
       if (item.into) note(item.into, found);
       walk(
@@ -49,6 +70,15 @@ function walk(items: readonly Item[], found: Found): void {
         continue;
       }
       if (item.stitch === 'ch' || item.stitch === 'picot') continue;
+      // `ch 2, dc in first sc` at the end closes the last space.
+      if (
+        item.into?.which === 'first' &&
+        i > 1 &&
+        items[i - 1]?.type === 'work' &&
+        (items[i - 1] as { stitch?: string }).stitch === 'ch' &&
+        i > 2
+      )
+        continue;
       if (
         local &&
         !item.into?.stitch &&

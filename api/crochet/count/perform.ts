@@ -52,7 +52,7 @@ function performStep(job: Job, item: Extract<Item, { type: 'step' }>): void {
   if (item.what === 'join') {
     // `ch 2, join with dc`: the stitch closes the last space.
     const stitch = /with (?:a )?(hdc|dc|tr|dtr|sc)\b/.exec(item.text)?.[1];
-    if (stitch && walker.made.at(-1)?.kind === 'chs') walker.chain(stitchOf(stitch)?.height ?? 1);
+    if (stitch && walker.made.at(-1)?.kind === 'chs') walker.lengthen(stitchOf(stitch)?.height ?? 1);
   }
 }
 
@@ -130,8 +130,9 @@ function performWork(job: Job, item: Work, need: () => number): void {
     for (let i = 0; i < n && !walker.full; i += 1) make(job, item.stitch, []);
     return;
   }
+  const hooked = target?.which === 'hook' && job.local === null;
   if (
-    target?.which === 'hook' ||
+    (target?.which === 'hook' && !hooked) ||
     (job.local !== null &&
       job.local.left > 0 &&
       item.times.type === 'n' &&
@@ -140,6 +141,12 @@ function performWork(job: Job, item: Work, need: () => number): void {
       target?.which !== 'same')
   ) {
     if (workLocal(job, item, per)) return;
+  }
+  if (target?.which === 'first' && isClosing(job, item)) {
+    // `ch 2, dc in first st`: the stitch stands for chains of the last space.
+    walker.walk.push({ stitch: item.stitch, on: [], makes: 0, colour: null });
+    walker.lengthen(row?.height ?? 1);
+    return;
   }
   if (target?.which === 'every') {
     performEvery(job, item, target, per, need());
@@ -150,7 +157,12 @@ function performWork(job: Job, item: Work, need: () => number): void {
       ? 2
       : legsOf(item.stitch) * (target?.through === 'layers' ? 2 : 1);
   const once = (): void => {
-    const on = placesFor(job, item, target, legs);
+    const on = placesFor(job, item, hooked ? null : target, legs);
+    if (item.stitch === 'slst' && target?.what === 'sp') {
+      // A slip stitch into a space only fastens what comes next.
+      walker.walk.push({ stitch: 'slst', on, makes: 0, colour: null });
+      return;
+    }
     for (let i = 0; i < per && !walker.full; i += 1) make(job, item.stitch, on, item.colour ?? null);
   };
   if (item.times.type === 'n') {
@@ -169,6 +181,14 @@ function performWork(job: Job, item: Work, need: () => number): void {
   fill(job, each, stopAt(job, times, need()), once, legs);
   if (times?.to) walker.pointed = goal(job, times.to);
 }
+
+/** A stitch into the first one at the end of a round, behind a chain. */
+const isClosing = (job: Job, item: Work): boolean =>
+  job.ring &&
+  job.walker.at > 1 &&
+  job.walker.made.at(-1)?.kind === 'chs' &&
+  item.times.type === 'n' &&
+  item.times.n[0] === 1;
 
 /** Where one stitch goes: the next place, or a place named. */
 function placesFor(job: Job, item: Work | Group, target: Target | null, legs: number): number[] {
@@ -189,7 +209,7 @@ function placesFor(job: Job, item: Work | Group, target: Target | null, legs: nu
       const n = item.times.type === 'n' ? pick(item.times.n, job.size) : 1;
       if (n > 1) return takeOne(job, { ...target, which: 'next' }, item, legs);
       for (let at = walker.places.length - 1; at >= walker.at; at -= 1) {
-        if (isAt(walker.places[at]!, target, walker.places)) {
+        if (isAt(walker.places[at]!, target, walker.spaces)) {
           walker.at = at;
           return takeOne(job, target, item, legs);
         }
@@ -214,21 +234,7 @@ function placesFor(job: Job, item: Work | Group, target: Target | null, legs: nu
 
 function takeNth(job: Job, item: { readonly span: Item['span'] }, target: Target): number[] {
   const { walker } = job;
-  if (target.of !== undefined || target.which === 'centre') {
-    for (let at = walker.at; at < walker.places.length; at += 1) {
-      const place = walker.places[at]!;
-      const nth = target.which === 'centre' ? Math.ceil(place.size / 2) : (target.n ?? 1);
-      if (target.what !== 'sp' && place.kind === 'st' && place.size > 1 && place.size >= nth && place.nth === nth) {
-        walker.at = at;
-        return takeOne(job, null, item);
-      }
-      if (target.what === 'sp' && isAt(place, target, walker.places)) {
-        walker.at = at;
-        return takeOne(job, target, item);
-      }
-    }
-    return takeOne(job, { ...target, which: 'next' }, item);
-  }
+  if (target.of !== undefined || target.which === 'centre') return takeOne(job, target, item);
   // `in 2nd st` at the start is told from the edge, later from where the hook is.
   const ahead = (target.n ?? 1) - 1 - (walker.at <= 1 ? walker.at : 0);
   for (let i = 0; i < ahead; i += 1) walker.take({ ...target, which: 'next' }, item.span);
@@ -314,7 +320,7 @@ function performInto(job: Job, item: Group, need: () => number): void {
   const target = item.into!;
   const once = (): void => {
     const isRing = target.what === 'ring';
-    const on = isRing ? [] : placesFor(job, item, target, 1);
+    const on = isRing ? [] : placesFor(job, item, target.which === 'hook' ? null : target, 1);
     performOn(job, item.items, on);
   };
   if (item.times.type === 'fill' || item.times.type === 'unsaid') {
@@ -412,7 +418,7 @@ function stopAt(job: Job, times: Extract<Times, { type: 'fill' }> | null, rest: 
   if (kept > 0 && leaveOf && (leaveOf.what === 'sp' || leaveOf.what === 'gap' || leaveOf.stitch !== undefined)) {
     let left = kept;
     for (let at = end - 1; at >= 0; at -= 1) {
-      if (isAt(walker.places[at]!, leaveOf, walker.places)) left -= 1;
+      if (isAt(walker.places[at]!, leaveOf, walker.spaces)) left -= 1;
       if (left === 0) return at;
     }
     return 0;

@@ -86,8 +86,8 @@ export interface Named {
 export function placesOf(left: Left, named: Named): Place[] {
   const places: Place[] = [];
   const { made } = left;
-  const spaces = made.filter((one) => one.kind === 'chs');
-  const noSpaces = named.sps.length > 0 && spaces.length === 0 && !named.st;
+  const spaces = spacesOf(made);
+  const noSpaces = named.sps.length > 0 && !spaces.any && !named.st;
   const wantGaps = named.gap || noSpaces;
   let gaps = 0;
   made.forEach((one, i) => {
@@ -107,17 +107,36 @@ export function placesOf(left: Left, named: Named): Place[] {
   return places;
 }
 
+/** What there is among the spaces of a line, reckoned once. */
+export interface Spaces {
+  readonly any: boolean;
+  readonly inside: boolean;
+  readonly longest: number;
+  readonly chains: boolean;
+}
+
+export function spacesOf(
+  all: readonly { readonly kind: string; readonly chains: number; readonly inside: boolean }[],
+): Spaces {
+  let longest = 0;
+  let any = false;
+  let inside = false;
+  let chains = false;
+  for (const one of all) {
+    if (one.kind === 'ch') chains = true;
+    if (one.kind !== 'sp' && one.kind !== 'chs') continue;
+    any = true;
+    if (one.inside) inside = true;
+    if (one.chains > longest) longest = one.chains;
+  }
+  return { any, inside, longest, chains };
+}
+
 /** Whether a space is meant by `ch-2 sp`, `corner`, or any `sp`. */
-function isSpace(
-  target: Target,
-  space: Pick<Made, 'chains' | 'inside'>,
-  spaces: readonly Pick<Made, 'chains' | 'inside'>[],
-): boolean {
+function isSpace(target: Target, space: Pick<Made, 'chains' | 'inside'>, spaces: Spaces): boolean {
   if (target.chains !== undefined) return space.chains === target.chains;
   if (!target.corner) return true;
-  if (spaces.some((other) => other.inside)) return space.inside;
-  const longest = Math.max(...spaces.map((other) => other.chains));
-  return space.chains === longest;
+  return spaces.inside ? space.inside : space.chains === spaces.longest;
 }
 
 /** Between two groups that stand in different places, or where a place was passed over. */
@@ -131,22 +150,26 @@ function isGap(one: Made, next: Made, length: number): boolean {
 }
 
 /** Whether a place is one that the target names. */
-export function isAt(place: Place, target: Target | null, places: readonly Place[]): boolean {
+export function isAt(place: Place, target: Target | null, spaces: Spaces): boolean {
   if (!target) return place.kind === 'st' || place.kind === 'ch';
   switch (target.what) {
     case 'sp':
-      if (place.kind === 'gap') return !places.some((other) => other.kind === 'sp');
-      return place.kind === 'sp' && isSpace(target, place, spacesOf(places));
+      if (place.kind === 'gap') return !spaces.any;
+      return place.kind === 'sp' && isSpace(target, place, spaces);
     case 'gap':
       return place.kind === 'gap';
     case 'ch':
-      return place.kind === 'ch' || (place.kind === 'sp' && !places.some((other) => other.kind === 'ch'));
+      if (place.kind === 'st') return !spaces.any && !spaces.chains;
+      return place.kind === 'ch' || (place.kind === 'sp' && !spaces.chains);
     case 'st-or-ch':
       return place.kind === 'st' || place.kind === 'ch';
     case 'group':
-      return place.kind === 'st' && place.size > 1 && place.nth === Math.ceil(place.size / 2);
+      return isCentre(place, 2);
     case 'st':
-      if (target.corner) return place.kind === 'st' && place.size >= 3 && place.nth === Math.ceil(place.size / 2);
+      if (target.corner) return isCentre(place, 3);
+      if (target.of !== undefined && target.which === 'nth')
+        return place.kind === 'st' && place.size > 1 && place.nth === target.n;
+      if (target.of !== undefined && target.which === 'centre') return isCentre(place, 2);
       if (place.kind === 'ch') return !target.stitch;
       return place.kind === 'st' && isStitch(place, target.stitch);
     default:
@@ -154,9 +177,8 @@ export function isAt(place: Place, target: Target | null, places: readonly Place
   }
 }
 
-function spacesOf(places: readonly Place[]): readonly Place[] {
-  return places.filter((place) => place.kind === 'sp');
-}
+const isCentre = (place: Place, least: number): boolean =>
+  place.kind === 'st' && place.size >= least && place.nth === Math.ceil(place.size / 2);
 
 /** A place of which only the number is known may be any stitch. */
 export const isStitch = (place: Pick<Place, 'stitch'>, key: string | undefined): boolean =>

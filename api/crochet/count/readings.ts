@@ -85,7 +85,7 @@ function look(items: readonly Item[], keys: Set<Key>, depth: number): void {
       if (item.times.type === 'fill') keys.add('cut');
       look(item.items, keys, depth + 1);
     } else if (item.type === 'work') {
-      if (isPair(item) && (isSeries || depth > 0)) keys.add('pair');
+      if (isPair(item) && (isSeries || depth > 0) && (item.glued || isBesideItself(items, i))) keys.add('pair');
       if (item.stitch === 'ch' && i <= 3 && depth === 0) keys.add('chain');
       if ((item.stitch === 'dec' || item.stitch === 'invdec') && item.times.type === 'n' && item.times.n[0] === 2)
         keys.add('dec');
@@ -112,17 +112,21 @@ export function usualFor(tree: LineTree): Choices {
 }
 
 function hasNeighbours(items: readonly Item[]): boolean {
-  return items.some((item, i) => {
-    if (item.type === 'group') return hasNeighbours(item.items);
-    const isNext = (other: Item | undefined) =>
-      other?.type === 'work' &&
-      item.type === 'work' &&
-      other.stitch === item.stitch &&
-      other.times.type === 'n' &&
-      (other.into === null || other.into.which === 'next') &&
-      !(other.per[0]! > 1);
-    return item.type === 'work' && isPair(item) && (isNext(items[i + 1]) || isNext(items[i - 1]));
-  });
+  return items.some((item, i) => (item.type === 'group' ? hasNeighbours(item.items) : isBesideItself(items, i)));
+}
+
+/** A pair beside plain stitches of the same kind. */
+function isBesideItself(items: readonly Item[], i: number): boolean {
+  const item = items[i];
+  if (item?.type !== 'work' || !isPair(item)) return false;
+  const isLike = (other: Item | undefined): boolean =>
+    other?.type === 'work' &&
+    other.stitch === item.stitch &&
+    other.times.type === 'n' &&
+    (other.into === null || other.into.which === 'next') &&
+    other.per[0] === 1 &&
+    other.loops === item.loops;
+  return isLike(items[i + 1]) || isLike(items[i - 1]);
 }
 
 function hasIncrease(items: readonly Item[]): boolean {

@@ -54,7 +54,7 @@ export function performRules(job: Job, items: readonly Item[]): void {
     return;
   }
   for (let at = walker.at; at < walker.places.length; at += 1) {
-    const rule = rules.find(({ target }) => isAt(walker.places[at]!, target, walker.places));
+    const rule = rules.find(({ target }) => isAt(walker.places[at]!, target, walker.spaces));
     if (!rule) continue;
     walker.at = at + 1;
     walker.last = at;

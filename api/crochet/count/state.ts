@@ -1,5 +1,4 @@
 import { type Totals } from '../language/tree.ts';
-import { type CountedWith } from './compare.ts';
 import { NOTHING, PLAIN, plainLeft, type Left, type Made } from './places.ts';
 import { type Verdict } from './result.ts';
 
@@ -30,7 +29,7 @@ export const startState = (sizes: number, base: number | null): State => ({
 });
 
 /** Places as a total tells them: plain stitches, and spaces spread among them. */
-export function leftOfTotals(totals: Totals, index: number, ways: readonly CountedWith[] = []): Left | null {
+export function leftOfTotals(totals: Totals, index: number): Left | null {
   let sts = 0;
   const spaces: number[] = [];
   let known = false;
@@ -46,7 +45,6 @@ export function leftOfTotals(totals: Totals, index: number, ways: readonly Count
     }
   }
   if (!known && spaces.length === 0) return null;
-  void ways;
   const left = plainLeft(sts);
   if (spaces.length === 0) return left;
   const made: Made[] = [];

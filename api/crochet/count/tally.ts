@@ -62,7 +62,7 @@ export function grouped(made: readonly Made[], ring: boolean): Made[] {
 const TOGETHER = /^([a-z]+?)\d+tog$/;
 
 /** Counts what was made. Stitches drawn together count under their own name. */
-export function tallyOf(made: readonly Made[], walk: readonly Step[]): Tally {
+export function tallyOf(made: readonly Made[]): Tally {
   const byStitch: Record<string, number> = {};
   const byLength: Record<number, number> = {};
   const byColour: Record<string, number> = {};
@@ -89,7 +89,6 @@ export function tallyOf(made: readonly Made[], walk: readonly Step[]): Tally {
     if (one.colour) byColour[one.colour] = (byColour[one.colour] ?? 0) + 1;
   }
   const increases = made.filter((one) => one.size === 2 && one.nth === 2).length;
-  void walk;
   return {
     sts,
     chains,
@@ -106,7 +105,8 @@ export function tallyOf(made: readonly Made[], walk: readonly Step[]): Tally {
 
 /** `{"sc":28,"ch":8}`, `{"dc":12,"ch-2 sp":4}`: a single long run is chains, others are spaces. */
 export function madeOf(tally: Tally): Record<string, number> {
-  const made: Record<string, number> = { ...tally.byStitch };
+  const isColoured = Object.keys(tally.byColour).length > 0;
+  const made: Record<string, number> = { ...(isColoured ? tally.byColour : tally.byStitch) };
   const lengths = Object.entries(tally.byLength);
   for (const [length, n] of lengths) {
     if (Number(length) >= 6 && n <= 2) made.ch = (made.ch ?? 0) + Number(length) * n;

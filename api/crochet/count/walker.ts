@@ -1,6 +1,6 @@
 import { type Span } from '../span.ts';
 import { type Target } from '../language/tree.ts';
-import { isAt, type Made, type Place } from './places.ts';
+import { isAt, spacesOf, type Made, type Place, type Spaces } from './places.ts';
 import { type Stitch } from './result.ts';
 
 /** One entry of the walk with what the tally needs beside. */
@@ -43,6 +43,7 @@ export class Walker {
   /** Places kept back on purpose at the end. */
   kept = 0;
   readonly counted: readonly number[];
+  readonly spaces: Spaces;
 
   constructor(places: readonly Place[], open: boolean) {
     this.places = places;
@@ -50,6 +51,7 @@ export class Walker {
     const counted = [0];
     for (const place of places) counted.push(counted.at(-1)! + (place.counted ? 1 : 0));
     this.counted = counted;
+    this.spaces = spacesOf(places);
   }
 
   mark(): Bookmark {
@@ -91,7 +93,7 @@ export class Walker {
   /** Index of the next place that the target names, or -1. */
   find(target: Target | null): number {
     for (let i = this.at; i < this.places.length; i += 1) {
-      if (isAt(this.places[i]!, target, this.places)) return i;
+      if (isAt(this.places[i]!, target, this.spaces)) return i;
     }
     return -1;
   }
@@ -147,6 +149,23 @@ export class Walker {
         inside: false,
         colour: null,
       });
+  }
+
+  /** The last run of chains grows by a stitch that stands for so many. */
+  lengthen(n: number): void {
+    const last = this.made.at(-1);
+    if (last?.kind === 'chs') this.made[this.made.length - 1] = { ...last, chains: last.chains + n };
+  }
+
+  /** Counted places behind the cursor that any of these could still go into. */
+  left(aims: readonly (Target | null)[]): number {
+    if (this.open) return 0;
+    let left = 0;
+    for (let i = this.at; i < this.places.length; i += 1) {
+      const place = this.places[i]!;
+      if (place.counted && aims.some((aim) => isAt(place, aim, this.spaces))) left += 1;
+    }
+    return left;
   }
 
   skip(at: number): void {

@@ -1,8 +1,8 @@
 import { type Span } from '../span.ts';
-import { type Item, type LineTree } from '../language/tree.ts';
+import { type Item, type LineTree, type Target } from '../language/tree.ts';
 import { stitchOf } from '../stitches.ts';
 import { allItems, chainBase, foundationOf, ownChain, targetsIn, type FreeLoops } from './base.ts';
-import { namedIn, travelling } from './named.ts';
+import { aimsIn, namedIn, travelling } from './named.ts';
 import { pick, type Job } from './job.ts';
 import { perform, takeOne } from './perform.ts';
 import { NOTHING, placesOf, plainLeft, type Left, type Named, type Place } from './places.ts';
@@ -43,10 +43,7 @@ export interface LineWork {
   readonly endless: boolean;
   /** Whether a starting chain counts was settled by nothing. */
   readonly chainUnsaid: boolean;
-  /** Loops worked into from behind or before, which leaves as many of the others free. */
   readonly isFoundation: boolean;
-  /** All chains of the line stand in its own foundation. */
-  readonly lapsed: number;
 }
 
 /** Works a line on what the line before left. Pure; linear in the stitches made. */
@@ -86,7 +83,7 @@ export function workLine(tree: LineTree, choices: Choices, setting: Setting): Li
 
 function foundationWork(left: Left): LineWork {
   const walk = Array.from({ length: left.chains }, (): Step => ({ stitch: 'ch', on: [], makes: 0, colour: null }));
-  const tally = { ...tallyOf([], walk), sts: left.chains };
+  const tally = { ...tallyOf([]), sts: left.chains };
   return {
     fits: true,
     base: null,
@@ -100,7 +97,6 @@ function foundationWork(left: Left): LineWork {
     endless: false,
     chainUnsaid: false,
     isFoundation: true,
-    lapsed: 0,
   };
 }
 
@@ -188,7 +184,7 @@ function onPlaces(
   };
   const begun = begin(job, body, setting, hook, isOpen);
   perform(job, begun.items, 0);
-  return finish(job, setting, told, begun.unsaid, isOpen);
+  return finish(job, aimsIn(begun.items), setting, told, begun.unsaid, isOpen);
 }
 
 function begin(
@@ -227,17 +223,6 @@ function travelled(places: readonly Place[], slips: readonly Item[], size: numbe
     const n = item.times.type === 'n' ? pick(item.times.n, size) : 1;
     for (let i = 0; i < n; i += 1) {
       const target = item.into;
-      if (target && (target.which === 'centre' || target.which === 'nth') && target.of !== undefined) {
-        const nth = (place: Place) => (target.which === 'centre' ? Math.ceil(place.size / 2) : (target.n ?? 1));
-        const found = places.findIndex(
-          (place, index) => index >= walker.at && place.kind === 'st' && place.size > 1 && place.nth === nth(place),
-        );
-        if (found >= 0) {
-          walker.at = found + 1;
-          walker.last = found;
-        }
-        continue;
-      }
       takeOne(
         { walker } as Job,
         target?.which === 'first' || target?.which === 'same'
@@ -296,17 +281,26 @@ function marksOf(items: readonly Item[], places: readonly Place[], size: number)
   return Array.from({ length: Math.min(n, places.length) }, (_, i) => Math.floor(((i + 0.5) * places.length) / n));
 }
 
-function finish(job: Job, setting: Setting, told: number | null, chainUnsaid: boolean, isOpen: boolean): LineWork {
+function finish(
+  job: Job,
+  aims: readonly (Target | null)[],
+  setting: Setting,
+  told: number | null,
+  chainUnsaid: boolean,
+  isOpen: boolean,
+): LineWork {
   const { walker } = job;
-  const remaining = isOpen ? 0 : Math.max(0, walker.remaining() - walker.kept);
+  const kept = walker.kept;
+  const remaining = isOpen ? 0 : Math.max(0, walker.left(aims) - kept);
   const isShortRow = remaining > 0 && job.turned && setting.comesBack;
   const over = isShortRow ? 0 : remaining;
   const made = grouped(walker.made, setting.ring);
-  const tally = tallyOf(made, walker.walk);
+  const tally = tallyOf(made);
   const turns = job.turned || !setting.ring;
   const counted = walker.counted.at(-1) ?? 0;
   const isBaseKnown = !isOpen;
-  const uses = isBaseKnown ? walker.uses + Math.min(walker.kept, walker.remaining()) : told;
+  const passed = remaining === 0 ? walker.remaining() : Math.min(kept, walker.remaining());
+  const uses = isBaseKnown ? walker.uses + passed : told;
   return {
     fits: walker.short === 0 && over === 0 && !walker.full,
     base: isBaseKnown ? counted : told,
@@ -328,6 +322,5 @@ function finish(job: Job, setting: Setting, told: number | null, chainUnsaid: bo
     endless: job.endless,
     chainUnsaid,
     isFoundation: false,
-    lapsed: walker.walk.length,
   };
 }

@@ -309,6 +309,7 @@ type Amounts = Pick<Work, 'per' | 'times' | 'into'>;
 
 function amounts(count: Sized | null, more: Sized | null, target: TargetRead | null, fill: Times | null): Amounts {
   const into = target?.target ?? null;
+  if (into?.which === 'skipped') return { per: ONE, times: times(target?.count ?? count ?? ONE), into };
   if (into?.what === 'ring' || into?.which === 'hook') return { per: count ?? ONE, times: times(more ?? ONE), into };
   if (target?.count) {
     const isEach = count !== null && count[0] === target.count[0] && count[0]! > 1;
