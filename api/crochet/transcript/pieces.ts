@@ -1,69 +1,85 @@
 import { type Sentences } from './sentences.ts';
 import { type Token } from './tokens.ts';
 
-const MAKES =
-  /\b(?:make|need|needs|wants|want|do|makes|making|quantity|also|of them|of these|twice|pair|identical|each side|there is|there are|you will be making|two of|each)\b/;
-const NOT_COUNTED = 'SGtUHZCKPD';
+/** Verbs and little words before a number of pieces: `make two`, `you need seven of them`, `there are four`. */
+const MAKING = /\b(?:make|making|makes|need|needs|wants|want|do|quantity|doing)$/;
+const BEING = /\b(?:there is|there 's|there are|also|it 's|they 're|is|of which there are also)$/;
+const COUNTED_OTHERWISE = 'SGtHZCKPDTNF';
+const MEASURE =
+  /^(?:millimet|centimet|inch|yard|gram|ounce|minute|ply|hundred|weight|half|color|colour|ball|skein|hour|year|month|round|row|finger|child|kid|people|dog|mil|cop|o'clock|of us|greens|video)/;
+/** How far before its first line a piece is introduced, in tokens. */
+const NEAR = 45;
 
-/** How many to make of the piece that begins here: the number said with it, before its first line or in it. */
-export function readMake(tokens: readonly Token[], from: number, to: number, sentences: Sentences): number {
-  let found = 1;
-  for (let i = from; i < to; i++) {
+/**
+ * How many to make of the piece that begins here: the number said with it before its first line.
+ * @param isFirst in the talk's long beginning only what is plainly about making counts
+ */
+export function readMake(
+  tokens: readonly Token[],
+  from: number,
+  to: number,
+  sentences: Sentences,
+  isFirst: boolean,
+): number {
+  for (let i = to - 1; i >= from; i--) {
     const token = tokens[i]!;
-    const start = sentences.isPunctuated ? sentences.startOf[i]! : Math.max(sentences.startOf[i]!, i - 9);
-    const end = sentences.isPunctuated ? sentences.endOf[i]! : Math.min(sentences.endOf[i]!, i + 6);
-    const text = tokens
-      .slice(Math.max(from, start), Math.min(to, end))
+    const isNear = !isFirst && to - i < NEAR;
+    if (isPair(tokens, i, from, isNear)) return 2;
+    if (token.kind !== 'N' || token.isGuess || tokens[i - 1]?.kind === 'U') continue;
+    const n = Number(token.value);
+    if (n < 2 || n > 60 || !isFree(tokens, i)) continue;
+    const start = Math.max(from, sentences.startOf[i]!, i - 6);
+    const before = tokens
+      .slice(start, i)
+      .filter((one) => !/^(?:the|a|so|um|uh|you|only|'ll|be|to|just)$/.test(one.text))
       .map((one) => one.text)
       .join(' ');
-    if (/\b(?:a|the) pair\b|\bpair of\b/.test(text)) found = Math.max(found, 2);
-    if (/\btwice\b/.test(text) && /\b(?:make|making|do|everything)\b/.test(text)) found = Math.max(found, 2);
-    if (token.kind !== 'N' || token.isGuess) continue;
-    const n = Number(token.value);
-    const next = tokens[i + 1];
-    if (n < 2 || n > 60 || NOT_COUNTED.includes(next?.kind ?? '.') || tokens[i - 1]?.kind === 'U') continue;
-    if (isMeasure(next) || isMeasure(tokens[i + 2])) continue;
-    if (MAKES.test(text) || isAlone(tokens, i)) found = found === 1 ? n : found;
+    if (MAKING.test(before) || (isNear && BEING.test(before)) || (isNear && isAlone(tokens, i))) return n;
   }
-  return found;
+  return 1;
 }
 
-const MEASURE =
-  /^(?:millimet|centimet|inch|yard|gram|ounce|minute|ply|hundred|weight|half|color|colour|ball|skein|hour|year|month|stitch|row|round|finger|child|kid|people|month|dog)/;
-
-function isMeasure(token: Token | undefined): boolean {
-  return token !== undefined && MEASURE.test(token.text);
+function isFree(tokens: readonly Token[], i: number): boolean {
+  const next = tokens[i + 1];
+  if (next === undefined) return true;
+  if (COUNTED_OTHERWISE.includes(next.kind)) return next.kind === 'F';
+  return !MEASURE.test(next.text) && !MEASURE.test(tokens[i + 2]?.text ?? '');
 }
 
-/** `Legs. There's four.`, `Legs, so, four.`, `Two ears.` */
+function isPair(tokens: readonly Token[], i: number, from: number, isNear: boolean): boolean {
+  const token = tokens[i]!;
+  const around = tokens.slice(Math.max(from, i - 8), i + 3).map((one) => one.text).join(' ');
+  if (token.text === 'pair') return isNear && !/\beyes\b|\bknit/.test(around);
+  return token.kind === 't' && Number(token.value) === 2 && /\b(?:make|making|everything|do|you do)\b/.test(around);
+}
+
+/** `Legs. There's four.`, `Legs, so, four.`, `Two ears.`, `Three berries, now`. */
 function isAlone(tokens: readonly Token[], i: number): boolean {
   const before = tokens[i - 1]?.kind ?? '.';
   const after = tokens[i + 1]?.kind ?? '.';
-  const isHead = '.|'.includes(before) && after === 'w';
-  return isHead || (',v~.|w'.includes(before) && '.,|'.includes(after)) || (after === 'w' && '~&a'.includes(before));
+  const isHead = '.|~&a'.includes(before) && after === 'w';
+  return isHead || (',~.|w'.includes(before) && ('.,|'.includes(after) || after === 'o'));
 }
 
 const NO_NAME = new Set(
-  'first last now okay so the a an welcome back hello new piece part thing bit next one it he she they them we you i and then going make made make two need little small big that this good well start starting begin beginning time today here there up out let see look right color colour brown green white red pink dark light yarn same done cut tail long mine way hand hands put sew stitch hold find join what all day just more turn upside down get hi hey over on off fun'.split(
+  'first last now okay the welcome back hello new piece part thing bit next one and then going make made two need small that this good well start starting begin beginning time today here there out let see look right color colour brown green white red pink dark light yarn same done cut tail long mine way hand hands put sew stitch hold find join what all day just more turn upside down get hey over fun side sides wool hook cotton bell bus kettle front top bottom end ends number loops fluff stuffing needle sorry pause want wants doing dog cat'.split(
     ' ',
   ),
 );
 
-/** What the piece is called: the likeliest noun among the words that lead to its first line. */
+/** What the piece is called: a noun that heads a sentence of its introduction or follows "the" there, the latest such. */
 export function readPieceName(tokens: readonly Token[], from: number, to: number): string | null {
-  const words = tokens
-    .slice(from, to)
-    .filter(
-      (token) =>
-        token.kind === 'w' && token.text.length > 2 && !NO_NAME.has(token.text) && /^[a-z'-]+$/.test(token.text),
-    );
-  const counts = new Map<string, number>();
-  words.forEach((token, n) => {
-    const i = tokens.indexOf(token, from);
-    const isLed = tokens[i - 1]?.kind === 'a' || tokens[i - 1]?.kind === 'N';
-    const isHead = '.|,'.includes(tokens[i + 1]?.kind ?? '.');
-    counts.set(token.text, (counts.get(token.text) ?? 0) + 1 + (isLed ? 0.6 : 0) + (isHead ? 0.6 : 0) + n / 1000);
-  });
-  const best = [...counts].sort((a, b) => b[1] - a[1])[0]?.[0];
-  return best === undefined ? null : `${best[0]!.toUpperCase()}${best.slice(1)}`;
+  let best: { text: string; score: number } | null = null;
+  for (let i = Math.max(from, to - NEAR); i < to; i++) {
+    const token = tokens[i]!;
+    if (token.kind !== 'w' || token.text.length < 3 || NO_NAME.has(token.text) || !/^[a-z'-]+$/.test(token.text)) continue;
+    const before = tokens[i - 1]?.kind ?? '.';
+    const after = tokens[i + 1]?.kind ?? '.';
+    const closes = '.,|'.includes(after);
+    const heads = '.|'.includes(before);
+    const led = /^(?:the|a|an|your|my|now|next|for|with)$/.test(tokens[i - 1]?.text ?? '') || before === 'N' || before === 'O';
+    const score = (closes ? 1 : 0) + (heads ? 0.8 : 0) + (led ? 1 : 0) + (i - from) / 1000;
+    if (best === null || score > best.score + 0.2) best = { text: token.text, score };
+  }
+  return best === null || best.score < 0.9 ? null : `${best.text[0]!.toUpperCase()}${best.text.slice(1)}`;
 }

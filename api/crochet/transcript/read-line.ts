@@ -54,7 +54,8 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
   const { announced, from, to } = stretch;
   const { candidate } = announced;
   const names = namesOfLines(tokens, stretch);
-  const isOut = (i: number) => talk.skipped[i] === true || names.has(i) || (i >= candidate.mark && i < candidate.end);
+  const start = tokens.slice(from, candidate.mark).some((token) => 'SPDFE'.includes(token.kind)) ? from : candidate.mark;
+  const isOut = (i: number) => i < start || talk.skipped[i] === true || names.has(i) || (i >= candidate.mark && i < candidate.end);
   const letters = lettersOf(tokens, from, to, talk.sentences, isOut);
   const events = prune(findEvents(letters), tokens);
   const words = tokens.slice(from, to).filter((_, n) => !isOut(from + n));

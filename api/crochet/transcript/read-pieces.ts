@@ -61,7 +61,7 @@ export function readPieces(
     if (announced.begins) {
       const from = Math.max(introFrom, candidate.at - INTRO);
       chainCounts = n === 0 ? chainRule(talk.tokens.slice(from, candidate.at)) : chainCounts;
-      pieces.push(beginPiece(talk, from, announced, next));
+      pieces.push(beginPiece(talk, from, announced, n === 0));
     }
     const piece = pieces.at(-1)!;
     if (candidate.kind === 'foundation') {
@@ -91,7 +91,7 @@ export function readPieces(
       }
     }
     for (const step of between) piece.entries.push({ type: 'step', at: step.at, to: step.end, topic: step.topic });
-    introFrom = Math.max(to, between.at(-1)?.end ?? 0);
+    introFrom = to;
   });
   return pieces.map(finish);
 }
@@ -149,12 +149,11 @@ function copiesOfPiece(
   return lines.map((line) => ({ ...foundation(0), ...line, verdict: 'no-total', said: null, isRing: line.from === 1 }));
 }
 
-function beginPiece(talk: Talk, from: number, announced: Announced, next: number): Building {
+function beginPiece(talk: Talk, from: number, announced: Announced, isFirst: boolean): Building {
   const { candidate } = announced;
-  const upTo = Math.min(next, candidate.end + 24);
   return {
     name: readPieceName(talk.tokens, from, candidate.mark) ?? 'Piece',
-    make: readMake(talk.tokens, from, Math.max(candidate.mark, Math.min(upTo, candidate.mark)), talk.sentences),
+    make: readMake(talk.tokens, from, candidate.mark, talk.sentences, isFirst),
     unit: candidate.unit,
     entries: [],
     lines: [],

@@ -1,9 +1,9 @@
 import { numberAt, readNumberList } from './announce/number-list.ts';
 import { type ReadSoFar } from './bases.ts';
 import { type Token } from './tokens.ts';
-import { type Unit } from './work/units.ts';
+import { periodOf, type Unit } from './work/units.ts';
 
-const LIKE = /\b(?:same|as|like|repeat|repeating|repeats|again|copy|yer|did|over|back to|repetition|returning|what)\b/;
+const LIKE = /\b(?:same|as|like|repeat|repeating|repeats|again|copy|yer|did|over|back to|repetition|returning|what|'s a|is a)\b/;
 
 /** Lines named as the model of this one: `the same as row three`, `repeat rows two and three`. */
 export function linesNamed(tokens: readonly Token[], from: number, to: number, before: number): readonly number[] {
@@ -61,14 +61,25 @@ export function copiesFor(
 
 /** The ways to do a line again: as it was, and with its longest plain stretch as long as now fits. */
 function patternsOf(line: ReadSoFar): readonly (readonly Unit[])[] {
+  const period = periodOf(line.units);
+  if (period.length < line.units.length) return repeats(period);
   const [unit] = line.units;
   const isUniform = unit?.type === 'stitch' || unit?.type === 'together' || unit?.type === 'oneplace';
   if (line.units.length === 1 && isUniform && unit.times > 1) return [[open([{ ...unit, times: 1 }])]];
-  if (line.units.length === 1 && unit?.type === 'repeat') return [line.units, [{ ...unit, times: 0 }]];
+  if (line.units.length === 1 && unit?.type === 'repeat') return [line.units, ...repeats(unit.units)];
   const longest = line.units.reduce((best, one, n) => (plainLength(one) > plainLength(line.units[best]!) ? n : best), 0);
   const stretch = line.units[longest];
   if (stretch?.type !== 'stitch' || plainLength(stretch) < 2) return [line.units];
   return [line.units, line.units.map((one, n) => (n === longest ? open([{ ...stretch, times: 1 }]) : one))];
+}
+
+/** A group as often as it fits: as it was, and with one more or one fewer plain stitch in it. */
+function repeats(group: readonly Unit[]): readonly (readonly Unit[])[] {
+  const plain = group.findIndex((unit) => plainLength(unit) > 0);
+  const stretch = group[plain];
+  if (stretch?.type !== 'stitch') return [[open(group)]];
+  const longer = (by: number) => [open(group.map((unit, n) => (n === plain ? { ...stretch, times: stretch.times + by } : unit)))];
+  return stretch.times > 1 ? [[open(group)], longer(1), longer(-1)] : [[open(group)], longer(1)];
 }
 
 function plainLength(unit: Unit): number {

@@ -129,6 +129,7 @@ function numberToken(
 ): Found | null {
   const text = texts[at]!;
   if (NO_NUMBER.test(texts.slice(at, at + 3).join(' '))) return null;
+  if (text === 'one' && isPronoun(before.at(-1))) return { token: plain('a', 0, text), length: 1 };
   const spoken = readNumber(texts, at, joined) ?? soundsLikeNumber(atoms, texts, at, before, misheard);
   if (spoken === null) return null;
   // "a hundred": the article belongs to the number, and nothing else begins with one.
@@ -144,6 +145,12 @@ function numberToken(
     },
     length: spoken.length,
   };
+}
+
+/** `the third one`, `this one`, `another one`: the word stands for a thing. */
+function isPronoun(before: Token | undefined): boolean {
+  if (before === undefined) return false;
+  return 'OXL'.includes(before.kind) || /^(?:this|that|which|another|any|no|pretty|easy|big|little|good|other)$/.test(before.text);
 }
 
 const GUESSES: ReadonlyMap<string, number> = new Map([

@@ -151,7 +151,8 @@ function kindsOf(tokens: readonly Token[], from: number, to: number): string {
 /** `row two, row three, row two, row three, till you have ten`: announced by the first row named. */
 function untilStart(tokens: readonly Token[], i: number, sentences: Sentences): number {
   const from = Math.max(sentences.startOf[i]!, i - DEED_REACH);
-  const first = kindsOf(tokens, from, i - 2).search(/[UR]/);
+  const kinds = kindsOf(tokens, from, i - 2);
+  const first = kinds.includes('R') ? kinds.indexOf('R') : kinds.indexOf('U');
   return announcementStart(tokens, first < 0 ? i : from + first, sentences);
 }
 

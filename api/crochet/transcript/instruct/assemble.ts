@@ -54,6 +54,8 @@ function extend(partial: Partial, element: Element): Partial[] {
       return repeat(partial, element.n, sentence);
     case 'around':
       return repeat(partial, 0, sentence);
+    case 'again':
+      return [partial, ...twice(partial)];
     case 'oneplace':
       return [gather(partial, sentence)];
     case 'corner':
@@ -100,6 +102,14 @@ function repeat(partial: Partial, times: number, sentence: number): Partial[] {
     });
     return period.length < group.length ? [made(period, 0), made(group, 1)] : [made(group, 0)];
   });
+}
+
+/** `and that whole lot over again`: everything so far, twice. */
+function twice(partial: Partial): Partial[] {
+  if (partial.nodes.length < 2) return [];
+  const units = partial.nodes.map((node) => node.unit);
+  const whole: Node = { unit: { type: 'repeat', units, times: 2 }, sentence: partial.nodes[0]!.sentence };
+  return [{ ...partial, nodes: [whole], closed: 1, cost: partial.cost + 0.8 }];
 }
 
 function startsOf(nodes: readonly Node[], closed: number, sentence: number): { start: number; cost: number }[] {

@@ -32,6 +32,7 @@ export interface Choice {
 
 const FIT_GAIN = 4;
 const SAID_GAIN = 3;
+const MISFIT_SAID_GAIN = 1;
 const LOST_REPEAT = 6;
 const SURE_TOTAL = 1.5;
 
@@ -72,6 +73,13 @@ function prefixes(events: readonly Event[]): { kept: readonly Event[]; rest: rea
     const times = rest.some((event) => event.type === 'times') ? LOST_REPEAT : 0;
     out.push({ kept: events.slice(0, border), rest, cost: explained ? 0.4 + times : 0.6 + 0.35 * units + times });
   }
+  for (const border of borders.slice(0, 3)) {
+    const before = events.slice(0, border);
+    const units = before.filter((event) => event.type === 'unit').length;
+    if (units === 0 || isExplained(events[border]!)) continue;
+    const times = before.some((event) => event.type === 'times') ? LOST_REPEAT : 0;
+    out.push({ kept: events.slice(border), rest: before, cost: 0.7 + 0.35 * units + times });
+  }
   return out;
 }
 
@@ -102,10 +110,17 @@ function weigh(
     const { makes } = sumOf(resolved.units);
     const said = saidTotal(idle, makes);
     const fit = resolved.fit === 'fits' ? FIT_GAIN : resolved.fit === 'unknown' ? 1 : 0;
-    const agrees = said === makes ? SAID_GAIN : 0;
+    const agrees = said === makes ? saidGain(idle, makes, resolved.fit === 'misfit') : 0;
     const score = fit + agrees - cost - resolved.cost;
     choices.push({ units: resolved.units, said, fit: resolved.fit, base: resolved.base, score, lead: 0 });
   }
+}
+
+/** A total that agrees speaks for the work, more where it was plainly said as one, little where the work does not fit. */
+function saidGain(idle: Casting['idle'], makes: number, isMisfit: boolean): number {
+  if (isMisfit) return MISFIT_SAID_GAIN;
+  const clearest = Math.max(...idle.filter((event) => event.n === makes).map((event) => event.asTotal));
+  return SAID_GAIN + 0.4 * Math.max(0, Math.min(2.5, clearest) - 1);
 }
 
 /** The total among the numbers left over: one that equals the work, else the one said most like a total. */

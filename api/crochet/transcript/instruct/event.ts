@@ -24,7 +24,7 @@ export type Event = {
       readonly asTimes: number;
     }
   | { readonly type: 'times'; readonly n: number }
-  | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'plain' | 'correction' }
+  | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'again' | 'plain' | 'correction' }
 );
 
 /** What stitch a bare number, an increase or a decrease is worked in. */

@@ -40,6 +40,9 @@ function eventOf(made: Made, place: { at: number; end: number; sentence: number 
   return { ...place, type: 'unit', options: made.options, fills: made.fills ?? false, reaches: made.reaches ?? false, explains };
 }
 
+/** "For" and "so" lead to a total, and to much else. */
+const WEAK_RESULT = /^(?:for|so|at|be|have|got|you want|leaving)$/;
+
 /** A number on its own may be a total, stitches of the kind in hand, a repeat, or talk; what stands beside it says how likely. */
 function numberEvent(letters: Letters, i: number): Event | null {
   const token = letters.tokens[i]!;
@@ -49,11 +52,11 @@ function numberEvent(letters: Letters, i: number): Event | null {
   const after = letters.text[i + 1] ?? '.';
   const isAlone = '.|,'.includes(before) && '.|'.includes(after);
   let asTotal = 0;
-  if (before === '=' || (before === 'w' && beforeThat === '=')) asTotal += 1.6;
+  if (before === '=' || (before === 'w' && beforeThat === '=')) asTotal += WEAK_RESULT.test(letters.tokens[i - 1]!.text) ? 1.1 : 1.6;
   if (isAlone) asTotal += before === ',' ? 1 : 1.5;
   if (after === 'G' || after === '=') asTotal += 1.2;
   if (after === 'E' || (after === 'w' && letters.text[i + 2] === 'E')) asTotal += 0.7;
-  if (before === 'c') asTotal += 1;
+  if (before === 'c') asTotal += 1.6;
   if ('.|'.includes(after)) asTotal += 0.4;
   if (before === 'p' || after === 'w') asTotal -= 0.4;
   if (before === ',' && after !== 'w') asTotal += 0.3;

@@ -11,7 +11,7 @@ export type Made =
       readonly reaches?: boolean;
     }
   | { readonly type: 'times'; readonly n: number }
-  | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'plain' | 'correction' | 'nothing' };
+  | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'again' | 'plain' | 'correction' | 'nothing' };
 
 interface Rule {
   readonly pattern: RegExp;
@@ -37,6 +37,13 @@ const SPECIAL = new Set(['bobble', 'popcorn', 'puff', 'cluster', 'picot']);
  * is taken. What it leaves alone is talk, except numbers, which may be stitches, repeats or totals.
  */
 export const RULES: readonly Rule[] = [
+  // shaping that is only spoken of
+  { pattern: /[LbnE]P/y, make: (m) => (isPlural(m[1]) ? nothing : null) },
+  // so many places, so many in each
+  { pattern: /LN[GS],?N(?:E|A)/y, make: (m) => unit(st(BARE, number(m), number(m, 1))) },
+  { pattern: /N[GS]gNE?/y, make: (m) => unit(st(BARE, number(m), number(m, 1))) },
+  { pattern: /[XLO]*[GC][wI]{0,4}gN[SP]?(?![tT])/y, make: (m) => unit(st(stitch(m), 1, number(m))) },
+  { pattern: /XN[GS]?(?![tTU])/y, make: (m) => unit(st(stitch(m), number(m))) },
   // up to a number, or to the last few
   { pattern: /R?w?C?p=NS?(?![tT])/y, make: (m) => ({ type: 'unit', options: [[st(stitch(m), number(m))]], reaches: true }) },
   { pattern: /N?S[IE]*[GZ]?p+LN?[GZ]?(?!T)/y, make: (m) => fills(st(stitch(m), 1)) },
@@ -76,7 +83,8 @@ export const RULES: readonly Rule[] = [
   { pattern: /PI[XOLM]?N?[GZ]?/y, make: () => unit(st(BARE, 1, 2)) },
   { pattern: /P/y, make: () => unit(st(BARE, 1, 2)) },
   // chains and places passed over
-  { pattern: /K[OXLN]?C+[IH]?H?/y, make: () => nothing },
+  { pattern: /K[^.,|]{0,3}C+[^.,|]{0,2}H/y, make: () => nothing },
+  { pattern: /K[OXL]?N?C+/y, make: (m) => unit({ type: 'skip', many: number(m) }) },
   { pattern: /NCK/y, make: () => nothing },
   { pattern: /K[OL](?![GZNS])/y, make: () => nothing },
   { pattern: /K[XO]?N[GCZS]?/y, make: (m) => unit({ type: 'skip', many: number(m) }) },
@@ -106,7 +114,7 @@ export const RULES: readonly Rule[] = [
     make: (m) => (m.some((one) => one.kind === 'P') ? fills(st(BARE, 1, 2)) : fills(st(BARE, 1, number(m)))),
   },
   // several in one place
-  { pattern: /NS[&,]?I[XLOM]*N?[GZ]?/y, make: inOne },
+  { pattern: /NS[&,]?E?I[XLOM]*N?[GZ]?/y, make: inOne },
   { pattern: /NI[XLOM]*N?[GZ]?/y, make: inOne },
   {
     pattern: /I?[XLO]+[GC]?gN?[SP]?/y,
@@ -129,11 +137,11 @@ export const RULES: readonly Rule[] = [
   { pattern: /ES/y, make: (m) => fills(st(stitch(m), 1)) },
   {
     pattern: /S/y,
-    make: (m) => unit(st(stitch(m), 1)),
+    make: (m) => (isPlural(m[0]) && SPECIAL.has(stitch(m)) ? nothing : unit(st(stitch(m), 1))),
   },
   { pattern: /[RE]*A/y, make: () => ({ type: 'around' }) },
   { pattern: /F/y, make: () => ({ type: 'plain' }) },
-  { pattern: /R/y, make: (m) => (m[0]!.value === 'again' ? { type: 'nothing' } : { type: 'around' }) },
+  { pattern: /R/y, make: (m) => (m[0]!.value === 'again' ? { type: 'again' } : { type: 'around' }) },
   { pattern: /Y/y, make: () => ({ type: 'correction' }) },
   { pattern: /[IXLMEHGZ]+/y, make: () => nothing },
 ];
@@ -153,6 +161,8 @@ function repeated(matched: readonly Token[]): Made | null {
 /** `single crochet in each of the next four`, `half double in seven stitches`; "in one" is a single place. */
 function counted(matched: readonly Token[], letters: string): Made | null {
   if (!/[IE]/.test(letters)) return null;
+  const each = matched.find((token) => token.kind === 'E');
+  if (each !== undefined && !/[XLO]/.test(letters) && / one$/.test(each.text)) return null;
   return unit(st(stitch(matched), number(matched)));
 }
 

@@ -10,7 +10,7 @@ export interface Letters {
   readonly sentence: readonly number[];
 }
 
-const TAKES = new Set(['get', 'gets', 'takes', 'take', 'wants', 'has', 'receives', 'asks for', 'had']);
+const TAKES = new Set(['get', 'gets', 'takes', 'take', 'wants', 'has', 'receives', 'asks for', 'had', 'receiving', 'receive', 'taking']);
 const DROPPED = new Set<string>(['a', '~', '#']);
 
 /** @param skipped tokens that are no instruction: the announcement's own numbers, demonstrations, recaps */

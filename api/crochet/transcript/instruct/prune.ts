@@ -7,7 +7,7 @@ type UnitEvent = Extract<Event, { type: 'unit' }>;
 /** Takes out of the phrases what adds nothing: what was taken back, explained twice, or only joins or turns. */
 export function prune(events: readonly Event[], tokens: readonly Token[]): readonly Event[] {
   return withEchoes(
-    meshes(withoutTurning(withoutJoins(withoutExplained(withoutCorrected(events, tokens)), tokens))),
+    meshes(withoutTurning(withoutJoins(withoutExplained(withoutCorrected(events, tokens)), tokens), tokens)),
   );
 }
 
@@ -84,16 +84,26 @@ function withoutJoins(events: readonly Event[], tokens: readonly Token[]): reado
 }
 
 /** A chain of one in a line without spaces only turns or lifts the work. */
-function withoutTurning(events: readonly Event[]): readonly Event[] {
+function withoutTurning(spoken: readonly Event[], tokens: readonly Token[]): readonly Event[] {
+  const events = withoutFirstSkip(spoken, tokens);
+  const firstUnit = events.findIndex((event) => event.type === 'unit');
   const hasSpaces = events.some(
     (event) => only(event)?.type === 'skip' || ['corner', 'oneplace', 'here'].includes(event.type),
   );
   if (hasSpaces) return events;
-  const firstUnit = events.findIndex((event) => event.type === 'unit');
   return events.filter((event, n) => {
     const unit = only(event);
     return unit?.type !== 'chain' || !(unit.many === 1 || (unit.many < 5 && n > firstUnit));
   });
+}
+
+/** `skip one chain` before any stitch only says where the first goes. */
+function withoutFirstSkip(events: readonly Event[], tokens: readonly Token[]): readonly Event[] {
+  const first = events.findIndex((event) => event.type === 'unit');
+  const event = events[first];
+  if (event === undefined || only(event)?.type !== 'skip') return events;
+  const ofChain = tokens.slice(event.at, event.end).some((token) => token.kind === 'C');
+  return ofChain ? events.filter((_, n) => n !== first) : events;
 }
 
 /** `three half trebles in one stitch, …, three half trebles`: said short the second time. */
@@ -102,10 +112,11 @@ function withEchoes(events: readonly Event[]): readonly Event[] {
   return events.map((event) => {
     const unit = only(event);
     if (event.type !== 'unit' || unit?.type !== 'stitch') return event;
-    if (unit.inOne > 2) inOnes.push(unit);
+    if (unit.inOne > 1) inOnes.push(unit);
     const echo = inOnes.find((one) => one.type === 'stitch' && one.stitch === unit.stitch && one.inOne === unit.times);
     if (unit.inOne !== 1 || echo === undefined) return event;
-    const options: UnitEvent['options'] = [[echo], ...event.options];
+    const options: UnitEvent['options'] =
+      unit.times > 2 ? [[echo], ...event.options] : [...event.options, [echo]];
     return { ...event, options };
   });
 }

@@ -5,7 +5,7 @@ import { BARE, type Event } from './event.ts';
 export type Element = { readonly sentence: number; readonly at: number } & (
   | { readonly type: 'unit'; readonly options: readonly (readonly Unit[])[]; readonly fills: boolean; readonly reaches: boolean }
   | { readonly type: 'times'; readonly n: number }
-  | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'plain' }
+  | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'again' | 'plain' }
 );
 
 export interface Casting {
@@ -45,7 +45,7 @@ function partsOf(casting: Casting, event: Extract<Event, { type: 'number' }>): C
   const idle: Casting = {
     ...casting,
     idle: [...casting.idle, event],
-    cost: casting.cost + (event.asTotal >= 1 ? 0 : 0.5),
+    cost: casting.cost + (event.asTotal >= 1 ? 0 : 0.5 + Math.max(0, event.asItem - 0.6) * 1.5),
   };
   const out = [idle];
   if (n > 0 && event.asItem > -0.4 && n <= 120) {

@@ -54,7 +54,7 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
     `
     each, every, all, each one, every one, each and every, every single, every single one, each single, each of
     them, each of those, all of them, all of those, everything, everybody, apiece, one apiece, each other, them
-    all, the lot, every last, any, each of these, any of them, both, everywhere, everywhere you see a stitch,
+    all, the lot, every last, any, each of these, any of them, both, everywhere, every time, each time, the whole time, the entire time, whole time, entire time, every single time, everywhere you see a stitch,
     wherever you see a stitch`,
   ],
   ['O', 1, `opening, very first`],
@@ -71,7 +71,7 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
     'G',
     'st',
     `
-    stitch, stitches, st, sts, place, places, hole, foot, tip, bend, edge, edge stitch, end stitch, spot`,
+    stitch, stitches, st, sts, place, places, hole, foot, tip, bend, edge, edge stitch, end stitch, end chain, spot`,
   ],
   ['G', 'loop', `loop, loops`],
   [
@@ -99,7 +99,7 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
     't',
     0,
     `
-    times, time, lots, sets, helpings, verses, repeats, rounds of that, times over, times around, times round,
+    times, time around, time round, time about, lots, sets, helpings, verses, repeats, rounds of that, times over, times around, times round,
     times in all, times altogether, times total, times in total, lots of that, lots of it`,
   ],
   ['t', 2, `twice, twice over, 2 times`],
@@ -132,7 +132,7 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
     'A',
     0,
     `
-    around, all the way around, all the way round, the whole way around, the whole way round, all round, all
+    around, all the way around, all the way round, the whole way around, the whole way about, the whole way back, on around, the whole way round, all round, all
     around, right round, right around, clear around, all the way across, all the way along, all the way, the
     whole way, the whole round, the whole row, whole way, across, to the end, till the end, until the end, to
     the marker, to your marker, till the marker, till your marker, until your marker, until the marker, until
@@ -259,7 +259,7 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
     kind of, kinda, sort of, basically, honestly, actually, obviously, you know, i guess, only, please, gonna,
     going, also, always, hmm, oh, ah, yeah, yes, love, my love, folks, everyone, everybody here, baby, sugar,
     only, too, still, once, very, quite, exactly, simply, here, there, back, righto, um so, i think, i believe,
-    i suppose, let us, lets, say, let me, start, nice, neat, kindly, merely, little, big, lovely, long, tall`,
+    i suppose, let us, lets, say, let me, start, nice, neat, kindly, merely, this time, little, big, lovely, long, tall`,
   ],
   [
     'p',
