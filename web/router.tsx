@@ -15,6 +15,8 @@ type Page = () => Promise<PageModule>;
 /** With the binding at the left: for people who have signed in. */
 const IN_THE_HOUSE: Record<string, Page> = {
   '/': () => import('./app/shelf-page.tsx'),
+  '/new': () => import('./app/new-pattern-page.tsx'),
+  '/patterns/:patternId/recording': () => import('./app/recording-page.tsx'),
   '/patterns/:patternId/bench': () => import('./app/bench-page.tsx'),
   '/account': () => import('./app/account-page.tsx'),
   '/studio': () => import('./app/studio-page.tsx'),

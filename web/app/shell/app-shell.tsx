@@ -1,6 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import { Outlet, ScrollRestoration, useLocation, useMatch } from 'react-router-dom';
 import { useEffect } from 'react';
+import { UploadDock } from '../../features/recordings/upload-dock.tsx';
 import { cx } from '../../lib/class-names.ts';
 import { initialsOf } from '../../features/studio/initials.tsx';
 import { sessionQuery } from '../../lib/session.ts';
@@ -37,6 +38,7 @@ export function AppShell() {
       >
         <Outlet />
       </div>
+      <UploadDock at={pathname} />
       <ScrollRestoration />
     </ToastProvider>
   );
