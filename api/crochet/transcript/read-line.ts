@@ -65,7 +65,7 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
   const named = linesNamed(tokens, from, to, announced.from ?? 0);
   const setting: Setting = {
     bases,
-    stitch: stitchNamed(words) ?? before.stitch,
+    stitch: stitchNamed(words, events) ?? before.stitch,
     chainCounts: chainRule(words) ?? before.chainCounts,
     copies: copiesFor(tokens, from, to, named, before.piece),
     mayLeave: LEAVING.test(words.map((token) => token.text).join(' ')),
@@ -96,11 +96,14 @@ function namesOfLines(tokens: readonly Token[], { announced, from, to }: Stretch
 
 const LEAVING = /\b(?:leave|leaving)\b.{0,12}\b(?:last|rest|alone|unworked|hat)\b|\bstop dead\b|\bjust the \w+\b|\bhalf the\b/;
 
-const FABRIC = new Set(['sc', 'hdc', 'dc', 'tr', 'slst']);
+const FABRIC = new Set(['sc', 'hdc', 'dc', 'tr']);
 
-function stitchNamed(words: readonly Token[]): string | null {
-  const named = words.filter((token) => token.kind === 'S' && FABRIC.has(String(token.value)));
-  return (named.find((token) => token.value !== 'slst') ?? named[0])?.value.toString() ?? null;
+/** The stitch a line names; a slip stitch only where the line is made of them. */
+function stitchNamed(words: readonly Token[], events: readonly Event[]): string | null {
+  const named = words.find((token) => token.kind === 'S' && FABRIC.has(String(token.value)));
+  if (named !== undefined) return String(named.value);
+  const slips = events.some((event) => event.type === 'unit' && event.fills && event.options[0]!.some((unit) => unit.type === 'stitch' && unit.stitch === 'slst'));
+  return slips ? 'slst' : null;
 }
 
 function isPlainLine(words: readonly Token[], events: readonly Event[], { from, to }: Announced): boolean {
@@ -139,13 +142,9 @@ function basesFor(
   const left =
     loops === 'both'
       ? null
-      : loopsLeft(tokens, last === undefined ? before.introFrom : announced.candidate.at, to, before);
+      : loopsLeft(tokens, before.introFrom, to, before);
   if (left !== null) return [{ n: left, cost: 0 }];
-  if (last !== undefined)
-    return basesAfter(
-      last,
-      words.some((token) => token.kind === 'Z'),
-    );
+  if (last !== undefined) return layered(basesAfter(last, words.some((token) => token.kind === 'Z')), words);
   if (before.chains === null) return [];
   const text = tokens
     .slice(from, to)
@@ -161,6 +160,13 @@ function basesFor(
       ),
     nth: nth < 0 ? null : Number(tokens[from + nth]!.value),
   });
+}
+
+/** Through both layers two places are worked as one. */
+function layered(bases: readonly Base[], words: readonly Token[]): readonly Base[] {
+  const text = words.map((token) => token.text).join(' ');
+  if (!/\bboth (?:the )?(?:sides|layers|thicknesses)\b|\beach both sides\b/.test(text)) return bases;
+  return bases.flatMap(({ n, cost }) => (n % 2 === 0 ? [{ n: n / 2, cost }] : []));
 }
 
 /** `the front loops left in round thirteen`: as many as that round had to work into. */

@@ -57,7 +57,7 @@ export function readPieces(
     const next = chain[n + 1]?.candidate.at ?? talk.tokens.length;
     const between = steps.filter((step) => step.at >= candidate.end && step.at < next);
     const firstStep = between.find((step) => step.at > candidate.end);
-    const to = endOfLine(talk, candidate.end, Math.min(next, firstStep?.at ?? next), silenceAfter);
+    const to = endOfLine(talk, candidate.end, Math.min(next, firstStep?.trigger ?? next), silenceAfter);
     if (announced.begins) {
       const from = Math.max(introFrom, candidate.at - INTRO);
       chainCounts = n === 0 ? chainRule(talk.tokens.slice(from, candidate.at)) : chainCounts;
@@ -77,7 +77,7 @@ export function readPieces(
         piece: piece.lines,
         all: pieces.slice(0, -1).map((one) => one.lines),
         chains: piece.chains,
-        introFrom: piece.introFrom,
+        introFrom: piece.lines.length === 0 ? piece.introFrom : introFrom,
         stitch,
         chainCounts,
         chainJoined: piece.chainJoined,

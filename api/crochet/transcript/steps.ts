@@ -6,6 +6,8 @@ import { type Token } from './tokens.ts';
 export interface SpokenStep {
   readonly topic: string;
   readonly at: number;
+  /** Where the doing itself is named: what stands before it in the sentence may still be the line's total. */
+  readonly trigger: number;
   readonly end: number;
 }
 
@@ -32,7 +34,7 @@ export function findSteps(
       found[found.length - 1] = { ...last, end: i + 1 };
       continue;
     }
-    found.push({ topic, at: startOfStep(tokens, i, sentences), end: i + 1 });
+    found.push({ topic, at: startOfStep(tokens, i, sentences), trigger: i, end: i + 1 });
   }
   return found;
 }

@@ -57,7 +57,7 @@ export function tokensOf(words: readonly Word[]): Tokens {
     const mark = atoms[at - 1]!.breakAfter;
     if (mark !== '') tokens.push(breakToken(mark, atoms[at - 1]!.word));
   }
-  return { tokens: withoutCounting(tokens), corrections };
+  return { tokens: withoutSums(withoutCounting(tokens)), corrections };
 }
 
 function atomsOf(words: readonly Word[]): Atom[] {
@@ -69,13 +69,22 @@ function atomsOf(words: readonly Word[]): Atom[] {
       .replace(/[^\p{L}\p{N}'.-]/gu, '')
       .replace(/^['.-]+|['.-]+$/g, '');
     const parts = plain.split(/[-.]+/).flatMap((part) => /^(.+)('s|'re|'ve|'ll|'d|'m)$/.exec(part)?.slice(1) ?? [part]);
-    const said = parts.filter((part) => part !== '');
+    const said = parts.filter((part) => part !== '').map((part, n) => spoken(part, n === 0 ? '' : parts[n - 1]!));
     const silent = (words[index + 1]?.silenceMs ?? 0) > SENTENCE_SILENCE;
     said.forEach((text, n) => {
       atoms.push({ text, word: index, breakAfter: n < said.length - 1 ? '' : silent ? '|' : word.mark });
     });
   });
   return atoms;
+}
+
+const LONG_FORMS: Readonly<Record<string, string>> = { "'re": 'are', "'ll": 'will', "'ve": 'have', "'m": 'am', "'d": 'would' };
+const BEFORE_IS = /^(?:that|it|there|here|what|which|he|she|who|where|thats)$/;
+
+/** Contractions in full, so that "that's" and "that is" are one; a name's "'s" is left alone. */
+function spoken(part: string, before: string): string {
+  if (part === "'s" && BEFORE_IS.test(before)) return 'is';
+  return LONG_FORMS[part] ?? part;
 }
 
 /** Puts the trade word in the place of what was mis-heard. */
@@ -238,4 +247,27 @@ function countingLength(tokens: readonly Token[], at: number): number {
   }
   const many = reached / step;
   return step > 0 && step < 11 && many >= (step === 1 ? 4 : 3) ? end - at : 0;
+}
+
+/** `five plus seven plus 24 is 36`, `thirty two plus six, so thirty eight`: of a sum that is told only its result counts. */
+function withoutSums(tokens: readonly Token[]): readonly Token[] {
+  const out: Token[] = [];
+  for (let at = 0; at < tokens.length; ) {
+    const result = resultOfSum(tokens, at);
+    at = result ?? at;
+    out.push(tokens[at]!);
+    at += 1;
+  }
+  return out;
+}
+
+function resultOfSum(tokens: readonly Token[], at: number): number | null {
+  if (tokens[at]!.kind !== 'N' || tokens[at + 1]?.text !== 'plus') return null;
+  let end = at;
+  while (tokens[end + 1]?.text === 'plus' && tokens[end + 2]?.kind === 'N') end += 2;
+  for (let i = end + 1; i < Math.min(tokens.length, end + 5); i++) {
+    if (tokens[i]!.kind === 'N') return i;
+    if (!'=v,~a&.'.includes(tokens[i]!.kind)) return null;
+  }
+  return null;
 }

@@ -110,7 +110,7 @@ function counted(
   if (tokens[i + 1]?.text === 'of' && tokens[i + 2]?.kind === 'N') return [];
   const list = explicitAfter(tokens, i + 1, many);
   if (list !== null)
-    return [{ ...base, end: list.end, lines: { type: 'named', from: list.from, to: list.to }, strength: 3 }];
+    return [{ ...base, lines: { type: 'named', from: list.from, to: list.to }, strength: 3 }];
   return [{ ...base, lines: { type: 'next', many }, strength: ahead ? 2 : isFor ? 1.4 : 1 }];
 }
 

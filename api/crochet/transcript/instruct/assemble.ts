@@ -156,7 +156,7 @@ function gatherPlaces(elements: readonly Element[]): readonly Element[] {
     const run = elements.slice(n + 1, n + 4);
     const apart = run.flatMap((each) => (each.type === 'unit' ? each.options[0]! : []));
     const options = element.type === 'corner' ? [[one]] : [[one], apart];
-    out.push({ ...run[0]!, type: 'unit', options, fills: false, reaches: false });
+    out.push({ ...run[0]!, type: 'unit', options, fills: false, reaches: false, same: false });
     n += 3;
   }
   return out;

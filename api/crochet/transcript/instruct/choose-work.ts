@@ -31,7 +31,7 @@ export interface Choice {
 }
 
 const FIT_GAIN = 4;
-const SAID_GAIN = 3;
+const SAID_GAIN = 2.2;
 const MISFIT_SAID_GAIN = 1;
 const LOST_REPEAT = 6;
 const SURE_TOTAL = 1.5;
@@ -76,7 +76,7 @@ function prefixes(events: readonly Event[]): { kept: readonly Event[]; rest: rea
   for (const border of borders.slice(0, 3)) {
     const before = events.slice(0, border);
     const units = before.filter((event) => event.type === 'unit').length;
-    if (units === 0 || isExplained(events[border]!)) continue;
+    if (units === 0) continue;
     const times = before.some((event) => event.type === 'times') ? LOST_REPEAT : 0;
     out.push({ kept: events.slice(border), rest: before, cost: 0.7 + 0.35 * units + times });
   }

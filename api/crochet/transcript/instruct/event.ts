@@ -15,6 +15,8 @@ export type Event = {
       readonly reaches: boolean;
       /** Said to explain what went before: `so that's your chain three plus eleven more`. */
       readonly explains: boolean;
+      /** Worked into the place of what went before: `a treble in the same stitch`. */
+      readonly same: boolean;
     }
   | {
       readonly type: 'number';

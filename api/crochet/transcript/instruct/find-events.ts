@@ -27,17 +27,17 @@ function matchAt(letters: Letters, i: number): { event: Event | null; length: nu
     const made = make(letters.tokens.slice(i, i + text.length), text);
     if (made === null) continue;
     const place = { at: letters.at[i]!, end: letters.at[i + text.length - 1]! + 1, sentence: letters.sentence[i]! };
-    const event = eventOf(made, place, letters.text[i - 1] === '=' || letters.tokens[i - 1]?.text === 'meaning');
+    const event = eventOf(made, place, letters.text[i - 1] === '=' || letters.tokens[i - 1]?.text === 'meaning', text.includes('M'));
     return { event, length: text.length };
   }
   return null;
 }
 
-function eventOf(made: Made, place: { at: number; end: number; sentence: number }, explains: boolean): Event | null {
+function eventOf(made: Made, place: { at: number; end: number; sentence: number }, explains: boolean, same: boolean): Event | null {
   if (made.type === 'nothing') return null;
   if (made.type === 'times') return { ...place, type: 'times', n: made.n };
   if (made.type !== 'unit') return { ...place, type: made.type };
-  return { ...place, type: 'unit', options: made.options, fills: made.fills ?? false, reaches: made.reaches ?? false, explains };
+  return { ...place, type: 'unit', options: made.options, fills: made.fills ?? false, reaches: made.reaches ?? false, explains, same };
 }
 
 /** "For" and "so" lead to a total, and to much else. */
@@ -61,9 +61,12 @@ function numberEvent(letters: Letters, i: number): Event | null {
   if (before === 'p' || after === 'w') asTotal -= 0.4;
   if (before === ',' && after !== 'w') asTotal += 0.3;
   if (token.isGuess) asTotal -= 1;
+  const isThing = after === 'w';
+  const closes = isThing && /[,.&|F]/.test(letters.text[i + 2] ?? '.');
   const asItem =
     ('&,.|~pwFmYIg'.includes(before) ? 0.6 : 0) +
-    ('&,wF.R'.includes(after) ? 0.6 : 0) -
+    ('&,F.R'.includes(after) ? 0.6 : 0) +
+    (isThing ? (closes ? 0.4 : -0.2) - (token.value === 1 ? 0.3 : 0) : 0) -
     (before === '=' ? 0.5 : 0) -
     (after === 'G' ? 0.2 : 0);
   const asTimes = after === 'R' || after === 'w' ? 0.8 : 0.2;

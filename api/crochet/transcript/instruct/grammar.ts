@@ -39,6 +39,11 @@ const SPECIAL = new Set(['bobble', 'popcorn', 'puff', 'cluster', 'picot']);
 export const RULES: readonly Rule[] = [
   // shaping that is only spoken of
   { pattern: /[LbnE]P/y, make: (m) => (isPlural(m[1]) ? nothing : null) },
+  { pattern: /n[PD]/y, make: () => nothing },
+  // unlike stitches in one place
+  { pattern: /N?S(?:[,&]+N?S)+[,&]?(?:E?o?I[XLOM]*N?[GZC]|E?T)/y, make: unlikeInOne },
+  { pattern: /NI?V/y, make: (m) => unit(st(BARE, number(m))) },
+  { pattern: /VN(?![StTP])/y, make: (m) => unit(st(BARE, number(m))) },
   // so many places, so many in each
   { pattern: /LN[GS],?N(?:E|A)/y, make: (m) => unit(st(BARE, number(m), number(m, 1))) },
   { pattern: /N[GS]gNE?/y, make: (m) => unit(st(BARE, number(m), number(m, 1))) },
@@ -95,7 +100,7 @@ export const RULES: readonly Rule[] = [
   { pattern: /I[XL]C+,?&?NS/y, make: (m) => unit(st(stitch(m), 1, number(m))) },
   { pattern: /IE[XOL]?N?C/y, make: () => nothing },
   { pattern: /(?:I|O|L|X|E|M)+C+H?/y, make: () => nothing },
-  { pattern: /C{1,2}N(?![StTDPG])/y, make: (m) => unit({ type: 'chain', many: number(m) }) },
+  { pattern: /C{1,2}N(?![StTDPG])/y, make: (m) => (isPlural(m[0]) ? null : unit({ type: 'chain', many: number(m) })) },
   { pattern: /C{1,2}N(?=S|G)/y, make: (m) => unit({ type: 'chain', many: number(m) }) },
   { pattern: /NC(?!N)/y, make: (m) => unit({ type: 'chain', many: number(m) }) },
   { pattern: /SC/y, make: (m) => (m[0]!.text === 'single' ? unit({ type: 'chain', many: 1 }) : null) },
@@ -103,6 +108,7 @@ export const RULES: readonly Rule[] = [
   { pattern: /S[IE]*[XLO]?N[GSZC]?(?![tTD])/y, make: counted },
   { pattern: /NSIE?[XLO]?N[GSZC]?(?![tTD])/y, make: eachInCounted },
   { pattern: /[IE]+[XLO]?N[GZ],?S/y, make: (m) => (number(m) > 1 ? unit(st(stitch(m), number(m))) : null) },
+  { pattern: /SN(?=[EA])/y, make: (m) => unit(st(stitch(m), number(m))) },
   // in every place
   { pattern: /N?SE/y, make: (m) => (/^(?:ever|each)/.test(m.at(-1)!.text) ? fills(st(stitch(m), 1, number(m))) : null) },
   { pattern: /N?S[&,]?IB?E[GZSC]*A?/y, make: (m) => fills(st(stitch(m), 1, number(m))) },
@@ -126,9 +132,13 @@ export const RULES: readonly Rule[] = [
   { pattern: /I[XLOM]*Z/y, make: (m) => ({ type: m.at(-1)!.value === 'corner' ? 'corner' : 'here' }) },
   { pattern: /I[XLOM]*[GN][,&]/y, make: () => ({ type: 'here' }) },
   { pattern: /Z/y, make: (m) => (m[0]!.value === 'corner' ? { type: 'corner' } : nothing) },
-  { pattern: /(?:E[,&]?)?I?(?:M|(?<=I)N)[GZ]/y, make: () => ({ type: 'oneplace' }) },
+  { pattern: /(?:E[,&]?)?o?I?(?:M|(?<=I)N)[GZC]/y, make: () => ({ type: 'oneplace' }) },
   // plain lists
-  { pattern: /NS/y, make: (m) => unit(st(stitch(m), number(m))) },
+  {
+    pattern: /NS/y,
+    // "eight, slip stitch": a total and a join, where nobody would say "eight slip stitch"
+    make: (m) => (m[1]!.text === 'slip stitch' && number(m) > 1 ? null : unit(st(stitch(m), number(m)))),
+  },
   { pattern: /S[&,]?(?:IB?[XLOM]*N?[GZ]?)/y, make: (m) => (m.length > 1 ? unit(st(stitch(m), 1)) : null) },
   {
     pattern: /E?[SF]+[&,]?E?A/y,
@@ -186,4 +196,20 @@ function inOne(matched: readonly Token[], letters: string): Made | null {
   if (many === 1) return unit(st(stitch(matched), 1));
   if (many > 12) return null;
   return either([st(stitch(matched), 1, many)]);
+}
+
+/** `a single and a double together`, `a half double, a double and a half double, all in the one stitch`. */
+function unlikeInOne(matched: readonly Token[], letters: string): Made | null {
+  if (!/M|EI|EoI|IN|T/.test(letters)) return null;
+  const parts: string[] = [];
+  let many = 1;
+  for (const token of matched) {
+    if (token.kind === 'N') many = Number(token.value);
+    if (token.kind !== 'S') continue;
+    for (let n = 0; n < Math.min(many, 12); n++) parts.push(String(token.value));
+    many = 1;
+  }
+  if (letters.endsWith('T') && parts.every((part) => part === parts[0])) return null;
+  if (parts.every((part) => part === parts[0])) return unit(st(parts[0]!, 1, parts.length));
+  return unit({ type: 'oneplace', parts, times: 1 });
 }

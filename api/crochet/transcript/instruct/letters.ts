@@ -46,7 +46,8 @@ export function lettersOf(
 }
 
 function letterOf(token: Token): string {
-  if (token.kind === 'v') return TAKES.has(token.text) ? 'g' : '';
+  if (TAKES.has(token.text)) return 'g';
+  if (token.kind === 'v') return '';
   if (token.kind === 'r' || token.kind === 'p') return 'p';
   return token.kind;
 }

@@ -3,7 +3,7 @@ import { BARE, type Event } from './event.ts';
 
 /** An event whose part in the line is settled: numbers have become stitches, repeats, or nothing. */
 export type Element = { readonly sentence: number; readonly at: number } & (
-  | { readonly type: 'unit'; readonly options: readonly (readonly Unit[])[]; readonly fills: boolean; readonly reaches: boolean }
+  | { readonly type: 'unit'; readonly options: readonly (readonly Unit[])[]; readonly fills: boolean; readonly reaches: boolean; readonly same: boolean }
   | { readonly type: 'times'; readonly n: number }
   | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'again' | 'plain' }
 );
@@ -35,7 +35,7 @@ export function castNumbers(events: readonly Event[]): readonly Casting[] {
 
 function settled(event: Exclude<Event, { type: 'number' }>): Element {
   const { sentence, at } = event;
-  if (event.type === 'unit') return { sentence, at, type: 'unit', options: event.options, fills: event.fills, reaches: event.reaches };
+  if (event.type === 'unit') return { sentence, at, type: 'unit', options: event.options, fills: event.fills, reaches: event.reaches, same: event.same };
   if (event.type === 'times') return { sentence, at, type: 'times', n: event.n };
   return { sentence, at, type: event.type === 'correction' ? 'plain' : event.type };
 }
@@ -45,12 +45,12 @@ function partsOf(casting: Casting, event: Extract<Event, { type: 'number' }>): C
   const idle: Casting = {
     ...casting,
     idle: [...casting.idle, event],
-    cost: casting.cost + (event.asTotal >= 1 ? 0 : 0.5 + Math.max(0, event.asItem - 0.6) * 1.5),
+    cost: casting.cost + (event.asTotal >= 1 ? 0 : 0.5 + Math.max(0, event.asItem - 0.6) * 2),
   };
   const out = [idle];
   if (n > 0 && event.asItem > -0.4 && n <= 120) {
     const unit: Unit = { type: 'stitch', stitch: BARE, inOne: 1, times: n };
-    const element: Element = { sentence, at, type: 'unit', options: bareOptions(unit, casting.elements), fills: false, reaches: false };
+    const element: Element = { sentence, at, type: 'unit', options: bareOptions(unit, casting.elements), fills: false, reaches: false, same: false };
     out.push({
       ...casting,
       elements: [...casting.elements, element],

@@ -34,7 +34,7 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
     skip, skips, skipping, miss, missing, misses, pass over, jump over, hop over, leave out, passing
     over, ignore`,
   ],
-  ['P', 0, `increase, increases, inc, incs, increasing`],
+  ['P', 0, `increase, increases, inc, double it, double them, double those up, double up, double that, incs, increasing`],
   [
     'D',
     0,
@@ -180,7 +180,7 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
     '=',
     0,
     `
-    that is, that gives, gives you, gives us, gives me, which gives, that makes, which makes, makes, making,
+    that is, it is, there is, there are, that gives, gives you, gives us, gives me, which gives, that makes, which makes, makes, making,
     comes to, brings you to, bring you to, brings us to, brings it to, brings me to, bring it to, you will have,
     you should have, you have, you have got, you got, i have, i have got, we have, we have got, you get, you end
     up with, end up with, ends up with, we end up with, gets you, gets us to, get to, down to, up to, to get, so
