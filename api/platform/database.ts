@@ -18,6 +18,8 @@ const types: pg.CustomTypesConfig = {
 export interface DatabaseOptions {
   readonly statementTimeoutMs?: number;
   readonly acquireTimeoutMs?: number;
+  /** How soon PostgreSQL notices in the middle of a long statement that this process has died. */
+  readonly noticeDeathMs?: number;
 }
 
 /** Opens a pool; connections are made when first needed, so a database that is down does not stop the start. */
@@ -30,6 +32,9 @@ export function openDatabase(settings: Env['database'], options: DatabaseOptions
       connectionTimeoutMillis: 2_000,
       statement_timeout: options.statementTimeoutMs ?? STATEMENT_TIMEOUT_MS,
       types,
+      ...(options.noticeDeathMs !== undefined && {
+        options: `-c client_connection_check_interval=${options.noticeDeathMs}`,
+      }),
     } as Knex.PgConnectionConfig,
     pool: { min: 0, max: settings.pool },
     acquireConnectionTimeout: options.acquireTimeoutMs ?? ACQUIRE_TIMEOUT_MS,

@@ -85,11 +85,12 @@ export async function migrate(
   log: Logger,
   dir = MIGRATIONS_DIR,
 ): Promise<readonly string[]> {
-  const db = openDatabase({ url: settings.url, pool: 4 }, { statementTimeoutMs: 0 });
+  const db = openDatabase({ url: settings.url, pool: 4 }, { statementTimeoutMs: 0, noticeDeathMs: 1_000 });
   try {
     // The lock belongs to this one connection: when the process dies, the server lets it go.
     return await db.transaction(async (holder) => {
-      await holder.raw('select pg_advisory_xact_lock(?)', [LOCK]);
+      // Without bindings: a bound statement would keep its snapshot, and an index built concurrently waits for those.
+      await holder.raw(`select pg_advisory_xact_lock(${LOCK})`);
       await refuseNewer(db, dir);
       await dropHalfBuiltIndexes(db);
       await db.migrate.forceFreeMigrationsLock(migrationConfig(dir));
