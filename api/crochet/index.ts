@@ -22,3 +22,5 @@ export { printTotals, readTotals } from './language/totals-text.ts';
 export { translate } from './language/translate.ts';
 export { abbreviationsUsed, type Abbreviation } from './language/abbreviations.ts';
 export { repairsFor } from './count/repairs.ts';
+export { readPattern } from './language/pattern/read-pattern.ts';
+export { countReport, inputOf } from './count/report.ts';

@@ -5,7 +5,7 @@ import { type LineInput } from './input.ts';
 import { judgeLine, type Given, type Judged } from './judge.ts';
 import { plainLeft, type Left } from './places.ts';
 import { isMixed, relativeOf, withMore } from './relative.ts';
-import { type LineCount, type RoundCount, type Verdict } from './result.ts';
+import { type LineCount, type RoundCount, type RowCount, type Verdict } from './result.ts';
 import { leftOfTotals, type State } from './state.ts';
 import { madeOf, workOf } from './tally.ts';
 import { messageOf } from './message.ts';
@@ -279,6 +279,7 @@ function joined(
     work: workOf(opening.work.walk),
     loops,
     rounds,
+    rows: rowsOf(first.judged, passes, given),
     asks: opening.asks,
     countedWith: final === 'agrees' && given.written?.sts ? (shown.ways[0] ?? null) : null,
     walk: opening.work.walk.map(({ stitch, on, makes }) => ({ stitch, on, makes })),
@@ -325,6 +326,24 @@ function roundsOf(
     const stated: Totals | null = perRound ? { sts: [figures[i]!] } : isLast ? given.written : null;
     return { n: passes[i]?.n ?? i + 1, base: one.work.base, stated, count: one.work.tally.sts, verdict: one.verdict };
   });
+}
+
+/** One entry a row where a group of rows is repeated. */
+function rowsOf(judged: readonly Judged[], passes: readonly Pass[], given: Given): RowCount[] | null {
+  const isGroup = new Set(passes.map((pass) => pass.source)).size > 1;
+  if (!isGroup) return null;
+  return judged.map(({ work, verdict }, i) => ({
+    from: passes[i]!.n,
+    to: passes[i]!.n,
+    source: passes[i]!.source ?? passes[i]!.n,
+    work: workOf(work.walk),
+    base: work.base,
+    uses: work.uses,
+    stated: i === judged.length - 1 ? given.written : null,
+    count: work.tally.sts,
+    made: madeOf(work.tally),
+    verdict,
+  }));
 }
 
 function lastSpan(tree: LineTree): Span | null {
@@ -389,6 +408,7 @@ function unreadLine(
     work: workOf(judged.work.walk),
     loops: loopsOf(read),
     rounds: null,
+    rows: null,
     asks: [],
     countedWith: null,
     walk: [],

@@ -134,12 +134,11 @@ function workPiece(
       return;
     }
     const read = reads[i]!;
-    const isRow = line.kind === 'row' && !read.tree.items.some((item) => item.type === 'step' && item.what === 'join');
     const around: Around = {
       sizes: work.sizes,
       policy: work.policy,
       own: work.own,
-      ring: piece.worked !== 'rows' && !isRow,
+      ring: piece.worked !== 'rows' || line.kind === 'round',
       comesBack: backFrom > i,
       trees,
       free,
@@ -225,6 +224,7 @@ function quiet(line: LineInput): LineCount {
     work: [],
     loops: 'both',
     rounds: null,
+    rows: null,
     asks: [],
     countedWith: null,
     walk: [],

@@ -21,6 +21,19 @@ export interface RoundCount {
   readonly verdict: Verdict;
 }
 
+export interface RowCount {
+  readonly from: number;
+  readonly to: number;
+  readonly source: number;
+  readonly work: readonly string[];
+  readonly base: number | null;
+  readonly uses: number | null;
+  readonly stated: Totals | null;
+  readonly count: number | null;
+  readonly made: Readonly<Record<string, number>>;
+  readonly verdict: Verdict;
+}
+
 export interface Ask {
   readonly kind: string;
   readonly text: string;
@@ -53,6 +66,8 @@ export interface LineCount {
   readonly work: readonly string[];
   readonly loops: 'both' | 'back' | 'front' | 'third' | 'mixed';
   readonly rounds: readonly RoundCount[] | null;
+  /** For rows told as a group (`repeat rows 3–4 twice more`): each row, with the line it is taken from. */
+  readonly rows: readonly RowCount[] | null;
   readonly asks: readonly Ask[];
   readonly countedWith: 'stitches' | 'chains' | 'spaces' | null;
   readonly walk: readonly Stitch[];

@@ -116,7 +116,9 @@ export function madeOf(tally: Tally): Record<string, number> {
 }
 
 /** The walk in short words: `2sc` for two in one place, `[dc,dc,ch,dc,dc]` for unlike ones. */
-export function workOf(walk: readonly Step[]): string[] {
+export function workOf(all: readonly Step[]): string[] {
+  // Slip stitches that only fasten or travel are no work of the line.
+  const walk = all.filter((step) => step.stitch !== 'slst' || step.makes > 0);
   const words: string[] = [];
   let at = 0;
   while (at < walk.length) {

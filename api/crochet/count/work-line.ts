@@ -140,8 +140,9 @@ function onPlaces(
 ): LineWork {
   const { left } = setting;
   const first = namedIn(items);
-  const named: Named =
-    choices.chains === 'places' && first.sps.length === 0 && first.st ? { ...first, ch: true } : first;
+  const isChain = hook > 0 || (left.chains === 0 && left.shape === 'ring' && told !== null);
+  const wide = isChain ? { ...first, st: true } : first;
+  const named: Named = choices.chains === 'places' && wide.sps.length === 0 && wide.st ? { ...wide, ch: true } : wide;
   const wantsSkipped =
     targetsIn(items).some((target) => target.which === 'skipped') &&
     !allItems(items).some((item) => item.type === 'skip');
@@ -294,6 +295,8 @@ function finish(
   const remaining = isOpen ? 0 : Math.max(0, walker.left(aims) - kept);
   const isShortRow = remaining > 0 && job.turned && setting.comesBack;
   const over = isShortRow ? 0 : remaining;
+  const carried =
+    aims.some((aim) => aim?.which === 'skipped') && walker.skipped.length === 0 ? 0 : setting.left.unworked;
   const made = grouped(walker.made, setting.ring);
   const tally = tallyOf(made);
   const turns = job.turned || !setting.ring;
@@ -314,7 +317,7 @@ function finish(
       made: turns ? made.toReversed() : made,
       shape: setting.ring ? 'ring' : 'row',
       chains: 0,
-      unworked: (isShortRow ? remaining : 0) + (setting.ring ? 0 : walker.kept),
+      unworked: carried + (isShortRow ? remaining : 0) + (setting.ring ? 0 : walker.kept),
       turningChain: job.turningChain,
       count: tally.sts,
       open: false,

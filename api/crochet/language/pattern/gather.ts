@@ -1,0 +1,227 @@
+import { type Terms } from '../../span.ts';
+import { type SpecialStitch } from '../../count/input.ts';
+import { hasWork } from '../groups.ts';
+import { type Label } from '../labels.ts';
+import { readLine } from '../read-line.ts';
+import { type Item, type ReadLine } from '../tree.ts';
+import { type Entry } from './cut.ts';
+import { headingOf, sectionOf, type Heading, type Section } from './headings.ts';
+import { type TextStretch } from './pattern-text.ts';
+import { definitionOf, isAbbreviation } from './special-lines.ts';
+
+/** One line of work, a step or a heading, in the order of the text. */
+export type Part =
+  | { readonly type: 'heading'; readonly heading: Heading; readonly start: number; readonly end: number }
+  | {
+      readonly type: 'line';
+      readonly label: Label | null;
+      readonly labelText: string;
+      readonly start: number;
+      readonly bodyStart: number;
+      readonly end: number;
+    }
+  | { readonly type: 'step' | 'note'; readonly start: number; readonly end: number };
+
+export interface Gathered {
+  readonly parts: readonly Part[];
+  readonly title: string | null;
+  readonly materials: readonly TextStretch[];
+  readonly notes: readonly TextStretch[];
+}
+
+interface State {
+  readonly parts: Part[];
+  readonly materials: TextStretch[];
+  readonly notes: TextStretch[];
+  title: string | null;
+  section: Section | null;
+  last: number;
+}
+
+/** Tells each entry for what it is and joins those that are one line printed over several. */
+export function gather(
+  text: string,
+  entries: readonly Entry[],
+  terms: Terms,
+  special: readonly SpecialStitch[],
+): Gathered {
+  const state: State = { parts: [], materials: [], notes: [], title: null, section: null, last: 0 };
+  entries.forEach((entry, i) => {
+    const next = entries[i + 1];
+    take(state, text, entry, next, terms, special);
+  });
+  return state;
+}
+
+function take(
+  state: State,
+  text: string,
+  entry: Entry,
+  next: Entry | undefined,
+  terms: Terms,
+  special: readonly SpecialStitch[],
+): void {
+  const source = text.slice(entry.span.start, entry.span.end);
+  const stretch: TextStretch = { text: source, span: entry.span };
+  const section = entry.label && entry.label.kind !== 'bare' ? null : sectionOf(source);
+  if (section) {
+    state.section = section;
+    (section === 'materials' ? state.materials : state.notes).push(stretch);
+    return;
+  }
+  const body = text.slice(entry.bodyStart, entry.span.end);
+  const read = readLine(oneLine(body), { terms, special });
+  const label = isLabel(entry, read, state) ? entry.label : null;
+  if (label) {
+    state.section = null;
+    state.last = label.to ?? label.from ?? state.last + Math.max(1, label.next);
+    state.parts.push({
+      type: 'line',
+      label,
+      labelText: entry.labelText,
+      start: entry.span.start,
+      bodyStart: entry.bodyStart,
+      end: entry.span.end,
+    });
+    return;
+  }
+  if (definitionOf(source, terms) && special.some((one) => source.includes(one.text))) {
+    state.notes.push(stretch);
+    return;
+  }
+  const whole = entry.label ? readLine(oneLine(source), { terms, special }) : read;
+  if (continues(state, entry, source, whole, text)) {
+    extend(state, entry.span.end);
+    return;
+  }
+  const heading = headingFor(source, whole, next);
+  if (state.section && !(heading && isLead(next)) && !(state.section === 'assembly' && false)) {
+    const isWorkAgain =
+      entry.apart &&
+      isCounted(whole) &&
+      state.section !== 'abbreviations' &&
+      state.section !== 'special' &&
+      state.section !== 'materials';
+    if (!isWorkAgain) {
+      (state.section === 'materials' ? state.materials : state.notes).push(stretch);
+      return;
+    }
+    state.section = null;
+  }
+  if (heading && !isCounted(whole)) {
+    state.section = null;
+    if (state.parts.length === 0 && state.title === null && !isLead(next)) {
+      state.title = heading.name;
+      return;
+    }
+    state.parts.push({ type: 'heading', heading, start: entry.span.start, end: entry.span.end });
+    state.last = 0;
+    return;
+  }
+  if (isAbbreviation(source, terms)) {
+    state.notes.push(stretch);
+    return;
+  }
+  if (isCounted(whole)) {
+    state.parts.push({
+      type: 'line',
+      label: null,
+      labelText: '',
+      start: entry.span.start,
+      bodyStart: entry.span.start,
+      end: entry.span.end,
+    });
+    return;
+  }
+  const isStep = whole.tree.items.some((item) => item.type === 'step');
+  if (state.parts.length === 0 && state.title === null && !isStep) state.title = source.trim();
+  else if (isStep && state.parts.length > 0)
+    state.parts.push({ type: 'step', start: entry.span.start, end: entry.span.end });
+  else state.notes.push(stretch);
+}
+
+/** Line ends made spaces, unit for unit. */
+export const oneLine = (text: string): string => text.replace(/[\r\n]/g, ' ');
+
+const isLead = (next: Entry | undefined): boolean => next?.label !== null && next?.label !== undefined;
+
+/** A number alone is a label only in sequence and before work. */
+function isLabel(entry: Entry, read: ReadLine, state: State): boolean {
+  const { label } = entry;
+  if (!label) return false;
+  if (label.kind !== 'bare') return label.next === 0 || hasWork(read.tree.items) || read.unread.length > 0;
+  if (!hasWork(read.tree.items)) return false;
+  const from = label.from ?? 0;
+  return (
+    from === state.last + 1 ||
+    from === 1 ||
+    (from === 2 && state.last === 0) ||
+    (from > state.last && from <= state.last + 3)
+  );
+}
+
+/** Work in a sentence that could stand for a round: something with a count or a place, not prose with a stray word. */
+function isCounted(read: ReadLine): boolean {
+  const { items } = read.tree;
+  if (!hasWork(items)) return false;
+  const works = items.filter(
+    (item) =>
+      item.type === 'work' ||
+      item.type === 'group' ||
+      item.type === 'relative' ||
+      item.type === 'straight' ||
+      item.type === 'shaped',
+  );
+  const prose = items.reduce(
+    (sum, item) =>
+      sum +
+      (item.type === 'note' || item.type === 'step' || item.type === 'unread' ? item.span.end - item.span.start : 0),
+    0,
+  );
+  const size = read.tree.span.end - read.tree.span.start;
+  if (read.total !== null) return works.length > 0;
+  const isFirm = works.some((item) => isFirmWork(item));
+  return isFirm && prose < size * 0.6;
+}
+
+const isFirmWork = (item: Item): boolean =>
+  item.type === 'group' ||
+  item.type === 'relative' ||
+  (item.type === 'work' &&
+    (item.into !== null || item.times.type === 'fill' || (item.times.type === 'n' && item.times.n[0]! > 1)));
+
+/** Whether an entry without a label goes on with the line before it. */
+function continues(state: State, entry: Entry, source: string, read: ReadLine, text: string): boolean {
+  const last = state.parts.at(-1);
+  if (last?.type !== 'line' || entry.apart) return false;
+  const before = text.slice(last.bodyStart, last.end).trim();
+  if (before === '') return true;
+  const onlyTotal = read.total !== null && !hasWork(read.tree.items);
+  const isEnded = /[.)\]}]\s*$/.test(before) || /\d\s*(sts?|stitches)?$/.test(before);
+  if (onlyTotal) return !hasTotal(before);
+  if (/[,;:*+(&-]\s*$/.test(before) || /\b(in|of|next|each|and|the|to|from|rep|repeat|sc|\d+)$/i.test(before))
+    return true;
+  const isSmall = /^[a-z*(\[]/.test(source.trim());
+  if (isSmall && !hasTotal(before) && (hasWork(read.tree.items) || !isEnded)) return true;
+  const opens = (before.match(/[([{]/g) ?? []).length > (before.match(/[)\]}]/g) ?? []).length;
+  return opens;
+}
+
+const hasTotal = (text: string): boolean =>
+  /[([{<]\s*=?\s*\d[^()[\]{}]*[)\]}>]\.?\s*$/.test(text) ||
+  /[=–—-]\s*\d+\s*(sts?|sc|dc|hdc|tr|stitches)?\.?\s*$/.test(text);
+
+function extend(state: State, end: number): void {
+  const last = state.parts.at(-1);
+  if (last?.type === 'line') state.parts[state.parts.length - 1] = { ...last, end };
+}
+
+function headingFor(source: string, read: ReadLine, next: Entry | undefined): Heading | null {
+  const heading = headingOf(source);
+  if (!heading) return null;
+  const isShouted = /[A-Z]{3}/.test(source) && source === source.toUpperCase();
+  const isTitled = /^\s*[A-Z#*]/.test(source);
+  const closes = /:\s*$/.test(source.trim()) || heading.make > 1;
+  if (read.tree.items.some((item) => item.type === 'step') && !closes && !isShouted) return null;
+  return isShouted || closes || (isTitled && next !== undefined) ? heading : null;
+}
