@@ -7,6 +7,7 @@ export interface ReadSoFar {
   readonly to: number | null;
   readonly units: readonly Unit[];
   readonly base: number | null;
+  readonly loops: 'both' | 'back' | 'front';
   readonly said: number | null;
   readonly verdict: 'agrees' | 'differs' | 'does-not-fit' | 'unread' | 'no-total';
 }

@@ -40,7 +40,6 @@ export interface Before {
 }
 
 export interface ReadLineResult extends ReadSoFar {
-  readonly loops: 'both' | 'back' | 'front';
   readonly count: number | null;
   readonly isRing: boolean;
   readonly lead: number;
@@ -89,7 +88,8 @@ function namesOfLines(tokens: readonly Token[], { announced, from, to }: Stretch
     const value = Number(tokens[i]!.value);
     const isNamed = follows && value <= last + 1;
     const isTag = isUnnumbered && value === first && tokens[i - 1]?.kind !== 'E' && /[.,|]/.test(tokens[i + 1]?.kind ?? '.') && /^(?:is|'s|that is)$/.test(tokens[i - 1]?.text ?? '');
-    if (isOwn || isNamed || isTag) for (let j = i; j < (isOwn ? list.end : i + 1); j++) out.add(j);
+    const isHead = isUnnumbered && value === first && i - from < 3 && ',.'.includes(tokens[i + 1]?.kind ?? '.');
+    if (isOwn || isNamed || isTag || isHead) for (let j = i; j < (isOwn ? list.end : i + 1); j++) out.add(j);
   }
   return out;
 }
@@ -144,6 +144,7 @@ function basesFor(
       ? null
       : loopsLeft(tokens, before.introFrom, to, before);
   if (left !== null) return [{ n: left, cost: 0 }];
+  if (last === undefined && before.chains === null && loops !== 'both') return freeLoops(before, loops);
   if (last !== undefined) return layered(basesAfter(last, words.some((token) => token.kind === 'Z')), words);
   if (before.chains === null) return [];
   const text = tokens
@@ -160,6 +161,12 @@ function basesFor(
       ),
     nth: nth < 0 ? null : Number(tokens[from + nth]!.value),
   });
+}
+
+/** A piece that begins in loops grows on the last line that was worked in the other ones. */
+function freeLoops(before: Before, loops: 'back' | 'front'): readonly Base[] {
+  const line = before.all.flat().findLast((one) => one.loops !== 'both' && one.loops !== loops && one.base !== null);
+  return line === undefined || line.base === null ? [] : [{ n: line.base, cost: 0 }];
 }
 
 /** Through both layers two places are worked as one. */

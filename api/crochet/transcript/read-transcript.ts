@@ -1,4 +1,5 @@
 import { type Terms } from '../span.ts';
+import { withAliases } from './aliases.ts';
 import { findCandidates } from './announce/candidates.ts';
 import { chooseChain } from './announce/chain.ts';
 import { type Cue } from './cue.ts';
@@ -24,7 +25,7 @@ export function readTranscript(cues: readonly Cue[], options: { readonly terms?:
   const { tokens: heard, corrections } = tokensOf(spoken);
   const inferred = inferTerms(heard);
   const terms = options.terms ?? inferred.terms;
-  const tokens = inUsTerms(heard, terms);
+  const tokens = withAliases(inUsTerms(heard, terms));
   const sentences = sentencesOf(tokens);
   const skipped = findSkipped(tokens, sentences);
   const candidates = findCandidates(tokens, sentences).filter(

@@ -36,7 +36,7 @@ function ordinalNamed(tokens: readonly Token[], i: number): { from: number; to: 
 }
 
 const SAME =
-  /\b(?:same|again|copy|just like|repeat|repetition|like that|likewise|once more|one more time|ditto|the lap you just did|is like it|do it over|that is|that with)\b/;
+  /\b(?:same|again|copy|just like|repeat|repetition|like that|likewise|once more|one more time|ditto|the lap you just did|is like it|do it over|is that with|is that but)\b/;
 
 /** Works that the line may copy: the lines it names, or the one before where it says "the same". */
 export function copiesFor(

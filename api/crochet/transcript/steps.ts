@@ -47,6 +47,8 @@ function belongsTo(last: SpokenStep, topic: string, i: number, sentences: Senten
 }
 
 function topicAt(tokens: readonly Token[], i: number, sentences: Sentences): string | null {
+  // "in the next stitch it's …" is a place
+  if (tokens[i]!.kind === 'G' && 'XOLNEMIaS'.includes(tokens[i - 1]?.kind ?? '.')) return null;
   const ahead: string[] = [];
   for (let j = i; j < Math.min(tokens.length, sentences.endOf[i]!, i + AHEAD); j++) {
     if (!',.|'.includes(tokens[j]!.kind)) ahead.push(tokens[j]!.text);

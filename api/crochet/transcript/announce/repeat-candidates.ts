@@ -46,5 +46,7 @@ export function repeatCandidates(tokens: readonly Token[], i: number, sentences:
   }
   const until = before.findIndex((one) => one.text === 'until' || one.text === 'till');
   if (until < 0) return [];
-  return [{ ...base, lines: { type: 'until', last: Number(number.value) }, strength: 1.2 }];
+  const deed = before.findLastIndex((one) => one.kind === 'R');
+  const at = deed < 0 ? base.at : announcementStart(tokens, start + deed, sentences);
+  return [{ ...base, at, lines: { type: 'until', last: Number(number.value) }, strength: 1.2 }];
 }

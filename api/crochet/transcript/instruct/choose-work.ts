@@ -93,7 +93,7 @@ function addWhole(events: readonly Event[], setting: Setting, choices: Choice[])
   const plain: Unit = { type: 'repeat', units: [{ type: 'stitch', stitch: '?', inOne: 1, times: 1 }], times: 0 };
   if (setting.isPlain) weigh([plain], 0.4 + units * 0.8 + times, numbers, setting, false, choices);
   for (const copy of setting.copies)
-    weigh(copy.units, copy.cost + units * 0.6 + times, numbers, setting, true, choices);
+    weigh(copy.units, copy.cost + units * 1.1 + times, numbers, setting, true, choices);
 }
 
 function weigh(

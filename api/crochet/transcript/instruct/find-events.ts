@@ -6,6 +6,12 @@ import { type Letters } from './letters.ts';
 export function findEvents(letters: Letters): readonly Event[] {
   const events: Event[] = [];
   for (let i = 0; i < letters.text.length;) {
+    const total = statedTotal(letters, i, events);
+    if (total !== null) {
+      events.push(total);
+      i += 2;
+      continue;
+    }
     const found = matchAt(letters, i);
     if (found === null) {
       const number = numberEvent(letters, i);
@@ -17,6 +23,19 @@ export function findEvents(letters: Letters): readonly Event[] {
     i += found.length;
   }
   return events;
+}
+
+/** `That comes to thirty six double crochets.`, `Thirty seven double crochet.`: the stitches that are there, not work. */
+function statedTotal(letters: Letters, i: number, events: readonly Event[]): Event | null {
+  const token = letters.tokens[i]!;
+  if (token.kind !== 'N' || letters.text[i + 1] !== 'S' || Number(token.value) < 8) return null;
+  const before = letters.text[i - 1] ?? '.';
+  const after = letters.text[i + 2] ?? '.';
+  const results = before === '=' && !WEAK_RESULT.test(letters.tokens[i - 1]!.text) && !/[IE]/.test(after);
+  const alone = '.|'.includes(before) && '.|,'.includes(after);
+  if (!(results || alone) || !events.some((event) => event.type === 'unit')) return null;
+  const place = { at: letters.at[i]!, end: letters.at[i]! + 1, sentence: letters.sentence[i]! };
+  return { ...place, type: 'number', n: Number(token.value), asTotal: 1.8, asItem: 0.5, asTimes: 0 };
 }
 
 function matchAt(letters: Letters, i: number): { event: Event | null; length: number } | null {
@@ -54,6 +73,7 @@ function numberEvent(letters: Letters, i: number): Event | null {
   let asTotal = 0;
   if (before === '=' || (before === 'w' && beforeThat === '=')) asTotal += WEAK_RESULT.test(letters.tokens[i - 1]!.text) ? 1.1 : 1.6;
   if (isAlone) asTotal += before === ',' ? 1 : 1.5;
+  if ('.|'.includes(before) && after === ',' && Number(token.value) > 7) asTotal += 1.1;
   if (after === 'G' || after === '=') asTotal += 1.2;
   if (after === 'E' || (after === 'w' && letters.text[i + 2] === 'E')) asTotal += 0.7;
   if (before === 'c') asTotal += 1.6;

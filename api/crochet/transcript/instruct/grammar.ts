@@ -43,7 +43,7 @@ export const RULES: readonly Rule[] = [
   // unlike stitches in one place
   { pattern: /N?S(?:[,&]+N?S)+[,&]?(?:E?o?I[XLOM]*N?[GZC]|E?T)/y, make: unlikeInOne },
   { pattern: /NI?V/y, make: (m) => unit(st(BARE, number(m))) },
-  { pattern: /VN(?![StTP])/y, make: (m) => unit(st(BARE, number(m))) },
+  { pattern: /V&N(?![StTP])/y, make: (m) => unit(st(BARE, number(m))) },
   // so many places, so many in each
   { pattern: /LN[GS],?N(?:E|A)/y, make: (m) => unit(st(BARE, number(m), number(m, 1))) },
   { pattern: /N[GS]gNE?/y, make: (m) => unit(st(BARE, number(m), number(m, 1))) },

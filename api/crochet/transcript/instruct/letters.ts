@@ -29,13 +29,15 @@ export function lettersOf(
   for (let i = from; i < to; i++) {
     const token = tokens[i]!;
     if (',.|'.includes(token.kind)) isReason = false;
-    if (/^(?:because|cause|although|unless)$/.test(token.text)) isReason = true;
+    if (sentences.isPunctuated && /^(?:because|cause|although|unless)$/.test(token.text)) isReason = true;
     const isManner = token.kind === 'F' && text.endsWith('N') && tokens[i + 1]?.kind === 'S';
     if (skipped(i) || isReason || isManner || DROPPED.has(token.kind)) continue;
     // "along the side" tells a place; "along" alone means to the end
     const isPlace =
       token.kind === 'A' && !token.text.includes(' ') && tokens[i + 1]?.kind === 'a' && 'wCGZS'.includes(tokens[i + 2]?.kind ?? '.');
-    const letter = isPlace ? 'w' : letterOf(token);
+    // "a row in single crochet," names the stitch and works none
+    const isMention = token.kind === 'S' && /^(?:in|of)$/.test(tokens[i - 1]?.text ?? '') && ',.|&'.includes(tokens[i + 1]?.kind ?? '.');
+    const letter = isPlace || isMention ? 'w' : letterOf(token);
     if (letter === '') continue;
     kept.push(token);
     at.push(i);

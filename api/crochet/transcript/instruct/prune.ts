@@ -71,15 +71,19 @@ const only = (event: Event | undefined): Unit | undefined =>
 
 /** A single slip stitch behind the work, alone in its sentence or clause, closes the round and is no stitch of it. */
 function withoutJoins(events: readonly Event[], tokens: readonly Token[]): readonly Event[] {
-  return events.filter((event, n) => {
+  return events.flatMap((event, n) => {
     const unit = only(event);
-    if (unit?.type !== 'stitch' || unit.stitch !== 'slst' || unit.times !== 1 || unit.inOne !== 1) return true;
-    if (event.type === 'unit' && event.fills) return true;
-    const earlier = events.slice(0, n).some((one) => one.type === 'unit');
-    const closes = tokens.slice(event.at, event.end + 2).some((token) => token.kind === 'O' || /^(?:to|join|close)$/.test(token.text));
-    if (earlier && closes) return false;
-    const same = events.slice(n + 1).filter((one) => one.sentence === event.sentence);
-    return !earlier || same.some((one) => one.type === 'unit' || one.type === 'around' || one.type === 'times');
+    if (event.type !== 'unit' || unit?.type !== 'stitch' || unit.stitch !== 'slst' || event.fills) return [event];
+    if (unit.times !== 1 || unit.inOne !== 1 || !events.slice(0, n).some((one) => one.type === 'unit')) return [event];
+    const closes = tokens
+      .slice(event.at, event.end + 2)
+      .some((token) => token.kind === 'O' || /^(?:to|join|close)$/.test(token.text));
+    if (closes) return [];
+    const goesOn = events
+      .slice(n + 1)
+      .some((one) => one.sentence === event.sentence && ['unit', 'around', 'times'].includes(one.type));
+    // the last of a list of stitches may still be one of them
+    return goesOn ? [event] : [{ ...event, options: [[], [unit]] }];
   });
 }
 

@@ -283,9 +283,9 @@ function buildPhrases(): ReadonlyMap<string, readonly Phrase[]> {
   const byFirst = new Map<string, Phrase[]>();
   for (const [kind, value, list] of TABLE) {
     for (const phrase of list.trim().split(/\s*,\s*/)) {
-      const words = phrase.split(' ');
+      const words = phrase.split(/\s+/);
       const entries = byFirst.get(words[0]!) ?? [];
-      if (!entries.some((one) => one.words.join(' ') === phrase)) entries.push({ words, kind, value });
+      if (!entries.some((one) => one.words.join(' ') === words.join(' '))) entries.push({ words, kind, value });
       byFirst.set(words[0]!, entries);
     }
   }
