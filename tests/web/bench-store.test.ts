@@ -78,16 +78,16 @@ function fakeServer(pattern: Pattern) {
   const rows = new Map<string, AnyRow>(
     [...pattern.lines, ...pattern.pieces].map((row) => [row.id, row as unknown as AnyRow]),
   );
-  rows.set(PATTERN, pattern as unknown as AnyRow);
+  rows.set(PATTERN, pattern);
   const sent: Pending[] = [];
-  let fails: (() => unknown)[] = [];
+  let fails: (() => Error)[] = [];
   const api: BenchApi = {
     read: () => Promise.resolve({ ...pattern, lastChange: 99 }),
     undo: () => Promise.resolve({ deedId: uuid(50), undoesDeedId: uuid(51), rows: [] }),
     write: (entry) => {
       sent.push(entry);
       const fail = fails.shift();
-      if (fail) return Promise.reject(fail() as Error);
+      if (fail) return Promise.reject(fail());
       const row = rows.get(entry.id);
       if (entry.op === 'create') {
         const made = { orderKey: 'z0', shortId: 'new', ...entry.fields, id: entry.id, version: 1 } as AnyRow;
@@ -111,7 +111,7 @@ function fakeServer(pattern: Pattern) {
   return {
     api,
     sent,
-    failNext: (...errors: (() => unknown)[]) => (fails = errors),
+    failNext: (...errors: (() => Error)[]) => (fails = errors),
     /** Somebody else saves. */
     saveElsewhere(id: string, fields: Record<string, unknown>) {
       const row = rows.get(id)!;

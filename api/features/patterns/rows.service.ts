@@ -119,6 +119,10 @@ export async function staleVersion(trx: Knex, row: Row, present: unknown): Promi
   });
 }
 
+/** A moment that a person moves is theirs from then on: no reading moves it again. */
+const byHand = (entity: RowEntity, fields: Fields): Fields =>
+  entity === 'mark' && ('startMs' in fields || 'endMs' in fields) ? { madeBy: 'person' } : {};
+
 /**
  * Saves a row if nobody saved it since `version`.
  * @throws AppError not-found | forbidden | gone | invalid | stale-version (with the present row)
@@ -134,7 +138,7 @@ export async function editRow(
     const { row, deed } = await openRow(trx, asking, entity, at.id, at.version);
     const fields = await fit(trx, entity, deed.patternId, asked, row);
     if (entity === 'mark') await keepOneMain(trx, deed, { ...row, ...fields });
-    const saved = await writeFields(trx, deed, entity, row, fields);
+    const saved = await writeFields(trx, deed, entity, row, { ...fields, ...byHand(entity, fields) });
     if (entity === 'line') await touchFields(trx, row.id, Object.keys(fields), deed.at);
     return { row: saved, deedId: deed.id };
   });

@@ -1,6 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import type { Knex } from 'knex';
 import type { Draft, DraftLine } from '#crochet';
+import type { Details } from '#contract/pattern-details';
 import { AppError } from '../../http/problem.ts';
 import { joinCautions } from './cautions.service.ts';
 import { record, writeFields, type Deed } from './deed.service.ts';
@@ -143,6 +144,15 @@ async function takeSuggestions({ trx, deed }: Taking, draft: Draft): Promise<voi
   await add('caution', suggestedCautions(draft.suggestions, cautions, brought));
 }
 
+/** What the speaker's words say of the pattern as a whole, where it is still empty. */
+async function takeHead(trx: Knex.Transaction, deed: Deed, draft: Draft): Promise<void> {
+  const row = (await findRow(trx, 'pattern', deed.patternId))!;
+  const details = row.details as Partial<Details>;
+  const gauge = draft.suggestions.find(({ kind }) => kind === 'gauge')?.text.slice(0, 300);
+  const heard = gauge !== undefined && !details.gauge ? { details: { ...details, gauge } } : {};
+  await writeFields(trx, deed, 'pattern', row, { terms: draft.terms, ...heard });
+}
+
 /**
  * Takes a reading into a pattern: pieces, lines with their moments and the words they were heard in, and what the
  * recording says of materials and cautions. What the pattern has already keeps its place and its ids; what a person has
@@ -154,10 +164,7 @@ export async function takeDraft(trx: Knex.Transaction, deed: Deed, readingId: st
   const source = await findSource(trx, readingId);
   if (!pattern || !source) throw new AppError('not-found');
   const lines = await listKnownLines(trx, pattern.id);
-  if (lines.length === 0) {
-    const row = (await findRow(trx, 'pattern', pattern.id)) as Row;
-    await writeFields(trx, deed, 'pattern', row, { terms: draft.terms });
-  }
+  if (lines.length === 0) await takeHead(trx, deed, draft);
   const many = draft.pieces.reduce((sum, piece) => sum + piece.lines.length, 0);
   const shortIds = newShortIds(await takenShortIds(trx, pattern.id), many);
   const taking: Taking = { trx, deed, source, shortIds };
