@@ -1,10 +1,10 @@
 import { createServer } from 'node:http';
 import { createApp } from './app.ts';
+import { startWorker } from './background.ts';
 import { EnvError, readEnv, type Env } from './env.ts';
 import { orderlyEnd } from './http/shutdown.ts';
 import { closeDeps, openDeps } from './platform/deps.ts';
 import { NewerDatabase, refuseNewer } from './platform/migrations.ts';
-import { startWorker } from './worker.ts';
 
 /** A request that is not answered by then has its connection closed; statements in the database end before. */
 const REQUEST_MS = 15_000;

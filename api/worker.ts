@@ -1,66 +1,24 @@
-import { pathToFileURL } from 'node:url';
+import { startWorker } from './background.ts';
 import { readEnv } from './env.ts';
-import { accountTasks } from './features/account/account.tasks.ts';
-import { recordingTasks } from './features/recordings/recordings.tasks.ts';
-import { sweepRequestKeys } from './http/idempotency.ts';
-import { sweepLimits } from './http/limits.ts';
-import { sweepSessions } from './http/session.ts';
-import { closeDeps, openDeps, type Deps } from './platform/deps.ts';
-import { startJobs, type JobRunner, type Tasks, type Timetable } from './platform/jobs.ts';
-import { mailTasks } from './platform/mail.ts';
-
-/** What is done in the background, by name. */
-export function allTasks(deps: Deps): Tasks {
-  return {
-    ...mailTasks(deps),
-    ...accountTasks(deps),
-    ...recordingTasks(deps),
-    'sweep-housekeeping': async () => {
-      const now = deps.clock.now();
-      await sweepSessions(deps.db, now);
-      await sweepLimits(deps.db, now);
-      await sweepRequestKeys(deps.db, now);
-    },
-  };
-}
-
-/** What is done by the clock. */
-export const TIMETABLE: Timetable = {
-  'sweep-housekeeping': '17 * * * *',
-  'sweep-tokens': '23 3 * * *',
-  'sweep-storage': '41 * * * *',
-};
-
-/** Works off jobs until stopped. */
-export function startWorker(deps: Deps): Promise<JobRunner> {
-  return startJobs({
-    databaseUrl: deps.env.database.url,
-    db: deps.db,
-    tasks: allTasks(deps),
-    timetable: TIMETABLE,
-    log: deps.log,
-  });
-}
+import { closeDeps, openDeps } from './platform/deps.ts';
 
 /** A process that does nothing but jobs; as many of them as are wanted. */
-async function main(): Promise<void> {
-  const deps = openDeps(readEnv());
-  const runner = await startWorker(deps);
-  deps.log.info('worker started');
-  let stopping = false;
-  const stop = () => {
-    if (stopping) return;
-    stopping = true;
-    void runner
-      .stop()
-      .then(() => closeDeps(deps))
-      .catch((err: unknown) => {
-        deps.log.error({ err }, 'the worker did not end in order');
-        process.exitCode = 1;
-      });
-  };
-  process.on('SIGTERM', stop);
-  process.on('SIGINT', stop);
+const deps = openDeps(readEnv());
+const runner = await startWorker(deps);
+deps.log.info('worker started');
+process.send?.('listening');
+
+async function end(): Promise<void> {
+  try {
+    await runner.stop();
+    await closeDeps(deps);
+  } catch (err) {
+    deps.log.error({ err }, 'the worker did not end in order');
+    process.exitCode = 1;
+  }
 }
 
-if (import.meta.url === pathToFileURL(process.argv[1] ?? '').href) await main();
+let ending: Promise<void> | undefined;
+const stop = () => void (ending ??= end());
+process.on('SIGTERM', stop);
+process.on('SIGINT', stop);

@@ -100,7 +100,7 @@ function targetOf(from: string, spec: string): string | undefined {
 
 const featureOf = (file: string) => file.split('/')[2];
 
-function isAllowedPackage(from: string, layer: string, { spec, typesOnly }: Import): boolean {
+function isAllowedPackage(layer: string, { spec, typesOnly }: Import): boolean {
   if (layer === 'api/crochet') return false;
   if (layer === 'api/contract') return spec === 'zod';
   const behindPlatform = PLATFORM_ONLY.test(spec) && !typesOnly;
@@ -129,7 +129,7 @@ function breach(from: string, each: Import): string | null {
   const layer = layerOf(from);
   if (layer === undefined) return null;
   const to = targetOf(from, each.spec);
-  const fits = to === undefined ? isAllowedPackage(from, layer, each) : isAllowedFile(from, layer, to, each);
+  const fits = to === undefined ? isAllowedPackage(layer, each) : isAllowedFile(from, layer, to, each);
   return fits ? null : `${from} -> ${each.spec}`;
 }
 

@@ -2,13 +2,13 @@ import { randomUUID } from 'node:crypto';
 import type { Express } from 'express';
 import { inject } from 'vitest';
 import { createApp, type AppOptions } from '../../api/app.ts';
+import { allTasks } from '../../api/background.ts';
 import { readEnv, type Env } from '../../api/env.ts';
 import { createSession, SESSION_COOKIE } from '../../api/http/session.ts';
 import type { Deps } from '../../api/platform/deps.ts';
 import { openLog } from '../../api/platform/log.ts';
 import { openMail } from '../../api/platform/mail.ts';
 import { openStorage } from '../../api/platform/storage.ts';
-import { allTasks } from '../../api/worker.ts';
 import { movableClock, type MovableClock } from './clock.ts';
 import { cloneDatabase, type ScratchDatabase } from './database.ts';
 
