@@ -28,5 +28,13 @@ export const inside = ({ icon, keys, children }: Look) => (
   </>
 );
 
+const SPOKEN_KEYS: Readonly<Record<string, string>> = {
+  Ctrl: 'Control',
+  '←': 'ArrowLeft',
+  '→': 'ArrowRight',
+  '↑': 'ArrowUp',
+  '↓': 'ArrowDown',
+};
+
 export const shortcuts = (keys?: readonly string[]) =>
-  keys ? { 'aria-keyshortcuts': keys.join('+').replace('Ctrl', 'Control') } : {};
+  keys ? { 'aria-keyshortcuts': keys.map((key) => SPOKEN_KEYS[key] ?? key).join('+') } : {};

@@ -8,7 +8,7 @@ export interface RingLine {
   /** Stitches of each of its rounds; null where they cannot be counted. A range has several. */
   readonly counts: readonly (number | null)[];
   readonly verdict: VerdictName;
-  /** One entry a stitch of one round: the places of the round before it stands on, and how many it makes. */
+  /** One entry a stitch of one round, in order: the places of the round before that it stands on. */
   readonly walk: readonly { readonly on: readonly number[]; readonly makes: number }[];
   readonly isDone: boolean;
 }
@@ -200,14 +200,12 @@ function stemsOf(line: RingLine, below: Worked, here: Worked, band: number, isOp
     m + Math.max(-spread / r, Math.min(spread / r, t - m));
   const arm = Math.min(0.5 * (here.span / here.n) * here.radius, 0.42 * band);
   let path = '';
-  let made = 0;
-  for (const { on, makes } of line.walk) {
-    const tops = Array.from({ length: makes }, (_, k) => middle(here, made + k));
+  for (const { on, from, to } of groupByFoot(line.walk)) {
+    const tops = Array.from({ length: to - from }, (_, k) => middle(here, from + k));
     const feet = on.filter((k) => k < below.n).map((k) => middle(below, k));
-    made += makes;
     const [first] = tops;
     const [foothold] = feet;
-    if (first === undefined || foothold === undefined || made > here.n) continue;
+    if (first === undefined || foothold === undefined || to > here.n) continue;
     if (tops.length > 1) {
       const m = tops.reduce((a, b) => a + b) / tops.length;
       const split = foot + (here.radius - foot) * 0.42;
@@ -222,4 +220,25 @@ function stemsOf(line: RingLine, below: Worked, here: Worked, band: number, isOp
     }
   }
   return path;
+}
+
+interface Grown {
+  readonly on: readonly number[];
+  /** Numbers of the stitches it makes, from and up to but without the last. */
+  readonly from: number;
+  to: number;
+}
+
+/** Stitches one after another on the same single place are one increase. */
+function groupByFoot(walk: RingLine['walk']): Grown[] {
+  const grown: Grown[] = [];
+  let made = 0;
+  for (const { on, makes } of walk) {
+    const last = grown.at(-1);
+    const isSame = last?.on.length === 1 && on.length === 1 && last.on[0] === on[0];
+    if (isSame) last.to += makes;
+    else grown.push({ on, from: made, to: made + makes });
+    made += makes;
+  }
+  return grown;
 }

@@ -1,5 +1,6 @@
 import { useSingleKeys } from '../../../lib/use-keys.ts';
 import { Dialog } from '../../../ui/dialog.tsx';
+import { KeyCap } from '../../../ui/key-cap.tsx';
 import { TickBox } from '../../../ui/field.tsx';
 
 type Row = readonly [keys: readonly string[], does: string];
@@ -58,9 +59,7 @@ function KeyList({ title, rows }: { title: string; rows: readonly Row[] }) {
           <div key={does} className="flex min-h-[27px] items-center gap-3 border-b border-feint">
             <dt className="flex w-36 flex-none gap-1">
               {keys.map((key) => (
-                <kbd key={key} className="key">
-                  {key}
-                </kbd>
+                <KeyCap key={key} name={key} />
               ))}
             </dt>
             <dd>{does}</dd>

@@ -7,13 +7,13 @@ export function Notices() {
   const { bench } = useDesk();
   if (bench.notices.length === 0) return null;
   return (
-    <ul role="status" className="border-b border-rule bg-sheet">
+    <div role="status" className="flex-none border-b border-rule bg-sheet">
       {bench.notices.map(({ id, words }) => (
-        <li key={id} className="bar flex items-center justify-between gap-3 py-1 pr-2 pl-5">
+        <p key={id} className="bar flex items-center justify-between gap-3 py-1 pr-2 pl-5">
           {words}
           <IconButton icon={X} label="Put this away" onClick={() => bench.dismissNotice(id)} />
-        </li>
+        </p>
       ))}
-    </ul>
+    </div>
   );
 }

@@ -43,7 +43,14 @@ export function TermsSwitch() {
       label="The lines are written in"
       value={pattern.terms}
       options={[
-        { value: 'US', label: 'US terms' },
+        {
+          value: 'US',
+          label: (
+            <>
+              US<span className="max-lg:sr-only"> terms</span>
+            </>
+          ),
+        },
         { value: 'UK', label: 'UK' },
       ]}
       onChange={(terms) => {

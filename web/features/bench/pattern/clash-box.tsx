@@ -61,7 +61,7 @@ function Side({
   const isLine = conflict.kind === 'line' && row !== null;
   return (
     <div className="flex flex-col border border-feint bg-field p-2.5">
-      <h4 className="label">{title}</h4>
+      <p className="label">{title}</p>
       {isLine && (
         <p className="wr mb-2 flex justify-between gap-3">
           <span className="min-w-0 break-words">{printValue(row.text)}</span>

@@ -56,11 +56,15 @@ export function PatternPanel() {
         Pattern
       </h2>
       <Tally />
+      {bench.conflicts.length > 0 && (
+        <div className="max-h-[45%] flex-none overflow-y-auto border-b border-rule">
+          {bench.conflicts.map((conflict) => (
+            <ClashBox key={conflict.id} conflict={conflict} />
+          ))}
+        </div>
+      )}
       <div ref={list} className="relative min-h-0 grow overflow-y-auto max-sm:overflow-visible">
         <ColumnHeads />
-        {bench.conflicts.map((conflict) => (
-          <ClashBox key={conflict.id} conflict={conflict} />
-        ))}
         <DndContext
           sensors={sensors}
           collisionDetection={closestCenter}
