@@ -8,7 +8,7 @@ import { record, writeFields, type Deed } from './deed.service.ts';
 import { matchLines, matchPiece, type MatchedLine } from './draft-match.ts';
 import { findSource, insertEvidence, listKnownLines, type KnownLine, type SourceOfDraft } from './draft.store.ts';
 import { hearAgain } from './draft-again.ts';
-import type { Fields, Row, RowEntity } from './entities.ts';
+import type { Fields, RowEntity } from './entities.ts';
 import { newShortIds } from './ids.ts';
 import { placeManyAfter } from './order.ts';
 import { setPatternState } from './patterns.service.ts';
