@@ -9,6 +9,8 @@ export interface ReadSoFar {
   readonly base: number | null;
   readonly loops: 'both' | 'back' | 'front';
   readonly said: number | null;
+  /** Whether the reading is uncertain, or stands on one that is. */
+  readonly isDoubtful: boolean;
   readonly verdict: 'agrees' | 'differs' | 'does-not-fit' | 'unread' | 'no-total';
 }
 

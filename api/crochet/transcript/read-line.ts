@@ -66,12 +66,14 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
     bases,
     stitch: stitchNamed(words, events) ?? before.stitch,
     chainCounts: chainRule(words) ?? before.chainCounts,
+    corner: cornerBefore(before, stitchNamed(words, events) ?? before.stitch),
+    isDoubtful: before.piece.at(-1)?.isDoubtful ?? false,
     copies: copiesFor(tokens, from, to, named, before.piece),
     mayLeave: LEAVING.test(words.map((token) => token.text).join(' ')),
     isPlain: isPlainLine(words, events, announced),
   };
   const choice = chooseWork(events, setting);
-  return result(choice, announced, bases, events, { loops, isRing });
+  return result(choice, announced, bases, events, { loops, isRing }, setting.isDoubtful);
 }
 
 /** Numbers that name lines and count nothing: `so that's 22 and 23`, `same as round 9`, `six in a ring, that's one`. */
@@ -94,6 +96,23 @@ function namesOfLines(tokens: readonly Token[], { announced, from, to }: Stretch
   return out;
 }
 
+/** The corner of an earlier line, in the stitch of this one. */
+function cornerBefore(before: Before, stitch: string): Unit | null {
+  for (const line of [...before.piece].reverse()) {
+    const parts = cornerIn(line.units);
+    if (parts !== null) return { type: 'oneplace', parts: parts.map((part) => (part === 'ch' ? part : stitch)), times: 1 };
+  }
+  return null;
+}
+
+function cornerIn(units: readonly Unit[]): readonly string[] | null {
+  for (const unit of units) {
+    const parts = unit.type === 'repeat' ? cornerIn(unit.units) : unit.type === 'oneplace' ? unit.parts : null;
+    if (parts?.includes('ch') === true) return parts;
+  }
+  return null;
+}
+
 const LEAVING = /\b(?:leave|leaving)\b.{0,12}\b(?:last|rest|alone|unworked|hat)\b|\bstop dead\b|\bjust the \w+\b|\bhalf the\b/;
 
 const FABRIC = new Set(['sc', 'hdc', 'dc', 'tr']);
@@ -105,6 +124,9 @@ function stitchNamed(words: readonly Token[], events: readonly Event[]): string 
   const slips = events.some((event) => event.type === 'unit' && event.fills && event.options[0]!.some((unit) => unit.type === 'stitch' && unit.stitch === 'slst'));
   return slips ? 'slst' : null;
 }
+
+/** A reading below this neither fits nor agrees. */
+const DOUBTFUL = 0;
 
 function isPlainLine(words: readonly Token[], events: readonly Event[], { from, to }: Announced): boolean {
   const plain = words.some(
@@ -203,12 +225,14 @@ function result(
   bases: readonly Base[],
   events: readonly Event[],
   rest: { loops: 'both' | 'back' | 'front'; isRing: boolean },
+  wasDoubtful: boolean,
 ): ReadLineResult {
   const { from, to } = announced;
   const heard = events.filter((event) => event.type === 'number').sort((a, b) => b.asTotal - a.asTotal)[0];
   if (choice === null) {
     const said = heard !== undefined && heard.asTotal >= 1.5 ? heard.n : null;
     return {
+      isDoubtful: true,
       ...rest,
       from,
       to,
@@ -231,7 +255,9 @@ function result(
         : choice.said === makes
           ? 'agrees'
           : 'differs';
+  const isDoubtful = verdict !== 'agrees' && (wasDoubtful || choice.fit === 'misfit' || verdict === 'differs' || choice.score < DOUBTFUL);
   return {
+    isDoubtful,
     ...rest,
     from,
     to,

@@ -175,6 +175,7 @@ function endOfLine(talk: Talk, from: number, to: number, silenceAfter: (token: T
 
 function foundation(many: number): ReadLineResult {
   return {
+    isDoubtful: false,
     from: null,
     to: null,
     units: chainUnits(many),

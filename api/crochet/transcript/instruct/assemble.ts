@@ -26,9 +26,10 @@ interface Partial {
 const MOST = 60;
 
 /** Puts phrases together in every likely way: which of them a repeat takes in, what stands in one place. */
-export function assemble(spoken: readonly Element[]): readonly Assembly[] {
+export function assemble(spoken: readonly Element[], knownCorner: Unit | null): readonly Assembly[] {
   const elements = gatherPlaces(spoken);
-  let partials: Partial[] = [{ nodes: [], closed: 0, corner: null, cost: 0 }];
+  const corner = cornerTold(elements) ?? knownCorner;
+  let partials: Partial[] = [{ nodes: [], closed: 0, corner, cost: 0 }];
   for (const element of elements) {
     const next = partials.flatMap((partial) => extend(partial, element));
     partials = next.sort((a, b) => a.cost - b.cost).slice(0, MOST);
@@ -128,19 +129,17 @@ function startsOf(nodes: readonly Node[], closed: number, sentence: number): { s
   return [...starts].map(([start, cost]) => ({ start, cost }));
 }
 
-/** Stitches and chains that were just said go into one place. */
+/** Stitches and chains that were just said go into one place: those around the last chain, else all of the sentence. */
 function gather(partial: Partial, sentence: number): Partial {
-  let start = partial.nodes.length;
-  while (
-    start > partial.closed &&
-    partial.nodes[start - 1]!.sentence === sentence &&
-    isSimple(partial.nodes[start - 1]!.unit)
-  )
-    start -= 1;
-  const units = partial.nodes.slice(start).map((node) => node.unit);
-  const one = onePlace(units);
+  const { nodes, closed } = partial;
+  let start = nodes.length;
+  while (start > closed && nodes[start - 1]!.sentence === sentence && isSimple(nodes[start - 1]!.unit)) start -= 1;
+  const aroundChain = nodes.length - start > 3 && nodes.at(-2)!.unit.type === 'chain';
+  if (aroundChain) start = nodes.length - 3;
+  if (nodes.length - start > 4) return partial;
+  const one = onePlace(nodes.slice(start).map((node) => node.unit));
   if (one === null) return partial;
-  return { ...partial, nodes: [...partial.nodes.slice(0, start), { unit: one, sentence }] };
+  return { ...partial, nodes: [...nodes.slice(0, start), { unit: one, sentence }] };
 }
 
 /** What is said right after a place was named stands in it: stitches, a chain and stitches become one unit. */
@@ -148,6 +147,12 @@ function gatherPlaces(elements: readonly Element[]): readonly Element[] {
   const out: Element[] = [];
   for (let n = 0; n < elements.length; n++) {
     const element = elements[n]!;
+    const ahead = element.type === 'oneplace' ? allAfter(elements, n) : null;
+    if (ahead !== null) {
+      out.push({ ...ahead.unit, sentence: element.sentence, at: element.at });
+      n += ahead.length;
+      continue;
+    }
     const one = element.type === 'corner' || element.type === 'here' ? placeAfter(elements, n) : null;
     if (one === null) {
       out.push(element);
@@ -155,11 +160,30 @@ function gatherPlaces(elements: readonly Element[]): readonly Element[] {
     }
     const run = elements.slice(n + 1, n + 4);
     const apart = run.flatMap((each) => (each.type === 'unit' ? each.options[0]! : []));
-    const options = element.type === 'corner' ? [[one]] : [[one], apart];
+    const options = element.type === 'corner' ? [[one], []] : [[one], apart];
     out.push({ ...run[0]!, type: 'unit', options, fills: false, reaches: false, same: false });
     n += 3;
   }
   return out;
+}
+
+type UnitElement = Extract<Element, { type: 'unit' }>;
+
+/** `All in one stitch: chain two, two double crochets, chain two, slip stitch`: the rest of the sentence. */
+function allAfter(elements: readonly Element[], n: number): { unit: UnitElement; length: number } | null {
+  const { sentence } = elements[n]!;
+  if (elements.slice(0, n).some((one) => one.sentence === sentence && one.type === 'unit')) return null;
+  const run: Unit[] = [];
+  let length = 0;
+  for (const element of elements.slice(n + 1)) {
+    if (element.type !== 'unit' || element.sentence !== sentence || element.fills) break;
+    run.push(...(element.options.at(-1) ?? []));
+    length += 1;
+  }
+  const one = run.every(isSimple) ? onePlace(run) : null;
+  if (one === null) return null;
+  const unit: UnitElement = { type: 'unit', sentence, at: elements[n]!.at, options: [[one]], fills: false, reaches: false, same: false };
+  return { unit, length };
 }
 
 function placeAfter(elements: readonly Element[], n: number): Unit | null {
@@ -170,13 +194,21 @@ function placeAfter(elements: readonly Element[], n: number): Unit | null {
   return isPlace && run.every(isSimple) ? onePlace(run) : null;
 }
 
+function cornerTold(elements: readonly Element[]): Unit | null {
+  for (const element of elements) {
+    const unit = element.type === 'unit' ? element.options[0]?.[0] : undefined;
+    if (unit?.type === 'oneplace' && unit.parts.includes('ch')) return unit;
+  }
+  return null;
+}
+
 /** A corner named alone is the corner told before, once more. */
 function corner(partial: Partial, sentence: number): Partial[] {
-  const known = partial.nodes.find(({ unit }) => unit.type === 'oneplace')?.unit ?? partial.corner;
+  const known = partial.corner;
   if (known === null) return [partial];
   return [
     { ...partial, nodes: [...partial.nodes, { unit: known, sentence }] },
-    { ...partial, cost: partial.cost + 0.5 },
+    { ...partial, cost: partial.cost + 0.6 },
   ];
 }
 

@@ -11,6 +11,10 @@ export interface Setting {
   readonly bases: readonly Base[];
   readonly stitch: string;
   readonly chainCounts: boolean | null;
+  /** What a corner was before, in the stitch in hand. */
+  readonly corner: Unit | null;
+  /** Whether what stands before is itself doubtful, so that a total that agrees outweighs it. */
+  readonly isDoubtful: boolean;
   /** Works of other lines that this one may be a copy of, with what speaks against it. */
   readonly copies: readonly { readonly units: readonly Unit[]; readonly cost: number }[];
   /** Whether places are left on purpose. */
@@ -45,7 +49,7 @@ export function chooseWork(events: readonly Event[], setting: Setting): Choice |
     for (const casting of castNumbers(kept)) {
       const idle = [...casting.idle, ...later];
       for (const elements of startingChains(casting.elements, setting.chainCounts)) {
-        for (const assembly of assemble(elements.elements)) {
+        for (const assembly of assemble(elements.elements, setting.corner)) {
           const before = casting.cost + cost + elements.cost + assembly.cost;
           if (assembly.units.length > 0)
             weigh(assembly.units, before, idle, setting, !hasTimes && isRepeatable(elements.elements), choices);
@@ -109,10 +113,12 @@ function weigh(
   for (const resolved of resolve(settled, setting.bases, totals, { mayImply, mayLeave: setting.mayLeave })) {
     const { makes } = sumOf(resolved.units);
     const said = saidTotal(idle, makes);
-    const fit = resolved.fit === 'fits' ? FIT_GAIN : resolved.fit === 'unknown' ? 1 : 0;
-    const agrees = said === makes ? saidGain(idle, makes, resolved.fit === 'misfit') : 0;
+    const isSoft = resolved.fit === 'misfit' && setting.isDoubtful && said === makes;
+    const fits = isSoft ? 'unknown' : resolved.fit;
+    const fit = fits === 'fits' ? FIT_GAIN : fits === 'unknown' ? 1 : 0;
+    const agrees = said === makes ? saidGain(idle, makes, fits === 'misfit') : 0;
     const score = fit + agrees - cost - resolved.cost;
-    choices.push({ units: resolved.units, said, fit: resolved.fit, base: resolved.base, score, lead: 0 });
+    choices.push({ units: resolved.units, said, fit: fits, base: resolved.base, score, lead: 0 });
   }
 }
 

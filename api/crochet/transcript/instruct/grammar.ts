@@ -40,8 +40,15 @@ export const RULES: readonly Rule[] = [
   // shaping that is only spoken of
   { pattern: /[LbnE]P/y, make: (m) => (isPlural(m[1]) ? nothing : null) },
   { pattern: /n[PD]/y, make: () => nothing },
+  { pattern: /pNIN[p=]NIN/y, make: () => nothing },
+  { pattern: /NC=S/y, make: (m) => unit({ type: 'chain', many: number(m) }) },
+  { pattern: /CN=S/y, make: (m) => unit({ type: 'chain', many: number(m) }) },
+  // so many between the shapings
+  { pattern: /NS?bP/y, make: (m) => unit(st(stitch(m), number(m)), st(BARE, 1, 2)) },
+  { pattern: /NS?bD/y, make: (m) => unit(st(stitch(m), number(m)), tog(BARE, 2)) },
+  { pattern: /N[GS]I?[wo]{0,2}&?E[GZ]?gN?S/y, make: (m) => unit(st(stitch(m), number(m))) },
   // unlike stitches in one place
-  { pattern: /N?S(?:[,&]+N?S)+[,&]?(?:E?o?I[XLOM]*N?[GZC]|E?T)/y, make: unlikeInOne },
+  { pattern: /N?S(?:[,&]*N?S)+[,&]?(?:E?o?I[XLOM]*N?[GZC]|E?T)/y, make: unlikeInOne },
   { pattern: /NI?V/y, make: (m) => unit(st(BARE, number(m))) },
   { pattern: /V&N(?![StTP])/y, make: (m) => unit(st(BARE, number(m))) },
   // so many places, so many in each

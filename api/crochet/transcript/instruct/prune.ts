@@ -88,8 +88,19 @@ function withoutJoins(events: readonly Event[], tokens: readonly Token[]): reado
 }
 
 /** A chain of one in a line without spaces only turns or lifts the work. */
+const UNCOUNTED =
+  /^(?:(?!\bsc\b).){0,40}?\b(?:(?:not|never|nobody|don't|doesn't|isn't|no)\b.{0,20}\b(?:count|counts|counted|stitch|anything)|uncounted|does nothing|is nothing|to begin|to start|to turn|and turn)\b/;
+
+function isUncounted(tokens: readonly Token[], event: Event): boolean {
+  const unit = only(event);
+  if (unit?.type !== 'chain' || unit.many > 4) return false;
+  const after = tokens.slice(event.end, event.end + 9);
+  const stop = after.findIndex((token) => token.kind === '.' || token.kind === 'S');
+  return UNCOUNTED.test((stop < 0 ? after : after.slice(0, stop)).map((token) => token.text).join(' '));
+}
+
 function withoutTurning(spoken: readonly Event[], tokens: readonly Token[]): readonly Event[] {
-  const events = withoutFirstSkip(spoken, tokens);
+  const events = withoutHeading(withoutFirstSkip(spoken, tokens)).filter((event) => !isUncounted(tokens, event));
   const firstUnit = events.findIndex((event) => event.type === 'unit');
   const hasSpaces = events.some(
     (event) => only(event)?.type === 'skip' || ['corner', 'oneplace', 'here'].includes(event.type),
@@ -99,6 +110,16 @@ function withoutTurning(spoken: readonly Event[], tokens: readonly Token[]): rea
     const unit = only(event);
     return unit?.type !== 'chain' || !(unit.many === 1 || (unit.many < 5 && n > firstUnit));
   });
+}
+
+/** `Round five is single crochet. In the corner …`: the stitch as a heading, worked only in what follows. */
+function withoutHeading(events: readonly Event[]): readonly Event[] {
+  const [first, ...rest] = events;
+  const unit = first === undefined ? undefined : only(first);
+  if (first?.type !== 'unit' || first.fills || unit?.type !== 'stitch' || unit.times !== 1 || unit.inOne !== 1) return events;
+  const inSentence = rest.filter((event) => event.sentence === first.sentence && event.type !== 'plain');
+  const isHeading = inSentence.every((event) => only(event)?.type === 'chain') && rest.some((event) => event.type === 'unit' && event.sentence !== first.sentence);
+  return isHeading ? rest : events;
 }
 
 /** `skip one chain` before any stitch only says where the first goes. */
@@ -111,7 +132,8 @@ function withoutFirstSkip(events: readonly Event[], tokens: readonly Token[]): r
 }
 
 /** `three half trebles in one stitch, …, three half trebles`: said short the second time. */
-function withEchoes(events: readonly Event[]): readonly Event[] {
+function withEchoes(spoken: readonly Event[]): readonly Event[] {
+  const events = withGroupEchoes(spoken);
   const inOnes: Unit[] = [];
   return events.map((event) => {
     const unit = only(event);
@@ -131,4 +153,35 @@ function meshes(events: readonly Event[]): readonly Event[] {
   return events.map((event) =>
     event.type === 'unit' && event.fills && skips.includes(event.sentence) ? { ...event, fills: false } : event,
   );
+}
+
+/** `half double, double, half double` said again without `all in one stitch`: the same group in one place. */
+function withGroupEchoes(events: readonly Event[]): readonly Event[] {
+  const out: Event[] = [];
+  let known: { unit: Unit; parts: readonly string[] } | null = null;
+  for (let n = 0; n < events.length; n++) {
+    const event = events[n]!;
+    const unit = only(event);
+    if (unit?.type === 'oneplace') known = { unit, parts: unit.parts };
+    const many: number = known === null ? 0 : echoLength(events, n, known.parts);
+    if (known === null || many === 0 || event.type !== 'unit') {
+      out.push(event);
+      continue;
+    }
+    out.push({ ...event, options: [[known.unit]], end: events[n + many - 1]!.end });
+    n += many - 1;
+  }
+  return out;
+}
+
+function echoLength(events: readonly Event[], from: number, parts: readonly string[]): number {
+  const said: string[] = [];
+  for (let n = from; n < events.length && said.length < parts.length; n++) {
+    const unit = only(events[n]);
+    if (unit?.type === 'stitch' && unit.inOne === 1 && unit.times < 6) said.push(...new Array<string>(unit.times).fill(unit.stitch));
+    else if (unit?.type === 'chain' && unit.many < 6) said.push(...new Array<string>(unit.many).fill('ch'));
+    else return 0;
+    if (said.length === parts.length && said.every((part, k) => part === parts[k])) return n - from + 1;
+  }
+  return 0;
 }

@@ -34,7 +34,7 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
     skip, skips, skipping, miss, missing, misses, pass over, jump over, hop over, leave out, passing
     over, ignore`,
   ],
-  ['P', 0, `increase, increases, inc, double it, double them, double those up, double up, double that, incs, increasing`],
+  ['P', 0, `increase, increases, inc, double it, double them, double those up, double up, double that, a pair, incs, increasing`],
   [
     'D',
     0,
@@ -109,7 +109,7 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
     'o',
     0,
     `
-    of those, of them, of these, of that, of em, such pairs, such, pairs, of each, of those pairs, of them
+    each side, each edge, per side, per edge, every side, every edge, edges, of those, of them, of these, of that, of em, such pairs, such, pairs, of each, of those pairs, of them
     pairs, sides, corners in all`,
   ],
   [
@@ -255,7 +255,7 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
     '~',
     0,
     `
-    okay, ok, so, now, um, uh, er, erm, right, alright, all right, well, like, just, simply, really, literally,
+    a pair of, okay, ok, so, now, um, uh, er, erm, right, alright, all right, well, like, just, simply, really, literally,
     kind of, kinda, sort of, basically, honestly, actually, obviously, you know, i guess, only, please, gonna,
     going, also, always, hmm, oh, ah, yeah, yes, love, my love, folks, everyone, everybody here, baby, sugar,
     only, too, still, once, very, quite, exactly, simply, here, there, back, righto, um so, i think, i believe,
