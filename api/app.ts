@@ -1,8 +1,11 @@
 import express, { Router, type Express, type Request } from 'express';
 import { accountRoutes } from './features/account/account.routes.ts';
+import { editionRoutes } from './features/editions/editions.routes.ts';
 import { patternRoutes } from './features/patterns/patterns.routes.ts';
 import { recordingRoutes } from './features/recordings/recordings.routes.ts';
+import { sheetRoutes } from './features/sheet/sheet.routes.ts';
 import { studioRoutes } from './features/studios/studios.routes.ts';
+import { watchPages } from './features/watch/watch.routes.ts';
 import { noStore, securityHeaders } from './http/headers.ts';
 import { healthRoutes, type Readiness } from './http/health.ts';
 import { limit, READS, WRITES } from './http/limits.ts';
@@ -16,7 +19,11 @@ import type { Deps } from './platform/deps.ts';
 /** What is sent as JSON; files come as forms, with limits of their own. */
 const JSON_LIMIT = '1mb';
 /** Parts and ranges of a clip are bounded by what is open and by bytes, not by calls a minute. */
-const UNCOUNTED: readonly RegExp[] = [/^PUT \/uploads\/[^/]+\/parts\/\d+$/, /^(?:GET|HEAD) \/recordings\/[^/]+\/clip$/];
+const UNCOUNTED: readonly RegExp[] = [
+  /^PUT \/uploads\/[^/]+\/parts\/\d+$/,
+  /^(?:GET|HEAD) \/recordings\/[^/]+\/clip$/,
+  /^(?:GET|HEAD) \/editions\/[^/]+\/\d+\/clips\/\d+$/,
+];
 
 const personIdOf = (req: Request) => sessionOf(req)?.person.id;
 
@@ -38,6 +45,7 @@ function apiRoutes(deps: Deps): Router {
   const router = Router();
   router.use(noStore, sameOrigin(deps), readSession(deps), countedCalls(deps), express.json({ limit: JSON_LIMIT }));
   router.use(accountRoutes(deps), studioRoutes(deps), patternRoutes(deps), recordingRoutes(deps));
+  router.use(editionRoutes(deps), sheetRoutes(deps));
   router.use(noRoute, problemHandler(deps, personIdOf));
   return router;
 }
@@ -58,6 +66,7 @@ export function createApp(deps: Deps, options: AppOptions = {}): Express {
   app.use(requestId, accessLog(deps, personIdOf), securityHeaders({ vite: deps.env.web === 'vite' }));
   app.use(healthRoutes(deps, options.readiness ?? { accepting: true }));
   app.use('/api', apiRoutes(deps));
+  app.use(watchPages(deps, options.webDir));
   app.use(webPages(options.webDir));
   app.use(problemHandler(deps, personIdOf));
   return app;

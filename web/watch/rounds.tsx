@@ -7,7 +7,13 @@ import { useWatch } from './use-watch.ts';
 /** The whole piece in rows with boxes: to see what is done, to tick, and to go anywhere. */
 export function Rounds() {
   const { edition } = useWatch();
-  return edition.pieces.map((piece) => <PieceRounds key={piece.id} piece={piece} />);
+  return (
+    <div id="all-lines">
+      {edition.pieces.map((piece) => (
+        <PieceRounds key={piece.id} piece={piece} />
+      ))}
+    </div>
+  );
 }
 
 function PieceRounds({ piece }: { piece: PublicPiece }) {

@@ -1,5 +1,6 @@
 import type { LineCount, PieceCount } from '../count/result.ts';
-import { abbreviationsUsed, countPattern } from '../index.ts';
+import { countPattern } from '../count/pattern.ts';
+import { abbreviationsUsed } from '../language/abbreviations.ts';
 import { buildLine, inBothTerms } from './build-line.ts';
 import { cautionTitle, DEFERRAL } from './cautions.ts';
 import { SCHEMA_VERSION, type EditionDocument, type EditionPiece } from './document.ts';

@@ -1,7 +1,8 @@
 import type { LineCount } from '../count/result.ts';
 import type { Totals } from '../language/tree.ts';
 import type { Terms } from '../span.ts';
-import { printTotals, translate } from '../index.ts';
+import { printTotals } from '../language/totals-text.ts';
+import { translate } from '../language/translate.ts';
 import type { BothTerms, EditionLine, EditionPiece } from './document.ts';
 import { lineLabel } from './line-label.ts';
 import { repeatsOf } from './repeats.ts';

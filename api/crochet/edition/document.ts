@@ -131,7 +131,7 @@ export interface Erratum {
   readonly why: string;
 }
 
-export interface Abbreviation {
+export interface EditionAbbreviation {
   readonly abbreviation: BothTerms;
   readonly name: BothTerms;
 }
@@ -154,7 +154,7 @@ export interface EditionDocument {
   readonly sizes: readonly string[];
   readonly details: EditionDetails;
   readonly materials: readonly EditionMaterial[];
-  readonly abbreviations: readonly Abbreviation[];
+  readonly abbreviations: readonly EditionAbbreviation[];
   readonly specialStitches: readonly {
     readonly name: string;
     readonly abbreviation: string;

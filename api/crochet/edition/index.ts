@@ -1,4 +1,5 @@
 export { blocksOf, type Block } from './blocks.ts';
+export { buildEdition, ENGINE_VERSION } from './build-edition.ts';
 export { differenceOf, type Difference } from './difference.ts';
 export type * from './document.ts';
 export { roundsOf } from './line-label.ts';

@@ -53,14 +53,14 @@ export function editionRoutes(deps: Deps): Router {
 
   router.get('/editions/:code/:number/clips/:recording', async (req, res) => {
     const who = sessionOf(req)?.person ?? null;
-    const seen = await openEdition(db, who, String(req.params.code), numberIn(req));
+    const seen = await openEdition(db, who, req.params.code, numberIn(req));
     const recordingId = await recordingOf(db, seen, numberIn(req, 'recording'));
     await sendClip(deps, await findRecordingClip(db, recordingId), req, res);
   });
 
   router.get('/editions/:code/:number/captions/:recording', async (req, res) => {
     const who = sessionOf(req)?.person ?? null;
-    const seen = await openEdition(db, who, String(req.params.code), numberIn(req));
+    const seen = await openEdition(db, who, req.params.code, numberIn(req));
     const file = captionFile(seen.edition, numberIn(req, 'recording'));
     res.type('text/vtt; charset=utf-8').set('Cache-Control', 'private, no-cache').send(file);
   });

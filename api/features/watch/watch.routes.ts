@@ -9,7 +9,7 @@ import { pageAssets } from './page-assets.ts';
 import { nothingHere, trouble, watchPage } from './watch-page.ts';
 
 /** Failures of a page are pages: the same one for everything that is not there or not shared. */
-function pageProblems(deps: Deps): ErrorRequestHandler {
+function pageProblems(deps: Deps, webDir?: string): ErrorRequestHandler {
   return (err: unknown, req, res, next) => {
     if (res.headersSent) {
       next(err);
@@ -20,12 +20,12 @@ function pageProblems(deps: Deps): ErrorRequestHandler {
     const { retryAfter } = problem.extra;
     if (typeof retryAfter === 'number') res.set('Retry-After', String(retryAfter));
     res.status(problem.status).type('html').set('Cache-Control', 'no-store');
-    res.send(problem.status === 404 ? nothingHere(pageAssets(deps.env.web)) : trouble());
+    res.send(problem.status === 404 ? nothingHere(pageAssets(deps.env.web, webDir)) : trouble());
   };
 }
 
 /** The public pages under /w: a pattern's current edition, and each edition at its own address. */
-export function watchPages(deps: Deps): Router {
+export function watchPages(deps: Deps, webDir?: string): Router {
   const { db, env } = deps;
   const router = Router();
   router.use('/w', readSession(deps), limit(deps, READS));
@@ -42,7 +42,7 @@ export function watchPages(deps: Deps): Router {
       path,
       isListed: seen.visibility === 'listed' && !seen.isWithdrawn && (number === null || number === seen.currentNumber),
       withdrawnReason: seen.isWithdrawn ? (seen.withdrawnReason ?? '') : null,
-      assets: pageAssets(env.web),
+      assets: pageAssets(env.web, webDir),
     });
     return { page, keeping: seen.visibility === 'private' ? 'private, no-store' : 'private, no-cache' };
   };
@@ -57,6 +57,6 @@ export function watchPages(deps: Deps): Router {
     res.type('html').set('Cache-Control', keeping).send(page);
   });
 
-  router.use('/w', pageProblems(deps));
+  router.use('/w', pageProblems(deps, webDir));
   return router;
 }
