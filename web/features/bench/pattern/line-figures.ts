@@ -41,5 +41,5 @@ export function spokenLine(line: Line, count: LineCount | undefined, follows: st
   parts.push(...say('said', count.said), ...say('written', count.written));
   if (count.count !== null) parts.push(`worked out ${count.count}`);
   parts.push(count.message ?? (follows ? `follows ${follows}` : VERDICT_WORDS[count.verdict]));
-  return parts.join(', ').replaceAll('×', ' times ');
+  return parts.join(', ').replace(/\s*×\s*/g, ' times ');
 }

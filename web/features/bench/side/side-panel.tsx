@@ -13,7 +13,7 @@ export function SidePanel({ clip }: { clip: ReactNode }) {
   const [chosen, setChosen] = useState<{ pieceId: string; atLine: string | null } | null>(null);
   // The drawing follows the line in hand; another piece chosen here stays until the hand goes on.
   const ofLine = lineOf(desk, desk.lineId)?.pieceId;
-  const wanted = chosen && chosen.atLine === desk.lineId ? chosen.pieceId : ofLine;
+  const wanted = chosen?.atLine === desk.lineId ? chosen.pieceId : ofLine;
   const piece = pattern.pieces.find((one) => one.id === wanted) ?? pattern.pieces[0];
   return (
     <aside
