@@ -98,7 +98,7 @@ function namesOfLines(tokens: readonly Token[], { announced, from, to }: Stretch
 
 /** The corner of an earlier line, in the stitch of this one. */
 function cornerBefore(before: Before, stitch: string): Unit | null {
-  for (const line of [...before.piece].reverse()) {
+  for (const line of [...before.all.flat(), ...before.piece].reverse()) {
     const parts = cornerIn(line.units);
     if (parts !== null) return { type: 'oneplace', parts: parts.map((part) => (part === 'ch' ? part : stitch)), times: 1 };
   }

@@ -25,9 +25,14 @@ export function linesNamed(tokens: readonly Token[], from: number, to: number, b
   return [...new Set(out)];
 }
 
+const textBefore = (tokens: readonly Token[], i: number): string =>
+  `${tokens.slice(Math.max(0, i - 3), i).map((token) => token.text).join(' ')} `;
+
 function ordinalNamed(tokens: readonly Token[], i: number): { from: number; to: number; end: number } | null {
   if (tokens[i]!.kind === 'N') {
     const list = readNumberList(tokens, i, true, true);
+    const asNamed = list !== null && /\b(?:same as|like) $/.test(textBefore(tokens, i)) && '.,|'.includes(tokens[list.end]?.kind ?? '.');
+    if (asNamed) return list;
     return list !== null && /^(?:did|was|were)$/.test(tokens[list.end]?.text ?? '') ? list : null;
   }
   if (tokens[i]!.kind !== 'O' || tokens[i + 1]?.kind !== 'U') return null;
@@ -36,7 +41,7 @@ function ordinalNamed(tokens: readonly Token[], i: number): { from: number; to: 
 }
 
 const SAME =
-  /\b(?:same|again|copy|just like|repeat|repetition|like that|likewise|once more|one more time|ditto|the lap you just did|is like it|do it over|is that with|is that but)\b/;
+  /\b(?:more (?:plain )?between|same|again|copy|just like|repeat|repetition|like that|likewise|once more|one more time|ditto|the lap you just did|is like it|do it over|is that with|is that but)\b/;
 
 /** Works that the line may copy: the lines it names, or the one before where it says "the same". */
 export function copiesFor(

@@ -138,7 +138,9 @@ function numberToken(
 ): Found | null {
   const text = texts[at]!;
   if (NO_NUMBER.test(texts.slice(at, at + 3).join(' '))) return null;
-  if (text === 'one' && isPronoun(before.at(-1))) return { token: plain('a', 0, text), length: 1 };
+  if (text === 'one' && isPronoun(before.at(-1))) {
+    return { token: before.at(-2)?.kind === 'I' ? plain('G', 'st', text) : plain('a', 0, text), length: 1 };
+  }
   const spoken = readNumber(texts, at, joined) ?? soundsLikeNumber(atoms, texts, at, before, misheard);
   if (spoken === null) return null;
   // "a hundred": the article belongs to the number, and nothing else begins with one.

@@ -24,6 +24,7 @@ interface Partial {
 }
 
 const MOST = 60;
+const PLAIN: Unit = { type: 'stitch', stitch: BARE, inOne: 1, times: 1 };
 
 /** Puts phrases together in every likely way: which of them a repeat takes in, what stands in one place. */
 export function assemble(spoken: readonly Element[], knownCorner: Unit | null): readonly Assembly[] {
@@ -56,7 +57,7 @@ function extend(partial: Partial, element: Element): Partial[] {
     case 'around':
       return repeat(partial, 0, sentence);
     case 'again':
-      return [partial, ...twice(partial)];
+      return [partial, ...again(partial, sentence)];
     case 'oneplace':
       return [gather(partial, sentence)];
     case 'corner':
@@ -105,12 +106,10 @@ function repeat(partial: Partial, times: number, sentence: number): Partial[] {
   });
 }
 
-/** `and that whole lot over again`: everything so far, twice. */
-function twice(partial: Partial): Partial[] {
-  if (partial.nodes.length < 2) return [];
-  const units = partial.nodes.map((node) => node.unit);
-  const whole: Node = { unit: { type: 'repeat', units, times: 2 }, sentence: partial.nodes[0]!.sentence };
-  return [{ ...partial, nodes: [whole], closed: 1, cost: partial.cost + 0.8 }];
+/** `and that again`, `that whole lot over again`: the group just said, twice, or only a way of going on. */
+function again(partial: Partial, sentence: number): Partial[] {
+  if (partial.nodes.length < 2 || partial.closed >= partial.nodes.length) return [];
+  return repeat(partial, 2, sentence).map((one) => ({ ...one, cost: one.cost + 0.7 }));
 }
 
 function startsOf(nodes: readonly Node[], closed: number, sentence: number): { start: number; cost: number }[] {
@@ -125,7 +124,9 @@ function startsOf(nodes: readonly Node[], closed: number, sentence: number): { s
     if (n > 0 && n > closed && node.sentence !== nodes[n - 1]!.sentence) add(n, 0.6);
   });
   add(0, 0.9);
-  for (let n = closed; n < nodes.length && starts.size < 9; n++) add(n, 1.3);
+  // without full stops a group may begin anywhere; with them hardly inside a sentence
+  const isOneSentence = nodes.every((node) => node.sentence === sentence);
+  for (let n = closed; n < nodes.length && starts.size < 9; n++) add(n, isOneSentence ? 1.1 : 2.4);
   return [...starts].map(([start, cost]) => ({ start, cost }));
 }
 
@@ -147,6 +148,11 @@ function gatherPlaces(elements: readonly Element[]): readonly Element[] {
   const out: Element[] = [];
   for (let n = 0; n < elements.length; n++) {
     const element = elements[n]!;
+    const besideCorner = elements[n - 1]?.type === 'corner' || elements[n + 1]?.type === 'corner';
+    if (element.type === 'plain' && besideCorner) {
+      out.push({ ...element, type: 'unit', options: [[PLAIN], []], fills: false, reaches: false, same: false });
+      continue;
+    }
     const ahead = element.type === 'oneplace' ? allAfter(elements, n) : null;
     if (ahead !== null) {
       out.push({ ...ahead.unit, sentence: element.sentence, at: element.at });

@@ -31,7 +31,8 @@ function statedTotal(letters: Letters, i: number, events: readonly Event[]): Eve
   if (token.kind !== 'N' || letters.text[i + 1] !== 'S' || Number(token.value) < 8) return null;
   const before = letters.text[i - 1] ?? '.';
   const after = letters.text[i + 2] ?? '.';
-  const results = before === '=' && !WEAK_RESULT.test(letters.tokens[i - 1]!.text) && !/[IE]/.test(after);
+  const isWeak = before === '=' && WEAK_RESULT.test(letters.tokens[i - 1]!.text);
+  const results = before === '=' && (isWeak ? Number(token.value) > 19 && '.|,'.includes(after) : !/[IE]/.test(after));
   const alone = '.|'.includes(before) && '.|,'.includes(after);
   if (!(results || alone) || !events.some((event) => event.type === 'unit')) return null;
   const place = { at: letters.at[i]!, end: letters.at[i]! + 1, sentence: letters.sentence[i]! };
@@ -83,9 +84,11 @@ function numberEvent(letters: Letters, i: number): Event | null {
   if (token.isGuess) asTotal -= 1;
   const isThing = after === 'w';
   const closes = isThing && /[,.&|F]/.test(letters.text[i + 2] ?? '.');
+  if (after === 'U') asTotal -= 3;
   const asItem =
-    ('&,.|~pwFmYIg'.includes(before) ? 0.6 : 0) +
-    ('&,F.R'.includes(after) ? 0.6 : 0) +
+    (after === 'U' ? -2 : 0) +
+    ('&,.|~pwFmYIgNTDP'.includes(before) ? 0.6 : 0) +
+    ('&,F.RNTDP'.includes(after) ? 0.6 : 0) +
     (isThing ? (closes ? 0.4 : -0.2) - (token.value === 1 ? 0.3 : 0) : 0) -
     (before === '=' ? 0.5 : 0) -
     (after === 'G' ? 0.2 : 0);

@@ -47,6 +47,16 @@ export const RULES: readonly Rule[] = [
   { pattern: /NS?bP/y, make: (m) => unit(st(stitch(m), number(m)), st(BARE, 1, 2)) },
   { pattern: /NS?bD/y, make: (m) => unit(st(stitch(m), number(m)), tog(BARE, 2)) },
   { pattern: /N[GS]I?[wo]{0,2}&?E[GZ]?gN?S/y, make: (m) => unit(st(stitch(m), number(m))) },
+  // corners
+  { pattern: /N?S[,&]*(?:CN|NC)[,&]*E?N?S[,&]*E?o?I[XLOME]*N?[ZG]/y, make: aroundChain },
+  { pattern: /IEZ(?=N?S[,&]*[CN])/y, make: (m) => (m.at(-1)!.value === 'corner' ? { type: 'corner' } : null) },
+  { pattern: /ZI[XLOM]*Z/y, make: (m) => (m[0]!.value === 'corner' ? { type: 'corner' } : nothing) },
+  { pattern: /[=p]X?Z/y, make: () => nothing },
+  { pattern: /NZ/y, make: (m) => (m[1]!.value === 'corner' && number(m) > 1 ? { type: 'times', n: number(m) } : nothing) },
+  {
+    pattern: /I[XLOM]*Z[,&]?NS(?![,&]*[CN])/y,
+    make: (m) => (m.some((one) => one.value === 'corner') ? null : either([st(stitch(m), 1, number(m))], [st(stitch(m), number(m))])),
+  },
   // unlike stitches in one place
   { pattern: /N?S(?:[,&]*N?S)+[,&]?(?:E?o?I[XLOM]*N?[GZC]|E?T)/y, make: unlikeInOne },
   { pattern: /NI?V/y, make: (m) => unit(st(BARE, number(m))) },
@@ -57,7 +67,7 @@ export const RULES: readonly Rule[] = [
   { pattern: /[XLO]*[GC][wI]{0,4}gN[SP]?(?![tT])/y, make: (m) => unit(st(stitch(m), 1, number(m))) },
   { pattern: /XN[GS]?(?![tTU])/y, make: (m) => unit(st(stitch(m), number(m))) },
   // up to a number, or to the last few
-  { pattern: /R?w?C?p=NS?(?![tT])/y, make: (m) => ({ type: 'unit', options: [[st(stitch(m), number(m))]], reaches: true }) },
+  { pattern: /R?w?C?p=NS?(?![tTo])/y, make: (m) => ({ type: 'unit', options: [[st(stitch(m), number(m))]], reaches: true }) },
   { pattern: /N?S[IE]*[GZ]?p+LN?[GZ]?(?!T)/y, make: (m) => fills(st(stitch(m), 1)) },
   { pattern: /A?p+LN?[GZ]?(?!T)/y, make: () => fills(st(BARE, 1)) },
   { pattern: /N?S[IwG]{0,3}IES/y, make: (m) => fills(st(stitch(m), 1, number(m))) },
@@ -65,7 +75,7 @@ export const RULES: readonly Rule[] = [
   // repeats and ends
   { pattern: /t[&,]?N(?![tS])/y, make: (m) => ({ type: 'times', n: number(m) }) },
   { pattern: /NNt/y, make: (m) => ({ type: 'times', n: number(m, 1) }) },
-  { pattern: /(?:R|E|A)*[&,p]?N[Fm]?(?:t|o(?=[.,|&=AR]|$))(?:R|A|o)*/y, make: repeated },
+  { pattern: /(?:R|E|A)*[&,p]?(?<![=c])N[Fm]?(?:t|o(?=[.,|&=ARN]|$))(?:R|A|o)*/y, make: repeated },
   {
     pattern: /t(?:R|A)*/y,
     make: (m) => (Number(m[0]!.value) > 1 ? { type: 'times', n: Number(m[0]!.value) } : nothing),
@@ -218,5 +228,22 @@ function unlikeInOne(matched: readonly Token[], letters: string): Made | null {
   }
   if (letters.endsWith('T') && parts.every((part) => part === parts[0])) return null;
   if (parts.every((part) => part === parts[0])) return unit(st(parts[0]!, 1, parts.length));
+  return unit({ type: 'oneplace', parts, times: 1 });
+}
+
+/** `three double crochets, chain two, three double crochets in the corner space`. */
+function aroundChain(matched: readonly Token[], letters: string): Made | null {
+  const place = matched.at(-1)!;
+  if (place.kind !== 'Z' && !/M|IN|E/.test(letters)) return null;
+  const parts: string[] = [];
+  let many = 1;
+  matched.forEach((token, n) => {
+    if (token.kind === 'N') many = Math.min(12, Number(token.value));
+    const chained = matched[n + 1]?.kind === 'N' && matched[n - 1]?.kind !== 'N' ? Math.min(12, Number(matched[n + 1]!.value)) : many;
+    if (token.kind === 'C') parts.push(...new Array<string>(chained).fill('ch'));
+    if (token.kind === 'S') parts.push(...new Array<string>(many).fill(String(token.value)));
+    if (token.kind === 'C' || token.kind === 'S') many = 1;
+    if (token.kind === 'N' && matched[n - 1]?.kind === 'C' && matched[n - 2]?.kind !== 'N') many = 1;
+  });
   return unit({ type: 'oneplace', parts, times: 1 });
 }

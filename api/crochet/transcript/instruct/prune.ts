@@ -7,7 +7,7 @@ type UnitEvent = Extract<Event, { type: 'unit' }>;
 /** Takes out of the phrases what adds nothing: what was taken back, explained twice, or only joins or turns. */
 export function prune(events: readonly Event[], tokens: readonly Token[]): readonly Event[] {
   return withEchoes(
-    meshes(withoutTurning(withoutJoins(withoutExplained(withoutCorrected(events, tokens)), tokens), tokens)),
+    meshes(withoutTurning(withoutJoins(withoutExplained(withoutCorrected(events, tokens), tokens), tokens), tokens)),
   );
 }
 
@@ -56,14 +56,26 @@ function takeBack(out: Event[], event: Event): void {
 }
 
 /** `an increase, so two in one`: the same thing in other words. */
-function withoutExplained(events: readonly Event[]): readonly Event[] {
-  return events.filter((event, n) => {
-    const before = events[n - 1];
-    if (event.type !== 'unit' || before?.type !== 'unit' || !event.explains) return true;
-    const [now] = event.options[0]!;
-    const [then] = before.options[0]!;
-    return !(now?.type === 'stitch' && then?.type === 'stitch' && now.inOne > 1 && now.inOne === then.inOne);
-  });
+function withoutExplained(events: readonly Event[], tokens: readonly Token[]): readonly Event[] {
+  const out: Event[] = [];
+  for (const event of events) {
+    const before = out.at(-1);
+    if (before === undefined || !isInOtherWords(before, event)) {
+      out.push(event);
+      continue;
+    }
+    // "increase just means two in one": neither is worked
+    const defines = tokens.slice(before.end, event.at).some((token) => token.text.endsWith('means'));
+    if (defines && out.some((one) => one !== before && one.type === 'unit')) out.pop();
+  }
+  return out;
+}
+
+function isInOtherWords(before: Event, event: Event): boolean {
+  if (event.type !== 'unit' || before.type !== 'unit' || !event.explains) return false;
+  const [now] = event.options[0]!;
+  const [then] = before.options[0]!;
+  return now?.type === 'stitch' && then?.type === 'stitch' && now.inOne > 1 && now.inOne === then.inOne;
 }
 
 const only = (event: Event | undefined): Unit | undefined =>

@@ -47,7 +47,7 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
   ['D', 'dc', `dc 2 tog, dc2tog, double crochet decrease`],
   ['D', 'tr', `tr2tog, treble decrease`],
   ['T', 0, `together, tog, at once, as one, at a time`],
-  ['I', 0, `in, into, on, onto, under, inside, in to, inside of, on top of, over top of`],
+  ['I', 0, `in, into, on, onto, over, under, inside, in to, inside of, on top of, over top of`],
   [
     'E',
     0,
@@ -180,7 +180,7 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
     '=',
     0,
     `
-    that is, it is, there is, there are, that gives, gives you, gives us, gives me, which gives, that makes, which makes, makes, making,
+    means, just means, that is, it is, there is, there are, that gives, gives you, gives us, gives me, which gives, that makes, which makes, makes, making,
     comes to, brings you to, bring you to, brings us to, brings it to, brings me to, bring it to, you will have,
     you should have, you have, you have got, you got, i have, i have got, we have, we have got, you get, you end
     up with, end up with, ends up with, we end up with, gets you, gets us to, get to, down to, up to, to get, so
