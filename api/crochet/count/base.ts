@@ -35,6 +35,18 @@ export function ownChain(items: readonly Item[], size: number): { chains: number
   return { chains: pick(first.times.n, size), index };
 }
 
+/** A chain joined into a ring at the start of the line that goes on into it: `ch 5, join in a ring, 12 dc in ring`. */
+export function ownRing(items: readonly Item[], size: number): { chains: number; index: number } | null {
+  const index = items.findIndex((item) => item.type === 'work');
+  const first = items[index];
+  if (first?.type !== 'work' || first.stitch !== 'ch' || first.times.type !== 'n') return null;
+  const next = index + 1 + items.slice(index + 1).findIndex((item) => item.type !== 'note');
+  const join = items[next];
+  const isJoin = join?.type === 'step' && (join.what === 'ring' || join.what === 'join') && next > index;
+  const goesOn = items.slice(next + 1).some((item) => item.type === 'work' || item.type === 'group');
+  return isJoin && goesOn ? { chains: pick(first.times.n, size), index: next } : null;
+}
+
 /** A line that is only a chain, perhaps joined into a ring. */
 export function foundationOf(items: readonly Item[], size: number): Left | null {
   const works = items.filter(

@@ -54,7 +54,8 @@ function figureOf(kind: string, tally: Tally, alone: boolean): { figures: readon
   if (space) return strict(tally.byLength[Number(space[1])] ?? 0);
   if (kind === 'inc' || kind === 'dec' || kind === 'invdec') return null;
   if (kind === 'corner') return tally.spaces === 4 ? strict(4) : null;
-  if (kind === 'group' || kind === 'shell') return { figures: [tally.groups], loose: true };
+  if (kind === 'group' || kind === 'shell' || kind === 'vst')
+    return { figures: [tally.groups, tally.spaces], loose: true };
   if (/^[A-Z]$/.test(kind)) return strict(tally.byColour[kind] ?? 0);
   const own = tally.byStitch[kind];
   if (own !== undefined) {

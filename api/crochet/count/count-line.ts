@@ -173,6 +173,7 @@ function runPasses(
       rows: state.rows + i,
       comesBack: around.comesBack,
       label: pass.n,
+      blocks: given.written?.group !== undefined,
     };
     const isLast = i === passes.length - 1;
     // Where every round is the same, its total is that of each; where they shape, of the last.
@@ -266,7 +267,7 @@ function joined(
     verdict: final,
     base: opening.work.base,
     uses: opening.work.uses,
-    count: opening.work.endless && !opening.inferred ? null : shown.work.tally.sts,
+    count: opening.work.endless && !opening.inferred ? null : countOf(shown, given),
     made: isFoundation ? { ch: shown.work.walk.length } : madeOf(shown.work.tally),
     written: given.written,
     writtenSpan: read.totalSpan,
@@ -305,6 +306,14 @@ function joined(
   const isLooped = (loops === 'back' || loops === 'front') && count.uses !== null;
   const free = isLooped ? ([passes.at(-1)!.n, { loops, n: count.uses }] as const) : null;
   return { count, state: nextState(line, count, sizes, passes, state), chain: unsaid, trees, free };
+}
+
+/** Stitches; or blocks and groups, where the total counts those and comes out. */
+function countOf({ work, verdict }: Judged, given: Given): number {
+  const kinds = Object.entries(given.written ?? {});
+  const [kind, figures] = kinds[0] ?? ['sts', []];
+  const isGrouped = kinds.length === 1 && ['group', 'shell', 'vst'].includes(kind) && verdict === 'agrees';
+  return isGrouped ? (figures[0] ?? work.tally.sts) : work.tally.sts;
 }
 
 /** One entry a round where the rounds of a range do not all come out the same. */
@@ -388,6 +397,7 @@ function unreadLine(
     rows: state.rows,
     comesBack: around.comesBack,
     label: line.from,
+    blocks: false,
   };
   const judged = judgeLine(read, { written: null, said: null }, setting, 0);
   const count: LineCount = {

@@ -17,6 +17,8 @@ export interface Job {
   readonly own: ReadonlyMap<string, readonly Item[]>;
   readonly ring: boolean;
   /** Places along a chain made within the line (`ch 6, dc in 4th ch and next 2`). */
+  /** Places on the first side of a chain that is worked on both sides; 0 where it is not, or the far side is reached. */
+  sideEnd: number;
   local: { chains: number; left: number } | null;
   /** Places marked, by index. */
   readonly marks: readonly number[];

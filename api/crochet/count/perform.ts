@@ -22,7 +22,7 @@ export function perform(job: Job, items: readonly Item[], rest: number): void {
         break;
       case 'group':
         if (item.into && item.into.what !== 'loop') performInto(job, item, need);
-        else performGroup(job, item, need);
+        else performGroup(job, item, need, isEnding(after[0]));
         break;
       case 'skip':
         performSkip(job, item, need);
@@ -42,9 +42,13 @@ export function perform(job: Job, items: readonly Item[], rest: number): void {
   });
 }
 
+/** `ending with sc in last st`: the last repeat is cut where these words take over. */
+const isEnding = (item: Item | undefined): boolean => item?.type === 'note' && /^end/.test(item.text);
+
 function performStep(job: Job, item: Extract<Item, { type: 'step' }>): void {
   const { walker } = job;
   if (item.what === 'turn') job.turned = true;
+  if (item.what === 'far') job.sideEnd = 0;
   if (item.what === 'leave') {
     const n = item.n === -1 ? walker.remaining() : (item.n ?? 1);
     walker.kept += n;
@@ -208,7 +212,7 @@ function placesFor(job: Job, item: Work | Group, target: Target | null, legs: nu
       if (walker.open) return takeOne(job, target, item, legs);
       const n = item.times.type === 'n' ? pick(item.times.n, job.size) : 1;
       if (n > 1) return takeOne(job, { ...target, which: 'next' }, item, legs);
-      for (let at = walker.places.length - 1; at >= walker.at; at -= 1) {
+      for (let at = endOf(job) - 1; at >= walker.at; at -= 1) {
         if (isAt(walker.places[at]!, target, walker.spaces)) {
           walker.at = at;
           return takeOne(job, target, item, legs);
@@ -253,7 +257,10 @@ function workLocal(job: Job, item: Work, per: number): boolean {
       job.local = null;
       return true;
     }
-    job.local.left = job.local.chains - (item.into.n ?? 2) + 1;
+    const skipped = (item.into.n ?? 2) - 1;
+    job.local.left = job.local.chains - skipped;
+    // The chains passed over stand beside the block as a space.
+    if (skipped >= 3) walker.chain(skipped);
   }
   const { local } = job;
   if (!local || local.left < n) return false;
@@ -338,7 +345,7 @@ const countOf = (job: Job, item: Group): number =>
       ? pick(item.times.n, job.size) + (job.choices.rep === 'more' ? 1 : 0)
       : 1;
 
-function performGroup(job: Job, item: Group, need: () => number): void {
+function performGroup(job: Job, item: Group, need: () => number, ending: boolean): void {
   const part = item.stop === null ? null : item.items.slice(0, item.stop);
   const { walker } = job;
   const isFill = item.times.type === 'fill' || (item.times.type === 'unsaid' && job.choices.unsaid === 'fill');
@@ -351,10 +358,10 @@ function performGroup(job: Job, item: Group, need: () => number): void {
     }
     return;
   }
-  fillGroup(job, item, part, need());
+  fillGroup(job, item, part, need(), ending);
 }
 
-function fillGroup(job: Job, item: Group, part: readonly Item[] | null, rest: number): void {
+function fillGroup(job: Job, item: Group, part: readonly Item[] | null, rest: number, ending: boolean): void {
   const { walker } = job;
   const times = item.times.type === 'fill' ? item.times : null;
   const stop = stopAt(job, times, rest);
@@ -370,7 +377,7 @@ function fillGroup(job: Job, item: Group, part: readonly Item[] | null, rest: nu
     if (walker.short > before.short || walker.at > stop) {
       walker.back(before);
       if (part) perform(job, part, 0);
-      else if (job.choices.cut === 'cut') cutShort(job, item.items, stop);
+      else if (ending || job.choices.cut === 'cut') cutShort(job, item.items, stop);
       return;
     }
     if (!went) {
@@ -404,10 +411,13 @@ function goal(job: Job, to: Target): number {
   return job.walker.find({ ...to, which: 'next' });
 }
 
+/** Where the places end: at the turn to the far side of a chain, else at the last. */
+const endOf = (job: Job): number => (job.sideEnd > 0 ? job.sideEnd : job.walker.places.length);
+
 /** Index before which a fill stops: the end less what is kept back, or a place named. */
 function stopAt(job: Job, times: Extract<Times, { type: 'fill' }> | null, rest: number): number {
   const { walker } = job;
-  const end = walker.places.length;
+  const end = endOf(job);
   if (walker.open) return end;
   if (times?.to) {
     const at = goal(job, times.to);
@@ -415,6 +425,16 @@ function stopAt(job: Job, times: Extract<Times, { type: 'fill' }> | null, rest: 
   }
   const kept = times ? pick(times.leave, job.size) : 0;
   const { leaveOf } = times ?? { leaveOf: null };
+  if (kept > 0 && leaveOf?.what === 'group') {
+    // `to last shell`: to where it begins.
+    let left = kept;
+    for (let at = end - 1; at >= 0; at -= 1) {
+      const place = walker.places[at]!;
+      if (place.nth === 1 && place.size > 1 && place.size * 3 > walker.spaces.largest * 2) left -= 1;
+      if (left === 0) return at;
+    }
+    return 0;
+  }
   if (kept > 0 && leaveOf && (leaveOf.what === 'sp' || leaveOf.what === 'gap' || leaveOf.stitch !== undefined)) {
     let left = kept;
     for (let at = end - 1; at >= 0; at -= 1) {
@@ -423,14 +443,14 @@ function stopAt(job: Job, times: Extract<Times, { type: 'fill' }> | null, rest: 
     }
     return 0;
   }
-  return indexLeaving(job, kept > 0 ? kept : rest);
+  return indexLeaving(job, kept > 0 ? kept : job.sideEnd > 0 ? 0 : rest, end);
 }
 
 /** The index from which exactly so many counted places remain. */
-function indexLeaving(job: Job, n: number): number {
+function indexLeaving(job: Job, n: number, end: number): number {
   const { walker } = job;
   let left = n;
-  let at = walker.places.length;
+  let at = end;
   while (left > 0 && at > 0) {
     at -= 1;
     if (walker.places[at]!.counted) left -= 1;

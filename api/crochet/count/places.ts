@@ -112,24 +112,28 @@ export interface Spaces {
   readonly any: boolean;
   readonly inside: boolean;
   readonly longest: number;
+  /** Stitches of the largest group: a half shell at an edge is no shell. */
+  readonly largest: number;
   readonly chains: boolean;
 }
 
 export function spacesOf(
-  all: readonly { readonly kind: string; readonly chains: number; readonly inside: boolean }[],
+  all: readonly { readonly kind: string; readonly chains: number; readonly inside: boolean; readonly size: number }[],
 ): Spaces {
   let longest = 0;
+  let largest = 0;
   let any = false;
   let inside = false;
   let chains = false;
   for (const one of all) {
+    if (one.size > largest) largest = one.size;
     if (one.kind === 'ch') chains = true;
     if (one.kind !== 'sp' && one.kind !== 'chs') continue;
     any = true;
     if (one.inside) inside = true;
     if (one.chains > longest) longest = one.chains;
   }
-  return { any, inside, longest, chains };
+  return { any, inside, longest, largest, chains };
 }
 
 /** Whether a space is meant by `ch-2 sp`, `corner`, or any `sp`. */
@@ -164,12 +168,13 @@ export function isAt(place: Place, target: Target | null, spaces: Spaces): boole
     case 'st-or-ch':
       return place.kind === 'st' || place.kind === 'ch';
     case 'group':
-      return isCentre(place, 2);
+      return isCentre(place, Math.max(2, Math.ceil((spaces.largest * 2) / 3)));
     case 'st':
       if (target.corner) return isCentre(place, 3);
       if (target.of !== undefined && target.which === 'nth')
-        return place.kind === 'st' && place.size > 1 && place.nth === target.n;
-      if (target.of !== undefined && target.which === 'centre') return isCentre(place, 2);
+        return place.kind === 'st' && place.size > 1 && place.size * 3 > spaces.largest * 2 && place.nth === target.n;
+      if (target.of !== undefined && target.which === 'centre')
+        return isCentre(place, Math.max(2, Math.ceil((spaces.largest * 2) / 3)));
       if (place.kind === 'ch') return !target.stitch;
       return place.kind === 'st' && isStitch(place, target.stitch);
     default:

@@ -52,7 +52,8 @@ export function startOf(
   const next = after.find((other) => other.type !== 'note' && other.type !== 'step');
   if (next?.type === 'work' && next.into?.which === 'hook') return null;
   const chains = own ? (own.times.type === 'n' ? pick(own.times.n, job.size) : 1) : carried;
-  const stitch = firstStitch(after);
+  const named = firstStitch(after);
+  const stitch = named !== null && job.own.has(named) ? firstStitch(job.own.get(named)!) : named;
   const found = own?.counts ? said(own.counts, stitch, chains) : unsaid(chains, stitch, after, items, policy, job);
   return { index: own ? index + 1 : index, chains, ...found };
 }

@@ -1,7 +1,7 @@
 import { type Span } from '../span.ts';
 import { type Item, type LineTree, type Target } from '../language/tree.ts';
 import { stitchOf } from '../stitches.ts';
-import { allItems, chainBase, foundationOf, ownChain, targetsIn, type FreeLoops } from './base.ts';
+import { allItems, chainBase, foundationOf, ownChain, ownRing, targetsIn, type FreeLoops } from './base.ts';
 import { aimsIn, namedIn, travelling } from './named.ts';
 import { pick, type Job } from './job.ts';
 import { perform, takeOne } from './perform.ts';
@@ -26,6 +26,8 @@ export interface Setting {
   /** A later line goes over what a short row leaves. */
   readonly comesBack: boolean;
   readonly label: number | null;
+  /** Counted in blocks: the chains passed over at a start are a space of the block, no stitch. */
+  readonly blocks: boolean;
 }
 
 /** A line worked once, under one choice of what its words leave open. */
@@ -55,6 +57,11 @@ export function workLine(tree: LineTree, choices: Choices, setting: Setting): Li
   if (loop?.type === 'group')
     return onPlaces(loop.items, choices, { ...setting, left: loopBase(loop.into!.line ?? null, setting) }, 0, null);
   const own = ownChain(items, setting.size);
+  const ring = ownRing(items, setting.size);
+  if (ring) {
+    const base = chainBase(ring.chains, items.slice(ring.index + 1), true);
+    return onPlaces(items.slice(ring.index + 1), choices, { ...setting, left: base.left }, 0, base.told);
+  }
   const { left } = setting;
   const isOnChain = left.chains > 0 && left.made.length === 0;
   if (own && (left === NOTHING || left.open || isOnChain)) {
@@ -176,6 +183,7 @@ function onPlaces(
     named,
     own: setting.own,
     ring: setting.ring,
+    sideEnd: sideEndOf(items, places.length, hook),
     local: null,
     marks: marksOf(items, places, setting.size),
     endless: false,
@@ -196,6 +204,10 @@ function begin(
   isOpen: boolean,
 ): { items: readonly Item[]; unsaid: boolean } {
   if (hook > 0) {
+    if (setting.blocks && hook > 3) {
+      job.walker.chain(hook - 1);
+      return { items: withoutSkips(body), unsaid: false };
+    }
     const start = hookStart(body, hook, job, setting.policy);
     if (start.stitch) job.walker.stitch(start.stitch, []);
     job.walker.chain(start.extra);
@@ -214,6 +226,12 @@ function withoutSkips(items: readonly Item[]): readonly Item[] {
   const first = items[index];
   const isLead = first?.type === 'skip' && (first.of?.what === 'ch' || first.of?.which === 'first');
   return isLead ? [...items.slice(0, index), ...items.slice(index + 1)] : items;
+}
+
+/** Where the first side of a chain ends that is worked along both sides. */
+function sideEndOf(items: readonly Item[], places: number, hook: number): number {
+  const isBoth = hook > 0 && allItems(items).some((item) => item.type === 'step' && item.what === 'far');
+  return isBoth ? (places + 1) / 2 : 0;
 }
 
 /** Index of the place that travelling slip stitches end on. */

@@ -28,6 +28,10 @@ export function readBracket(reading: Reading, limit: number, before: readonly It
     reading.at += 1;
     return [];
   }
+  if (isRoundsRemark(reading, open, close)) {
+    reading.at = close + 1;
+    return [{ type: 'note', span: spanFrom(reading, open), text: 'rounds' }];
+  }
   const kinds = totalBetween(reading, open + 1, close);
   const isBareNumber = close === open + 2;
   if (kinds && !isGroupAfterAll(reading, close) && (hasWork(before) || isBareNumber)) {
@@ -37,9 +41,9 @@ export function readBracket(reading: Reading, limit: number, before: readonly It
   }
   const counts = readChainCounts(reading);
   if (counts) return [];
-  if (isRoundsRemark(reading, open, close)) {
+  if (isMadeRemark(reading, open, close)) {
     reading.at = close + 1;
-    return [{ type: 'note', span: spanFrom(reading, open), text: 'rounds' }];
+    return [{ type: 'note', span: spanFrom(reading, open), text: 'made' }];
   }
   reading.at = open + 1;
   const items = reading.readItems(reading, close);
@@ -47,6 +51,12 @@ export function readBracket(reading: Reading, limit: number, before: readonly It
   if (!hasWork(items)) return items;
   const mark = reading.lexes[open]!.text as Group['mark'];
   return [finishGroup(reading, open, items, mark, null)];
+}
+
+/** `(shell made)`, `(first dc made)`: what has just been worked, said again. */
+function isMadeRemark(reading: Reading, open: number, close: number): boolean {
+  const last = reading.lexes[close - 1]!;
+  return close - open < 10 && isPlain(last, 'made', 'completed', 'formed', 'complete');
 }
 
 /** `(4 rounds)`: how many there are, which is no total. */

@@ -125,6 +125,11 @@ function finishRelative(
         until = goal.lines.at(-1) ?? null;
         continue;
       }
+      // `until piece measures 25 cm`: open in number.
+      if (peek(reading).kind === 'word' || peek(reading).kind === 'measure') {
+        while (reading.at < limit && !isMark(peek(reading), '.') && !isMark(peek(reading), ';')) reading.at += 1;
+        continue;
+      }
       reading.at = here;
     }
     if (isPlain(peek(reading), 'ending', 'end', 'finishing') || isWord(peek(reading), 'end')) {

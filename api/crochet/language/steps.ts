@@ -146,7 +146,8 @@ export function readSlipJoin(reading: Reading, limit: number): Item | null {
     takeAll(reading, 'the');
     const place = peek(reading);
     const isFirst = isWord(place, 'first', 'top', 'turningchain') || isChainTop(reading);
-    if (isWord(place, 'join', 'end') || (isFirst && !isWord(peek(reading, 1), 'sp'))) {
+    const goesOn = isWord(peek(reading, 1), 'sp', 'sp2', 'corner') || peek(reading, 1).kind === 'num';
+    if (isWord(place, 'join', 'end') || (isFirst && !goesOn)) {
       takeClause(reading, limit);
       return step(reading, from, 'join', { into: joinPlace(reading, rest) });
     }

@@ -11,6 +11,8 @@ export interface TargetRead {
   readonly loops: Loops | null;
   /** A second kind of place named with the first: `in each dc and ch-1 sp`. */
   readonly also: Target | null;
+  /** `each of next 2`: what is counted goes into each. */
+  readonly each?: true;
   /** Only the loops were named (`in BLO`), no place. */
   readonly loopsOnly?: true;
 }
@@ -207,10 +209,10 @@ function each(reading: Reading): TargetRead {
   if (peek(reading).kind === 'ord') return every(reading, peek(reading).value, 1);
   if (take(reading, 'next')) {
     takeAll(reading, 'the', 'of');
-    return counted(reading, 'next');
+    return { ...counted(reading, 'next'), each: true };
   }
-  if (take(reading, 'first')) return counted(reading, 'first');
-  if (take(reading, 'last')) return counted(reading, 'last');
+  if (take(reading, 'first')) return { ...counted(reading, 'first'), each: true };
+  if (take(reading, 'last')) return { ...counted(reading, 'last'), each: true };
   if (take(reading, 'remain')) takeAll(reading, 'of', 'the');
   if (take(reading, 'same')) takeAll(reading, 'the');
   if (peek(reading).kind === 'num' && !isSpaceNumber(reading)) {
@@ -219,7 +221,7 @@ function each(reading: Reading): TargetRead {
     // `3 sc over every 4 row ends`: so many in so many, all along.
     return read.target.what === 'row-end'
       ? { ...read, target: { ...read.target, which: 'every', n }, count: null, fill: true }
-      : read;
+      : { ...read, each: true };
   }
   const noun = readNoun(reading);
   return fromNoun(noun ?? { what: 'st' }, 'each', null, true);
@@ -276,7 +278,9 @@ function counted(reading: Reading, which: Target['which']): TargetRead {
     return plainTarget('mark', 'next', count);
   }
   const noun = readNoun(reading);
-  return fromNoun(noun ?? { what: 'st' }, which, count, false);
+  // The first three are three in order.
+  const order = count && count[0]! > 1 && (which === 'first' || which === 'last') ? 'next' : which;
+  return fromNoun(noun ?? { what: 'st' }, order, count, false);
 }
 
 function ordinal(reading: Reading, n: number): TargetRead {
@@ -366,6 +370,10 @@ function qualifiers(reading: Reading): void {
     ) {
       named = true;
       reading.at += 1;
+    }
+    if (named && isWord(peek(reading), 'group')) {
+      reading.at += 1;
+      continue;
     }
     if (isWord(peek(reading), 'round', 'row') && (named || start < reading.at)) {
       reading.at += 1;

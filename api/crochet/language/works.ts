@@ -185,6 +185,17 @@ function placed(
     if (late) loops = late;
     else reading.at -= 1;
   }
+  const drawn = readTogether(reading, target, before ?? after);
+  if (drawn) {
+    const legs = {
+      type: 'work' as const,
+      span: spanFrom(reading, from),
+      stitch: `${key}${String(drawn)}tog`,
+      loops,
+      glued: false,
+    };
+    return [{ ...legs, per: ONE, times: times(readMultiple(reading) ?? ONE), into: null, multiplied: false }];
+  }
   const span = spanFrom(reading, from);
   const isIncrease = key.endsWith('inc') && key !== 'inc';
   const stitch = isIncrease ? key.slice(0, -3) : key;
@@ -219,6 +230,13 @@ function placed(
   if (target?.also) items.push({ ...work, into: target.also });
   items.push(...conjoined(reading, base));
   return items;
+}
+
+/** `sc next 2 sts tog`, `sc in next 2 sts together`: how many are drawn into one; null where none are. */
+function readTogether(reading: Reading, target: TargetRead | null, count: Sized | null): number | null {
+  const legs = target?.count?.[0] ?? (target === null ? count?.[0] : undefined);
+  if (legs === undefined || legs < 2 || legs > 12 || !take(reading, 'tog')) return null;
+  return legs;
 }
 
 /** `dc two rows down`: where a long stitch reaches to, which is no count. */
@@ -312,7 +330,7 @@ function amounts(count: Sized | null, more: Sized | null, target: TargetRead | n
   if (into?.which === 'skipped') return { per: ONE, times: times(target?.count ?? count ?? ONE), into };
   if (into?.what === 'ring' || into?.which === 'hook') return { per: count ?? ONE, times: times(more ?? ONE), into };
   if (target?.count) {
-    const isEach = count !== null && count[0] === target.count[0] && count[0]! > 1;
+    const isEach = !target.each && count !== null && count[0] === target.count[0] && count[0]! > 1;
     return {
       per: isEach || !count ? ONE : count,
       times: fill && target.count[0] === 1 ? fill : times(target.count),

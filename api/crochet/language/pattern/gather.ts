@@ -1,5 +1,6 @@
 import { type Terms } from '../../span.ts';
 import { type SpecialStitch } from '../../count/input.ts';
+import { foundationOf } from '../../count/base.ts';
 import { hasWork } from '../groups.ts';
 import { type Label } from '../labels.ts';
 import { readLine } from '../read-line.ts';
@@ -31,6 +32,7 @@ export interface Gathered {
 
 interface State {
   readonly parts: Part[];
+  readonly sizes: number;
   readonly materials: TextStretch[];
   readonly notes: TextStretch[];
   title: string | null;
@@ -44,8 +46,17 @@ export function gather(
   entries: readonly Entry[],
   terms: Terms,
   special: readonly SpecialStitch[],
+  sizes: number,
 ): Gathered {
-  const state: State = { parts: [], materials: [], notes: [], title: null, section: null, last: 0 };
+  const state: State = {
+    parts: [],
+    sizes: Math.max(1, sizes),
+    materials: [],
+    notes: [],
+    title: null,
+    section: null,
+    last: 0,
+  };
   entries.forEach((entry, i) => {
     const next = entries[i + 1];
     take(state, text, entry, next, terms, special);
@@ -65,12 +76,14 @@ function take(
   const stretch: TextStretch = { text: source, span: entry.span };
   const section = entry.label && entry.label.kind !== 'bare' ? null : sectionOf(source);
   if (section) {
-    state.section = section;
+    // `Sizes: S (M, L)` says all in its own line.
+    const isShort = /:\s*\S/.test(source) && section !== 'special' && section !== 'abbreviations';
+    state.section = isShort ? null : section;
     (section === 'materials' ? state.materials : state.notes).push(stretch);
     return;
   }
   const body = text.slice(entry.bodyStart, entry.span.end);
-  const read = readLine(oneLine(body), { terms, special });
+  const read = readLine(oneLine(body), { terms, special, sizes: state.sizes });
   const label = isLabel(entry, read, state) ? entry.label : null;
   if (label) {
     state.section = null;
@@ -89,13 +102,13 @@ function take(
     state.notes.push(stretch);
     return;
   }
-  const whole = entry.label ? readLine(oneLine(source), { terms, special }) : read;
+  const whole = entry.label ? readLine(oneLine(source), { terms, special, sizes: state.sizes }) : read;
   if (continues(state, entry, source, whole, text)) {
     extend(state, entry.span.end);
     return;
   }
   const heading = headingFor(source, whole, next);
-  if (state.section && !(heading && isLead(next)) && !(state.section === 'assembly' && false)) {
+  if (state.section && !(heading && isLead(next))) {
     const isWorkAgain =
       entry.apart &&
       isCounted(whole) &&
@@ -172,6 +185,7 @@ function isCounted(read: ReadLine): boolean {
       item.type === 'straight' ||
       item.type === 'shaped',
   );
+  if (foundationOf(items, 0)) return true;
   const prose = items.reduce(
     (sum, item) =>
       sum +

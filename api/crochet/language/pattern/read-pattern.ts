@@ -21,8 +21,8 @@ export function readPattern(text: string, terms?: Terms): PatternText {
   const special = specialIn(text, found.terms);
   const own = ownForms(special);
   const entries = entriesOf(text, found.terms, own);
-  const gathered = gather(text, entries, found.terms, special);
   const sizes = sizesIn(text);
+  const gathered = gather(text, entries, found.terms, special, sizes.length);
   return {
     terms: found.terms,
     termsReason: found.reason,

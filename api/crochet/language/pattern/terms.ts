@@ -41,11 +41,22 @@ function heights(text: string): TermsFound {
   lexes.forEach((lex, i) => {
     if (lex.kind === 'stitch' && lex.text === 'ch') {
       const near = [lexes[i - 1], lexes[i + 1], lexes[i + 2]].find((other) => other?.kind === 'num');
-      chain = near?.value ?? 1;
+      // Only a chain that begins a line tells; one between stitches is a space.
+      const before = lexes[i - 1]?.kind === 'num' ? lexes[i - 2] : lexes[i - 1];
+      const begins =
+        before === undefined || lex.broken || before.text === ':' || before.text === '.' || before.text === ';';
+      chain = begins ? (near?.value ?? 1) : null;
       since = 0;
       return;
     }
     since += 1;
+    if (lex.kind === 'ord' && lexes[i + 1]?.text === 'ch' && lexes[i + 2]?.text === 'hook') {
+      const stitch = lexes.slice(Math.max(0, i - 5), i).findLast((other) => other.kind === 'stitch')?.text;
+      if (stitch === 'dc' && lex.value === 2) uk += 1;
+      if (stitch === 'dc' && lex.value === 4) us += 1;
+      if (stitch === 'tr' && lex.value === 4) uk += 1;
+      if (stitch === 'tr' && lex.value === 5) us += 1;
+    }
     if (lex.kind !== 'stitch' || chain === null || since > 14) return;
     if (lex.text === 'dc') {
       if (chain === 1) uk += 1;
