@@ -38,7 +38,7 @@ describe('a clip whose way is cut', () => {
     const pattern = await buildPattern(at.db, { studio_id: house.studio.id });
     recordingId = (await buildRecording(at.db, { pattern_id: pattern.id })).id;
     who = await at.as(house.creator);
-    file = padFilm(filmClip('mp4'), 18_000_000);
+    file = padFilm(filmClip('mp4'), 13_000_000);
   });
   afterAll(async () => {
     server.closeAllConnections();

@@ -18,7 +18,7 @@ describe('a clip on its way up', () => {
     at = await buildApp();
     house = await buildHouse(at.db);
     film = filmClip('mp4');
-    large = padFilm(film, 20 * MIB + 123);
+    large = padFilm(film, 12 * MIB + 123);
     creator = await at.as(house.creator);
   });
   // Each test stands in a minute of its own, so that calls are not counted together.

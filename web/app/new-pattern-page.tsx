@@ -101,7 +101,7 @@ function NewPatternDesk({ studioId }: { studioId: string }) {
           }
         />
       </main>
-      <footer className="sticky bottom-0 z-10 flex min-h-[58px] flex-wrap items-center gap-x-3.5 gap-y-2 border-t border-rule bg-chalk px-6 py-2 max-sm:px-4">
+      <footer className="sticky bottom-0 z-10 max-sm:static flex min-h-[58px] flex-wrap items-center gap-x-3.5 gap-y-2 border-t border-rule bg-chalk px-6 py-2 max-sm:px-4">
         {failed ? (
           <ErrorNote what="Not saved.">The connection was lost, or somebody else was quicker. Try again.</ErrorNote>
         ) : (

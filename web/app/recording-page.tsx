@@ -58,7 +58,7 @@ export function Component() {
         isCompact
       />
       <main className="grid grow grid-cols-[320px_minmax(0,1fr)_372px] max-lg:grid-cols-1">
-        <div>
+        <div className="flex flex-col border-r border-rule max-lg:border-r-0">
           {failed && <ErrorNote what="Not added.">The connection was lost. Try again.</ErrorNote>}
           <RecordingLedger
             patternId={patternId}

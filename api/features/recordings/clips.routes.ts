@@ -12,13 +12,13 @@ import { PartBuffers } from './part-buffers.ts';
 import { readPartForm } from './part-form.ts';
 import { cancelUpload, completeUpload, readUpload } from './upload-end.service.ts';
 import { takePart } from './upload-parts.service.ts';
-import { PART_BYTES, startClip } from './upload-start.service.ts';
+import { LARGEST_PART_BYTES, startClip } from './upload-start.service.ts';
 
 /** A recording's clip: its way up in parts, and its way back in ranges. */
 export function clipRoutes(deps: Deps): Router {
   const { db } = deps;
   const router = Router();
-  const buffers = new PartBuffers(PART_BYTES);
+  const buffers = new PartBuffers(LARGEST_PART_BYTES);
 
   router.post('/recordings/:recordingId/clip', limit(deps, CREATING), async (req, res) => {
     const started = await startClip(deps, signedIn(req), idIn(req, 'recordingId'), ClipStart.parse(req.body));

@@ -11,8 +11,14 @@ import { findRecordingFor } from './recordings.access.ts';
 import { giveUpUpload } from './upload-end.service.ts';
 import { countArrivingOf, insertUpload, listParts, listUnderWay, type UploadRow } from './uploads.store.ts';
 
-/** Bytes of every part but the last: eight hundred odd make the largest clip, and six of them fit into memory. */
-export const PART_BYTES = 8 * 1_048_576;
+const MIB = 1_048_576;
+/** Bytes of the largest part there is; six of them fit into memory, and a thousand make the largest clip. */
+export const LARGEST_PART_BYTES = 8 * MIB;
+/** The smallest that S3 takes: what is under way when somebody pauses or loses the line is little. */
+const SMALL_PART_BYTES = 5 * MIB;
+/** From here on fewer, larger parts. */
+const LARGE_CLIP_BYTES = 1_000_000_000;
+const partBytesFor = (size: number) => (size < LARGE_CLIP_BYTES ? SMALL_PART_BYTES : LARGEST_PART_BYTES);
 /** Clips that one person may have on the way at a time. */
 const OPEN_UPLOADS = 8;
 /** Somebody else's clip that moved within this time is not pushed aside. */
@@ -94,9 +100,9 @@ export async function startClip(
       objectId: randomUUID(),
       key,
       storageId: await storage.createMultipart(key, CONTAINER_TYPES[kind]),
-      partSize: PART_BYTES,
+      partSize: partBytesFor(file.size),
     };
     await insertUpload(trx, row, file, CONTAINER_TYPES[kind], now);
-    return { uploadId: row.id, partSize: PART_BYTES, have: [] };
+    return { uploadId: row.id, partSize: row.partSize, have: [] };
   });
 }

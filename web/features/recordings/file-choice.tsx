@@ -18,9 +18,7 @@ export function FileChoice({ children, accept, kind = 'plain', onFile }: FileCho
         ref={input}
         type="file"
         accept={accept}
-        className="sr-only"
-        tabIndex={-1}
-        aria-label={children}
+        hidden
         onChange={({ target }) => {
           const file = target.files?.[0];
           if (file) onFile(file);

@@ -31,7 +31,7 @@ export interface SourceLine {
   /** Counted from 1. */
   readonly number: number;
   readonly text: string;
-  /** A time of subtitles: set in the interface's face, since nobody said it. */
+  /** A time or a number of subtitles: set in the interface's face, since nobody said it. */
   readonly isTime: boolean;
 }
 
@@ -45,7 +45,7 @@ export function linesAround(source: string, line: number): readonly SourceLine[]
   return all.slice(first, first + 2 * AROUND + 1).map((text, i) => ({
     number: first + i + 1,
     text,
-    isTime: text.includes('-->'),
+    isTime: text.includes('-->') || /^\d+$/.test(text),
   }));
 }
 

@@ -43,7 +43,7 @@ export function RecordingLedger({ patternId, recordings, chosen, mayEdit, onChoo
   };
   const failed = deeds.edit.isError || deeds.remove.isError;
   return (
-    <div className="flex flex-col border-r border-rule">
+    <div>
       <ul aria-label="Recordings of this pattern" className="bg-sheet">
         {recordings.map((recording) => (
           <li key={recording.id}>

@@ -15,11 +15,28 @@ function Caption({ cue, transcriptId, mayEdit }: { cue: Cue; transcriptId: strin
   const [words, setWords] = useState<string | null>(null);
   const save = (corrected: string | null) => correct.mutate({ cue, corrected }, { onSuccess: () => setWords(null) });
   return (
-    <li className="grid grid-cols-[48px_minmax(0,1fr)] py-1.5">
+    <li className="grid grid-cols-[48px_minmax(0,1fr)] py-0.5">
       <span className="small border-r border-rule pr-2.5 text-right text-walnut3">{cue.ordinal}</span>
-      <div className="min-w-0 pl-3">
-        <p className="small text-walnut2">
-          {formatTenths(cue.startMs)} – {formatTenths(cue.endMs)}
+      <div className="min-w-0 pr-3.5 pl-3">
+        <p className="small flex min-h-[26px] items-center gap-1 text-walnut2">
+          <span className="mr-auto">
+            {formatTenths(cue.startMs)} – {formatTenths(cue.endMs)}
+          </span>
+          {mayEdit && words === null && cue.corrected !== null && (
+            <Button kind="quiet" size="row" onClick={() => save(null)}>
+              Back to the file
+            </Button>
+          )}
+          {mayEdit && words === null && (
+            <Button
+              kind="quiet"
+              size="row"
+              aria-label={`Change caption ${cue.ordinal}`}
+              onClick={() => setWords(cue.corrected ?? cue.heard)}
+            >
+              Change
+            </Button>
+          )}
         </p>
         {words === null ? (
           <p className="said">{cue.corrected ?? cue.heard}</p>
@@ -36,27 +53,14 @@ function Caption({ cue, transcriptId, mayEdit }: { cue: Cue; transcriptId: strin
         {correct.isError && (
           <ErrorNote what="Not saved.">Somebody else was quicker, or the connection was lost.</ErrorNote>
         )}
-        {mayEdit && (
-          <p className="mt-0.5 flex gap-2">
-            {words === null ? (
-              <Button kind="quiet" size="row" onClick={() => setWords(cue.corrected ?? cue.heard)}>
-                Change
-              </Button>
-            ) : (
-              <>
-                <Button size="row" onClick={() => save(words.trim() === cue.heard ? null : words.trim())}>
-                  Done
-                </Button>
-                <Button kind="quiet" size="row" onClick={() => setWords(null)}>
-                  Keep it as it was
-                </Button>
-              </>
-            )}
-            {cue.corrected !== null && words === null && (
-              <Button kind="quiet" size="row" onClick={() => save(null)}>
-                Back to the file
-              </Button>
-            )}
+        {words !== null && (
+          <p className="mt-1 flex gap-2">
+            <Button size="row" onClick={() => save(words.trim() === cue.heard ? null : words.trim())}>
+              Done
+            </Button>
+            <Button kind="quiet" size="row" onClick={() => setWords(null)}>
+              Keep it as it was
+            </Button>
           </p>
         )}
       </div>

@@ -50,39 +50,42 @@ export function UploadProgress({ entry, onFile, onChanged }: UploadProgressProps
       <div className="mt-2 mb-1.5">
         <Winding share={share} label={`${fileName}, as far as it is up`} />
       </div>
-      <div className="flex flex-wrap items-center gap-x-4 gap-y-1">
-        <p className="grow text-walnut2">
+      <div className="flex items-center gap-x-3 max-sm:flex-wrap">
+        <p className="min-w-0 grow text-walnut2">
           {uploadWords(state)}
           {state.isResumed && state.phase === 'sending' && ' It went on where it had stopped.'}
         </p>
-        {canStop && state.phase === 'paused' && (
-          <Button kind="quiet" onClick={() => goOnWithUpload(recordingId)}>
-            Go on
-          </Button>
-        )}
-        {canStop && state.phase === 'waiting' && (
-          <Button kind="quiet" onClick={() => goOnWithUpload(recordingId)}>
-            Try now
-          </Button>
-        )}
-        {canStop && state.phase !== 'paused' && (
-          <Button kind="quiet" onClick={() => pauseUpload(recordingId)}>
-            Pause
-          </Button>
-        )}
-        {canStop && (
-          <Button
-            kind="quiet"
-            onClick={() =>
-              void cancelUpload(recordingId)
-                .catch(() => undefined)
-                .finally(onChanged)
-            }
-          >
-            Cancel
-          </Button>
-        )}
+        {canStop && <Stops entry={entry} onChanged={onChanged} />}
       </div>
     </>
+  );
+}
+
+function Stops({ entry, onChanged }: Omit<UploadProgressProps, 'onFile'>) {
+  const { recordingId, state } = entry;
+  const isStill = state.phase === 'paused';
+  return (
+    <span className="-mr-1.5 flex shrink-0 gap-1">
+      {(isStill || state.phase === 'waiting') && (
+        <Button kind="quiet" onClick={() => goOnWithUpload(recordingId)}>
+          {isStill ? 'Go on' : 'Try now'}
+        </Button>
+      )}
+      {!isStill && (
+        <Button kind="quiet" onClick={() => pauseUpload(recordingId)}>
+          Pause
+        </Button>
+      )}
+      <Button
+        kind="quiet"
+        onClick={() =>
+          void cancelUpload(recordingId)
+            .catch(() => undefined)
+            .finally(onChanged)
+        }
+      >
+        Cancel
+      </Button>
+    </span>
   );
 }

@@ -3,14 +3,7 @@ import { useRef, useState } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import type { PatternHead } from '#contract/patterns';
 import type { Recording, RecordingCreate } from '#contract/recordings';
-import {
-  addRecording,
-  createPattern,
-  editPattern,
-  patternHeadQuery,
-  recordingsQuery,
-  useRefresh,
-} from './recordings.queries.ts';
+import { addRecording, createPattern, editPattern, patternHeadQuery, recordingsQuery } from './recordings.queries.ts';
 import { nameOfFile } from './use-recording-files.ts';
 
 /** An id of our own, so that a request sent twice makes one thing; where the browser makes none, the server does. */
@@ -37,7 +30,8 @@ export function useNewPattern(studioId: string) {
   const [search, setSearch] = useSearchParams();
   const patternId = search.get('pattern') ?? undefined;
   const client = useQueryClient();
-  const refresh = useRefresh(patternId);
+  // What was made is known here at once, before the address of the page has followed.
+  const made = useRef<{ pattern?: PatternHead; recording?: Recording }>({});
   const head = useQuery({ ...patternHeadQuery(patternId ?? ''), enabled: patternId !== undefined });
   const list = useQuery({ ...recordingsQuery(patternId ?? ''), enabled: patternId !== undefined });
   const [ids] = useState(() => ({ pattern: ownId(), recording: ownId() }));
@@ -53,18 +47,20 @@ export function useNewPattern(studioId: string) {
 
   const ensurePattern = (fallback: string): Promise<PatternHead> =>
     patternOnce(async () => {
-      if (head.data) return head.data;
+      const present = head.data ?? made.current.pattern;
+      if (present) return present;
       if (patternId !== undefined) return client.query(patternHeadQuery(patternId));
-      const made = await createPattern({
+      const pattern = await createPattern({
         ...ids.pattern,
         studioId,
         title: title.trim() || fallback,
         ...(terms !== undefined && { terms }),
       });
-      client.setQueryData(patternHeadQuery(made.id).queryKey, made);
+      made.current.pattern = pattern;
+      client.setQueryData(patternHeadQuery(pattern.id).queryKey, pattern);
       setTyped({});
-      setSearch({ pattern: made.id }, { replace: true });
-      return made;
+      setSearch({ pattern: pattern.id }, { replace: true });
+      return pattern;
     });
 
   const save = async (edit: { title?: string; terms?: 'US' | 'UK' }) => {
@@ -75,13 +71,15 @@ export function useNewPattern(studioId: string) {
     setTyped({});
   };
 
-  const ensureRecording = (name: string, elsewhere: Elsewhere = {}): Promise<Recording & { patternId: string }> => {
-    const made = recordingOnce(async () => {
-      if (chosen) return chosen;
-      const { id } = await ensurePattern(name);
-      return addRecording(id, { ...ids.recording, title: name, ...elsewhere });
+  const ensureRecording = async (name: string, elsewhere: Elsewhere = {}) => {
+    const pattern = await ensurePattern(name);
+    const recording = await recordingOnce(async () => {
+      const present = chosen ?? made.current.recording;
+      if (present) return present;
+      made.current.recording = await addRecording(pattern.id, { ...ids.recording, title: name, ...elsewhere });
+      return made.current.recording;
     });
-    return made.then(async (recording) => ({ ...recording, patternId: (await ensurePattern(name)).id }));
+    return { recordingId: recording.id, patternId: pattern.id, title: recording.title };
   };
 
   return {
@@ -91,21 +89,21 @@ export function useNewPattern(studioId: string) {
     list: list.data,
     recordings,
     chosen,
-    refresh: () => void refresh(),
+    refresh: () => {
+      const id = patternId ?? made.current.pattern?.id;
+      void client.invalidateQueries({ queryKey: ['patterns', id] });
+    },
     type: (newTitle: string) => setTyped((before) => ({ ...before, title: newTitle })),
     save,
     choose: setChosenId,
     ensurePattern,
     /** The chosen recording; the first is made, named after its file, when it is needed. */
-    ensureRecording: async (fileName: string, elsewhere?: Elsewhere) => {
-      const { id, title: name, patternId: of } = await ensureRecording(nameOfFile(fileName), elsewhere);
-      return { recordingId: id, patternId: of, title: name };
-    },
+    ensureRecording: (fileName: string, elsewhere?: Elsewhere) => ensureRecording(nameOfFile(fileName), elsewhere),
     addAnother: async () => {
       const { id } = await ensurePattern('New pattern');
-      const made = await addRecording(id, { ...ownId(), title: `Part ${recordings.length + 1}` });
+      const another = await addRecording(id, { ...ownId(), title: `Part ${recordings.length + 1}` });
       await client.invalidateQueries({ queryKey: recordingsQuery(id).queryKey });
-      setChosenId(made.id);
+      setChosenId(another.id);
     },
   };
 }
