@@ -41,11 +41,15 @@ function StudioShelf({ studioId, name }: { studioId: string; name: string }) {
   return (
     <>
       <TopStrip title={TITLES[part]} beside={`${name}, ${howMany(shelf.patterns.length, part === 'shelf')}`}>
-        {!isEmpty && <FindField value={words} onChange={setWords} />}
-        {!isEmpty && shelf.mayCreate && part === 'shelf' && (
-          <LinkButton kind="primary" icon={Plus} to={paths.newPattern()} aria-keyshortcuts="N">
-            New pattern
-          </LinkButton>
+        {!isEmpty && (
+          <div className="flex items-center gap-4.5 max-sm:w-[calc(100vw-24px)] max-sm:gap-3 max-sm:pb-2">
+            <FindField value={words} onChange={setWords} />
+            {shelf.mayCreate && part === 'shelf' && (
+              <LinkButton kind="primary" icon={Plus} to={paths.newPattern()} aria-keyshortcuts="N">
+                New pattern
+              </LinkButton>
+            )}
+          </div>
         )}
       </TopStrip>
       <main className="flex grow flex-col">

@@ -23,6 +23,7 @@ export function EmptyShelf({ mayCreate }: { mayCreate: boolean }) {
       <div className="flex justify-center pt-24 max-lg:hidden">
         <FirstRounds />
       </div>
+      <div aria-hidden className="double-before absolute inset-y-0 right-[268px] max-lg:hidden" />
       <section className="pt-24 max-lg:col-span-2 max-sm:pt-12">
         <h2 className="h-12 px-5 font-serif text-[28px] leading-[48px] font-semibold">Begin with the ring</h2>
         <ol>
@@ -45,7 +46,7 @@ export function EmptyShelf({ mayCreate }: { mayCreate: boolean }) {
             </li>
           ))}
         </ol>
-        <div className="px-5 sm:pl-[92px]">
+        <div className="px-5 sm:pl-[108px]">
           <p className="mt-12 leading-[24px] text-walnut2 sm:leading-[48px]">
             No transcript? Most film editors export WebVTT or SubRip. Text with clock times will do.
           </p>

@@ -9,7 +9,7 @@ export function FindField({ value, onChange }: { value: string; onChange: (words
   const ref = useRef<HTMLInputElement>(null);
   useKeys({ '/': () => ref.current?.focus() });
   return (
-    <label className="field relative flex h-[30px]! w-[240px]! items-center gap-2 focus-within:outline-2 focus-within:outline-offset-1 focus-within:outline-woad max-sm:w-full!">
+    <label className="field relative flex h-[30px]! w-[240px]! items-center gap-2 max-sm:h-11! focus-within:outline-2 focus-within:outline-offset-1 focus-within:outline-woad max-sm:w-auto! max-sm:min-w-0 max-sm:grow">
       <Icon of={Search} size={16} />
       <span className="sr-only">Find a pattern</span>
       <input

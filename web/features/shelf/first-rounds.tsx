@@ -23,7 +23,7 @@ function angleAt(radius: number, k: number, n: number): number {
 function dash(i: number, k: number): string {
   const [n, radius] = [ROUNDS[i] ?? 0, radiusOf(i)];
   const [from, to] = [angleAt(radius, k, n), angleAt(radius, k + 1, n)];
-  const gap = Math.min(0.3 * (to - from), 7 / radius) / 2;
+  const gap = Math.min(0.3 * (to - from), (i === 0 ? 18 : 7) / radius) / 2;
   const r = radius.toFixed(1);
   return `M${at(radius, from + gap)}A${r} ${r} 0 0 0 ${at(radius, to - gap)}`;
 }
@@ -33,7 +33,8 @@ function stem(i: number, k: number): string {
   const [n, below] = [ROUNDS[i] ?? 0, ROUNDS[i - 1] ?? 1];
   const repeat = below / 6;
   const second = (k + 1) * (repeat + 1) - 1;
-  const foot = radiusOf(i - 1);
+  // From the outer edge of the dash it grows out of; the open round's are thick.
+  const foot = radiusOf(i - 1) + (i === 1 ? bandOf(0) * 0.1 : 0.8);
   const middle = (angleAt(radiusOf(i), second - 1, n) + angleAt(radiusOf(i), second + 1, n)) / 2;
   const fork = innerOf(i) + bandOf(i) * 0.34;
   const spread = 0.26 * (angleAt(radiusOf(i), 1, n) - angleAt(radiusOf(i), 0, n));

@@ -25,7 +25,7 @@ function Group({ name, count, children }: { name: string | null; count: number; 
   return (
     <section>
       {name !== null && (
-        <h2 className="flex h-[34px] items-center border-b border-rule bg-chalk px-5 font-serif text-[16px] font-semibold max-sm:px-3">
+        <h2 className="flex h-[34px] items-center border-b border-rule px-5 font-serif text-[16px] font-semibold max-sm:px-3">
           {name}
           <span className="ml-2.5 font-sans text-[15px] font-normal text-walnut2">{count}</span>
         </h2>

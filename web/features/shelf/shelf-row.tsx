@@ -1,5 +1,6 @@
 import { Link } from 'react-router-dom';
 import type { ShelfPart, ShelfPattern } from '#contract/shelf';
+import { cx } from '../../lib/class-names.ts';
 import { paths } from '../../lib/paths.ts';
 import { formatTouched } from '../../lib/time.ts';
 import { PatternPrint } from '../../parts/pattern-print.tsx';
@@ -19,13 +20,19 @@ const STATE_WORDS: Readonly<Record<ShelfPattern['state'], string>> = {
 function whereItIs({ state, edition }: ShelfPattern): string {
   if (state === 'published') return edition === null ? 'withdrawn' : `edition ${edition}`;
   if (state === 'reading') return 'its transcript';
+  if (state === 'in-proof') return 'proofreading';
   return edition === null ? 'at the bench' : `edition ${edition + 1}`;
 }
 
 /** A figure of the ledger; the column's name is read out with it, and on a phone it is seen. */
 function Figure({ of, unit }: { of: number | null; unit: string }) {
   return (
-    <span className="text-right text-[15.5px] whitespace-nowrap max-sm:text-left max-sm:text-[14px] max-sm:text-walnut2">
+    <span
+      className={cx(
+        'text-right text-[15.5px] whitespace-nowrap max-sm:text-left max-sm:text-[14px] max-sm:text-walnut2',
+        of === null && 'max-sm:hidden',
+      )}
+    >
       {of === null ? '–' : formatCount(of)}
       <span className="sm:sr-only"> {unit}</span>
     </span>
@@ -36,7 +43,7 @@ function Name({ pattern, isLink }: { pattern: ShelfPattern; isLink: boolean }) {
   const { id, title, state, pieces } = pattern;
   const to = state === 'reading' ? paths.recording(id) : paths.bench(id);
   return (
-    <span className="min-w-0">
+    <span className="min-w-0 pr-4 max-sm:pr-10">
       <span className="block truncate font-serif text-[17px] leading-[24px] font-semibold max-sm:whitespace-normal">
         {isLink ? (
           <Link to={to} className="after:absolute after:inset-0 hover:underline focus-visible:outline-offset-1">

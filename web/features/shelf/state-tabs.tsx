@@ -27,7 +27,7 @@ export function StateTabs({
       aria-pressed={chosen === state}
       onClick={() => onChoose(state)}
       className={cx(
-        'relative h-[45px] whitespace-nowrap',
+        'relative inline-flex h-[45px] items-center whitespace-nowrap',
         chosen === state
           ? 'font-bold after:absolute after:inset-x-0 after:-bottom-px after:h-2 after:border-y-[1.5px] after:border-woad'
           : 'hover:text-woad',
