@@ -9,6 +9,9 @@ const MEASURE =
   /^(?:millimet|centimet|inch|yard|gram|ounce|minute|ply|hundred|weight|half|color|colour|ball|skein|hour|year|month|round|row|finger|child|kid|people|dog|mil|cop|o'clock|of us|greens|video)/;
 /** How far before its first line a piece is introduced, in tokens. */
 const NEAR = 45;
+const NEAR_FIRST = 30;
+/** One for each of two. */
+const BOTH = /\bone (?:on|for|at) each\b|\bone each (?:side|end)\b|\bleft (?:one )?and (?:a |one )?right\b/;
 
 /**
  * How many to make of the piece that begins here: the number said with it before its first line.
@@ -23,25 +26,34 @@ export function readMake(
 ): number {
   for (let i = to - 1; i >= from; i--) {
     const token = tokens[i]!;
-    const isNear = !isFirst && to - i < NEAR;
+    const isNear = to - i < (isFirst ? NEAR_FIRST : NEAR);
     if (isPair(tokens, i, from, isNear)) return 2;
+    if (isNear && BOTH.test(textFrom(tokens, i, to))) return 2;
     if (token.kind !== 'N' || token.isGuess || tokens[i - 1]?.kind === 'U') continue;
     const n = Number(token.value);
-    if (n < 2 || n > 60 || !isFree(tokens, i)) continue;
+    if (n < 2 || n > 60 || !isFree(tokens, i, to)) continue;
     const start = Math.max(from, sentences.startOf[i]!, i - 6);
     const before = tokens
       .slice(start, i)
       .filter((one) => !/^(?:the|a|so|um|uh|you|only|'ll|be|to|just)$/.test(one.text))
       .map((one) => one.text)
       .join(' ');
-    if (MAKING.test(before) || (isNear && BEING.test(before)) || (isNear && isAlone(tokens, i))) return n;
+    if (MAKING.test(before) || (isNear && BEING.test(before)) || (isNear && !isFirst && isAlone(tokens, i)) || isNeeded(tokens, i)) return n;
   }
   return 1;
 }
 
-function isFree(tokens: readonly Token[], i: number): boolean {
+const textFrom = (tokens: readonly Token[], i: number, to: number): string =>
+  tokens.slice(i, Math.min(to, i + 6)).map((one) => one.text).join(' ');
+
+/** `Six squares is what you need`, `Two tabs are needed`. */
+function isNeeded(tokens: readonly Token[], i: number): boolean {
+  return /^\w+ \w+(?: \w+)? (?:is|are)(?: what)?(?: you)? (?:need|needed|wanted)/.test(textFrom(tokens, i, tokens.length));
+}
+
+function isFree(tokens: readonly Token[], i: number, to: number): boolean {
   const next = tokens[i + 1];
-  if (next === undefined) return true;
+  if (next === undefined || i + 1 >= to) return true;
   if (COUNTED_OTHERWISE.includes(next.kind)) return next.kind === 'F';
   return !MEASURE.test(next.text) && !MEASURE.test(tokens[i + 2]?.text ?? '');
 }

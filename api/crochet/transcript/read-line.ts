@@ -44,6 +44,7 @@ export interface ReadLineResult extends ReadSoFar {
   readonly isRing: boolean;
   readonly lead: number;
   readonly score: number;
+  readonly cost: number;
   readonly events: readonly Event[];
 }
 
@@ -56,7 +57,7 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
   const start = tokens.slice(from, candidate.mark).some((token) => 'SPDFE'.includes(token.kind)) ? from : candidate.mark;
   const isOut = (i: number) => i < start || talk.skipped[i] === true || names.has(i) || (i >= candidate.mark && i < candidate.end);
   const letters = lettersOf(tokens, from, to, talk.sentences, isOut);
-  const events = prune(findEvents(letters), tokens);
+  const events = prune(findEvents(letters), tokens, talk.sentences.startOf[candidate.mark]!);
   const words = tokens.slice(from, to).filter((_, n) => !isOut(from + n));
   const isRing = before.piece.length === 0 && before.chains === null && words.some((token) => token.kind === 'V');
   const loops = loopsOf(tokens, from, to, (i) => talk.skipped[i] === true);
@@ -89,7 +90,7 @@ function namesOfLines(tokens: readonly Token[], { announced, from, to }: Stretch
     const follows = tokens[i - 1]?.kind === 'U' || tokens[i - 1]?.kind === '#';
     const value = Number(tokens[i]!.value);
     const isNamed = follows && value <= last + 1;
-    const isTag = isUnnumbered && value === first && tokens[i - 1]?.kind !== 'E' && /[.,|]/.test(tokens[i + 1]?.kind ?? '.') && /^(?:is|'s|that is)$/.test(tokens[i - 1]?.text ?? '');
+    const isTag = isUnnumbered && value === first && tokens[i - 1]?.kind !== 'E' && /[.,|]/.test(tokens[i + 1]?.kind ?? '.') && /^(?:is|'s|that is|there is|it is)$/.test(tokens[i - 1]?.text ?? '');
     const isHead = isUnnumbered && value === first && i - from < 3 && ',.'.includes(tokens[i + 1]?.kind ?? '.');
     if (isOwn || isNamed || isTag || isHead) for (let j = i; j < (isOwn ? list.end : i + 1); j++) out.add(j);
   }
@@ -123,6 +124,22 @@ function stitchNamed(words: readonly Token[], events: readonly Event[]): string 
   if (named !== undefined) return String(named.value);
   const slips = events.some((event) => event.type === 'unit' && event.fills && event.options[0]!.some((unit) => unit.type === 'stitch' && unit.stitch === 'slst'));
   return slips ? 'slst' : null;
+}
+
+/** What may speak against a reading and its lead over others so that a fault it shows is the maker's and not the reader's. */
+const CLEAR_COST = 0.65;
+const CLEAR_LEAD = 0.35;
+
+/**
+ * The verdict by what the words come to. A fault is only claimed where the words were understood plainly and stand on a
+ * line that is sure; else the line is shown as not understood, which asks a person instead of blaming one.
+ */
+function verdictOf(choice: Choice, makes: number, wasDoubtful: boolean): ReadSoFar['verdict'] {
+  const isMisfit = choice.fit === 'misfit';
+  if (!isMisfit && choice.said === null) return 'no-total';
+  if (!isMisfit && choice.said === makes) return 'agrees';
+  if (wasDoubtful || choice.cost > CLEAR_COST || choice.lead < CLEAR_LEAD) return 'unread';
+  return isMisfit ? 'does-not-fit' : 'differs';
 }
 
 /** A reading below this neither fits nor agrees. */
@@ -178,7 +195,7 @@ function basesFor(
     chains: before.chains,
     isJoined: before.chainJoined,
     bothSides:
-      /\b(?:other side|underside|under side|bottom|back down|both sides|other edge|both edges|back along|coming back|coming home|up one side|goes all around the chain)\b/.test(
+      /\b(?:other side|underside|under side|bottom|back down|both sides|other edge|both edges|coming back|coming home|up one side|goes all around the chain)\b/.test(
         text,
       ),
     nth: nth < 0 ? null : Number(tokens[from + nth]!.value),
@@ -243,19 +260,13 @@ function result(
       count: null,
       lead: 0,
       score: 0,
+      cost: 9,
       events,
     };
   }
   const { makes } = sumOf(choice.units);
-  const verdict =
-    choice.fit === 'misfit'
-      ? 'does-not-fit'
-      : choice.said === null
-        ? 'no-total'
-        : choice.said === makes
-          ? 'agrees'
-          : 'differs';
-  const isDoubtful = verdict !== 'agrees' && (wasDoubtful || choice.fit === 'misfit' || verdict === 'differs' || choice.score < DOUBTFUL);
+  const verdict = verdictOf(choice, makes, wasDoubtful);
+  const isDoubtful = verdict === 'unread' || (verdict !== 'agrees' && (wasDoubtful || choice.score < DOUBTFUL || verdict !== 'no-total'));
   return {
     isDoubtful,
     ...rest,
@@ -265,9 +276,10 @@ function result(
     base: choice.base,
     said: choice.said,
     verdict,
-    count: makes,
+    count: verdict === 'unread' ? null : makes,
     lead: choice.lead,
     score: choice.score,
+    cost: choice.cost,
     events,
   };
 }

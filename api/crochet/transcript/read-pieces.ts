@@ -108,7 +108,7 @@ function readExpanded(
   const many = (until ?? 0) - (from ?? 0) + 1;
   const copied = from === 1 && many > 1 ? copiesOfPiece(talk, announced, to, before) : null;
   if (copied !== null) return copied;
-  const named = many > 1 ? linesNamed(talk.tokens, candidate.at, to, from ?? 0) : [];
+  const named = many > 1 ? linesNamed(talk.tokens, Math.max(candidate.at - 40, talk.sentences.startOf[candidate.at]!), to, from ?? 0) : [];
   if (named.length < 2) return [readSpokenLine(talk, stretch, before)];
   const lines = [...before.piece];
   const out: ReadLineResult[] = [];
@@ -186,7 +186,7 @@ function foundation(many: number): ReadLineResult {
     count: many,
     isRing: false,
     lead: 9,
-    score: 9,
+    score: 9, cost: 0,
     events: [],
   };
 }

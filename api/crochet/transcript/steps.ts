@@ -59,6 +59,7 @@ function topicAt(tokens: readonly Token[], i: number, sentences: Sentences): str
 }
 
 function isIdle(tokens: readonly Token[], i: number, sentences: Sentences): boolean {
+  if (tokens[i - 1]?.text === 'to') return true;
   const start = Math.max(sentences.startOf[i]!, i - 6);
   return IDLE.test(
     tokens

@@ -101,12 +101,12 @@ function counted(
   const many = Number(tokens[j]!.value);
   if (many < 2 || many > 200) return [];
   const ahead = tokens[j - 1]?.kind === 'X' || tokens[j - 2]?.kind === 'X' || tokens[j + 1]?.kind === 'm';
+  const isUntil = tokens.slice(Math.max(0, j - 5), j).some((one) => one.text === 'until' || one.text === 'till');
+  if (isUntil) return [{ ...base, at: untilStart(tokens, j, sentences), lines: { type: 'until', last: many }, strength: 1.2 }];
   const isFor = tokens[j - 1]?.text === 'for';
   const isResult =
     (tokens[j - 1]?.kind === '=' && !isFor) || tokens[j - 1]?.text === "'s" || tokens[j - 1]?.kind === 'p';
-  if (isResult && !ahead) return [{ ...base, lines: { type: 'until', last: many }, strength: 0.6 }];
-  const isUntil = tokens.slice(Math.max(0, j - 5), j).some((one) => one.text === 'until' || one.text === 'till');
-  if (isUntil) return [{ ...base, at: untilStart(tokens, j, sentences), lines: { type: 'until', last: many }, strength: 1.2 }];
+  if (isResult && !ahead) return [{ ...base, at: untilStart(tokens, j, sentences), lines: { type: 'until', last: many }, strength: 0.8 }];
   if (tokens[i + 1]?.text === 'of' && tokens[i + 2]?.kind === 'N') return [];
   const list = explicitAfter(tokens, i + 1, many);
   if (list !== null)
@@ -152,18 +152,18 @@ function kindsOf(tokens: readonly Token[], from: number, to: number): string {
 function untilStart(tokens: readonly Token[], i: number, sentences: Sentences): number {
   const from = Math.max(sentences.startOf[i]!, i - DEED_REACH);
   const kinds = kindsOf(tokens, from, i - 2);
-  const first = kinds.includes('R') ? kinds.indexOf('R') : kinds.indexOf('U');
+  const first = /U[^N]{0,2}N/.test(kinds) ? kinds.search(/U[^N]{0,2}N/) : kinds.indexOf('R');
   return announcementStart(tokens, first < 0 ? i : from + first, sentences);
 }
 
-const DEED_REACH = 18;
+const DEED_REACH = 28;
 
 /** `repeat row two, two more times, so that's rows three and four` is announced by its deed, not by the numbers at its end. */
 function deedBefore(tokens: readonly Token[], i: number, sentences: Sentences): number | null {
   const lead = tokens.slice(Math.max(0, i - 3), i).map((token) => token.text).join(' ');
   if (!/\b(?:that is|that 's)$/.test(lead)) return null;
-  for (let j = i - 1; j >= Math.max(0, i - DEED_REACH); j--) {
-    const isDeed = tokens[j]!.kind === 'R' && tokens[j]!.value === 0 && kindsOf(tokens, j, i).includes('U');
+  for (let j = i - 1; j >= Math.max(0, i - 18) && tokens[j]!.kind !== '|'; j--) {
+    const isDeed = tokens[j]!.kind === 'R' && tokens[j]!.value === 0 && /^[^.]*U[^.]*\.?[^.]*$/.test(kindsOf(tokens, j, i));
     if (isDeed) return announcementStart(tokens, j, sentences);
   }
   return null;
@@ -199,7 +199,8 @@ export function announcementStart(
   withTurning = false,
 ): number {
   const start = sentences.startOf[i]!;
-  if (i - start <= FAR && sentences.isPunctuated) return start;
+  const isLong = i - start <= 2 * FAR && /U.*N/.test(kindsOf(tokens, start, i));
+  if ((i - start <= FAR || isLong) && sentences.isPunctuated) return start;
   let at = i;
   while (at > start && i - at < 5 && LEADS.includes(tokens[at - 1]!.kind)) at -= 1;
   const turns = withTurning && /^[~&a=,]*[CR][^USPDV]*$/.test(kindsOf(tokens, start, i));

@@ -25,7 +25,8 @@ const RESTART_COST = 0.9;
 const CHAIN_REACH = 70;
 const STATES_KEPT = 4;
 const CHAINS_KEPT = 3;
-const OWN_RING = 22;
+const OWN_RING = 16;
+const OWN_RING_AGAIN = 44;
 /** Weak announcements are taken only where they join others. */
 const TAKING_COST = 0.45;
 
@@ -119,7 +120,8 @@ function isOwnRing(top: State, candidate: Candidate, tokens: readonly Token[]): 
   if (candidate.needs !== 'start' || top.announced?.from !== 1) return false;
   const { at, end } = top.announced.candidate;
   const since = candidate.at - end;
-  return since < OWN_RING || (since < 2 * OWN_RING && !tokens.slice(at, candidate.at).some((token) => token.kind === 'V'));
+  const hasRing = tokens.slice(at, candidate.at).some((token) => token.kind === 'V');
+  return since < (hasRing ? OWN_RING_AGAIN : OWN_RING);
 }
 
 /** Whether the candidate's words come after those of the line before. */
@@ -143,7 +145,7 @@ function begin(candidate: Candidate, before: State, to: number, gain: number): S
   return { to, score: before.score + gain, announced, before, chainAt: isChain ? candidate.end : null };
 }
 
-const ENDING = /\b(?:cut|fasten|tail|sew|off|close|pieces?|two|make|now|weave)\b/;
+const ENDING = /(?:cut|fasten|tail|sew|off|close|pieces?|two|make|now|weave|hide|ends?|snip|snug|finish|done|tie)/;
 
 /** Beginning at one again is likely where the line before was finished off or a part is named. */
 function restartCost(top: State, candidate: Candidate, tokens: readonly Token[]): number {

@@ -108,7 +108,7 @@ function ringCandidate(
   if (named !== undefined && named.at > at && hasWork)
     return [{ ...base, end: named.end, mark: named.mark, lines, strength: named.strength + 0.2 }];
   if (!hasWork) return [];
-  return [{ ...base, end: at, mark: at, lines, strength: 1.3 }];
+  return [{ ...base, end: at, mark: at, lines, strength: 2 }];
 }
 
 /** Right after a starting chain: `slip stitch in the second chain from the hook`, `one row of slip stitch`. */

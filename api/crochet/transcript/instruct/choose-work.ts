@@ -30,6 +30,8 @@ export interface Choice {
   readonly fit: 'fits' | 'misfit' | 'unknown';
   readonly base: number | null;
   readonly score: number;
+  /** What speaks against this way of taking the words, whatever the count says. */
+  readonly cost: number;
   /** How far ahead of the next different reading. */
   readonly lead: number;
 }
@@ -118,7 +120,7 @@ function weigh(
     const fit = fits === 'fits' ? FIT_GAIN : fits === 'unknown' ? 1 : 0;
     const agrees = said === makes ? saidGain(idle, makes, fits === 'misfit') : 0;
     const score = fit + agrees - cost - resolved.cost;
-    choices.push({ units: resolved.units, said, fit: fits, base: resolved.base, score, lead: 0 });
+    choices.push({ units: resolved.units, said, fit: fits, base: resolved.base, score, cost: cost + resolved.cost, lead: 0 });
   }
 }
 

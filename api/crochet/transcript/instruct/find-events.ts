@@ -28,7 +28,7 @@ export function findEvents(letters: Letters): readonly Event[] {
 /** `That comes to thirty six double crochets.`, `Thirty seven double crochet.`: the stitches that are there, not work. */
 function statedTotal(letters: Letters, i: number, events: readonly Event[]): Event | null {
   const token = letters.tokens[i]!;
-  if (token.kind !== 'N' || letters.text[i + 1] !== 'S' || Number(token.value) < 8) return null;
+  if (token.kind !== 'N' || !'So'.includes(letters.text[i + 1] ?? '.') || Number(token.value) < 8) return null;
   const before = letters.text[i - 1] ?? '.';
   const after = letters.text[i + 2] ?? '.';
   const isWeak = before === '=' && WEAK_RESULT.test(letters.tokens[i - 1]!.text);

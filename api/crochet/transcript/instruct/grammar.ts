@@ -52,13 +52,13 @@ export const RULES: readonly Rule[] = [
   { pattern: /IEZ(?=N?S[,&]*[CN])/y, make: (m) => (m.at(-1)!.value === 'corner' ? { type: 'corner' } : null) },
   { pattern: /ZI[XLOM]*Z/y, make: (m) => (m[0]!.value === 'corner' ? { type: 'corner' } : nothing) },
   { pattern: /[=p]X?Z/y, make: () => nothing },
-  { pattern: /NZ/y, make: (m) => (m[1]!.value === 'corner' && number(m) > 1 ? { type: 'times', n: number(m) } : nothing) },
+  { pattern: /NZ/y, make: (m) => (m[1]!.value !== 'corner' ? nothing : m[1]!.first === m[0]!.last + 1 && number(m) > 1 ? { type: 'times', n: number(m) } : null) },
   {
     pattern: /I[XLOM]*Z[,&]?NS(?![,&]*[CN])/y,
     make: (m) => (m.some((one) => one.value === 'corner') ? null : either([st(stitch(m), 1, number(m))], [st(stitch(m), number(m))])),
   },
   // unlike stitches in one place
-  { pattern: /N?S(?:[,&]*N?S)+[,&]?(?:E?o?I[XLOM]*N?[GZC]|E?T)/y, make: unlikeInOne },
+  { pattern: /N?S(?:[,&m]*N?S)+[,&]?(?:E?o?I[XLOM]*N?[GZC]|E?T)/y, make: unlikeInOne },
   { pattern: /NI?V/y, make: (m) => unit(st(BARE, number(m))) },
   { pattern: /V&N(?![StTP])/y, make: (m) => unit(st(BARE, number(m))) },
   // so many places, so many in each
@@ -75,13 +75,14 @@ export const RULES: readonly Rule[] = [
   // repeats and ends
   { pattern: /t[&,]?N(?![tS])/y, make: (m) => ({ type: 'times', n: number(m) }) },
   { pattern: /NNt/y, make: (m) => ({ type: 'times', n: number(m, 1) }) },
-  { pattern: /(?:R|E|A)*[&,p]?(?<![=c])N[Fm]?(?:t|o(?=[.,|&=ARN]|$))(?:R|A|o)*/y, make: repeated },
+  { pattern: /(?:R|E|A)*[&,p]?N[Fm]?t(?:R|A|o)*/y, make: repeated },
+  { pattern: /(?:R|E|A)*[&,p]?(?<![=c])N[Fm]?o(?=[.,|&=ARN]|$)(?:R|A|o)*/y, make: repeated },
   {
     pattern: /t(?:R|A)*/y,
     make: (m) => (Number(m[0]!.value) > 1 ? { type: 'times', n: Number(m[0]!.value) } : nothing),
   },
   // several drawn into one
-  { pattern: /NSNT(?:IXN)?/y, make: (m) => unit(tog(stitch(m), number(m, 1), number(m))) },
+  { pattern: /NSNT(?:IXN)?/y, make: manyTogether },
   { pattern: /SNT(?:[IA]?XN)?/y, make: (m) => unit(tog(stitch(m), number(m))) },
   { pattern: /NST/y, make: (m) => unit(tog(stitch(m), number(m))) },
   { pattern: /ST/y, make: (m) => unit(tog(stitch(m), 2)) },
@@ -93,7 +94,7 @@ export const RULES: readonly Rule[] = [
     pattern: /DIE?[GZ]?/y,
     make: (m) => (m.some((one) => one.kind === 'E') ? fills(tog(decName(m), 2)) : unit(tog(decName(m), 2))),
   },
-  { pattern: /DA/y, make: (m) => fills(tog(decName(m), 2)) },
+  { pattern: /(?<![&,])DA/y, make: (m) => fills(tog(decName(m), 2)) },
   { pattern: /D/y, make: (m) => unit(tog(decName(m), 2)) },
   // increases
   { pattern: /PI?E[XOL]?N[GS]?/y, make: (m) => unit(st(BARE, number(m), 2)) },
@@ -101,11 +102,12 @@ export const RULES: readonly Rule[] = [
   { pattern: /NP/y, make: (m) => unit(st(BARE, number(m), 2)) },
   { pattern: /PI?EN?[GZ]?A?/y, make: () => fills(st(BARE, 1, 2)) },
   { pattern: /IE[GZ]?,?P/y, make: () => fills(st(BARE, 1, 2)) },
-  { pattern: /PA/y, make: () => fills(st(BARE, 1, 2)) },
+  { pattern: /(?<![&,])PA/y, make: () => fills(st(BARE, 1, 2)) },
   { pattern: /PI[XOLM]?N?[GZ]?/y, make: () => unit(st(BARE, 1, 2)) },
   { pattern: /P/y, make: () => unit(st(BARE, 1, 2)) },
   // chains and places passed over
   { pattern: /K[^.,|]{0,3}C+[^.,|]{0,2}H/y, make: () => nothing },
+  { pattern: /KOC+/y, make: () => nothing },
   { pattern: /K[OXL]?N?C+/y, make: (m) => unit({ type: 'skip', many: number(m) }) },
   { pattern: /NCK/y, make: () => nothing },
   { pattern: /K[OL](?![GZNS])/y, make: () => nothing },
@@ -246,4 +248,11 @@ function aroundChain(matched: readonly Token[], letters: string): Made | null {
     if (token.kind === 'N' && matched[n - 1]?.kind === 'C' && matched[n - 2]?.kind !== 'N') many = 1;
   });
   return unit({ type: 'oneplace', parts, times: 1 });
+}
+
+/** `six singles two together` is six decreases; `four singles, three together` are four stitches and a decrease. */
+function manyTogether(matched: readonly Token[]): Made {
+  const apart = [st(stitch(matched), number(matched)), tog(stitch(matched), number(matched, 1))];
+  const joined = [tog(stitch(matched), number(matched, 1), number(matched))];
+  return isPlural(matched[1]) ? either(apart, joined) : either(joined, apart);
 }

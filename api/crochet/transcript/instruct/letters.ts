@@ -37,7 +37,8 @@ export function lettersOf(
       token.kind === 'A' && !token.text.includes(' ') && tokens[i + 1]?.kind === 'a' && 'wCGZS'.includes(tokens[i + 2]?.kind ?? '.');
     // "a row in single crochet," names the stitch and works none
     const isMention = token.kind === 'S' && /^(?:in|of)$/.test(tokens[i - 1]?.text ?? '') && ',.|&'.includes(tokens[i + 1]?.kind ?? '.');
-    const letter = isPlace || isMention ? 'w' : letterOf(token);
+    const isLeft = /^leav(?:e|ing)$/.test(token.text) && tokens[i + 1]?.kind === 'N';
+    const letter = isLeft ? 'K' : isPlace || isMention ? 'w' : letterOf(token);
     if (letter === '') continue;
     kept.push(token);
     at.push(i);

@@ -5,10 +5,11 @@ import { type Event } from './event.ts';
 type UnitEvent = Extract<Event, { type: 'unit' }>;
 
 /** Takes out of the phrases what adds nothing: what was taken back, explained twice, or only joins or turns. */
-export function prune(events: readonly Event[], tokens: readonly Token[]): readonly Event[] {
-  return withEchoes(
+export function prune(spoken: readonly Event[], tokens: readonly Token[], heading: number): readonly Event[] {
+  const events = withoutHeading(spoken, heading);
+  return withCounted(withEchoes(
     meshes(withoutTurning(withoutJoins(withoutExplained(withoutCorrected(events, tokens), tokens), tokens), tokens)),
-  );
+  ));
 }
 
 /**
@@ -112,7 +113,7 @@ function isUncounted(tokens: readonly Token[], event: Event): boolean {
 }
 
 function withoutTurning(spoken: readonly Event[], tokens: readonly Token[]): readonly Event[] {
-  const events = withoutHeading(withoutFirstSkip(spoken, tokens)).filter((event) => !isUncounted(tokens, event));
+  const events = withoutFirstSkip(spoken, tokens).filter((event) => !isUncounted(tokens, event));
   const firstUnit = events.findIndex((event) => event.type === 'unit');
   const hasSpaces = events.some(
     (event) => only(event)?.type === 'skip' || ['corner', 'oneplace', 'here'].includes(event.type),
@@ -125,10 +126,10 @@ function withoutTurning(spoken: readonly Event[], tokens: readonly Token[]): rea
 }
 
 /** `Round five is single crochet. In the corner …`: the stitch as a heading, worked only in what follows. */
-function withoutHeading(events: readonly Event[]): readonly Event[] {
+function withoutHeading(events: readonly Event[], heading: number): readonly Event[] {
   const [first, ...rest] = events;
   const unit = first === undefined ? undefined : only(first);
-  if (first?.type !== 'unit' || first.fills || unit?.type !== 'stitch' || unit.times !== 1 || unit.inOne !== 1) return events;
+  if (first?.type !== 'unit' || first.sentence !== heading || first.fills || unit?.type !== 'stitch' || unit.times !== 1 || unit.inOne !== 1) return events;
   const inSentence = rest.filter((event) => event.sentence === first.sentence && event.type !== 'plain');
   const isHeading = inSentence.every((event) => only(event)?.type === 'chain') && rest.some((event) => event.type === 'unit' && event.sentence !== first.sentence);
   return isHeading ? rest : events;
@@ -175,6 +176,11 @@ function withGroupEchoes(events: readonly Event[]): readonly Event[] {
     const event = events[n]!;
     const unit = only(event);
     if (unit?.type === 'oneplace') known = { unit, parts: unit.parts };
+    // "and three together again": the three of the group
+    if (known !== null && event.type === 'unit' && unit?.type === 'together' && unit.many === known.parts.length) {
+      out.push({ ...event, options: [[known.unit]] });
+      continue;
+    }
     const many: number = known === null ? 0 : echoLength(events, n, known.parts);
     if (known === null || many === 0 || event.type !== 'unit') {
       out.push(event);
@@ -196,4 +202,21 @@ function echoLength(events: readonly Event[], from: number, parts: readonly stri
     if (said.length === parts.length && said.every((part, k) => part === parts[k])) return n - from + 1;
   }
   return 0;
+}
+
+/** `decrease, decrease, decrease, six decreases`: the number says how many there are in all. */
+function withCounted(events: readonly Event[]): readonly Event[] {
+  const out: Event[] = [];
+  for (const event of events) {
+    const unit = only(event);
+    const isMany = (unit?.type === 'together' || (unit?.type === 'stitch' && unit.inOne > 1)) && unit.times > 1;
+    if (isMany) {
+      const single = JSON.stringify({ ...unit, times: 1 });
+      let same = 0;
+      while (JSON.stringify(only(out.at(-1 - same))) === single) same += 1;
+      if (same > 1 && same < unit.times) out.length -= same;
+    }
+    out.push(event);
+  }
+  return out;
 }

@@ -34,7 +34,7 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
     skip, skips, skipping, miss, missing, misses, pass over, jump over, hop over, leave out, passing
     over, ignore`,
   ],
-  ['P', 0, `increase, increases, inc, double it, double them, double those up, double up, double that, a pair, incs, increasing`],
+  ['P', 0, `increase, increases, inc, double it, double them, double those up, double up, double that, a pair, pairs, incs, increasing`],
   [
     'D',
     0,
@@ -109,7 +109,7 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
     'o',
     0,
     `
-    each side, each edge, per side, per edge, every side, every edge, edges, of those, of them, of these, of that, of em, such pairs, such, pairs, of each, of those pairs, of them
+    each side, each edge, per side, per edge, every side, every edge, edges, of those, of them, of these, of that, of em, such pairs, such, of each, of those pairs, of them
     pairs, sides, corners in all`,
   ],
   [
