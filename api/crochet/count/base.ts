@@ -85,7 +85,10 @@ export function chainBase(chains: number, items: readonly Item[], isRing: boolea
   const all = allItems(items);
   const targets = targetsIn(items);
   if (isRing) {
-    const inRing = targets.some((target) => target.what === 'ring' || target.what === 'sp');
+    const isIntoChains =
+      targets.some((target) => target.what === 'ch' || target.what === 'st-or-ch' || target.what === 'st') ||
+      all.some((item) => (item.type === 'work' || item.type === 'group') && item.times.type === 'fill');
+    const inRing = targets.some((target) => target.what === 'ring' || target.what === 'sp') || !isIntoChains;
     const left: Left = { ...plainLeft(chains), shape: 'ring', open: inRing };
     return { left, hook: 0, told: inRing ? chains : null };
   }

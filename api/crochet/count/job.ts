@@ -60,6 +60,7 @@ export function usesOf(items: readonly Item[], job: Job): number {
       if (item === job.lastSlip || item.stitch === 'ch' || item.stitch === 'picot' || item.times.type !== 'n') continue;
       if (
         item.into?.what === 'ring' ||
+        item.into?.what === 'edge' ||
         item.into?.which === 'hook' ||
         item.into?.which === 'same' ||
         item.into?.which === 'first' ||

@@ -8,7 +8,13 @@ export function aimsIn(items: readonly Item[]): (Target | null)[] {
     if (item.type === 'group' && !item.into) aims.push(...aimsIn(item.items));
     else if (item.type === 'work' || item.type === 'group') {
       if (item.type === 'work' && (item.stitch === 'ch' || item.stitch === 'picot')) continue;
-      if (item.into?.which === 'first' || item.into?.which === 'same' || item.into?.what === 'ring') continue;
+      if (
+        item.into?.which === 'first' ||
+        item.into?.which === 'same' ||
+        item.into?.what === 'ring' ||
+        item.into?.what === 'edge'
+      )
+        continue;
       aims.push(
         item.into && item.into.which !== 'hook'
           ? item.into.which === 'nth' && item.into.of === undefined
@@ -114,6 +120,7 @@ function note(target: Target, found: Found): void {
       found.st = true;
       return;
     case 'ring':
+    case 'edge':
       return;
     case 'other':
       if (target.which !== 'same') found.st = true;

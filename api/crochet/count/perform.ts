@@ -129,7 +129,7 @@ function performWork(job: Job, item: Work, need: () => number): void {
   const row = stitchOf(item.stitch);
   const per = pick(item.per, job.size);
   if (item === job.lastSlip) return;
-  if (item.stitch === 'picot' || row?.family === 'foundation' || target?.what === 'ring') {
+  if (item.stitch === 'picot' || row?.family === 'foundation' || target?.what === 'ring' || target?.what === 'edge') {
     const n = (item.times.type === 'n' ? pick(item.times.n, job.size) : 1) * per;
     for (let i = 0; i < n && !walker.full; i += 1) make(job, item.stitch, []);
     return;

@@ -101,6 +101,8 @@ export function placesOf(left: Left, named: Named): Place[] {
       gaps += 1;
     }
   });
+  // Free loops are called loops too: where there is neither space nor gap, a stitch is meant.
+  if (noSpaces && gaps === 0) return places.map((place) => ({ ...place, counted: true }));
   // Spaces between groups are called gaps where there is a chain in each.
   if (named.gap && gaps === 0)
     return places.map((place) => (place.kind === 'sp' ? { ...place, kind: 'gap', counted: true } : place));
@@ -115,6 +117,7 @@ export interface Spaces {
   /** Stitches of the largest group: a half shell at an edge is no shell. */
   readonly largest: number;
   readonly chains: boolean;
+  readonly gaps: boolean;
 }
 
 export function spacesOf(
@@ -125,15 +128,17 @@ export function spacesOf(
   let any = false;
   let inside = false;
   let chains = false;
+  let gaps = false;
   for (const one of all) {
     if (one.size > largest) largest = one.size;
     if (one.kind === 'ch') chains = true;
+    if (one.kind === 'gap') gaps = true;
     if (one.kind !== 'sp' && one.kind !== 'chs') continue;
     any = true;
     if (one.inside) inside = true;
     if (one.chains > longest) longest = one.chains;
   }
-  return { any, inside, longest, largest, chains };
+  return { any, inside, longest, largest, chains, gaps };
 }
 
 /** Whether a space is meant by `ch-2 sp`, `corner`, or any `sp`. */
@@ -159,6 +164,7 @@ export function isAt(place: Place, target: Target | null, spaces: Spaces): boole
   switch (target.what) {
     case 'sp':
       if (place.kind === 'gap') return !spaces.any;
+      if (place.kind === 'st') return !spaces.any && !spaces.gaps;
       return place.kind === 'sp' && isSpace(target, place, spaces);
     case 'gap':
       return place.kind === 'gap';

@@ -135,7 +135,8 @@ export function performStart(job: Job, start: Start, after: readonly Item[], rin
       const at = walker.find(job.named.sps[0] ?? { what: 'gap', which: 'next' });
       walker.stitch(start.stitch, at < 0 ? [] : [at]);
       if (next?.into?.which === 'same' && at >= 0) walker.pointed = at;
-    } else walker.stitch(start.stitch, takeOne(job, null, after[0] ?? { span: { start: 0, end: 0 } }));
+    } else if (walker.last >= 0 && walker.walk.length === 0) walker.stitch(start.stitch, [walker.last]);
+    else walker.stitch(start.stitch, takeOne(job, null, after[0] ?? { span: { start: 0, end: 0 } }));
   }
   walker.chain(start.extra);
 }

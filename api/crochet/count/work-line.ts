@@ -60,7 +60,7 @@ export function workLine(tree: LineTree, choices: Choices, setting: Setting): Li
   const ring = ownRing(items, setting.size);
   if (ring) {
     const base = chainBase(ring.chains, items.slice(ring.index + 1), true);
-    return onPlaces(items.slice(ring.index + 1), choices, { ...setting, left: base.left }, 0, base.told);
+    return onPlaces(items.slice(ring.index + 1), choices, { ...setting, left: base.left }, 0, base.told, true);
   }
   const { left } = setting;
   const isOnChain = left.chains > 0 && left.made.length === 0;
@@ -76,6 +76,7 @@ export function workLine(tree: LineTree, choices: Choices, setting: Setting): Li
       { ...setting, left: { ...base.left, turningChain: left.turningChain } },
       base.hook,
       base.told,
+      true,
     );
   }
   if (
@@ -144,11 +145,11 @@ function onPlaces(
   setting: Setting,
   hook: number,
   told: number | null,
+  onChain = hook > 0,
 ): LineWork {
   const { left } = setting;
   const first = namedIn(items);
-  const isChain = hook > 0 || (left.chains === 0 && left.shape === 'ring' && told !== null);
-  const wide = isChain ? { ...first, st: true } : first;
+  const wide = onChain ? { ...first, st: true } : first;
   const named: Named = choices.chains === 'places' && wide.sps.length === 0 && wide.st ? { ...wide, ch: true } : wide;
   const wantsSkipped =
     targetsIn(items).some((target) => target.which === 'skipped') &&
@@ -158,7 +159,10 @@ function onPlaces(
   const isOpen =
     left.open ||
     (hook === 0 &&
-      allItems(items).some((item) => (item.type === 'work' || item.type === 'group') && item.into?.what === 'ring'));
+      allItems(items).some(
+        (item) =>
+          (item.type === 'work' || item.type === 'group') && (item.into?.what === 'ring' || item.into?.what === 'edge'),
+      ));
   let places = isOpen ? [] : placesOf(base, named);
   const travels = hook > 0 ? 0 : travelling(items);
   let pointed = -1;
@@ -171,8 +175,10 @@ function onPlaces(
   }
   const walker = new Walker(places, isOpen);
   if (pointed >= 0) {
-    walker.at = Math.max(0, at);
-    walker.pointed = pointed;
+    // In a row the hook stands on the last slip stitch; in a ring the place reached is where the round begins.
+    walker.at = setting.ring ? 0 : at + 1;
+    if (setting.ring) walker.pointed = pointed;
+    else walker.last = at;
   }
   const body = items.slice(travels);
   const job: Job = {

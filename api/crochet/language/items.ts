@@ -131,6 +131,11 @@ function readItem(reading: Reading, limit: number, items: Item[]): Item[] | null
   }
   if (isWord(lex, 'total')) return readSentenceTotal(reading, limit);
   const relative = readRelative(reading, limit) ?? readShaped(reading, limit) ?? readStraight(reading, limit);
+  if (relative?.type === 'shaped' && relative.how === 'evenly') {
+    // `sc in each st, increasing 7 evenly`: the increases are spread over what was just said.
+    const last = items.at(-1);
+    if (last?.type === 'work' && last.times.type === 'fill' && last.per[0] === 1) items.pop();
+  }
   if (relative) return [relative];
   if (isWord(lex, 'rep')) return readRepeat(reading, items);
   const slip = readSlipJoin(reading, limit);
@@ -145,6 +150,8 @@ function readItem(reading: Reading, limit: number, items: Item[]): Item[] | null
   if (work) return work;
   const lay = readLay(reading);
   if (lay) return [lay];
+  const joined = readJoinedLoops(reading, limit);
+  if (joined) return joined;
   const far = readFar(reading);
   if (far) return [far];
   const step = readStep(reading, limit);
@@ -491,6 +498,26 @@ function loopBase(
 ): Item {
   const items = readItems(reading, limit);
   return { type: 'group', span: spanFrom(reading, from), items, times: times(ONE), into: target, mark: '', stop: null };
+}
+
+/** `Join yarn in free front loops of R3: …`: what follows is worked into those loops. */
+function readJoinedLoops(reading: Reading, limit: number): Item[] | null {
+  const from = reading.at;
+  if (!isWord(peek(reading), 'join') && !isPlain(peek(reading), 'attach', 'rejoin')) return null;
+  for (let i = 1; i < 14; i += 1) {
+    const lex = peek(reading, i);
+    if (lex.kind === 'end' || isMark(lex, ',') || isMark(lex, '.')) return null;
+    if (!isWord(lex, 'blo', 'flo')) continue;
+    reading.at += i;
+    const target = readTarget(reading);
+    if (target?.target.what !== 'loop') {
+      reading.at = from;
+      return null;
+    }
+    while (isSeparator(peek(reading)) && reading.at < limit) reading.at += 1;
+    return [loopBase(reading, from, target.target, limit)];
+  }
+  return null;
 }
 
 /** Words in which a stitch, a number, a place or a repeat could hide are hot. */

@@ -1,4 +1,4 @@
-import { isMark, isPlain, isWord } from './reading.ts';
+import { isMark, isPlain, isTimesSign, isWord } from './reading.ts';
 import { type Lex } from './lexer.ts';
 
 /** A label that begins a line: `Round 4:`, `R5–8`, `4th row.`, `Rnds 5 to 8`, `Row 2 (RS)`, `4)`. */
@@ -118,7 +118,7 @@ function closing(lexes: readonly Lex[], start: number): number {
       isMark(lex, ')') ||
       isMark(lex, '.') ||
       isMark(lex, '-') ||
-      isMark(lex, '|') ||
+      (isMark(lex, '|') && !opensBars(lexes, i)) ||
       isMark(lex, '=') ||
       isMark(lex, ',') ||
       isMark(lex, ';') ||
@@ -129,6 +129,14 @@ function closing(lexes: readonly Lex[], start: number): number {
     }
     return i;
   }
+}
+
+/** `|3 sc, dec| × 6`: bars round a group, not the cell of a table. */
+function opensBars(lexes: readonly Lex[], open: number): boolean {
+  for (let i = open + 2; i < open + 30; i += 1) {
+    if (isMark(at(lexes, i), '|')) return isTimesSign(at(lexes, i + 1)) || at(lexes, i + 1).kind === 'num';
+  }
+  return false;
 }
 
 /** `(RS)`, `(right side)`, `(4 rounds)`, `(wrong side)`. */

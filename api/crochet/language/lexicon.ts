@@ -27,8 +27,8 @@ const WORDS: Readonly<Record<string, string>> = {
   ring: 'ring, circle, magic ring, magic circle, magic loop, mr, mc, mgc, magic rng, adjustable ring, adjustable loop, sliding loop, slip ring, magical ring, magic',
   corner: 'corner, corners, cnr, corner sp, corner space, corner sps, corner spaces, corner loop',
   around:
-    'around, arround, aroud, all around, all the way around, all the way round, all round, rnd around, evenly around, around the whole round, entire round, around the circle, throughout, to complete round, to complete rnd',
-  across: 'across, acros, along, all across, all along, all the way across, evenly across, straight across',
+    'around, arround, aroud, all around, all the way around, all the way round, all round, rnd around, around the whole round, entire round, around the circle, throughout, to complete round, to complete rnd',
+  across: 'across, acros, along, all across, all along, all the way across, straight across',
   round: 'round, rounds, rnd, rnds, rd, rds, ronud, rond',
   row: 'row, rows, rwo, rw, rws',
   end: 'end, ends, beginning of round, end of round, end of row, end of rnd, end of the round, end of the row, end of the rnd',

@@ -12,6 +12,7 @@ export function printPlace(target: Target, n: number, terms: Terms, sized?: Size
   const noun = nounOf(target, n, terms);
   const count = sized && (sized.length > 1 || sized[0] !== 1) ? `${sizedText(sized)} ` : n > 1 ? `${String(n)} ` : '';
   if (target.what === 'ring') return 'ring';
+  if (target.what === 'edge') return 'the edge';
   if (target.what === 'loop')
     return `${target.line === undefined ? 'the free loops left' : `the front loops left in R${String(target.line)}`}`;
   switch (target.which) {

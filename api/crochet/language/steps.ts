@@ -138,6 +138,10 @@ export function readSlipJoin(reading: Reading, limit: number): Item | null {
   if (lex.kind !== 'stitch' || lex.text !== 'slst') return null;
   reading.at += 1;
   const rest = reading.at;
+  if (formsRing(reading)) {
+    takeClause(reading, limit);
+    return step(reading, from, 'ring');
+  }
   if (isWord(peek(reading), 'join')) {
     takeClause(reading, limit);
     return step(reading, from, 'join', { into: joinPlace(reading, rest) });
@@ -146,7 +150,8 @@ export function readSlipJoin(reading: Reading, limit: number): Item | null {
     takeAll(reading, 'the');
     const place = peek(reading);
     const isFirst = isWord(place, 'first', 'top', 'turningchain') || isChainTop(reading);
-    const goesOn = isWord(peek(reading, 1), 'sp', 'sp2', 'corner') || peek(reading, 1).kind === 'num';
+    const goesOn =
+      isWord(peek(reading, 1), 'sp', 'sp2', 'corner') || (isWord(place, 'first') && peek(reading, 1).kind === 'num');
     if (isWord(place, 'join', 'end') || (isFirst && !goesOn)) {
       takeClause(reading, limit);
       return step(reading, from, 'join', { into: joinPlace(reading, rest) });
@@ -156,10 +161,23 @@ export function readSlipJoin(reading: Reading, limit: number): Item | null {
   return null;
 }
 
+/** `to form a ring`, `in first ch to make ring`, within this clause. */
+function formsRing(reading: Reading): boolean {
+  for (let i = 0; i < 12; i += 1) {
+    const lex = peek(reading, i);
+    if (lex.kind === 'end' || isMark(lex, ',') || isMark(lex, '.') || isMark(lex, ';')) return false;
+    if (isPlain(lex, 'form', 'forming', 'forms') || (isWord(lex, 'work') && i > 0)) return true;
+  }
+  return false;
+}
+
 /** `3rd ch of beg ch-3`, `top of ch 3`. */
 function isChainTop(reading: Reading): boolean {
   const lex = peek(reading);
-  const isNth = lex.kind === 'ord' && peek(reading, 1).kind === 'stitch' && peek(reading, 1).text === 'ch';
+  const isNth =
+    lex.kind === 'ord' &&
+    ((peek(reading, 1).kind === 'stitch' && peek(reading, 1).text === 'ch') ||
+      (isWord(peek(reading, 1), 'of') && peek(reading, 2).kind === 'num'));
   return isNth && !isWord(peek(reading, 2), 'hook');
 }
 

@@ -48,6 +48,11 @@ export function readTarget(reading: Reading): TargetRead | null {
 
 function place(reading: Reading): TargetRead | null {
   takeAll(reading, 'the', 'of');
+  while (
+    isPlain(peek(reading), 'free', 'unused', 'remaining', 'exposed', 'unworked') &&
+    isWord(peek(reading, 1), 'blo', 'flo')
+  )
+    reading.at += 1;
   const loops = readLoops(reading);
   if (loops) {
     const freed = freeLoops(reading, loops);
@@ -145,7 +150,7 @@ function fromNoun(noun: Noun, which: Target['which'], count: Sized | null, fill:
 /** `front loops left in R10`. */
 function freeLoops(reading: Reading, loops: Loops): TargetRead | null {
   const start = reading.at;
-  let free = false;
+  let free = isPlain(reading.lexes[start - 2] ?? peek(reading), 'free', 'unused', 'remaining', 'exposed', 'unworked');
   while (
     isPlain(peek(reading), 'left', 'free', 'unused', 'unworked', 'exposed', 'remaining') ||
     isWord(peek(reading), 'remain', 'skipped', 'of', 'the', 'in', 'on', 'from')
@@ -324,7 +329,7 @@ function centre(reading: Reading): TargetRead {
   const noun = readNoun(reading);
   const start = reading.at;
   if (take(reading, 'of', 'from')) {
-    takeAll(reading, 'the', 'next', 'each', 'same', 'first');
+    takeAll(reading, 'the', 'next', 'each', 'same', 'first', 'last');
     const of = readNoun(reading);
     if (of)
       return {

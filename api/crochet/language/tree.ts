@@ -79,7 +79,8 @@ export type Times =
 
 /** What a stitch is worked into. */
 export interface Target {
-  readonly what: 'st' | 'ch' | 'sp' | 'gap' | 'ring' | 'row-end' | 'loop' | 'mark' | 'group' | 'st-or-ch' | 'other';
+  readonly what:
+    'st' | 'ch' | 'sp' | 'gap' | 'ring' | 'row-end' | 'loop' | 'mark' | 'edge' | 'group' | 'st-or-ch' | 'other';
   readonly which: 'next' | 'same' | 'first' | 'last' | 'each' | 'nth' | 'centre' | 'skipped' | 'every' | 'hook' | 'far';
   /** For nth, every and hook: which one (2 in `2nd ch from hook`, 6 in `every 6th st`). */
   readonly n?: number;

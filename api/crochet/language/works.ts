@@ -196,6 +196,7 @@ function placed(
     };
     return [{ ...legs, per: ONE, times: times(readMultiple(reading) ?? ONE), into: null, multiplied: false }];
   }
+  const edge = readEdge(reading);
   const span = spanFrom(reading, from);
   const isIncrease = key.endsWith('inc') && key !== 'inc';
   const stitch = isIncrease ? key.slice(0, -3) : key;
@@ -212,7 +213,14 @@ function placed(
   const found = amounts(before ?? after, isSeries ? null : multiple, target, fill);
   const work = { ...base, ...found, per: isIncrease ? found.per.map((n) => n * 2) : found.per };
   const into = through ? { ...(work.into ?? { what: 'st' as const, which: 'next' as const }), through } : work.into;
-  const only: Work = { ...work, into };
+  const only: Work = edge
+    ? {
+        ...work,
+        per: work.times.type === 'n' ? work.times.n : work.per,
+        times: times(ONE),
+        into: { what: 'edge', which: 'next' },
+      }
+    : { ...work, into };
   // `4 dc × 4` keeps both figures: it may be meant for more than the last.
   const items: Item[] = isSeries
     ? [
@@ -237,6 +245,35 @@ function readTogether(reading: Reading, target: TargetRead | null, count: Sized 
   const legs = target?.count?.[0] ?? (target === null ? count?.[0] : undefined);
   if (legs === undefined || legs < 2 || legs > 12 || !take(reading, 'tog')) return null;
   return legs;
+}
+
+/** `30 sc evenly around the edge`, `evenly along the side`: places that nothing tells the number of. */
+function readEdge(reading: Reading): boolean {
+  const start = reading.at;
+  const isEven = take(reading, 'evenly');
+  takeAll(reading, 'in', 'around', 'across', 'on', 'the', 'of');
+  if (
+    isPlain(
+      peek(reading),
+      'edge',
+      'edges',
+      'opening',
+      'armhole',
+      'neck',
+      'neckline',
+      'brim',
+      'border',
+      'perimeter',
+      'outside',
+    ) ||
+    isWord(peek(reading), 'side', 'rowend')
+  ) {
+    reading.at += 1;
+    return true;
+  }
+  reading.at = start;
+  if (isEven) take(reading, 'evenly');
+  return false;
 }
 
 /** `dc two rows down`: where a long stitch reaches to, which is no count. */
@@ -317,7 +354,7 @@ function isPost(reading: Reading): boolean {
   return (
     isWord(next, 'next', 'each', 'same', 'first', 'last') ||
     isPlain(next, 'post') ||
-    (isWord(next, 'the') && isPlain(peek(reading, 2), 'post')) ||
+    (isWord(next, 'the') && (isPlain(peek(reading, 2), 'post') || peek(reading, 2).kind === 'num')) ||
     next.kind === 'stitch' ||
     next.kind === 'ord'
   );
