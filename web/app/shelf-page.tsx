@@ -24,6 +24,9 @@ export const loader = signedInLoader(async (client, { request }, me) => {
   await client.query({ ...shelfQuery(studio.studioId, part), staleTime: 'static' });
 });
 
+/** On a phone the strip has two lines, and the first wants room above it. */
+const ON_PHONE = 'max-sm:inline-block max-sm:py-2.5';
+
 function howMany(count: number, isShelf: boolean): string {
   if (count === 0) return isShelf ? 'no patterns yet' : 'nothing here';
   return count === 1 ? '1 pattern' : `${count} patterns`;
@@ -40,7 +43,10 @@ function StudioShelf({ studioId, name }: { studioId: string; name: string }) {
   const isEmpty = shelf.patterns.length === 0;
   return (
     <>
-      <TopStrip title={TITLES[part]} beside={`${name}, ${howMany(shelf.patterns.length, part === 'shelf')}`}>
+      <TopStrip
+        title={<span className={ON_PHONE}>{TITLES[part]}</span>}
+        beside={<span className={ON_PHONE}>{`${name}, ${howMany(shelf.patterns.length, part === 'shelf')}`}</span>}
+      >
         {!isEmpty && (
           <div className="flex items-center gap-4.5 max-sm:w-[calc(100vw-24px)] max-sm:gap-3 max-sm:pb-2">
             <FindField value={words} onChange={setWords} />

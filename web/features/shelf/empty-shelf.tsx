@@ -47,7 +47,7 @@ export function EmptyShelf({ mayCreate }: { mayCreate: boolean }) {
           ))}
         </ol>
         <div className="px-5 sm:pl-[108px]">
-          <p className="mt-12 leading-[24px] text-walnut2 sm:leading-[48px]">
+          <p className="mt-12 leading-[24px] text-walnut2 sm:leading-[48px] lg:pr-[268px]">
             No transcript? Most film editors export WebVTT or SubRip. Text with clock times will do.
           </p>
           <p className="flex h-12 flex-wrap items-center gap-x-4.5 gap-y-2">

@@ -97,7 +97,7 @@ export function ShelfRow({
           {formatTouched(pattern.touchedAt)}
         </time>
       </span>
-      <span className="z-[1] justify-self-end pr-2 max-sm:absolute max-sm:top-1 max-sm:right-0">
+      <span className="z-[1] justify-self-end pr-2 has-[[aria-expanded=true]]:z-20 max-sm:absolute max-sm:top-1 max-sm:right-0">
         {onAct && <RowActions title={pattern.title} part={part} onAct={onAct} />}
       </span>
     </li>
