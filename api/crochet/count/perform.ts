@@ -397,7 +397,7 @@ function cutShort(job: Job, items: readonly Item[], stop: number): void {
     perform(job, [item], 0);
     if (walker.short > before.short || walker.at > stop) {
       walker.back(before);
-      if (item.type === 'work' && item.times.type === 'n' && item.stitch !== 'inc') {
+      if (item.type === 'work' && item.into === null && item.times.type === 'n' && pick(item.times.n, job.size) > 1) {
         const one: Work = { ...item, times: { type: 'n', n: [1] } };
         while (walker.remaining(stop) > 0) perform(job, [one], 0);
       }

@@ -79,14 +79,12 @@ function unsaid(
   job: Job,
 ): Found {
   const row = stitch ? stitchOf(stitch) : undefined;
+  // Before a cluster in the same place the chain is its first leg.
+  if (row?.family === 'bunch') return { stitch: null, extra: 0, unsaid: false };
   const tall =
     row?.family === 'increase' || row?.family === 'decrease' ? (stitchOf(job.stitch)?.height ?? 1) : (row?.height ?? 1);
   const base =
-    row?.family === 'plain' || row?.family === 'post'
-      ? stitch!
-      : row?.family === 'bunch' || row?.family === 'group'
-        ? 'dc'
-        : job.stitch;
+    row?.family === 'plain' || row?.family === 'post' ? stitch! : row?.family === 'group' ? 'dc' : job.stitch;
   if (tall <= 1) {
     // Before single crochet a longer chain is a space of its own, a short one only lifts the hook.
     const isSpace = chains > 1 && hasChains(after);

@@ -112,7 +112,9 @@ function build(terms: Terms, own: readonly (readonly [string, string])[]): Trie 
   return trie;
 }
 
-const READY = new Map<Terms, Trie>();
+/** Lexicons kept ready: those of the last patterns with stitches of their own. */
+const READY = new Map<string, Trie>();
+const MOST_KEPT = 8;
 
 /**
  * The words known in these terms, with the stitches that a pattern defines for itself laid over them.
@@ -120,11 +122,12 @@ const READY = new Map<Terms, Trie>();
  * @param own pairs of written form (small letters) and key.
  */
 export function lexiconOf(terms: Terms, own: readonly (readonly [string, string])[] = []): Trie {
-  if (own.length > 0) return build(terms, own);
-  let ready = READY.get(terms);
+  const key = own.length === 0 ? terms : `${terms} ${JSON.stringify(own)}`;
+  let ready = READY.get(key);
   if (!ready) {
-    ready = build(terms, []);
-    READY.set(terms, ready);
+    if (READY.size > MOST_KEPT) READY.clear();
+    ready = build(terms, own);
+    READY.set(key, ready);
   }
   return ready;
 }

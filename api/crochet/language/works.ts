@@ -9,7 +9,7 @@ import { FILL, readFill, times } from './times.ts';
 /** A work that begins here: a count and a stitch, or a stitch and a count. May be several where one word does for all. */
 export function readWork(reading: Reading): Item[] | null {
   const from = reading.at;
-  const before = readSized(reading);
+  let before = readSized(reading);
   const isGlued = before !== null && peek(reading).kind === 'stitch' && peek(reading).glued;
   if (before && isMark(peek(reading), '-') && peek(reading, 1).kind === 'stitch' && peek(reading, 1).glued)
     reading.at += 1;
@@ -27,6 +27,8 @@ export function readWork(reading: Reading): Item[] | null {
   if (lex.kind === 'stitch') {
     reading.at += 1;
     key = stitchWithTail(reading, lex.text);
+    // `3-dc cluster` is one cluster of three legs.
+    if (key !== lex.text && stitchOf(key)?.family === 'bunch') before = null;
   } else if (before && isWord(lex, 'st')) {
     reading.at += 1;
     if (isPlain(peek(reading), 'apart')) {
@@ -236,7 +238,7 @@ function placed(
       ]
     : [only];
   if (target?.also) items.push({ ...work, into: target.also });
-  items.push(...conjoined(reading, base));
+  items.push(...conjoined(reading, base, into ? before : null));
   return items;
 }
 
@@ -400,7 +402,7 @@ function amounts(count: Sized | null, more: Sized | null, target: TargetRead | n
 }
 
 /** `… and in each ch across`, `… and next 2`: the same stitch goes on in another place. */
-function conjoined(reading: Reading, base: Omit<Work, 'per' | 'times' | 'into'>): Item[] {
+function conjoined(reading: Reading, base: Omit<Work, 'per' | 'times' | 'into'>, count: Sized | null): Item[] {
   const items: Item[] = [];
   for (;;) {
     const from = reading.at;
@@ -429,7 +431,7 @@ function conjoined(reading: Reading, base: Omit<Work, 'per' | 'times' | 'into'>)
       return items;
     }
     const fill = readFill(reading);
-    items.push({ ...base, span: spanFrom(reading, from), ...amounts(null, null, target, fill) });
+    items.push({ ...base, span: spanFrom(reading, from), ...amounts(count, null, target, fill) });
     if (target.also)
       items.push({
         ...base,
