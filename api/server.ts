@@ -53,5 +53,5 @@ try {
 } catch (err) {
   if (!(err instanceof EnvError) && !(err instanceof NewerDatabase)) throw err;
   console.error(`Roundelay does not start:\n${err.message}`);
-  process.exitCode = 1;
+  process.exit(1);
 }

@@ -1,10 +1,20 @@
 import type { Knex } from 'knex';
-import { Logger as WorkerLogger, parseCronItems, run, runMigrations, type TaskList } from 'graphile-worker';
+import { EventEmitter } from 'node:events';
+import { setTimeout as wait } from 'node:timers/promises';
+import {
+  Logger as WorkerLogger,
+  parseCronItems,
+  run,
+  runMigrations,
+  type TaskList,
+  type WorkerEvents,
+} from 'graphile-worker';
 import type { Logger } from './log.ts';
 
 /** How often a job is tried, with growing gaps, before it stands as failed. */
 export const TRIES = 5;
 const HEARTBEAT_MS = 10_000;
+const STOP_MS = 8_000;
 /** A worker not heard of for this long is dead, and its jobs go to the others. */
 const DEAD_AFTER_MS = 40_000;
 
@@ -93,7 +103,12 @@ export async function startJobs(options: {
       },
     ]),
   );
+  // The queue locks a job for the pool of workers that takes it: the pool's id is what has to be kept alive.
+  const mine = new Set<string>();
+  const events: WorkerEvents = new EventEmitter();
+  events.on('pool:create', ({ workerPool }) => mine.add(workerPool.id));
   const runner = await run({
+    events,
     connectionString: options.databaseUrl,
     taskList,
     parsedCronItems: parseCronItems(
@@ -104,7 +119,6 @@ export async function startJobs(options: {
     logger: workerLogger(log),
   });
 
-  const mine = new Set<string>();
   const beat = async () => {
     const now = new Date();
     const rows = [...mine].map((id) => ({ id, seen_at: now }));
@@ -112,22 +126,19 @@ export async function startJobs(options: {
     await releaseDeadWorkers(db, now);
   };
   const tryBeat = () => beat().catch((err: unknown) => log.warn({ err }, 'the heartbeat of the workers was missed'));
-  runner.events.on('job:start', ({ worker }) => {
-    if (mine.has(worker.workerId)) return;
-    mine.add(worker.workerId);
-    void tryBeat();
-  });
+  await tryBeat();
   const heart = setInterval(() => void tryBeat(), HEARTBEAT_MS);
   heart.unref();
 
   return {
     async stop() {
       clearInterval(heart);
-      await runner.stop();
-      if (mine.size > 0)
-        await db('workers')
-          .whereIn('id', [...mine])
-          .delete();
+      // Jobs are asked to stop after five seconds; one that does not listen is taken from it.
+      await Promise.race([runner.stop(), wait(STOP_MS, undefined, { ref: false })]);
+      await db.raw('select graphile_worker.force_unlock_workers(?::text[])', [[...mine]]);
+      await db('workers')
+        .whereIn('id', [...mine])
+        .delete();
     },
   };
 }
