@@ -38,19 +38,26 @@ const AT_THE_DOOR: Record<string, Page> = {
 const routes = (pages: Record<string, Page>, client: QueryClient): RouteObject[] =>
   Object.entries(pages).map(([path, page]) => ({
     path,
-    errorElement: <PageProblem />,
     lazy: async () => {
       const { loader, ...rest } = await page();
       return loader ? { ...rest, loader: loader(client) } : rest;
     },
   }));
 
+/** While the first page is on its way: said, and nothing drawn that would jump. */
+const Opening = () => (
+  <p role="status" className="sr-only">
+    Opening the page
+  </p>
+);
+
 /** The table of pages. Each is fetched when somebody goes there. */
 export const createRouter = (client: QueryClient) =>
   createBrowserRouter([
-    ...routes(AT_THE_DOOR, client),
+    { errorElement: <PageProblem />, hydrateFallbackElement: <Opening />, children: routes(AT_THE_DOOR, client) },
     {
       element: <AppShell />,
+      hydrateFallbackElement: <Opening />,
       children: [{ errorElement: <PageProblem />, children: routes(IN_THE_HOUSE, client) }],
     },
     { path: '*', element: <PageProblem /> },

@@ -1,5 +1,6 @@
 import { useKeys } from '../../../lib/use-keys.ts';
 import { loopOf } from '../side/clip-panel.tsx';
+import { closeLine } from '../pattern/open-line.tsx';
 import { moveLine } from '../pattern/line-deeds.ts';
 import { useUndoKeys } from '../data/use-undo-keys.ts';
 import { markAtPlayhead, nudgeMoment } from './marking.ts';
@@ -14,6 +15,8 @@ export interface KeyDoors {
   readonly tell: (words: string) => void;
 }
 
+const WORDS = { undo: 'Undone', redo: 'Done again' } as const;
+
 /** Every key of the bench. The sheet of keys (`?`) lists the same. */
 export function useBenchKeys(desk: Desk, doors: KeyDoors): void {
   const { player, bench, pattern } = desk;
@@ -22,7 +25,7 @@ export function useBenchKeys(desk: Desk, doors: KeyDoors): void {
     const line = lineOf(desk, desk.lineId);
     if (line && pattern.mayEdit) moveLine(desk, line, way);
   };
-  useUndoKeys(bench, (outcome) => !outcome.done && doors.tell(outcome.words));
+  useUndoKeys(bench, (outcome, which) => doors.tell(outcome.done ? WORDS[which] : outcome.words));
   useKeys({
     Space: () => player.request({ kind: 'toggle' }),
     ArrowLeft: step(-1000),
@@ -49,6 +52,6 @@ export function useBenchKeys(desk: Desk, doors: KeyDoors): void {
     PageDown: () => walkCaptions(desk, 1),
     Enter: () => desk.lineId && desk.pick(desk.lineId, !desk.isOpen),
     'Ctrl+Enter': doors.useSuggestion,
-    Escape: () => desk.isOpen && desk.pick(desk.lineId),
+    Escape: () => desk.isOpen && closeLine(desk),
   });
 }

@@ -95,7 +95,8 @@ export function useNewDesk(bench: Bench, cuesByRecording: CuesByRecording, start
       showRecording(mark.recordingId);
       player.request({ kind: 'seek', toMs: mark.startMs });
     },
-    tellDone: (words) => toast(words, () => void bench.undo()),
+    tellDone: (words) =>
+      toast(words, () => void bench.undo().then((outcome) => toast(outcome.done ? 'Undone' : outcome.words))),
   };
 }
 

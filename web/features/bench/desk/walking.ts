@@ -1,5 +1,6 @@
 import { lastBegun } from '../transcript/captions.ts';
 import { nextToLook } from './bench-count.ts';
+import { focusLine } from './focus-line.ts';
 import { heardSpan, mainMark } from './moments.ts';
 import { type Desk } from './use-desk.ts';
 
@@ -8,7 +9,9 @@ export function walkLines(desk: Desk, way: 1 | -1): void {
   const { lines } = desk.pattern;
   const at = lines.findIndex((line) => line.id === desk.lineId);
   const next = at < 0 ? lines[way > 0 ? 0 : lines.length - 1] : lines[at + way];
-  if (next) desk.pick(next.id, desk.isOpen);
+  if (!next) return;
+  desk.pick(next.id, desk.isOpen);
+  if (!desk.isOpen) focusLine(next.id);
 }
 
 /** The playhead goes to the caption before or after the one that is spoken. */

@@ -12,7 +12,11 @@ export function Heard({ lineId }: { lineId: string }) {
   const desk = useDesk();
   const heard = desk.pattern.evidence
     .filter((one) => one.lineId === lineId && HEARD_ROLES.includes(one.role))
-    .sort((a, b) => a.startMs - b.startMs || a.firstWord - b.firstWord);
+    .sort((a, b) => a.firstWord - b.firstWord || b.lastWord - a.lastWord)
+    // A total is often heard inside the words of the work: said once, it stands once.
+    .filter(
+      (one, i, all) => !all.slice(0, i).some((other) => other.lastWord >= one.lastWord && other.role !== 'unread'),
+    );
   const span = spanToHear(desk, lineId);
   if (heard.length === 0 && !span) return null;
   return (

@@ -1,5 +1,6 @@
 import { type Line, type LineCreate, type LineEdit } from '#contract/rows';
 import { type Desk } from '../desk/use-desk.ts';
+import { focusLine } from '../desk/focus-line.ts';
 import { nextNumber } from '../desk/line-name.ts';
 
 const linesOf = (desk: Desk, pieceId: string) => desk.pattern.lines.filter((line) => line.pieceId === pieceId);
@@ -63,6 +64,8 @@ export function moveLine(desk: Desk, line: Line, way: 1 | -1): void {
 export function deleteLine(desk: Desk, line: Line): void {
   const { lines } = desk.pattern;
   const at = lines.findIndex((one) => one.id === line.id);
-  desk.pick((lines[at + 1] ?? lines[at - 1])?.id ?? null);
+  const neighbour = (lines[at + 1] ?? lines[at - 1])?.id ?? null;
+  desk.pick(neighbour);
+  focusLine(neighbour);
   desk.bench.remove('line', line.id);
 }

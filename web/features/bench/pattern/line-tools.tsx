@@ -74,11 +74,23 @@ export function LineTools({ line }: { line: Line }) {
         <Button size="row" icon={Copy} onClick={() => duplicateLine(desk, line)}>
           Duplicate
         </Button>
-        <Button size="row" icon={ArrowUp} keys={['Alt', '↑']} onClick={() => moveLine(desk, line, -1)}>
-          Move up
+        <Button
+          size="row"
+          icon={ArrowUp}
+          keys={['Alt', '↑']}
+          aria-label="Move up"
+          onClick={() => moveLine(desk, line, -1)}
+        >
+          Up
         </Button>
-        <Button size="row" icon={ArrowDown} keys={['Alt', '↓']} onClick={() => moveLine(desk, line, 1)}>
-          Move down
+        <Button
+          size="row"
+          icon={ArrowDown}
+          keys={['Alt', '↓']}
+          aria-label="Move down"
+          onClick={() => moveLine(desk, line, 1)}
+        >
+          Down
         </Button>
         <Button
           size="row"

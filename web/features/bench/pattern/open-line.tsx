@@ -4,6 +4,7 @@ import { type Line, type LineEdit } from '#contract/rows';
 import { cx } from '../../../lib/class-names.ts';
 import { formatMoment } from '../../../lib/time.ts';
 import { Button } from '../../../ui/button.tsx';
+import { focusLine } from '../desk/focus-line.ts';
 import { isCounted } from '../desk/bench-count.ts';
 import { lineName } from '../desk/line-name.ts';
 import { mainMark } from '../desk/moments.ts';
@@ -147,5 +148,5 @@ const nameOf = (desk: Desk, lineId: string): string | null => {
 export function closeLine(desk: Desk): void {
   const { lineId } = desk;
   desk.pick(lineId);
-  requestAnimationFrame(() => document.querySelector<HTMLElement>(`button[data-line="${lineId}"]`)?.focus());
+  focusLine(lineId);
 }

@@ -38,7 +38,7 @@ export function PieceSection({ piece }: { piece: Piece }) {
     goTo(id);
   });
   return (
-    <section aria-label={piece.name}>
+    <div role="group" aria-label={piece.name}>
       <PieceHead piece={piece} lines={lines} />
       <SortableContext items={lines.map((line) => line.id)} strategy={verticalListSortingStrategy}>
         <ol>
@@ -79,6 +79,6 @@ export function PieceSection({ piece }: { piece: Piece }) {
           </Button>
         </div>
       )}
-    </section>
+    </div>
   );
 }
