@@ -13,7 +13,8 @@ export function withAliases(tokens: readonly Token[]): readonly Token[] {
       const meant = namedHere(tokens, i);
       if (meant !== null) aliases.set(token.text, meant);
     }
-    const known = token.kind === 'w' ? (aliases.get(token.text) ?? aliases.get(token.text.replace(/s$/, ''))) : undefined;
+    const known =
+      token.kind === 'w' ? (aliases.get(token.text) ?? aliases.get(token.text.replace(/s$/, ''))) : undefined;
     return known === undefined ? token : { ...token, kind: known.kind, value: known.value };
   });
 }

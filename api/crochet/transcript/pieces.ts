@@ -38,17 +38,28 @@ export function readMake(
       .filter((one) => !/^(?:the|a|so|um|uh|you|only|'ll|be|to|just)$/.test(one.text))
       .map((one) => one.text)
       .join(' ');
-    if (MAKING.test(before) || (isNear && BEING.test(before)) || (isNear && !isFirst && isAlone(tokens, i)) || isNeeded(tokens, i)) return n;
+    if (
+      MAKING.test(before) ||
+      (isNear && BEING.test(before)) ||
+      (isNear && !isFirst && isAlone(tokens, i)) ||
+      isNeeded(tokens, i)
+    )
+      return n;
   }
   return 1;
 }
 
 const textFrom = (tokens: readonly Token[], i: number, to: number): string =>
-  tokens.slice(i, Math.min(to, i + 6)).map((one) => one.text).join(' ');
+  tokens
+    .slice(i, Math.min(to, i + 6))
+    .map((one) => one.text)
+    .join(' ');
 
 /** `Six squares is what you need`, `Two tabs are needed`. */
 function isNeeded(tokens: readonly Token[], i: number): boolean {
-  return /^\w+ \w+(?: \w+)? (?:is|are)(?: what)?(?: you)? (?:need|needed|wanted)/.test(textFrom(tokens, i, tokens.length));
+  return /^\w+ \w+(?: \w+)? (?:is|are)(?: what)?(?: you)? (?:need|needed|wanted)/.test(
+    textFrom(tokens, i, tokens.length),
+  );
 }
 
 function isFree(tokens: readonly Token[], i: number, to: number): boolean {
@@ -60,7 +71,10 @@ function isFree(tokens: readonly Token[], i: number, to: number): boolean {
 
 function isPair(tokens: readonly Token[], i: number, from: number, isNear: boolean): boolean {
   const token = tokens[i]!;
-  const around = tokens.slice(Math.max(from, i - 8), i + 3).map((one) => one.text).join(' ');
+  const around = tokens
+    .slice(Math.max(from, i - 8), i + 3)
+    .map((one) => one.text)
+    .join(' ');
   if (token.text === 'pair') return isNear && !/\beyes\b|\bknit/.test(around);
   return token.kind === 't' && Number(token.value) === 2 && /\b(?:make|making|everything|do|you do)\b/.test(around);
 }
@@ -84,12 +98,14 @@ export function readPieceName(tokens: readonly Token[], from: number, to: number
   let best: { text: string; score: number } | null = null;
   for (let i = Math.max(from, to - NEAR); i < to; i++) {
     const token = tokens[i]!;
-    if (token.kind !== 'w' || token.text.length < 3 || NO_NAME.has(token.text) || !/^[a-z'-]+$/.test(token.text)) continue;
+    if (token.kind !== 'w' || token.text.length < 3 || NO_NAME.has(token.text) || !/^[a-z'-]+$/.test(token.text))
+      continue;
     const before = tokens[i - 1]?.kind ?? '.';
     const after = tokens[i + 1]?.kind ?? '.';
     const closes = '.,|'.includes(after);
     const heads = '.|'.includes(before);
-    const led = /^(?:the|a|an|your|my|now|next|for|with)$/.test(tokens[i - 1]?.text ?? '') || before === 'N' || before === 'O';
+    const led =
+      /^(?:the|a|an|your|my|now|next|for|with)$/.test(tokens[i - 1]?.text ?? '') || before === 'N' || before === 'O';
     const score = (closes ? 1 : 0) + (heads ? 0.8 : 0) + (led ? 1 : 0) + (i - from) / 1000;
     if (best === null || score > best.score + 0.2) best = { text: token.text, score };
   }

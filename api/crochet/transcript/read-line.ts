@@ -1,6 +1,8 @@
 import { type Announced } from './announce/chain.ts';
 import { readNumberList } from './announce/number-list.ts';
-import { basesAfter, basesOnChain, type ReadSoFar } from './bases.ts';
+import { type ReadSoFar } from './bases.ts';
+import { cornerBefore } from './corner-before.ts';
+import { basesFor } from './places-before.ts';
 import { type Choice, chooseWork, type Setting } from './instruct/choose-work.ts';
 import { type Event } from './instruct/event.ts';
 import { findEvents } from './instruct/find-events.ts';
@@ -54,8 +56,11 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
   const { announced, from, to } = stretch;
   const { candidate } = announced;
   const names = namesOfLines(tokens, stretch);
-  const start = tokens.slice(from, candidate.mark).some((token) => 'SPDFE'.includes(token.kind)) ? from : candidate.mark;
-  const isOut = (i: number) => i < start || talk.skipped[i] === true || names.has(i) || (i >= candidate.mark && i < candidate.end);
+  const start = tokens.slice(from, candidate.mark).some((token) => 'SPDFE'.includes(token.kind))
+    ? from
+    : candidate.mark;
+  const isOut = (i: number) =>
+    i < start || talk.skipped[i] === true || names.has(i) || (i >= candidate.mark && i < candidate.end);
   const letters = lettersOf(tokens, from, to, talk.sentences, isOut);
   const events = prune(findEvents(letters), tokens, talk.sentences.startOf[candidate.mark]!);
   const words = tokens.slice(from, to).filter((_, n) => !isOut(from + n));
@@ -90,31 +95,20 @@ function namesOfLines(tokens: readonly Token[], { announced, from, to }: Stretch
     const follows = tokens[i - 1]?.kind === 'U' || tokens[i - 1]?.kind === '#';
     const value = Number(tokens[i]!.value);
     const isNamed = follows && value <= last + 1;
-    const isTag = isUnnumbered && value === first && tokens[i - 1]?.kind !== 'E' && /[.,|]/.test(tokens[i + 1]?.kind ?? '.') && /^(?:is|'s|that is|there is|it is)$/.test(tokens[i - 1]?.text ?? '');
+    const isTag =
+      isUnnumbered &&
+      value === first &&
+      tokens[i - 1]?.kind !== 'E' &&
+      /[.,|]/.test(tokens[i + 1]?.kind ?? '.') &&
+      /^(?:is|'s|that is|there is|it is)$/.test(tokens[i - 1]?.text ?? '');
     const isHead = isUnnumbered && value === first && i - from < 3 && ',.'.includes(tokens[i + 1]?.kind ?? '.');
     if (isOwn || isNamed || isTag || isHead) for (let j = i; j < (isOwn ? list.end : i + 1); j++) out.add(j);
   }
   return out;
 }
 
-/** The corner of an earlier line, in the stitch of this one. */
-function cornerBefore(before: Before, stitch: string): Unit | null {
-  for (const line of [...before.all.flat(), ...before.piece].reverse()) {
-    const parts = cornerIn(line.units);
-    if (parts !== null) return { type: 'oneplace', parts: parts.map((part) => (part === 'ch' ? part : stitch)), times: 1 };
-  }
-  return null;
-}
-
-function cornerIn(units: readonly Unit[]): readonly string[] | null {
-  for (const unit of units) {
-    const parts = unit.type === 'repeat' ? cornerIn(unit.units) : unit.type === 'oneplace' ? unit.parts : null;
-    if (parts?.includes('ch') === true) return parts;
-  }
-  return null;
-}
-
-const LEAVING = /\b(?:leave|leaving)\b.{0,12}\b(?:last|rest|alone|unworked|hat)\b|\bstop dead\b|\bjust the \w+\b|\bhalf the\b/;
+const LEAVING =
+  /\b(?:leave|leaving)\b.{0,12}\b(?:last|rest|alone|unworked|hat)\b|\bstop dead\b|\bjust the \w+\b|\bhalf the\b/;
 
 const FABRIC = new Set(['sc', 'hdc', 'dc', 'tr']);
 
@@ -122,13 +116,19 @@ const FABRIC = new Set(['sc', 'hdc', 'dc', 'tr']);
 function stitchNamed(words: readonly Token[], events: readonly Event[]): string | null {
   const named = words.find((token) => token.kind === 'S' && FABRIC.has(String(token.value)));
   if (named !== undefined) return String(named.value);
-  const slips = events.some((event) => event.type === 'unit' && event.fills && event.options[0]!.some((unit) => unit.type === 'stitch' && unit.stitch === 'slst'));
+  const slips = events.some(
+    (event) =>
+      event.type === 'unit' &&
+      event.fills &&
+      event.options[0]!.some((unit) => unit.type === 'stitch' && unit.stitch === 'slst'),
+  );
   return slips ? 'slst' : null;
 }
 
 /** What may speak against a reading and its lead over others so that a fault it shows is the maker's and not the reader's. */
 const CLEAR_COST = 0.65;
 const CLEAR_LEAD = 0.35;
+const UNSURE_COST = 1;
 
 /**
  * The verdict by what the words come to. A fault is only claimed where the words were understood plainly and stand on a
@@ -169,73 +169,6 @@ export function chainRule(words: readonly Token[]): boolean | null {
   return COUNTED.test(text) ? true : null;
 }
 
-function basesFor(
-  talk: Talk,
-  { announced, from, to }: Stretch,
-  before: Before,
-  loops: 'both' | 'back' | 'front',
-  words: readonly Token[],
-): readonly Base[] {
-  const { tokens } = talk;
-  const last = before.piece.at(-1);
-  const left =
-    loops === 'both'
-      ? null
-      : loopsLeft(tokens, before.introFrom, to, before);
-  if (left !== null) return [{ n: left, cost: 0 }];
-  if (last === undefined && before.chains === null && loops !== 'both') return freeLoops(before, loops);
-  if (last !== undefined) return layered(basesAfter(last, words.some((token) => token.kind === 'Z')), words);
-  if (before.chains === null) return [];
-  const text = tokens
-    .slice(from, to)
-    .map((token) => token.text)
-    .join(' ');
-  const nth = tokens.slice(from, to).findIndex((token, n) => token.kind === 'O' && tokens[from + n + 1]?.kind === 'C');
-  return basesOnChain({
-    chains: before.chains,
-    isJoined: before.chainJoined,
-    bothSides:
-      /\b(?:other side|underside|under side|bottom|back down|both sides|other edge|both edges|coming back|coming home|up one side|goes all around the chain)\b/.test(
-        text,
-      ),
-    nth: nth < 0 ? null : Number(tokens[from + nth]!.value),
-  });
-}
-
-/** A piece that begins in loops grows on the last line that was worked in the other ones. */
-function freeLoops(before: Before, loops: 'back' | 'front'): readonly Base[] {
-  const line = before.all.flat().findLast((one) => one.loops !== 'both' && one.loops !== loops && one.base !== null);
-  return line === undefined || line.base === null ? [] : [{ n: line.base, cost: 0 }];
-}
-
-/** Through both layers two places are worked as one. */
-function layered(bases: readonly Base[], words: readonly Token[]): readonly Base[] {
-  const text = words.map((token) => token.text).join(' ');
-  if (!/\bboth (?:the )?(?:sides|layers|thicknesses)\b|\beach both sides\b/.test(text)) return bases;
-  return bases.flatMap(({ n, cost }) => (n % 2 === 0 ? [{ n: n / 2, cost }] : []));
-}
-
-/** `the front loops left in round thirteen`: as many as that round had to work into. */
-function loopsLeft(tokens: readonly Token[], from: number, to: number, before: Before): number | null {
-  const text = tokens.slice(from, to);
-  if (
-    !text.some(
-      (token) => token.kind === 'B' || token.text === 'loops' || token.text === 'line' || token.text === 'fence',
-    )
-  )
-    return null;
-  const last = before.piece.at(-1);
-  for (let i = from; i < to; i++) {
-    if (tokens[i]!.kind !== 'U' || tokens[i + 1]?.kind !== 'N') continue;
-    const n = Number(tokens[i + 1]!.value);
-    const lines = last === undefined ? [...before.all].reverse().flat() : [...before.piece];
-    if (last !== undefined && n >= (last.to ?? 0)) continue;
-    const line = lines.find((one) => one.from !== null && one.from <= n && n <= (one.to ?? one.from));
-    if (line !== undefined) return line.base ?? sumOf(line.units).uses;
-  }
-  return null;
-}
-
 function result(
   choice: Choice | null,
   announced: Announced,
@@ -266,7 +199,8 @@ function result(
   }
   const { makes } = sumOf(choice.units);
   const verdict = verdictOf(choice, makes, wasDoubtful);
-  const isDoubtful = verdict === 'unread' || (verdict !== 'agrees' && (wasDoubtful || choice.score < DOUBTFUL || verdict !== 'no-total'));
+  const isUnsure = wasDoubtful || choice.score < DOUBTFUL || choice.cost > UNSURE_COST || verdict !== 'no-total';
+  const isDoubtful = verdict === 'unread' || (verdict !== 'agrees' && isUnsure);
   return {
     isDoubtful,
     ...rest,

@@ -108,7 +108,10 @@ function readExpanded(
   const many = (until ?? 0) - (from ?? 0) + 1;
   const copied = from === 1 && many > 1 ? copiesOfPiece(talk, announced, to, before) : null;
   if (copied !== null) return copied;
-  const named = many > 1 ? linesNamed(talk.tokens, Math.max(candidate.at - 40, talk.sentences.startOf[candidate.at]!), to, from ?? 0) : [];
+  const named =
+    many > 1
+      ? linesNamed(talk.tokens, Math.max(candidate.at - 40, talk.sentences.startOf[candidate.at]!), to, from ?? 0)
+      : [];
   if (named.length < 2) return [readSpokenLine(talk, stretch, before)];
   const lines = [...before.piece];
   const out: ReadLineResult[] = [];
@@ -142,8 +145,11 @@ function copiesOfPiece(
   to: number,
   before: Parameters<typeof readSpokenLine>[2],
 ): readonly ReadLineResult[] | null {
-  if (!/\b(?:over again|as for|same as|as on|again|just like|like the)\b/.test(textOf(talk.tokens, candidate.at, to))) return null;
-  const model = before.all.findLast((lines) => lines.some((line) => line.from === 1) && (lines.at(-1)?.to ?? 0) >= until!);
+  if (!/\b(?:over again|as for|same as|as on|again|just like|like the)\b/.test(textOf(talk.tokens, candidate.at, to)))
+    return null;
+  const model = before.all.findLast(
+    (lines) => lines.some((line) => line.from === 1) && (lines.at(-1)?.to ?? 0) >= until!,
+  );
   if (model === undefined) return null;
   const lines = model.filter((line) => line.from !== null && line.to! <= until!);
   return lines.map((line) => ({ ...foundation(0), ...line, verdict: 'no-total', said: null, isRing: line.from === 1 }));
@@ -186,7 +192,8 @@ function foundation(many: number): ReadLineResult {
     count: many,
     isRing: false,
     lead: 9,
-    score: 9, cost: 0,
+    score: 9,
+    cost: 0,
     events: [],
   };
 }

@@ -34,7 +34,10 @@ export function readTranscript(cues: readonly Cue[], options: { readonly terms?:
   const chain = chooseChain(candidates, tokens);
   const steps = findSteps(tokens, sentences, skipped);
   const moments = [...chain.map((one) => one.candidate.at), ...steps.map((step) => step.at)].sort((a, b) => a - b);
-  const words = placeSilences(spoken, moments.map((at) => tokens[at]!.first));
+  const words = placeSilences(
+    spoken,
+    moments.map((at) => tokens[at]!.first),
+  );
   const silenceAfter = (token: Token) => words[token.last + 1]?.silenceMs ?? 0;
   const pieces = readPieces({ tokens, sentences, skipped }, chain, steps, silenceAfter);
   return {

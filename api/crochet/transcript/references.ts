@@ -3,7 +3,8 @@ import { type ReadSoFar } from './bases.ts';
 import { type Token } from './tokens.ts';
 import { periodOf, type Unit } from './work/units.ts';
 
-const LIKE = /\b(?:same|as|like|repeat|repeating|repeats|again|copy|yer|did|over|back to|repetition|returning|what|'s a|is a)\b/;
+const LIKE =
+  /\b(?:same|as|like|repeat|repeating|repeats|again|copy|yer|did|over|back to|repetition|returning|what|'s a|is a)\b/;
 
 /** Lines named as the model of this one: `the same as row three`, `repeat rows two and three`. */
 export function linesNamed(tokens: readonly Token[], from: number, to: number, before: number): readonly number[] {
@@ -26,12 +27,18 @@ export function linesNamed(tokens: readonly Token[], from: number, to: number, b
 }
 
 const textBefore = (tokens: readonly Token[], i: number): string =>
-  `${tokens.slice(Math.max(0, i - 3), i).map((token) => token.text).join(' ')} `;
+  `${tokens
+    .slice(Math.max(0, i - 3), i)
+    .map((token) => token.text)
+    .join(' ')} `;
 
 function ordinalNamed(tokens: readonly Token[], i: number): { from: number; to: number; end: number } | null {
   if (tokens[i]!.kind === 'N') {
     const list = readNumberList(tokens, i, true, true);
-    const asNamed = list !== null && /\b(?:same as|like) $/.test(textBefore(tokens, i)) && '.,|'.includes(tokens[list.end]?.kind ?? '.');
+    const asNamed =
+      list !== null &&
+      /\b(?:same as|like) $/.test(textBefore(tokens, i)) &&
+      '.,|'.includes(tokens[list.end]?.kind ?? '.');
     if (asNamed) return list;
     return list !== null && /^(?:did|was|were)$/.test(tokens[list.end]?.text ?? '') ? list : null;
   }
@@ -60,7 +67,8 @@ export function copiesFor(
     .map((token) => token.text)
     .join(' ');
   const last = earlier.at(-1);
-  if (SAME.test(text) && last !== undefined && last.from !== null) out.push(...patternsOf(last).map((units, k) => ({ units, cost: 0.9 + 0.4 * k })));
+  if (SAME.test(text) && last !== undefined && last.from !== null)
+    out.push(...patternsOf(last).map((units, k) => ({ units, cost: 0.9 + 0.4 * k })));
   return out;
 }
 
@@ -72,7 +80,10 @@ function patternsOf(line: ReadSoFar): readonly (readonly Unit[])[] {
   const isUniform = unit?.type === 'stitch' || unit?.type === 'together' || unit?.type === 'oneplace';
   if (line.units.length === 1 && isUniform && unit.times > 1) return [[open([{ ...unit, times: 1 }])]];
   if (line.units.length === 1 && unit?.type === 'repeat') return [line.units, ...repeats(unit.units)];
-  const longest = line.units.reduce((best, one, n) => (plainLength(one) > plainLength(line.units[best]!) ? n : best), 0);
+  const longest = line.units.reduce(
+    (best, one, n) => (plainLength(one) > plainLength(line.units[best]!) ? n : best),
+    0,
+  );
   const stretch = line.units[longest];
   if (stretch?.type !== 'stitch' || plainLength(stretch) < 2) return [line.units];
   return [line.units, line.units.map((one, n) => (n === longest ? open([{ ...stretch, times: 1 }]) : one))];
@@ -83,7 +94,9 @@ function repeats(group: readonly Unit[]): readonly (readonly Unit[])[] {
   const plain = group.findIndex((unit) => plainLength(unit) > 0);
   const stretch = group[plain];
   if (stretch?.type !== 'stitch') return [[open(group)]];
-  const longer = (by: number) => [open(group.map((unit, n) => (n === plain ? { ...stretch, times: stretch.times + by } : unit)))];
+  const longer = (by: number) => [
+    open(group.map((unit, n) => (n === plain ? { ...stretch, times: stretch.times + by } : unit))),
+  ];
   return stretch.times > 1 ? [[open(group)], longer(1), longer(-1)] : [[open(group)], longer(1)];
 }
 

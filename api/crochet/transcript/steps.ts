@@ -28,7 +28,8 @@ export function findSteps(
     if (skipped[i] === true || ',.|'.includes(tokens[i]!.kind)) continue;
     const topic = topicAt(tokens, i, sentences);
     if (topic === null || isIdle(tokens, i, sentences)) continue;
-    if (topic === 'finish' && tokens.slice(Math.max(0, i - RING_REACH), i).some((token) => token.kind === 'V')) continue;
+    if (topic === 'finish' && tokens.slice(Math.max(0, i - RING_REACH), i).some((token) => token.kind === 'V'))
+      continue;
     const last = found.at(-1);
     if (last !== undefined && belongsTo(last, topic, i, sentences)) {
       found[found.length - 1] = { ...last, end: i + 1 };

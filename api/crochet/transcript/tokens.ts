@@ -1,7 +1,8 @@
 import { type Class } from './lexicon/classes.ts';
 import { MISHEARINGS, ORDINARY } from './lexicon/mishearings.ts';
 import { readNumber, type SpokenNumber } from './lexicon/numbers.ts';
-import { PHRASES } from './lexicon/trade.ts';
+import { PHRASES } from './lexicon/phrases.ts';
+import { tidyNumbers } from './tidy-numbers.ts';
 import { type Word } from './words.ts';
 
 /** A stretch of speech with its class: one word, a phrase of the trade, a number of several words, or a break. */
@@ -57,7 +58,7 @@ export function tokensOf(words: readonly Word[]): Tokens {
     const mark = atoms[at - 1]!.breakAfter;
     if (mark !== '') tokens.push(breakToken(mark, atoms[at - 1]!.word));
   }
-  return { tokens: withoutSums(withoutCounting(tokens)), corrections };
+  return { tokens: tidyNumbers(tokens), corrections };
 }
 
 function atomsOf(words: readonly Word[]): Atom[] {
@@ -78,7 +79,13 @@ function atomsOf(words: readonly Word[]): Atom[] {
   return atoms;
 }
 
-const LONG_FORMS: Readonly<Record<string, string>> = { "'re": 'are', "'ll": 'will', "'ve": 'have', "'m": 'am', "'d": 'would' };
+const LONG_FORMS: Readonly<Record<string, string>> = {
+  "'re": 'are',
+  "'ll": 'will',
+  "'ve": 'have',
+  "'m": 'am',
+  "'d": 'would',
+};
 const BEFORE_IS = /^(?:that|it|there|here|what|which|he|she|who|where|thats)$/;
 
 /** Contractions in full, so that "that's" and "that is" are one; a name's "'s" is left alone. */
@@ -138,7 +145,7 @@ function numberToken(
 ): Found | null {
   const text = texts[at]!;
   if (NO_NUMBER.test(texts.slice(at, at + 3).join(' '))) return null;
-  if (text === 'one' && isPronoun(before.at(-1))) {
+  if (text === 'one' && isPronoun(before)) {
     return { token: before.at(-2)?.kind === 'I' ? plain('G', 'st', text) : plain('a', 0, text), length: 1 };
   }
   const spoken = readNumber(texts, at, joined) ?? soundsLikeNumber(atoms, texts, at, before, misheard);
@@ -159,9 +166,14 @@ function numberToken(
 }
 
 /** `the third one`, `this one`, `another one`: the word stands for a thing. */
-function isPronoun(before: Token | undefined): boolean {
+function isPronoun(tokens: readonly Token[]): boolean {
+  const before = tokens.at(-1);
   if (before === undefined) return false;
-  return 'OXL'.includes(before.kind) || /^(?:this|that|which|another|any|no|pretty|easy|big|little|good|other)$/.test(before.text);
+  if (before.kind === 'w' && /^(?:the|a|this|that|my|your)$/.test(tokens.at(-2)?.text ?? '')) return true;
+  return (
+    'OXL'.includes(before.kind) ||
+    /^(?:this|that|which|another|any|no|pretty|easy|big|little|good|other)$/.test(before.text)
+  );
 }
 
 const GUESSES: ReadonlyMap<string, number> = new Map([
@@ -192,6 +204,7 @@ function soundsLikeNumber(
   const likely =
     (afterName && (parted || /^(?:is|and|it|in|i|we|you|single|double|half|magic|um|uh)$/.test(next) || misheard)) ||
     (value === 2 && next === 'together') ||
+    ('LX'.includes(previous?.kind ?? '.') && /^(?:stitches|chains)$/.test(next)) ||
     (misheard &&
       (NUMBER_LIKES_AFTER.test(next) ||
         (afterChain && !/^(?:the|a|your|make|form|get)$/.test(next)) ||
@@ -215,61 +228,4 @@ function plain(kind: Class, value: string | number, text: string): Found['token'
 
 function breakToken(mark: ',' | '.' | '|', word: number): Token {
   return { kind: mark, value: 0, first: word, last: word, text: mark, split: null, isGuess: false };
-}
-
-/** `two, four, six … twelve` and `one, two, three, four` are counting aloud: what counts is the number reached. */
-function withoutCounting(tokens: readonly Token[]): readonly Token[] {
-  const out: Token[] = [];
-  for (let at = 0; at < tokens.length; ) {
-    const length = countingLength(tokens, at);
-    if (length === 0) {
-      out.push(tokens[at]!);
-      at += 1;
-      continue;
-    }
-    const last = tokens[at + length - 1]!;
-    out.push({ ...last, first: tokens[at]!.first, text: 'counted' });
-    at += length;
-  }
-  return out;
-}
-
-/** How many tokens a run of counting takes: three numbers or more in equal steps that begin with the step. */
-function countingLength(tokens: readonly Token[], at: number): number {
-  const first = tokens[at]!;
-  if (first.kind !== 'N' || tokens[at - 1]?.kind === 'U' || tokens[at - 1]?.kind === '#') return 0;
-  const step = Number(first.value);
-  let reached = step;
-  let end = at + 1;
-  for (;;) {
-    const next = tokens[end]?.kind === ',' ? end + 1 : end;
-    if (tokens[next]?.kind !== 'N' || Number(tokens[next]!.value) !== reached + step) break;
-    reached += step;
-    end = next + 1;
-  }
-  const many = reached / step;
-  return step > 0 && step < 11 && many >= (step === 1 ? 4 : 3) ? end - at : 0;
-}
-
-/** `five plus seven plus 24 is 36`, `thirty two plus six, so thirty eight`: of a sum that is told only its result counts. */
-function withoutSums(tokens: readonly Token[]): readonly Token[] {
-  const out: Token[] = [];
-  for (let at = 0; at < tokens.length; ) {
-    const result = resultOfSum(tokens, at);
-    at = result ?? at;
-    out.push(tokens[at]!);
-    at += 1;
-  }
-  return out;
-}
-
-function resultOfSum(tokens: readonly Token[], at: number): number | null {
-  if (tokens[at]!.kind !== 'N' || tokens[at + 1]?.text !== 'plus') return null;
-  let end = at;
-  while (tokens[end + 1]?.text === 'plus' && tokens[end + 2]?.kind === 'N') end += 2;
-  for (let i = end + 1; i < Math.min(tokens.length, end + 5); i++) {
-    if (tokens[i]!.kind === 'N') return i;
-    if (!'=v,~a&.'.includes(tokens[i]!.kind)) return null;
-  }
-  return null;
 }

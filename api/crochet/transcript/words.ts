@@ -39,7 +39,15 @@ export function wordsOf(cues: readonly Cue[]): readonly Word[] {
       passed += text.length + 1;
       const endMs = cue.startMs + (lasts * passed) / length;
       const silenceMs = spokenUntil === null ? 0 : Math.max(0, startMs - spokenUntil);
-      words.push({ text, startMs, endMs, mark: markAfter(text), silenceMs, cue: index, isInParagraph: length > PARAGRAPH });
+      words.push({
+        text,
+        startMs,
+        endMs,
+        mark: markAfter(text),
+        silenceMs,
+        cue: index,
+        isInParagraph: length > PARAGRAPH,
+      });
       spokenUntil = endMs;
     }
   });
@@ -60,4 +68,3 @@ function markAfter(text: string): Word['mark'] {
   if (/[.!?…]["'”’)\]]*$/.test(text)) return '.';
   return /[,;:–—]["'”’)\]]*$/.test(text) ? ',' : '';
 }
-

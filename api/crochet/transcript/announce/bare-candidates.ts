@@ -26,7 +26,14 @@ export function bareCandidates(tokens: readonly Token[], i: number, sentences: S
   if (strength <= 0) return [];
   const isTail = token.kind === 'O' && '.|'.includes(next?.kind ?? '.') && i - sentences.startOf[i]! < 24;
   const at = isTail ? sentences.startOf[i]! : announcementStart(tokens, i, sentences);
-  const base = { kind: 'line' as const, at, end: isTime ? list.end + 1 : list.end, mark: i, unit: null, needs: list.from === 1 ? ('start' as const) : null };
+  const base = {
+    kind: 'line' as const,
+    at,
+    end: isTime ? list.end + 1 : list.end,
+    mark: i,
+    unit: null,
+    needs: list.from === 1 ? ('start' as const) : null,
+  };
   return [{ ...base, lines: { type: 'named', from: list.from, to: list.to }, strength }];
 }
 
@@ -40,7 +47,14 @@ function strengthOf(tokens: readonly Token[], i: number, end: number, many: numb
   if (many > 2) return isHead ? 2 : 1.5;
   if (many === 2) return isHead ? 1.2 : 0.7;
   if (tokens[i]!.kind === 'O') return before === 'p' || !isHead ? 0.3 : 1.4;
-  if (!isHead) return shortHead(tokens, i, sentences) ? 1 : before === '&' && next === 'v' ? 0.9 : tokens[i - 1]?.text === 'for' && '.,'.includes(next) ? 0.6 : 0;
+  if (!isHead)
+    return shortHead(tokens, i, sentences)
+      ? 1
+      : before === '&' && next === 'v'
+        ? 0.9
+        : tokens[i - 1]?.text === 'for' && '.,'.includes(next)
+          ? 0.6
+          : 0;
   if (next === 'v' || next === '=') return atSentence ? 1.3 : 0.9;
   if (next === ',' || next === '.') return atSentence ? 0.9 : 0.6;
   if (next === '&') return 0.2;

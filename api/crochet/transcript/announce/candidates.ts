@@ -44,7 +44,8 @@ function fromNamed(
   const mention = isMention(tokens, i, named.end, sentences);
   const at = deedBefore(tokens, i, sentences) ?? announcementStart(tokens, i, sentences);
   const base = { kind: 'line' as const, at, end: named.end, mark: i, unit, needs: null };
-  if (mention === 'until') return [{ ...base, at: untilStart(tokens, i, sentences), lines: { type: 'until', last: named.to }, strength: 1.2 }];
+  if (mention === 'until')
+    return [{ ...base, at: untilStart(tokens, i, sentences), lines: { type: 'until', last: named.to }, strength: 1.2 }];
   if (mention !== null || (word.endsWith('s') && named.from === named.to)) return [];
   const isFirst = startsClause(tokens, i);
   const split = tokens[named.end - 1]!.split;
@@ -102,15 +103,16 @@ function counted(
   if (many < 2 || many > 200) return [];
   const ahead = tokens[j - 1]?.kind === 'X' || tokens[j - 2]?.kind === 'X' || tokens[j + 1]?.kind === 'm';
   const isUntil = tokens.slice(Math.max(0, j - 5), j).some((one) => one.text === 'until' || one.text === 'till');
-  if (isUntil) return [{ ...base, at: untilStart(tokens, j, sentences), lines: { type: 'until', last: many }, strength: 1.2 }];
+  if (isUntil)
+    return [{ ...base, at: untilStart(tokens, j, sentences), lines: { type: 'until', last: many }, strength: 1.2 }];
   const isFor = tokens[j - 1]?.text === 'for';
   const isResult =
     (tokens[j - 1]?.kind === '=' && !isFor) || tokens[j - 1]?.text === "'s" || tokens[j - 1]?.kind === 'p';
-  if (isResult && !ahead) return [{ ...base, at: untilStart(tokens, j, sentences), lines: { type: 'until', last: many }, strength: 0.8 }];
+  if (isResult && !ahead)
+    return [{ ...base, at: untilStart(tokens, j, sentences), lines: { type: 'until', last: many }, strength: 0.8 }];
   if (tokens[i + 1]?.text === 'of' && tokens[i + 2]?.kind === 'N') return [];
   const list = explicitAfter(tokens, i + 1, many);
-  if (list !== null)
-    return [{ ...base, lines: { type: 'named', from: list.from, to: list.to }, strength: 3 }];
+  if (list !== null) return [{ ...base, lines: { type: 'named', from: list.from, to: list.to }, strength: 3 }];
   return [{ ...base, lines: { type: 'next', many }, strength: ahead ? 2 : isFor ? 1.4 : 1 }];
 }
 
@@ -145,7 +147,10 @@ function ordinalsBefore(tokens: readonly Token[], j: number): { at: number; from
 }
 
 function kindsOf(tokens: readonly Token[], from: number, to: number): string {
-  return tokens.slice(from, to).map((token) => token.kind).join('');
+  return tokens
+    .slice(from, to)
+    .map((token) => token.kind)
+    .join('');
 }
 
 /** `row two, row three, row two, row three, till you have ten`: announced by the first row named. */
@@ -160,10 +165,14 @@ const DEED_REACH = 28;
 
 /** `repeat row two, two more times, so that's rows three and four` is announced by its deed, not by the numbers at its end. */
 function deedBefore(tokens: readonly Token[], i: number, sentences: Sentences): number | null {
-  const lead = tokens.slice(Math.max(0, i - 3), i).map((token) => token.text).join(' ');
+  const lead = tokens
+    .slice(Math.max(0, i - 3), i)
+    .map((token) => token.text)
+    .join(' ');
   if (!/\b(?:that is|that 's)$/.test(lead)) return null;
   for (let j = i - 1; j >= Math.max(0, i - 18) && tokens[j]!.kind !== '|'; j--) {
-    const isDeed = tokens[j]!.kind === 'R' && tokens[j]!.value === 0 && /^[^.]*U[^.]*\.?[^.]*$/.test(kindsOf(tokens, j, i));
+    const isDeed =
+      tokens[j]!.kind === 'R' && tokens[j]!.value === 0 && /^[^.]*U[^.]*\.?[^.]*$/.test(kindsOf(tokens, j, i));
     if (isDeed) return announcementStart(tokens, j, sentences);
   }
   return null;

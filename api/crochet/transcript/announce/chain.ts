@@ -145,7 +145,7 @@ function begin(candidate: Candidate, before: State, to: number, gain: number): S
   return { to, score: before.score + gain, announced, before, chainAt: isChain ? candidate.end : null };
 }
 
-const ENDING = /(?:cut|fasten|tail|sew|off|close|pieces?|two|make|now|weave|hide|ends?|snip|snug|finish|done|tie)/;
+const ENDING = /\b(?:cut|fasten|tail|sew|off|close|pieces?|two|make|now|weave|hide|ends?|snip|snug|finish|done|tie)\b/;
 
 /** Beginning at one again is likely where the line before was finished off or a part is named. */
 function restartCost(top: State, candidate: Candidate, tokens: readonly Token[]): number {

@@ -55,7 +55,8 @@ export function isMention(
   let j = i - 1;
   while (j >= 0 && 'a~'.includes(tokens[j]!.kind) && !MENTIONING.has(tokens[j]!.text) && i - j < 4) j -= 1;
   const before = j >= sentences.startOf[i]! ? tokens[j] : undefined;
-  if (PAST.has(tokens[end]?.text ?? '') || /^(?:finished|done|over|behind)$/.test(tokens[end]?.text ?? '')) return 'mention';
+  if (PAST.has(tokens[end]?.text ?? '') || /^(?:finished|done|over|behind)$/.test(tokens[end]?.text ?? ''))
+    return 'mention';
   if (before === undefined) return null;
   if (REACHING.has(before.text) || (before.text === 'with' && /^(?:finish|done|end)$/.test(tokens[j - 1]?.text ?? '')))
     return 'until';

@@ -13,7 +13,8 @@ export function oneMore(tokens: readonly Token[], i: number, sentences: Sentence
   const token = tokens[i]!;
   const next = tokens[i + 1];
   const isAfter = token.text === 'one after that' && next?.kind === 'v';
-  const isNext = token.kind === 'X' && !isPlace(tokens, i) && startsClause(tokens, i) && (next?.kind === ',' || next?.kind === 'v');
+  const isNext =
+    token.kind === 'X' && !isPlace(tokens, i) && startsClause(tokens, i) && (next?.kind === ',' || next?.kind === 'v');
   const isAround = token.kind === 'A' && /^(?:once|one|again)/.test(next?.text ?? '') && startsClause(tokens, i);
   if (!isNext && !isAround && !isAfter) return [];
   const at = announcementStart(tokens, i, sentences);

@@ -188,15 +188,26 @@ function allAfter(elements: readonly Element[], n: number): { unit: UnitElement;
   }
   const one = run.every(isSimple) ? onePlace(run) : null;
   if (one === null) return null;
-  const unit: UnitElement = { type: 'unit', sentence, at: elements[n]!.at, options: [[one]], fills: false, reaches: false, same: false };
+  const unit: UnitElement = {
+    type: 'unit',
+    sentence,
+    at: elements[n]!.at,
+    options: [[one]],
+    fills: false,
+    reaches: false,
+    same: false,
+  };
   return { unit, length };
 }
 
 function placeAfter(elements: readonly Element[], n: number): Unit | null {
-  const run = elements.slice(n + 1, n + 4).flatMap((element) =>
-    element.type === 'unit' && !element.fills && element.options[0]!.length === 1 ? [element.options[0]![0]!] : [],
-  );
-  const isPlace = run.length === 3 && run[0]!.type === 'stitch' && run[1]!.type === 'chain' && run[2]!.type === 'stitch';
+  const run = elements
+    .slice(n + 1, n + 4)
+    .flatMap((element) =>
+      element.type === 'unit' && !element.fills && element.options[0]!.length === 1 ? [element.options[0]![0]!] : [],
+    );
+  const isPlace =
+    run.length === 3 && run[0]!.type === 'stitch' && run[1]!.type === 'chain' && run[2]!.type === 'stitch';
   return isPlace && run.every(isSimple) ? onePlace(run) : null;
 }
 

@@ -70,7 +70,9 @@ function isRepeatable(elements: readonly Element[]): boolean {
 /** The phrases of the first sentences, the rest being talk: needed where a line is told twice. */
 function prefixes(events: readonly Event[]): { kept: readonly Event[]; rest: readonly Event[]; cost: number }[] {
   const out = [{ kept: events, rest: [] as readonly Event[], cost: 0 }];
-  const borders = events.flatMap((event, n) => (n > 0 && (event.sentence !== events[n - 1]!.sentence || isExplained(event)) ? [n] : []));
+  const borders = events.flatMap((event, n) =>
+    n > 0 && (event.sentence !== events[n - 1]!.sentence || isExplained(event)) ? [n] : [],
+  );
   for (const border of borders.slice(0, 6)) {
     const rest = events.slice(border);
     const units = rest.filter((event) => event.type === 'unit').length;
@@ -120,7 +122,15 @@ function weigh(
     const fit = fits === 'fits' ? FIT_GAIN : fits === 'unknown' ? 1 : 0;
     const agrees = said === makes ? saidGain(idle, makes, fits === 'misfit') : 0;
     const score = fit + agrees - cost - resolved.cost;
-    choices.push({ units: resolved.units, said, fit: fits, base: resolved.base, score, cost: cost + resolved.cost, lead: 0 });
+    choices.push({
+      units: resolved.units,
+      said,
+      fit: fits,
+      base: resolved.base,
+      score,
+      cost: cost + resolved.cost,
+      lead: 0,
+    });
   }
 }
 

@@ -47,17 +47,35 @@ function matchAt(letters: Letters, i: number): { event: Event | null; length: nu
     const made = make(letters.tokens.slice(i, i + text.length), text);
     if (made === null) continue;
     const place = { at: letters.at[i]!, end: letters.at[i + text.length - 1]! + 1, sentence: letters.sentence[i]! };
-    const event = eventOf(made, place, letters.text[i - 1] === '=' || letters.tokens[i - 1]?.text === 'meaning', text.includes('M'));
+    const event = eventOf(
+      made,
+      place,
+      letters.text[i - 1] === '=' || letters.tokens[i - 1]?.text === 'meaning',
+      text.includes('M'),
+    );
     return { event, length: text.length };
   }
   return null;
 }
 
-function eventOf(made: Made, place: { at: number; end: number; sentence: number }, explains: boolean, same: boolean): Event | null {
+function eventOf(
+  made: Made,
+  place: { at: number; end: number; sentence: number },
+  explains: boolean,
+  same: boolean,
+): Event | null {
   if (made.type === 'nothing') return null;
   if (made.type === 'times') return { ...place, type: 'times', n: made.n };
   if (made.type !== 'unit') return { ...place, type: made.type };
-  return { ...place, type: 'unit', options: made.options, fills: made.fills ?? false, reaches: made.reaches ?? false, explains, same };
+  return {
+    ...place,
+    type: 'unit',
+    options: made.options,
+    fills: made.fills ?? false,
+    reaches: made.reaches ?? false,
+    explains,
+    same,
+  };
 }
 
 /** "For" and "so" lead to a total, and to much else. */
@@ -72,7 +90,8 @@ function numberEvent(letters: Letters, i: number): Event | null {
   const after = letters.text[i + 1] ?? '.';
   const isAlone = '.|,'.includes(before) && '.|'.includes(after);
   let asTotal = 0;
-  if (before === '=' || (before === 'w' && beforeThat === '=')) asTotal += WEAK_RESULT.test(letters.tokens[i - 1]!.text) ? 1.1 : 1.6;
+  if (before === '=' || (before === 'w' && beforeThat === '='))
+    asTotal += WEAK_RESULT.test(letters.tokens[i - 1]!.text) ? 1.1 : 1.6;
   if (isAlone) asTotal += before === ',' ? 1 : 1.5;
   if ('.|'.includes(before) && after === ',' && Number(token.value) > 7) asTotal += 1.1;
   if (after === 'G' || after === '=') asTotal += 1.2;
@@ -84,15 +103,16 @@ function numberEvent(letters: Letters, i: number): Event | null {
   if (token.isGuess) asTotal -= 1;
   const isThing = after === 'w';
   const closes = isThing && /[,.&|F]/.test(letters.text[i + 2] ?? '.');
+  if (token.text === 'counted by steps') asTotal += 1.4;
   if (after === 'U') asTotal -= 3;
   const asItem =
-    (after === 'U' ? -2 : 0) +
+    (after === 'U' || token.text.startsWith('counted') ? -2 : 0) +
     ('&,.|~pwFmYIgNTDP'.includes(before) ? 0.6 : 0) +
     ('&,F.RNTDP'.includes(after) ? 0.6 : 0) +
     (isThing ? (closes ? 0.4 : -0.2) - (token.value === 1 ? 0.3 : 0) : 0) -
     (before === '=' ? 0.5 : 0) -
     (after === 'G' ? 0.2 : 0);
-  const asTimes = after === 'R' || after === 'w' ? 0.8 : 0.2;
+  const asTimes = token.text.startsWith('counted') ? -2 : after === 'R' || after === 'w' ? 0.8 : 0.2;
   return {
     type: 'number',
     at: letters.at[i]!,

@@ -52,10 +52,21 @@ export const RULES: readonly Rule[] = [
   { pattern: /IEZ(?=N?S[,&]*[CN])/y, make: (m) => (m.at(-1)!.value === 'corner' ? { type: 'corner' } : null) },
   { pattern: /ZI[XLOM]*Z/y, make: (m) => (m[0]!.value === 'corner' ? { type: 'corner' } : nothing) },
   { pattern: /[=p]X?Z/y, make: () => nothing },
-  { pattern: /NZ/y, make: (m) => (m[1]!.value !== 'corner' ? nothing : m[1]!.first === m[0]!.last + 1 && number(m) > 1 ? { type: 'times', n: number(m) } : null) },
+  {
+    pattern: /NZ/y,
+    make: (m) =>
+      m[1]!.value !== 'corner'
+        ? nothing
+        : m[1]!.first === m[0]!.last + 1 && number(m) > 1
+          ? { type: 'times', n: number(m) }
+          : null,
+  },
   {
     pattern: /I[XLOM]*Z[,&]?NS(?![,&]*[CN])/y,
-    make: (m) => (m.some((one) => one.value === 'corner') ? null : either([st(stitch(m), 1, number(m))], [st(stitch(m), number(m))])),
+    make: (m) =>
+      m.some((one) => one.value === 'corner')
+        ? null
+        : either([st(stitch(m), 1, number(m))], [st(stitch(m), number(m))]),
   },
   // unlike stitches in one place
   { pattern: /N?S(?:[,&m]*N?S)+[,&]?(?:E?o?I[XLOM]*N?[GZC]|E?T)/y, make: unlikeInOne },
@@ -67,7 +78,10 @@ export const RULES: readonly Rule[] = [
   { pattern: /[XLO]*[GC][wI]{0,4}gN[SP]?(?![tT])/y, make: (m) => unit(st(stitch(m), 1, number(m))) },
   { pattern: /XN[GS]?(?![tTU])/y, make: (m) => unit(st(stitch(m), number(m))) },
   // up to a number, or to the last few
-  { pattern: /R?w?C?p=NS?(?![tTo])/y, make: (m) => ({ type: 'unit', options: [[st(stitch(m), number(m))]], reaches: true }) },
+  {
+    pattern: /R?w?C?p=NS?(?![tTo])/y,
+    make: (m) => ({ type: 'unit', options: [[st(stitch(m), number(m))]], reaches: true }),
+  },
   { pattern: /N?S[IE]*[GZ]?p+LN?[GZ]?(?!T)/y, make: (m) => fills(st(stitch(m), 1)) },
   { pattern: /A?p+LN?[GZ]?(?!T)/y, make: () => fills(st(BARE, 1)) },
   { pattern: /N?S[IwG]{0,3}IES/y, make: (m) => fills(st(stitch(m), 1, number(m))) },
@@ -129,7 +143,10 @@ export const RULES: readonly Rule[] = [
   { pattern: /[IE]+[XLO]?N[GZ],?S/y, make: (m) => (number(m) > 1 ? unit(st(stitch(m), number(m))) : null) },
   { pattern: /SN(?=[EA])/y, make: (m) => unit(st(stitch(m), number(m))) },
   // in every place
-  { pattern: /N?SE/y, make: (m) => (/^(?:ever|each)/.test(m.at(-1)!.text) ? fills(st(stitch(m), 1, number(m))) : null) },
+  {
+    pattern: /N?SE/y,
+    make: (m) => (/^(?:ever|each)/.test(m.at(-1)!.text) ? fills(st(stitch(m), 1, number(m))) : null),
+  },
   { pattern: /N?S[&,]?IB?E[GZSC]*A?/y, make: (m) => fills(st(stitch(m), 1, number(m))) },
   { pattern: /NI?E[GZC]*A?/y, make: (m) => (number(m) < 6 ? fills(st(BARE, 1, number(m))) : null) },
   { pattern: /IB?E[GZC]+[,]?N?S/y, make: (m) => fills(st(stitch(m), 1, number(m))) },
@@ -191,7 +208,7 @@ function repeated(matched: readonly Token[]): Made | null {
 function counted(matched: readonly Token[], letters: string): Made | null {
   if (!/[IE]/.test(letters)) return null;
   const each = matched.find((token) => token.kind === 'E');
-  if (each !== undefined && !/[XLO]/.test(letters) && / one$/.test(each.text)) return null;
+  if (each !== undefined && !/[XLO]/.test(letters) && each.text.endsWith(' one')) return null;
   return unit(st(stitch(matched), number(matched)));
 }
 
@@ -241,7 +258,8 @@ function aroundChain(matched: readonly Token[], letters: string): Made | null {
   let many = 1;
   matched.forEach((token, n) => {
     if (token.kind === 'N') many = Math.min(12, Number(token.value));
-    const chained = matched[n + 1]?.kind === 'N' && matched[n - 1]?.kind !== 'N' ? Math.min(12, Number(matched[n + 1]!.value)) : many;
+    const chained =
+      matched[n + 1]?.kind === 'N' && matched[n - 1]?.kind !== 'N' ? Math.min(12, Number(matched[n + 1]!.value)) : many;
     if (token.kind === 'C') parts.push(...new Array<string>(chained).fill('ch'));
     if (token.kind === 'S') parts.push(...new Array<string>(many).fill(String(token.value)));
     if (token.kind === 'C' || token.kind === 'S') many = 1;

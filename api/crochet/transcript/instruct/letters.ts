@@ -10,7 +10,20 @@ export interface Letters {
   readonly sentence: readonly number[];
 }
 
-const TAKES = new Set(['get', 'gets', 'takes', 'take', 'wants', 'has', 'receives', 'asks for', 'had', 'receiving', 'receive', 'taking']);
+const TAKES = new Set([
+  'get',
+  'gets',
+  'takes',
+  'take',
+  'wants',
+  'has',
+  'receives',
+  'asks for',
+  'had',
+  'receiving',
+  'receive',
+  'taking',
+]);
 const DROPPED = new Set<string>(['a', '~', '#']);
 
 /** @param skipped tokens that are no instruction: the announcement's own numbers, demonstrations, recaps */
@@ -34,9 +47,15 @@ export function lettersOf(
     if (skipped(i) || isReason || isManner || DROPPED.has(token.kind)) continue;
     // "along the side" tells a place; "along" alone means to the end
     const isPlace =
-      token.kind === 'A' && !token.text.includes(' ') && tokens[i + 1]?.kind === 'a' && 'wCGZS'.includes(tokens[i + 2]?.kind ?? '.');
+      token.kind === 'A' &&
+      !token.text.includes(' ') &&
+      tokens[i + 1]?.kind === 'a' &&
+      'wCGZS'.includes(tokens[i + 2]?.kind ?? '.');
     // "a row in single crochet," names the stitch and works none
-    const isMention = token.kind === 'S' && /^(?:in|of)$/.test(tokens[i - 1]?.text ?? '') && ',.|&'.includes(tokens[i + 1]?.kind ?? '.');
+    const isMention =
+      token.kind === 'S' &&
+      /^(?:in|of)$/.test(tokens[i - 1]?.text ?? '') &&
+      ',.|&'.includes(tokens[i + 1]?.kind ?? '.');
     const isLeft = /^leav(?:e|ing)$/.test(token.text) && tokens[i + 1]?.kind === 'N';
     const letter = isLeft ? 'K' : isPlace || isMention ? 'w' : letterOf(token);
     if (letter === '') continue;

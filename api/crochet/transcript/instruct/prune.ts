@@ -7,9 +7,11 @@ type UnitEvent = Extract<Event, { type: 'unit' }>;
 /** Takes out of the phrases what adds nothing: what was taken back, explained twice, or only joins or turns. */
 export function prune(spoken: readonly Event[], tokens: readonly Token[], heading: number): readonly Event[] {
   const events = withoutHeading(spoken, heading);
-  return withCounted(withEchoes(
-    meshes(withoutTurning(withoutJoins(withoutExplained(withoutCorrected(events, tokens), tokens), tokens), tokens)),
-  ));
+  return withCounted(
+    withEchoes(
+      meshes(withoutTurning(withoutJoins(withoutExplained(withoutCorrected(events, tokens), tokens), tokens), tokens)),
+    ),
+  );
 }
 
 /**
@@ -129,9 +131,19 @@ function withoutTurning(spoken: readonly Event[], tokens: readonly Token[]): rea
 function withoutHeading(events: readonly Event[], heading: number): readonly Event[] {
   const [first, ...rest] = events;
   const unit = first === undefined ? undefined : only(first);
-  if (first?.type !== 'unit' || first.sentence !== heading || first.fills || unit?.type !== 'stitch' || unit.times !== 1 || unit.inOne !== 1) return events;
+  if (
+    first?.type !== 'unit' ||
+    first.sentence !== heading ||
+    first.fills ||
+    unit?.type !== 'stitch' ||
+    unit.times !== 1 ||
+    unit.inOne !== 1
+  )
+    return events;
   const inSentence = rest.filter((event) => event.sentence === first.sentence && event.type !== 'plain');
-  const isHeading = inSentence.every((event) => only(event)?.type === 'chain') && rest.some((event) => event.type === 'unit' && event.sentence !== first.sentence);
+  const isHeading =
+    inSentence.every((event) => only(event)?.type === 'chain') &&
+    rest.some((event) => event.type === 'unit' && event.sentence !== first.sentence);
   return isHeading ? rest : events;
 }
 
@@ -154,8 +166,7 @@ function withEchoes(spoken: readonly Event[]): readonly Event[] {
     if (unit.inOne > 1) inOnes.push(unit);
     const echo = inOnes.find((one) => one.type === 'stitch' && one.stitch === unit.stitch && one.inOne === unit.times);
     if (unit.inOne !== 1 || echo === undefined) return event;
-    const options: UnitEvent['options'] =
-      unit.times > 2 ? [[echo], ...event.options] : [...event.options, [echo]];
+    const options: UnitEvent['options'] = unit.times > 2 ? [[echo], ...event.options] : [...event.options, [echo]];
     return { ...event, options };
   });
 }
@@ -196,7 +207,8 @@ function echoLength(events: readonly Event[], from: number, parts: readonly stri
   const said: string[] = [];
   for (let n = from; n < events.length && said.length < parts.length; n++) {
     const unit = only(events[n]);
-    if (unit?.type === 'stitch' && unit.inOne === 1 && unit.times < 6) said.push(...new Array<string>(unit.times).fill(unit.stitch));
+    if (unit?.type === 'stitch' && unit.inOne === 1 && unit.times < 6)
+      said.push(...new Array<string>(unit.times).fill(unit.stitch));
     else if (unit?.type === 'chain' && unit.many < 6) said.push(...new Array<string>(unit.many).fill('ch'));
     else return 0;
     if (said.length === parts.length && said.every((part, k) => part === parts[k])) return n - from + 1;

@@ -3,7 +3,13 @@ import { BARE, type Event } from './event.ts';
 
 /** An event whose part in the line is settled: numbers have become stitches, repeats, or nothing. */
 export type Element = { readonly sentence: number; readonly at: number } & (
-  | { readonly type: 'unit'; readonly options: readonly (readonly Unit[])[]; readonly fills: boolean; readonly reaches: boolean; readonly same: boolean }
+  | {
+      readonly type: 'unit';
+      readonly options: readonly (readonly Unit[])[];
+      readonly fills: boolean;
+      readonly reaches: boolean;
+      readonly same: boolean;
+    }
   | { readonly type: 'times'; readonly n: number }
   | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'again' | 'plain' }
 );
@@ -35,7 +41,16 @@ export function castNumbers(events: readonly Event[]): readonly Casting[] {
 
 function settled(event: Exclude<Event, { type: 'number' }>): Element {
   const { sentence, at } = event;
-  if (event.type === 'unit') return { sentence, at, type: 'unit', options: event.options, fills: event.fills, reaches: event.reaches, same: event.same };
+  if (event.type === 'unit')
+    return {
+      sentence,
+      at,
+      type: 'unit',
+      options: event.options,
+      fills: event.fills,
+      reaches: event.reaches,
+      same: event.same,
+    };
   if (event.type === 'times') return { sentence, at, type: 'times', n: event.n };
   return { sentence, at, type: event.type === 'correction' ? 'plain' : event.type };
 }
@@ -50,7 +65,15 @@ function partsOf(casting: Casting, event: Extract<Event, { type: 'number' }>): C
   const out = [idle];
   if (n > 0 && event.asItem > -0.4 && n <= 120) {
     const unit: Unit = { type: 'stitch', stitch: BARE, inOne: 1, times: n };
-    const element: Element = { sentence, at, type: 'unit', options: bareOptions(unit, casting.elements), fills: false, reaches: false, same: false };
+    const element: Element = {
+      sentence,
+      at,
+      type: 'unit',
+      options: bareOptions(unit, casting.elements),
+      fills: false,
+      reaches: false,
+      same: false,
+    };
     out.push({
       ...casting,
       elements: [...casting.elements, element],
@@ -65,7 +88,10 @@ function partsOf(casting: Casting, event: Extract<Event, { type: 'number' }>): C
 }
 
 /** After `two in the next`, a bare "two" may be two in one again. */
-function bareOptions(unit: Extract<Unit, { type: 'stitch' }>, before: readonly Element[]): readonly (readonly Unit[])[] {
+function bareOptions(
+  unit: Extract<Unit, { type: 'stitch' }>,
+  before: readonly Element[],
+): readonly (readonly Unit[])[] {
   const inOne = before
     .flatMap((element) => (element.type === 'unit' ? (element.options[0] ?? []) : []))
     .find((one) => one.type === 'stitch' && one.inOne === unit.times && one.inOne > 1);

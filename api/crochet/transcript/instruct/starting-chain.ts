@@ -23,7 +23,9 @@ export function startingChains(
   const beside = next?.type === 'unit' && next.same ? next.options[0]![0] : undefined;
   if (next?.type === 'unit' && beside?.type === 'stitch' && beside.times === 1) {
     const pair: Unit = { ...beside, inOne: beside.inOne + 1 };
-    const paired = elements.flatMap((element, n) => (n === at ? [] : n === at + 1 ? [{ ...next, options: [[pair]] }] : [element]));
+    const paired = elements.flatMap((element, n) =>
+      n === at ? [] : n === at + 1 ? [{ ...next, options: [[pair]] }] : [element],
+    );
     return [{ elements: paired, cost: 0 }];
   }
   const out = [

@@ -1,52 +1,7 @@
 import { type Class } from './classes.ts';
 
-/** Phrases of the trade and of talk, by class and value. The longest phrase that fits is taken. */
-const TABLE: readonly (readonly [Class, string | number, string])[] = [
-  [
-    'S',
-    'sc',
-    `
-    single crochet, single, singles, sc, scs, s c, single crochets, single stitch, single stitches`,
-  ],
-  [
-    'S',
-    'hdc',
-    `
-    half double crochet, half double, half doubles, hdc, hdcs, h d c, h t c, half double crochets, halfdouble,
-    half double stitches`,
-  ],
-  ['S', 'dc', `double crochet, double, doubles, dc, dcs, d c, dee cee, deecee, double crochets`],
-  ['S', 'htr', `half treble, half trebles, half treble crochet, htr, half triple`],
-  ['S', 'tr', `treble, trebles, treble crochet, tr, trs, triple crochet, treble crochets, triple`],
-  ['S', 'dtr', `double treble, double trebles, dtr, double treble crochet, double triple crochet`],
-  ['S', 'slst', `slip stitch, slip stitches, slipstitch, slst, sl st, slip stitching, slips, ss`],
-  ['S', 'bobble', `bobble, bobbles`],
-  ['S', 'popcorn', `popcorn, popcorns`],
-  ['S', 'puff', `puff, puffs`],
-  ['S', 'cluster', `cluster, clusters`],
-  ['S', 'picot', `picot, picots`],
-  ['C', 0, `chain, chains, ch, chs, turning chain`],
-  ['C', 1, `chain up, chains up`],
-  [
-    'K',
-    0,
-    `
-    skip, skips, skipping, miss, missing, misses, pass over, jump over, hop over, leave out, passing
-    over, ignore`,
-  ],
-  ['P', 0, `increase, increases, inc, double it, double them, double those up, double up, double that, a pair, pairs, incs, increasing`],
-  [
-    'D',
-    0,
-    `
-    decrease, decreases, dec, decs, invisible decrease, invisible decreases, inv dec, invdec, decreasing,
-    invisibly decrease`,
-  ],
-  ['D', 'sc', `sc 2 tog, sc2tog, single crochet 2 together, single crochet decrease`],
-  ['D', 'hdc', `hdc 2 tog, hdc2tog, half double decrease, half double crochet decrease`],
-  ['D', 'dc', `dc 2 tog, dc2tog, double crochet decrease`],
-  ['D', 'tr', `tr2tog, treble decrease`],
-  ['T', 0, `together, tog, at once, as one, at a time`],
+/** Words of talk that give a sentence its shape: repeats, results, corrections, fillers. Class, value, phrases. */
+export const TALK_WORDS: readonly (readonly [Class, string | number, string])[] = [
   ['I', 0, `in, into, on, onto, over, under, inside, in to, inside of, on top of, over top of`],
   [
     'E',
@@ -67,34 +22,6 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
     next door, one after that, second next`,
   ],
   ['L', 0, `last, last one, final, very last, end one, very last one, last of all`],
-  [
-    'G',
-    'st',
-    `
-    stitch, stitches, st, sts, place, places, hole, foot, tip, bend, edge, edge stitch, end stitch, end chain, spot`,
-  ],
-  ['G', 'loop', `loop, loops`],
-  [
-    'Z',
-    'sp',
-    `
-    space, spaces, sp, sps, chain space, chain spaces, chain 1 space, chain 2 space, chain 1 spaces, chain 2
-    spaces, window, windows, chain sp, opening, mesh space`,
-  ],
-  [
-    'Z',
-    'corner',
-    `
-    corner, corners, corner space, corner spaces, corner hole, corner holes, corner stitch, corner stitches`,
-  ],
-  ['Z', 'gap', `gap, gaps`],
-  [
-    'H',
-    0,
-    `
-    from the hook, from hook, from your hook, from my hook, from the needle, next to your hook, next to the
-    hook, nearest the hook, hugging your hook`,
-  ],
   [
     't',
     0,
@@ -146,36 +73,6 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
     head, until you are back where you started, till you get back, until you get back around, to the end of the
     round, to the end of the row, to the other end, the whole lap`,
   ],
-  [
-    'F',
-    0,
-    `
-    plain, straight, even, evenly, nothing added, nothing happens, no increases, no shaping, nothing, regular,
-    work even, work straight, without shaping, no adding, just the same, with nothing in them, leave it alone,
-    no increasing, no decreases, unchanged, ordinary, nothing cute, throughout, nothing fancy, nothing clever,
-    normal, leave him be, leave it be, leave her be, walk, no change, nowt, naught, rest, flat`,
-  ],
-  [
-    'B',
-    'back',
-    `
-    back loop, back loops, back loop only, back loops only, back loop alone, blo, b l o, back half, rear loop,
-    rear loops, back bump`,
-  ],
-  [
-    'B',
-    'front',
-    `
-    front loop, front loops, front loop only, front loops only, front loop alone, flo, f l o, near loop, near
-    loops`,
-  ],
-  ['B', 'both', `both loops, both the loops, normal loops, regular loops, both loops again, both strands`],
-  ['V', 0, `magic ring, ring, the ring, fresh ring, your ring`],
-  ['U', 'round', `round, rnd, lap, circuit, go round`],
-  ['U', 'rounds', `rounds, rnds, laps`],
-  ['U', 'row', `row`],
-  ['U', 'rows', `rows`],
-  ['#', 0, `number, no.`],
   [
     '=',
     0,
@@ -269,26 +166,3 @@ const TABLE: readonly (readonly [Class, string | number, string])[] = [
   ],
   ['r', 0, `through, thru, to, up to, up through, until, till, through to, right up to`],
 ];
-
-export interface Phrase {
-  readonly words: readonly string[];
-  readonly kind: Class;
-  readonly value: string | number;
-}
-
-/** Phrases by their first word, longest first. */
-export const PHRASES: ReadonlyMap<string, readonly Phrase[]> = buildPhrases();
-
-function buildPhrases(): ReadonlyMap<string, readonly Phrase[]> {
-  const byFirst = new Map<string, Phrase[]>();
-  for (const [kind, value, list] of TABLE) {
-    for (const phrase of list.trim().split(/\s*,\s*/)) {
-      const words = phrase.split(/\s+/);
-      const entries = byFirst.get(words[0]!) ?? [];
-      if (!entries.some((one) => one.words.join(' ') === words.join(' '))) entries.push({ words, kind, value });
-      byFirst.set(words[0]!, entries);
-    }
-  }
-  for (const entries of byFirst.values()) entries.sort((a, b) => b.words.length - a.words.length);
-  return byFirst;
-}

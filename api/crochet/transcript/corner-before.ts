@@ -1,0 +1,20 @@
+import { type Before } from './read-line.ts';
+import { type Unit } from './work/units.ts';
+
+/** The corner of an earlier line, in the stitch of this one. */
+export function cornerBefore(before: Before, stitch: string): Unit | null {
+  for (const line of [...before.all.flat(), ...before.piece].reverse()) {
+    const parts = cornerIn(line.units);
+    if (parts !== null)
+      return { type: 'oneplace', parts: parts.map((part) => (part === 'ch' ? part : stitch)), times: 1 };
+  }
+  return null;
+}
+
+function cornerIn(units: readonly Unit[]): readonly string[] | null {
+  for (const unit of units) {
+    const parts = unit.type === 'repeat' ? cornerIn(unit.units) : unit.type === 'oneplace' ? unit.parts : null;
+    if (parts?.includes('ch') === true) return parts;
+  }
+  return null;
+}
