@@ -1,11 +1,12 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
 import { Plus } from 'lucide-react';
-import { useState } from 'react';
+import { Suspense, useState } from 'react';
 import { useNavigate, useSearchParams } from 'react-router-dom';
 import { ShelfPart } from '#contract/shelf';
 import { FindField } from '../features/shelf/find-field.tsx';
 import { NoStudio } from '../features/shelf/no-studio.tsx';
 import { ShelfRoom } from '../features/shelf/shelf-room.tsx';
+import { ShelfWaiting } from '../features/shelf/shelf-waiting.tsx';
 import { shelfQuery } from '../features/shelf/shelf.queries.ts';
 import { paths } from '../lib/paths.ts';
 import { signedInLoader, studioOf, useMe } from '../lib/session.ts';
@@ -17,11 +18,13 @@ import { TopStrip } from './shell/top-strip.tsx';
 const partIn = (search: URLSearchParams): ShelfPart => ShelfPart.catch('shelf').parse(search.get('part'));
 const TITLES: Readonly<Record<ShelfPart, string>> = { shelf: 'Shelf', archive: 'Archive', bin: 'Bin' };
 
-export const loader = signedInLoader(async (client, { request }, me) => {
+/** Asks, but does not wait: the page shows its rows waiting, in the binding, instead of nothing. */
+export const loader = signedInLoader((client, { request }, me) => {
   const studio = studioOf(me);
-  if (!studio) return;
   const part = partIn(new URL(request.url).searchParams);
-  await client.query({ ...shelfQuery(studio.studioId, part), staleTime: 'static' });
+  // What went wrong is told where it is read.
+  if (studio) void client.query(shelfQuery(studio.studioId, part)).catch(() => undefined);
+  return Promise.resolve();
 });
 
 /** On a phone the strip has two lines, and the first wants room above it. */
@@ -33,9 +36,7 @@ function howMany(count: number, isShelf: boolean): string {
 }
 
 /** The shelf of the studio somebody works in. */
-function StudioShelf({ studioId, name }: { studioId: string; name: string }) {
-  const [search] = useSearchParams();
-  const part = partIn(search);
+function StudioShelf({ studioId, name, part }: { studioId: string; name: string; part: ShelfPart }) {
   const { data: shelf } = useSuspenseQuery(shelfQuery(studioId, part));
   const [words, setWords] = useState('');
   const navigate = useNavigate();
@@ -59,7 +60,7 @@ function StudioShelf({ studioId, name }: { studioId: string; name: string }) {
         )}
       </TopStrip>
       <main className="flex grow flex-col">
-        <ShelfRoom key={part} studioId={studioId} part={part} words={words} />
+        <ShelfRoom studioId={studioId} part={part} words={words} />
       </main>
     </>
   );
@@ -67,8 +68,21 @@ function StudioShelf({ studioId, name }: { studioId: string; name: string }) {
 
 export function Component() {
   const studio = studioOf(useMe());
+  const [search] = useSearchParams();
   if (!studio) return <NoStudio />;
-  return <StudioShelf key={studio.studioId} studioId={studio.studioId} name={studio.studioName} />;
+  const part = partIn(search);
+  const { studioId, studioName } = studio;
+  const waiting = (
+    <>
+      <TopStrip title={TITLES[part]} beside={studioName} />
+      <ShelfWaiting />
+    </>
+  );
+  return (
+    <Suspense key={`${studioId} ${part}`} fallback={waiting}>
+      <StudioShelf studioId={studioId} name={studioName} part={part} />
+    </Suspense>
+  );
 }
 
 export const ErrorBoundary = () => <PageProblem what="shelf" />;

@@ -6,11 +6,12 @@ import { send } from '../../lib/http.ts';
 /** While something is being read, the shelf looks again by itself. */
 const READING_MS = 4_000;
 
-/** A studio's shelf, its archive or its bin. */
+/** A studio's shelf, its archive or its bin. Read anew at each visit: what was written at the bench changes its counts. */
 export const shelfQuery = (studioId: string, part: ShelfPart) =>
   queryOptions({
     queryKey: ['shelf', studioId, part],
     queryFn: ({ signal }) => send(Shelf, `/api/patterns?studioId=${studioId}&part=${part}`, { signal }),
+    staleTime: 0,
     refetchInterval: ({ state }) =>
       state.data?.patterns.some((pattern) => pattern.state === 'reading') ? READING_MS : false,
   });
