@@ -8,7 +8,7 @@ import { fileURLToPath, pathToFileURL } from 'node:url';
 export const ROOT = path.resolve(path.dirname(fileURLToPath(import.meta.url)), '../..');
 const DIST = path.join(ROOT, 'dist');
 
-/** Entry points of the server's processes; `seed` is there once the demo is. */
+/** Entry points of the server's processes. */
 const ENTRIES = {
   server: 'api/server.ts',
   worker: 'api/worker.ts',
@@ -62,10 +62,7 @@ export function buildServer() {
     };
     rmSync(path.join(DIST, 'server'), { recursive: true, force: true });
     rmSync(path.join(DIST, 'migrations'), { recursive: true, force: true });
-    const entryPoints = Object.fromEntries(
-      Object.entries(ENTRIES).filter(([name]) => name !== 'seed' || existsSync(path.join(ROOT, 'seeds/index.ts'))),
-    );
-    await build({ ...options, entryPoints, splitting: true, outdir: 'dist/server' });
+    await build({ ...options, entryPoints: ENTRIES, splitting: true, outdir: 'dist/server' });
     const migrations = readdirSync(path.join(ROOT, 'migrations')).filter((file) => /^\d{14}_.*\.ts$/.test(file));
     await build({ ...options, entryPoints: migrations.map((file) => `migrations/${file}`), outdir: 'dist/migrations' });
     await stop();

@@ -16,7 +16,7 @@ const MAY_IMPORT: Readonly<Record<string, readonly string[]>> = {
   'storage-fake': ['api/env.ts', 'api/platform'],
   migrations: ['api/env.ts', 'api/platform'],
   'knexfile.ts': ['api/env.ts', 'api/platform'],
-  seeds: ['api/env.ts', 'api/platform', 'api/features', 'api/contract', 'api/crochet'],
+  seeds: ['api/env.ts', 'api/platform', 'api/http types', 'api/features', 'api/contract', 'api/crochet'],
   'web/ui': ['web/lib'],
   'web/lib': ['api/contract'],
   'web/parts': ['web/ui', 'web/lib', 'api/contract types', 'api/crochet/shape', 'api/crochet types'],
