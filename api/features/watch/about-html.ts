@@ -29,7 +29,7 @@ function abbreviations({ abbreviations: used, terms }: PublicEdition): Html {
     <thead>
       <tr>
         <th scope="col">${terms}</th>
-        <th scope="col"></th>
+        <th scope="col">name</th>
         <th scope="col">${other}</th>
       </tr>
     </thead>

@@ -110,19 +110,21 @@ export function watchPage(page: WatchPage): string {
           <div class="watch-tools" data-island="tools"><a class="btn" href="${sheet}">Print sheet</a></div>
         </header>
         ${notices(page)}
-        <main class="watch-main">
-          <section class="watch-stage" data-island="stage" aria-label="Recording">${stage(page)}</section>
-          <section class="watch-work" id="work" data-island="work" aria-label="The line being worked">
-            ${work(page)}
-          </section>
-          <section class="watch-rounds" data-island="rounds" aria-label="All lines">${patternHtml(edition)}</section>
+        <main>
+          <div class="watch-main">
+            <section class="watch-stage" data-island="stage" aria-label="Recording">${stage(page)}</section>
+            <section class="watch-work" id="work" data-island="work" aria-label="The line being worked">
+              ${work(page)}
+            </section>
+            <section class="watch-rounds" data-island="rounds" aria-label="All lines">${patternHtml(edition)}</section>
+          </div>
+          ${aboutHtml(edition)}
+          <div data-island="dock"></div>
         </main>
-        ${aboutHtml(edition)}
         <footer class="watch-foot">
           ${edition.title}, edition ${number}. <a href="${sheet}">The sheet as PDF</a>. Made with Roundelay.
         </footer>
       </div>
-      <div data-island="dock"></div>
       ${jsonScript('edition', edition)}`,
   });
 }
