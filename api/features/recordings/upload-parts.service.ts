@@ -33,10 +33,10 @@ async function putInStorage(
   { storage, db, clock }: Pick<Deps, 'db' | 'storage' | 'clock'>,
   upload: UploadRow,
   n: number,
-  bytes: Uint8Array,
+  part: PartBytes,
 ) {
   try {
-    return await storage.putPart(upload.key, upload.storageId, n, bytes);
+    return await storage.putPart(upload.key, upload.storageId, n, part.bytes, part.sha256);
   } catch (err) {
     if (!(err instanceof StorageRefused)) throw err;
     // The store forgot the upload: what it had is gone, and only the whole file can be sent again.
@@ -80,7 +80,7 @@ export async function takePart(
     await refuseUpload(deps, upload, 'refused', refusal);
     throw new AppError('unsupported', refusal);
   }
-  const etag = await putInStorage(deps, upload, ref.n, part.bytes);
+  const etag = await putInStorage(deps, upload, ref.n, part);
   const kept = await db.transaction(async (trx) => {
     // While the bytes were on their way the upload may have been cancelled, and its parts taken from storage.
     refuseUnlessArriving((await lockUpload(trx, upload.id)) ?? { ...upload, state: 'given-up' });
