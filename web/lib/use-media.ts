@@ -14,5 +14,7 @@ export function useMedia(query: string): boolean {
 
 /** One column up to here. */
 export const PHONE = '(max-width: 640px)';
+/** Three columns of the bench do not fit side by side: it is worked as on a phone. */
+export const ONE_COLUMN = '(max-width: 860px)';
 /** The side panel is a drawer up to here. */
 export const NARROW = '(max-width: 1100px)';

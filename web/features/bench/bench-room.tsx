@@ -1,7 +1,8 @@
 import { PanelRight } from 'lucide-react';
 import { type ReactNode, useRef, useState } from 'react';
 import { type Pattern } from '#contract/patterns';
-import { NARROW, PHONE, useMedia } from '../../lib/use-media.ts';
+import { cx } from '../../lib/class-names.ts';
+import { NARROW, ONE_COLUMN, useMedia } from '../../lib/use-media.ts';
 import { IconButton } from '../../ui/button.tsx';
 import { useToast } from '../../ui/toast.tsx';
 import { BenchPhone } from './bench-phone.tsx';
@@ -41,7 +42,7 @@ export function BenchRoom({
   const cues = useCues(bench.pattern.recordings);
   const desk = useNewDesk(bench, cues.byRecording, startLineId);
   const toast = useToast();
-  const isPhone = useMedia(PHONE);
+  const isPhone = useMedia(ONE_COLUMN);
   const isNarrow = useMedia(NARROW);
   const [hasKeys, setKeys] = useState(false);
   const [isFinding, setFinding] = useState(false);
@@ -63,7 +64,7 @@ export function BenchRoom({
   const controls = (
     <>
       <TermsSwitch />
-      {isNarrow && (
+      {isNarrow && !isPhone && (
         <IconButton
           icon={PanelRight}
           size={20}
@@ -81,7 +82,7 @@ export function BenchRoom({
 
   return (
     <DeskProvider value={desk}>
-      <div className="flex min-h-dvh grow flex-col tall:h-dvh tall:overflow-hidden">
+      <div className={cx('flex min-h-dvh grow flex-col', !isPhone && 'tall:h-dvh tall:overflow-hidden')}>
         {head({ pattern: bench.pattern, saving: <SaveWords />, controls })}
         <Notices />
         {isPhone ? (

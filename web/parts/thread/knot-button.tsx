@@ -120,7 +120,8 @@ export function KnotButton({
             </svg>
           </>
         ) : (
-          showsLabel && (
+          showsLabel &&
+          held.label !== '' && (
             <text y={y - 11} textAnchor="middle" fontSize="13" fontWeight="500" fill="var(--color-walnut2)">
               {held.label}
               {more > 0 && `+${more}`}

@@ -1,35 +1,16 @@
-import { Keyboard, LogIn } from 'lucide-react';
-import { useLocation } from 'react-router-dom';
+import { Keyboard } from 'lucide-react';
 import { cx } from '../../../lib/class-names.ts';
-import { paths } from '../../../lib/paths.ts';
 import { Button } from '../../../ui/button.tsx';
-import { LinkButton } from '../../../ui/link-button.tsx';
 import { Switch } from '../../../ui/switch.tsx';
 import { useDesk } from './use-desk.ts';
 
-/** How saving stands, in words. Somebody who was signed out gets the way back; what was typed is kept meanwhile. */
+/** How saving stands, short enough never to move the head of the page; what is in the way stands under it. */
 export function SaveWords() {
-  const { bench } = useDesk();
-  const { pathname, search } = useLocation();
-  const { state, words, isSignedOut } = bench.save;
+  const { save } = useDesk().bench;
+  const isKept = save.state === 'not-saved';
   return (
-    <span className="flex items-center gap-2.5">
-      <span
-        role="status"
-        className={cx('max-w-[26em]', state === 'not-saved' ? 'small font-medium text-madder' : 'text-walnut2')}
-      >
-        {words}
-      </span>
-      {state === 'not-saved' &&
-        (isSignedOut ? (
-          <LinkButton size="row" icon={LogIn} to={paths.signIn(pathname + search)}>
-            Sign in
-          </LinkButton>
-        ) : (
-          <Button size="row" onClick={() => bench.retry()}>
-            Try again
-          </Button>
-        ))}
+    <span role="status" className={cx('whitespace-nowrap', isKept ? 'font-medium text-madder' : 'text-walnut2')}>
+      {isKept ? 'Not saved, kept here' : save.words}
     </span>
   );
 }

@@ -2,7 +2,7 @@ import { SortableContext, verticalListSortingStrategy } from '@dnd-kit/sortable'
 import { Plus } from 'lucide-react';
 import { type Piece } from '#contract/rows';
 import { usePlayerState } from '../../../parts/player/use-player.ts';
-import { PHONE, useMedia } from '../../../lib/use-media.ts';
+import { ONE_COLUMN, useMedia } from '../../../lib/use-media.ts';
 import { useStable } from '../../../lib/use-stable.ts';
 import { Button } from '../../../ui/button.tsx';
 import { lineName } from '../desk/line-name.ts';
@@ -31,7 +31,7 @@ export function PieceSection({ piece }: { piece: Piece }) {
   const { pattern, counts, lineId, isOpen, pick, goTo } = desk;
   const lines = pattern.lines.filter((line) => line.pieceId === piece.id);
   const playing = usePlayingLine();
-  const isPhone = useMedia(PHONE);
+  const isPhone = useMedia(ONE_COLUMN);
   const [Row, Open] = isPhone ? ([PhoneLine, PhoneOpenLine] as const) : ([LineRow, OpenLine] as const);
   const onPick = useStable((id: string) => {
     pick(id, true);

@@ -21,11 +21,11 @@ export function PhoneDock() {
   return (
     <nav
       aria-label="Lines"
-      className="sticky bottom-0 z-20 grid grid-cols-[76px_1fr_76px] gap-2 border-t border-rule bg-sheet px-3.5 pt-2.5 pb-[max(10px,env(safe-area-inset-bottom))]"
+      className="sticky bottom-0 z-20 grid grid-cols-[84px_1fr_84px] gap-2 border-t border-rule bg-sheet px-3.5 pt-2.5 pb-[max(10px,env(safe-area-inset-bottom))]"
     >
       <Button
         size="dock"
-        className="px-0!"
+        className="gap-1! px-0! text-[15px]!"
         {...(before ? { onClick: go(before.id) } : { notYet: 'This is the first line' })}
       >
         <Icon of={ChevronLeft} />
@@ -42,7 +42,7 @@ export function PhoneDock() {
       </Button>
       <Button
         size="dock"
-        className="px-0!"
+        className="gap-1! px-0! text-[15px]!"
         {...(after ? { onClick: go(after.id) } : { notYet: 'This is the last line' })}
       >
         {after ? nameOf(after) : ''}
