@@ -542,6 +542,12 @@ const HOT = new Set([
   'group',
 ]);
 
+/** "And so on", "tapering": work that nobody has written down. */
+function isLeftOpen(reading: Reading): boolean {
+  const [word, then] = [reading.lexes[reading.at]?.text ?? '', reading.lexes[reading.at + 1]?.text ?? ''];
+  return ['etc', 'taper', 'tapering'].includes(word) || (word === 'so' && ['on', 'forth'].includes(then));
+}
+
 /** A stretch that begins no item: prose is a note, anything hot is unread. */
 function leftover(reading: Reading, limit: number): Item {
   const from = reading.at;
@@ -559,6 +565,7 @@ function leftover(reading: Reading, limit: number): Item {
     }
     if (lex.kind === 'num' || lex.kind === 'stitch' || lex.kind === 'ord' || (lex.kind === 'w' && HOT.has(lex.text)))
       hot = true;
+    if (isLeftOpen(reading)) hot = true;
     reading.at += 1;
   }
   if (reading.at === from) reading.at += 1;
