@@ -124,7 +124,7 @@ function runSize(
   return { ...run, follows: start.follows };
 }
 
-type Start = { readonly left: Left; readonly follows: LineCount['follows'] };
+interface Start { readonly left: Left; readonly follows: LineCount['follows'] }
 
 /** What the line works into: what was made, or, after a fault, what was written or said. */
 function startFor(state: State, size: number): Start {

@@ -43,7 +43,7 @@ export function perform(job: Job, items: readonly Item[], rest: number): void {
 }
 
 /** `ending with sc in last st`: the last repeat is cut where these words take over. */
-const isEnding = (item: Item | undefined): boolean => item?.type === 'note' && /^end/.test(item.text);
+const isEnding = (item: Item | undefined): boolean => item?.type === 'note' && item.text.startsWith("end");
 
 function performStep(job: Job, item: Extract<Item, { type: 'step' }>): void {
   const { walker } = job;

@@ -129,7 +129,7 @@ function readGoal(reading: Reading): Target | null {
   const noun = readNoun(reading);
   if (!noun) return null;
   const { also: _also, ...place } = noun;
-  void _also;
+  _also;
   return { ...place, which };
 }
 

@@ -26,7 +26,7 @@ export function entriesOf(text: string, terms: Terms, own: Own): Entry[] {
       apart = true;
       continue;
     }
-    const lexes = lexesOf(source, terms, own);
+    const lexes = lexesOf(source.slice(0, LONGEST), terms, own);
     const cuts = cutsIn(lexes);
     cuts.forEach((cut, i) => {
       const from = cut.at === 0 ? 0 : lexes[cut.at]!.start;
@@ -46,6 +46,9 @@ export function entriesOf(text: string, terms: Terms, own: Own): Entry[] {
   }
   return entries;
 }
+
+/** Labels are looked for in so much of a printed line, in UTF-16 units. */
+const LONGEST = 100_000;
 
 const leading = (text: string): number => text.length - text.trimStart().length;
 

@@ -50,7 +50,7 @@ export function piecesOf(
       if (!isChain) last = part.label?.to ?? from ?? last + Math.max(1, part.label?.next ?? 1);
       current.lines.push({ part, read });
     } else if (current)
-      current.lines.push({ part: part as Extract<Part, { type: 'step' | 'note' }>, read: readLine('', {}) });
+      current.lines.push({ part: part, read: readLine('', {}) });
   });
   return drafts
     .filter((draft) => draft.lines.some((line) => line.part.type === 'line'))
