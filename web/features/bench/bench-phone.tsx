@@ -12,7 +12,7 @@ export function BenchPhone({ transcript }: { transcript: ReactNode }) {
   return (
     <>
       <main className="grow">
-        <div className="sticky top-0 z-20 bg-chalk">
+        <div className="z-20 bg-chalk [@media(min-height:600px)]:sticky [@media(min-height:600px)]:top-0">
           <div className="[&>div]:aspect-auto! [&>div]:h-[150px]">
             <Clip />
           </div>
