@@ -37,7 +37,11 @@ export default defineConfig({
       project('web', 10_000, { environment: 'jsdom', setupFiles: ['tests/support/quiet-console.ts'] }),
       project('migrations', 60_000, { globalSetup: HOUSE }),
       project('api', 20_000, { globalSetup: HOUSE, maxWorkers: 2 }),
-      project('browser', 120_000, { globalSetup: HOUSE, fileParallelism: false }),
+      project('browser', 120_000, {
+        globalSetup: HOUSE,
+        fileParallelism: false,
+        expect: { poll: { timeout: 15_000 } },
+      }),
     ],
   },
 });

@@ -35,7 +35,7 @@ export function Component() {
         <LinkButton to={paths.sheet(patternId)}>{chosen ? 'To the next edition' : 'To the sheet'}</LinkButton>
       </TopStrip>
       {chosen ? (
-        <main className="grid grow grid-cols-[minmax(280px,1fr)_minmax(0,3fr)] max-lg:grid-cols-1">
+        <main className="grid grow grid-cols-[minmax(280px,1fr)_minmax(0,3fr)] max-lg:grid-cols-[minmax(0,1fr)]">
           <div className="border-r border-rule max-lg:border-r-0 max-lg:border-b">
             <div className="panel-head justify-between">
               <h2 className="h-panel">Editions</h2>

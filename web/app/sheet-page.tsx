@@ -31,7 +31,7 @@ function SheetRoom({ patternId }: { patternId: string }) {
         </span>
         {save.state === 'not-saved' && <Button onClick={() => bench.retry()}>Try again</Button>}
       </TopStrip>
-      <main className="grid grow grid-cols-[minmax(400px,5fr)_minmax(0,6fr)] max-lg:grid-cols-1">
+      <main className="grid grow grid-cols-[minmax(400px,5fr)_minmax(0,6fr)] max-lg:grid-cols-[minmax(0,1fr)]">
         <div className="border-r border-rule max-lg:order-2 max-lg:border-r-0">
           <PublishPanel patternId={patternId} version={pattern.lastChange} canAsk={isSaved} />
           <SheetForms desk={bench} />

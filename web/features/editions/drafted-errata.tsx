@@ -27,7 +27,7 @@ export function DraftedErrata({
           const mine = settled[index];
           const id = `erratum-${index}`;
           return (
-            <li key={id} className="grid grid-cols-[24px_1fr] gap-x-1 border-b border-feint py-2">
+            <li key={id} className="grid grid-cols-[24px_minmax(0,1fr)] gap-x-1 border-b border-feint py-2">
               <input
                 id={id}
                 type="checkbox"

@@ -70,10 +70,11 @@ function Open({ patternId, desk, canAsk }: { patternId: string; desk: PublishDes
   const publish = usePublish(patternId);
   const toast = useToast();
   const notYet = reasonNot(desk, canAsk);
+  // A promise, not the call's own callback: the new number draws this form anew, and with it that callback is gone.
   const send = () =>
-    publish.mutate(
-      { lastChange: desk.lastChange, visibility, errata: [...settled] },
-      { onSuccess: () => toast(`Edition ${desk.number} is out. Its sheets follow in a moment.`) },
+    void publish.mutateAsync({ lastChange: desk.lastChange, visibility, errata: [...settled] }).then(
+      () => toast(`Edition ${desk.number} is out. Its sheets follow in a moment.`),
+      () => undefined,
     );
   return (
     <div className="grid gap-3 p-3.5">
@@ -92,7 +93,9 @@ function Open({ patternId, desk, canAsk }: { patternId: string; desk: PublishDes
       {desk.errata.length > 0 && <DraftedErrata desk={desk} settled={settled} onSettle={setSettled} />}
       <div>
         <span className="label">Who sees it</span>
-        <Switch label="Who sees it" value={visibility} options={WHO} onChange={setVisibility} />
+        <div className="max-w-full overflow-x-auto p-0.5">
+          <Switch label="Who sees it" value={visibility} options={WHO} onChange={setVisibility} />
+        </div>
         <p className="small mt-1 text-walnut2">{SAYS[visibility]}</p>
       </div>
       {publish.isError && <ErrorNote what="It is not out.">{publish.error.message}</ErrorNote>}

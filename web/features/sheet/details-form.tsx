@@ -54,12 +54,14 @@ export function DetailsForm({ desk }: { desk: SheetDesk }) {
         </div>
         <div className="flex flex-wrap items-center gap-2">
           <span className="label mb-0!">Level</span>
-          <Switch
-            label="Level"
-            value={details.level ?? 'none'}
-            options={LEVELS}
-            onChange={(level) => save({ level: level === 'none' ? null : level })}
-          />
+          <div className="max-w-full overflow-x-auto p-0.5">
+            <Switch
+              label="Level"
+              value={details.level ?? 'none'}
+              options={LEVELS}
+              onChange={(level) => save({ level: level === 'none' ? null : level })}
+            />
+          </div>
         </div>
         <fieldset>
           <legend className="label">The finished piece</legend>

@@ -13,11 +13,11 @@ export function MaterialsLedger({ desk }: { desk: SheetDesk }) {
   const { materials, mayEdit } = desk.pattern;
   return (
     <section aria-labelledby="sheet-materials" className="border-b border-rule">
-      <div className="panel-head justify-between">
+      <div className="panel-head flex-wrap justify-between gap-y-1.5 py-1.5">
         <h2 id="sheet-materials" className="h-panel">
           Materials
         </h2>
-        <span className="flex gap-2">
+        <span className="flex flex-wrap gap-2">
           {mayEdit &&
             (Object.keys(KINDS) as (keyof typeof KINDS)[]).map((kind) => (
               <Button key={kind} size="row" onClick={() => desk.add('material', { kind, name: KINDS[kind] })}>

@@ -33,7 +33,12 @@ export function SheetPreview({
   const url = `/api/patterns/${patternId}/sheet.pdf?paper=${paper}&terms=${terms}`;
   const { pdf, isDrawing, trouble } = usePdf(url, version);
   return (
-    <section aria-labelledby="sheet-preview" className="min-w-0">
+    <section
+      aria-labelledby="sheet-preview"
+      // It scrolls by itself beside the forms, so it must be reached by keyboard too.
+      tabIndex={0}
+      className="min-w-0 lg:sticky lg:top-[52px] lg:max-h-[calc(100dvh-52px)] lg:self-start lg:overflow-y-auto"
+    >
       <div className="panel-head flex-wrap gap-3 py-1.5">
         <h2 id="sheet-preview" className="h-panel">
           As it prints
