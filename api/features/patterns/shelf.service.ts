@@ -1,13 +1,26 @@
 import type { Knex } from 'knex';
 import { countPattern } from '#crochet';
-import { toPatternInput } from '#contract/pattern-input';
+import { toPatternInput, type Counted } from '#contract/pattern-input';
 import type { Shelf, ShelfPart, ShelfPattern } from '#contract/shelf';
 import { AppError } from '../../http/problem.ts';
 import type { Person } from '../../http/session.ts';
 import { canManagePatterns, canSeePattern } from './patterns.policy.ts';
 import { countAside, findStudio, listPatterns, type PatternRow } from './patterns.store.ts';
+import { remember } from './remember.ts';
 import { shelfFigures, shelfGroup } from './shelf-figures.ts';
-import { readShelfContent, type ShelfContent } from './shelf.store.ts';
+import { readShelfContent, type ShelfContent, type ShelfLine } from './shelf.store.ts';
+
+/** Counting is most of the shelf's work, and most patterns are as they were at the last look. */
+const figuresOf = remember(
+  ({
+    counted,
+    isFilmed,
+  }: {
+    readonly counted: Counted & { readonly lines: ShelfLine[] };
+    readonly isFilmed: boolean;
+  }) => shelfFigures(counted, countPattern(toPatternInput(counted)), isFilmed),
+  1_000,
+);
 
 function toShelfPattern(
   pattern: PatternRow,
@@ -18,8 +31,9 @@ function toShelfPattern(
     rows.filter(({ patternId }) => patternId === pattern.id);
   const pieces = ofPattern(content.pieces);
   const lines = ofPattern(content.lines).filter((line) => pieces.some(({ id }) => id === line.pieceId));
-  const counted = { ...pattern, pieces, lines, specialStitches: ofPattern(content.specials) };
-  const figures = shelfFigures(counted, countPattern(toPatternInput(counted)), content.filmed.includes(pattern.id));
+  const { terms, sizes } = pattern;
+  const counted = { terms, sizes, pieces, lines, specialStitches: ofPattern(content.specials) };
+  const figures = figuresOf({ counted, isFilmed: content.filmed.includes(pattern.id) });
   return {
     ...figures,
     id: pattern.id,
