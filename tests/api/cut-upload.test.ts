@@ -10,6 +10,7 @@ import { startStorageFake, type StorageFake } from '../../storage-fake/server.ts
 import { buildApp, type TestApp } from '../support/app.ts';
 import { buildHouse, buildPattern, buildRecording } from '../support/builders.ts';
 import { clipFactsOf, filmClip, padFilm, partOf, sha256 } from '../support/clips.ts';
+import { startCuttingProxy } from '../support/cutting-proxy.ts';
 
 const KEYS = { accessKey: 'cut-key', secretKey: 'cut-secret-key' };
 
@@ -125,6 +126,21 @@ describe('a clip whose way is cut', () => {
     await at.workAll();
     expect((await request(server).get(`/api/uploads/${uploadId}`).set(who)).body).toMatchObject({ state: 'ready' });
     expect((await request(server).get(`/api/recordings/${recordingId}/clip`).set(who)).status).toBe(200);
+  });
+});
+
+describe('the proxy that story tests cut a line with', () => {
+  test('cuts one connection at its byte, and lets everything else through', async () => {
+    const server = createServer((req, res) => void req.resume().on('end', () => res.end('whole')));
+    await new Promise<void>((ready) => server.listen(0, '127.0.0.1', ready));
+    const proxy = await startCuttingProxy((server.address() as AddressInfo).port, 1_000_000);
+    const send = () => request(`http://127.0.0.1:${proxy.port}`).put('/').send(Buffer.alloc(800_000));
+    expect((await send()).text).toBe('whole');
+    await expect(send()).rejects.toThrow();
+    expect((await send()).text).toBe('whole');
+    expect(proxy.cuts).toBe(1);
+    await proxy.close();
+    server.close();
   });
 });
 

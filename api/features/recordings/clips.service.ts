@@ -9,14 +9,6 @@ import { readRange } from './byte-range.ts';
 import { findClip, type ClipRow } from './clips.store.ts';
 import { canWatchClip } from './recordings.policy.ts';
 
-/** What an answer with a clip, or a stretch of it, says and holds. */
-export interface OpenClip {
-  readonly status: 200 | 206 | 416;
-  readonly headers: Readonly<Record<string, string>>;
-  /** Null with a 416. It must be read or destroyed. */
-  readonly body: Readable | null;
-}
-
 /** The clip may be kept by the browser that got it, but the right to it is asked for again each time. */
 const KEEPING = 'private, no-cache';
 
@@ -80,22 +72,6 @@ export async function findWatchableClip(db: Deps['db'], who: Person | null, reco
   const clip = await findRecordingClip(db, recordingId);
   if (!canWatchClip(who, clip)) throw new AppError('not-found');
   return clip;
-}
-
-/**
- * Opens a recording's clip, or the range asked for of it. No right is checked here.
- * @param rangeHeader the `Range` header of the request
- * @throws AppError not-found while the recording has no whole clip
- * @throws StorageDown
- */
-export async function openClip(
-  { db, storage }: Pick<Deps, 'db' | 'storage'>,
-  recordingId: string,
-  rangeHeader: string | undefined,
-): Promise<OpenClip> {
-  const clip = await findRecordingClip(db, recordingId);
-  const { range, status, headers } = describeAnswer(clip, rangeHeader);
-  return { status, headers, body: status === 416 ? null : await readStored(storage, clip, range) };
 }
 
 /** A stretch is only the right one of the very same clip; of another, the whole answers. */

@@ -107,5 +107,3 @@ export function useNewPattern(studioId: string) {
     },
   };
 }
-
-export type NewPattern = ReturnType<typeof useNewPattern>;

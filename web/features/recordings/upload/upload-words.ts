@@ -29,7 +29,7 @@ export function uploadWords(state: UploadState): string {
     case 'sending':
       return bytesPerSecond === null || secondsLeft === null
         ? percent
-        : `${percent}, ${aboutTime(secondsLeft)} left, ${formatBytes(bytesPerSecond)} a second`;
+        : `${percent}, ${aboutTime(secondsLeft)} left, ${formatBytes(bytesPerSecond)}/s`;
     case 'paused':
       return `Paused. ${percent} and kept.`;
     case 'waiting':
