@@ -1,6 +1,10 @@
+import { fileURLToPath } from 'node:url';
 import tailwindcss from '@tailwindcss/vite';
 import react from '@vitejs/plugin-react';
 import { defineConfig } from 'vitest/config';
+
+/** Absolute: building looks from the project's folder, developing from `web`. */
+const here = (file: string) => fileURLToPath(new URL(file, import.meta.url));
 
 /** Brings up the database, storage and mailbox that tests share. */
 const HOUSE = ['tests/support/house.ts'];
@@ -26,7 +30,7 @@ export default defineConfig({
     outDir: '../dist/web',
     emptyOutDir: true,
     manifest: true,
-    rolldownOptions: { input: { app: 'web/index.html', watch: 'web/watch/main.tsx' } },
+    rolldownOptions: { input: { app: here('web/index.html'), watch: here('web/watch/main.tsx') } },
   },
   test: {
     root: '.',
