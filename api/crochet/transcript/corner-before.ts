@@ -1,9 +1,12 @@
 import { type Before } from './read-line.ts';
 import { type Unit } from './work/units.ts';
 
+/** How many pieces back a speaker may mean. */
+const PIECES_BACK = 3;
+
 /** The corner of an earlier line, in the stitch of this one. */
 export function cornerBefore(before: Before, stitch: string): Unit | null {
-  for (const line of [...before.all.flat(), ...before.piece].reverse()) {
+  for (const line of [...before.all.slice(-PIECES_BACK).flat(), ...before.piece].reverse()) {
     const parts = cornerIn(line.units);
     if (parts !== null)
       return { type: 'oneplace', parts: parts.map((part) => (part === 'ch' ? part : stitch)), times: 1 };

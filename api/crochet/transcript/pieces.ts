@@ -66,6 +66,7 @@ function isFree(tokens: readonly Token[], i: number, to: number): boolean {
   const next = tokens[i + 1];
   if (next === undefined || i + 1 >= to) return true;
   if (COUNTED_OTHERWISE.includes(next.kind)) return next.kind === 'F';
+  if ('.,|'.includes(next.kind)) return true;
   return !MEASURE.test(next.text) && !MEASURE.test(tokens[i + 2]?.text ?? '');
 }
 

@@ -3,6 +3,8 @@ import { type Word } from './words.ts';
 /** A silence at a paragraph's end longer than this may belong before a line that is announced inside it. */
 const MOVABLE_MS = 2500;
 const SLACK_MS = 2000;
+/** At most so many announcements of a paragraph and the next are looked at. */
+const NEARBY = 40;
 
 /**
  * Moves the silences of paragraphs to where people fall silent: before a line is announced. A paragraph's time only says
@@ -14,10 +16,12 @@ export function placeSilences(words: readonly Word[], announced: readonly number
   const out = [...words];
   const usualMs = usualLength(words);
   let first = 0;
+  let passed = 0;
   for (let next = 1; next < out.length; next++) {
     const word = out[next]!;
     if (word.cue === out[next - 1]!.cue) continue;
-    const at = placeFor(out, first, next, announced, usualMs);
+    while (passed < announced.length && announced[passed]! <= first) passed += 1;
+    const at = placeFor(out, first, next, announced.slice(passed, passed + NEARBY), usualMs);
     if (at !== null) shift(out, at, next);
     first = next;
   }

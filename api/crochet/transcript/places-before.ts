@@ -4,6 +4,9 @@ import { type Before, type Stretch, type Talk } from './read-line.ts';
 import { type Token } from './tokens.ts';
 import { sumOf } from './work/units.ts';
 
+/** How many pieces back loops that were left are looked for. */
+const PIECES_BACK = 8;
+
 /** The places before a line, the likeliest first; none where they are not known. */
 export function basesFor(
   talk: Talk,
@@ -51,7 +54,10 @@ function layered(bases: readonly Base[], words: readonly Token[]): readonly Base
 
 /** A piece that begins in loops grows on the last line that was worked in the other ones. */
 function freeLoops(before: Before, loops: 'back' | 'front'): readonly Base[] {
-  const line = before.all.flat().findLast((one) => one.loops !== 'both' && one.loops !== loops && one.base !== null);
+  const line = before.all
+    .slice(-PIECES_BACK)
+    .flat()
+    .findLast((one) => one.loops !== 'both' && one.loops !== loops && one.base !== null);
   return line === undefined || line.base === null ? [] : [{ n: line.base, cost: 0 }];
 }
 
@@ -68,7 +74,7 @@ function loopsLeft(tokens: readonly Token[], from: number, to: number, before: B
   for (let i = from; i < to; i++) {
     if (tokens[i]!.kind !== 'U' || tokens[i + 1]?.kind !== 'N') continue;
     const n = Number(tokens[i + 1]!.value);
-    const lines = last === undefined ? [...before.all].reverse().flat() : [...before.piece];
+    const lines = last === undefined ? before.all.slice(-PIECES_BACK).reverse().flat() : [...before.piece];
     if (last !== undefined && n >= (last.to ?? 0)) continue;
     const line = lines.find((one) => one.from !== null && one.from <= n && n <= (one.to ?? one.from));
     if (line !== undefined) return line.base ?? sumOf(line.units).uses;

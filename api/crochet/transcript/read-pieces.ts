@@ -75,7 +75,7 @@ export function readPieces(
       chainCounts = chainRule(talk.tokens.slice(candidate.at, to)) ?? chainCounts;
       const before = {
         piece: piece.lines,
-        all: pieces.slice(0, -1).map((one) => one.lines),
+        all: pieces.slice(-9, -1).map((one) => one.lines),
         chains: piece.chains,
         introFrom: piece.lines.length === 0 ? piece.introFrom : introFrom,
         stitch,

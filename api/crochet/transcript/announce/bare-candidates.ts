@@ -80,7 +80,11 @@ function shortHead(tokens: readonly Token[], i: number, sentences: Sentences): b
 /** `down to eight`, `the other three`, `ten, two, four and eight`: numbers that come to something or are picked out. */
 function isResult(tokens: readonly Token[], i: number): boolean {
   const before = tokens[i - 1];
-  if (before?.kind === 'X') return true;
+  if (
+    before?.kind === 'X' ||
+    /^(?:make|makes|making|need|needs|want|wants|do|does|get|gets|has|had|use|put|take|takes)$/.test(before?.text ?? '')
+  )
+    return true;
   if (before?.kind === '=' && !/^(?:that is|for|so|it is|its|so that is)$/.test(before.text)) return true;
   const earlier = tokens[i - 2];
   return before?.kind === ',' && earlier?.kind === 'N' && Number(earlier.value) + 1 !== Number(tokens[i]!.value);

@@ -4,6 +4,7 @@ import { type Candidate } from './candidate.ts';
 import { announcementStart } from './candidates.ts';
 
 const NEAR = 34;
+const REACH = 16;
 /** What turns a start into a suggestion, a habit or another way. */
 const UNLESS = /\b(?:if|you may|you could|you can|or|every|each|when|whenever|isn't|counts?)\b/;
 const textOf = (tokens: readonly Token[]): string => tokens.map((one) => one.text).join(' ');
@@ -16,9 +17,12 @@ export function startCandidates(
   numbered: readonly Candidate[],
 ): readonly Candidate[] {
   const found: Candidate[] = [];
+  const firsts = numbered.filter((one) => one.lines.type === 'named' && one.lines.from === 1 && one.strength > 1.9);
+  let passed = 0;
   tokens.forEach((token, i) => {
+    while (passed < firsts.length && firsts[passed]!.at < i - REACH) passed += 1;
     if (token.kind === 'C') found.push(...chainCandidate(tokens, i, sentences));
-    if (token.kind === 'V') found.push(...ringCandidate(tokens, i, sentences, numbered));
+    if (token.kind === 'V') found.push(...ringCandidate(tokens, i, sentences, firsts.slice(passed, passed + 4)));
     if (token.kind === 'H' || token.kind === 'K' || token.kind === 'U' || token.kind === 'S') {
       found.push(...firstRow(tokens, i, sentences));
     }
@@ -99,10 +103,7 @@ function ringCandidate(
   if (isIdle(tokens.slice(Math.max(start, i - 10), i + 2))) return [];
   const hasWork = near.some((one) => one.kind === 'N' || one.kind === 'S');
   const at = i - start < 12 ? start : Math.max(start, i - 3);
-  const named = numbered.find(
-    (one) =>
-      one.lines.type === 'named' && one.lines.from === 1 && one.at >= at && one.at <= i + 14 && one.strength > 1.9,
-  );
+  const named = numbered.find((one) => one.at >= at && one.at <= i + 14);
   const base = { kind: 'line' as const, at, unit: 'round' as const, needs: 'start' as const };
   const lines = { type: 'named' as const, from: 1, to: 1 };
   if (named !== undefined && named.at > at && hasWork)

@@ -23,7 +23,7 @@ interface Partial {
   readonly cost: number;
 }
 
-const MOST = 60;
+const MOST = 24;
 const PLAIN: Unit = { type: 'stitch', stitch: BARE, inOne: 1, times: 1 };
 
 /** Puts phrases together in every likely way: which of them a repeat takes in, what stands in one place. */

@@ -44,23 +44,42 @@ const SURE_TOTAL = 1.5;
 
 /** Weighs every way of taking the phrases of a line against the places there are and the totals that were said. */
 export function chooseWork(events: readonly Event[], setting: Setting): Choice | null {
-  const choices: Choice[] = [];
+  const found: Found = { choices: [], best: -Infinity };
   const hasTimes = events.some((event) => event.type === 'times');
-  for (const { kept, rest, cost } of prefixes(events)) {
+  addWhole(events, setting, found);
+  for (const { kept, rest, cost } of prefixes(events).sort((a, b) => a.cost - b.cost)) {
     const later = rest.filter((event) => event.type === 'number');
+    if (isHopeless(cost, found)) break;
     for (const casting of castNumbers(kept)) {
+      if (isHopeless(cost + casting.cost, found)) break;
       const idle = [...casting.idle, ...later];
       for (const elements of startingChains(casting.elements, setting.chainCounts)) {
+        const mayImply = !hasTimes && isRepeatable(elements.elements);
+        const before = casting.cost + cost + elements.cost;
+        if (isHopeless(before, found)) continue;
         for (const assembly of assemble(elements.elements, setting.corner)) {
-          const before = casting.cost + cost + elements.cost + assembly.cost;
-          if (assembly.units.length > 0)
-            weigh(assembly.units, before, idle, setting, !hasTimes && isRepeatable(elements.elements), choices);
+          if (isHopeless(before + assembly.cost, found)) break;
+          if (assembly.units.length > 0) weigh(assembly.units, before + assembly.cost, idle, setting, mayImply, found);
         }
       }
     }
   }
-  addWhole(events, setting, choices);
-  return best(choices);
+  return best(found.choices);
+}
+
+interface Found {
+  readonly choices: Choice[];
+  best: number;
+}
+
+/** The most that places and a total can speak for a reading. */
+const MOST_GAIN = 6.9;
+/** How far behind the best a reading may be and still tell how sure that is. */
+const KEPT_BEHIND = 0.6;
+
+/** Whether a way of taking the words that costs so much can no longer come near the best: the ways come cheapest first. */
+function isHopeless(cost: number, found: Found): boolean {
+  return MOST_GAIN - cost < found.best - KEPT_BEHIND;
 }
 
 function isRepeatable(elements: readonly Element[]): boolean {
@@ -94,14 +113,13 @@ function prefixes(events: readonly Event[]): { kept: readonly Event[]; rest: rea
 const isExplained = (event: Event): boolean => event.type === 'unit' && event.explains;
 
 /** Readings of the whole line at once: plain work, and copies of other lines. */
-function addWhole(events: readonly Event[], setting: Setting, choices: Choice[]): void {
+function addWhole(events: readonly Event[], setting: Setting, found: Found): void {
   const numbers = events.filter((event) => event.type === 'number');
   const units = events.filter((event) => event.type === 'unit').length;
   const times = events.some((event) => event.type === 'times') ? 3 : 0;
   const plain: Unit = { type: 'repeat', units: [{ type: 'stitch', stitch: '?', inOne: 1, times: 1 }], times: 0 };
-  if (setting.isPlain) weigh([plain], 0.4 + units * 0.8 + times, numbers, setting, false, choices);
-  for (const copy of setting.copies)
-    weigh(copy.units, copy.cost + units * 1.1 + times, numbers, setting, true, choices);
+  if (setting.isPlain) weigh([plain], 0.4 + units * 0.8 + times, numbers, setting, false, found);
+  for (const copy of setting.copies) weigh(copy.units, copy.cost + units * 1.1 + times, numbers, setting, true, found);
 }
 
 function weigh(
@@ -110,7 +128,7 @@ function weigh(
   idle: Casting['idle'],
   setting: Setting,
   mayImply: boolean,
-  choices: Choice[],
+  found: Found,
 ): void {
   const settled = settleStitches(units, setting.stitch);
   const totals = idle.filter((event) => event.asTotal >= SURE_TOTAL).map((event) => event.n);
@@ -122,7 +140,7 @@ function weigh(
     const fit = fits === 'fits' ? FIT_GAIN : fits === 'unknown' ? 1 : 0;
     const agrees = said === makes ? saidGain(idle, makes, fits === 'misfit') : 0;
     const score = fit + agrees - cost - resolved.cost;
-    choices.push({
+    found.choices.push({
       units: resolved.units,
       said,
       fit: fits,
@@ -131,6 +149,7 @@ function weigh(
       cost: cost + resolved.cost,
       lead: 0,
     });
+    found.best = Math.max(found.best, score);
   }
 }
 
@@ -154,9 +173,7 @@ function best(choices: readonly Choice[]): Choice | null {
   for (const choice of choices) if (first === null || choice.score > first.score + 1e-9) first = choice;
   if (first === null) return null;
   const spelled = spell(first.units).join(' ');
-  let second = -Infinity;
-  for (const choice of choices) {
-    if (choice.score > second && spell(choice.units).join(' ') !== spelled) second = choice.score;
-  }
-  return { ...first, lead: first.score - second };
+  const near = choices.filter((choice) => choice.score > first.score - 2).sort((a, b) => b.score - a.score);
+  const second = near.find((choice) => spell(choice.units).join(' ') !== spelled);
+  return { ...first, lead: second === undefined ? 2 : first.score - second.score };
 }

@@ -21,7 +21,7 @@ export interface Casting {
   readonly idle: readonly Extract<Event, { type: 'number' }>[];
 }
 
-const MOST = 96;
+const MOST = 40;
 
 /** Gives each bare number a part (stitches, a repeat, none) in every likely way, likeliest first. */
 export function castNumbers(events: readonly Event[]): readonly Casting[] {

@@ -55,9 +55,20 @@ function zeroBytesEncoding(bytes: Uint8Array): Encoding | null {
   return null;
 }
 
+/** What Windows-1252 has at 0x80 to 0x9F; some runtimes decode these as Latin-1 controls, so they are set right here. */
+const WINDOWS_1252_HIGH = '€\x81‚ƒ„…†‡ˆ‰Š‹Œ\x8dŽ\x8f\x90‘’“”•–—˜™š›œ\x9džŸ';
+
 function decodeAs(bytes: Uint8Array, encoding: Encoding): string {
-  return new TextDecoder(encoding.toLowerCase())
-    .decode(bytes)
-    .replace(/^\uFEFF/, '')
-    .normalize('NFC');
+  const text =
+    encoding === 'Windows-1252' ? decodeWindows1252(bytes) : new TextDecoder(encoding.toLowerCase()).decode(bytes);
+  return text.replace(/^\uFEFF/, '').normalize('NFC');
+}
+
+function decodeWindows1252(bytes: Uint8Array): string {
+  let text = '';
+  for (const byte of bytes) {
+    const isHigh = byte >= 0x80 && byte < 0xa0;
+    text += isHigh ? WINDOWS_1252_HIGH.charAt(byte - 0x80) : String.fromCharCode(byte);
+  }
+  return text;
 }

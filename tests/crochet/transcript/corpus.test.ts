@@ -1,0 +1,48 @@
+import { describe, expect, test } from 'vitest';
+import { examplesOf, score } from './corpus.ts';
+import { misheard } from './mishear.ts';
+
+describe('of the spoken tutorials with known answers', () => {
+  const figures = score(examplesOf('dev'));
+
+  test('the reader finds the lines and the pieces', () => {
+    expect(figures.foundShare).toBeGreaterThanOrEqual(95);
+    expect(figures.spuriousShare).toBeLessThanOrEqual(4);
+    expect(figures.pieceShare).toBeGreaterThanOrEqual(90);
+  });
+
+  test('it reads their work, their totals and how they come out', () => {
+    expect(figures.workShare).toBeGreaterThanOrEqual(82);
+    expect(figures.saidShare).toBeGreaterThanOrEqual(89);
+    expect(figures.verdictShare).toBeGreaterThanOrEqual(86);
+  });
+
+  test('it finds what makers got wrong and blames hardly anybody else', () => {
+    expect(figures.faultsFound).toBeGreaterThanOrEqual(14);
+    expect(figures.falseAlarms).toBeLessThanOrEqual(7);
+  });
+
+  test('it finds what is done between the rounds', () => {
+    expect(figures.stepsShare).toBeGreaterThanOrEqual(85);
+    expect(figures.stepsSpuriousShare).toBeLessThanOrEqual(15);
+  });
+});
+
+describe('of six voices it was not written with', () => {
+  const figures = score(examplesOf('fresh'));
+
+  test('the reader reads nearly everything', () => {
+    expect(figures.foundShare).toBeGreaterThanOrEqual(95);
+    expect(figures.workShare).toBeGreaterThanOrEqual(91);
+    expect(figures.verdictShare).toBeGreaterThanOrEqual(92);
+    expect(figures.faultsFound).toBe(2);
+    expect(figures.falseAlarms).toBeLessThanOrEqual(1);
+  });
+});
+
+describe('of captions in which words were mis-heard', () => {
+  test('lines are still found where three words in a hundred are wrong', () => {
+    const examples = examplesOf('fresh').map((example, n) => ({ ...example, cues: misheard(example.cues, 0.03, n) }));
+    expect(score(examples).foundShare).toBeGreaterThanOrEqual(85);
+  });
+});
