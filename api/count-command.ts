@@ -1,7 +1,6 @@
 import { readFile } from 'node:fs/promises';
 import { text as readAll } from 'node:stream/consumers';
-import { countReport } from './crochet/index.ts';
-import { type Terms } from './crochet/span.ts';
+import { countReport, type Terms } from '#crochet';
 
 interface Arguments {
   readonly file: string;
