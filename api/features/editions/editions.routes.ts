@@ -9,7 +9,7 @@ import { askingIn, idIn } from '../../http/asking.ts';
 import { findRecordingClip, sendClip } from '../recordings/clips.service.ts';
 import { captionFile } from './captions.ts';
 import { openEdition, readEditions, recordingOf, withdrawEdition } from './editions.service.ts';
-import { numberIn } from './numbers.ts';
+import { numberIn } from '../../http/number-in.ts';
 import { publishEdition, readPublishDesk } from './publish.service.ts';
 
 /** Editions: what holds the next one back, publishing, withdrawing, and what an edition's page plays. */

@@ -8,7 +8,7 @@ import { sessionOf, signedIn } from '../../http/session.ts';
 import type { Deps } from '../../platform/deps.ts';
 import { draftEdition } from '../editions/drafts.service.ts';
 import { openEdition, type SeenEdition } from '../editions/editions.service.ts';
-import { numberIn } from '../editions/numbers.ts';
+import { numberIn } from '../../http/number-in.ts';
 import { idIn } from '../../http/asking.ts';
 import { findSeenPattern } from '../patterns/document.service.ts';
 import { openKeptSheet } from './sheet-files.service.ts';

@@ -4,7 +4,7 @@ import { logProblem, toAppError } from '../../http/problem.ts';
 import { readSession, sessionOf } from '../../http/session.ts';
 import type { Deps } from '../../platform/deps.ts';
 import { openEdition } from '../editions/editions.service.ts';
-import { numberIn } from '../editions/numbers.ts';
+import { numberIn } from '../../http/number-in.ts';
 import { pageAssets } from './page-assets.ts';
 import { nothingHere, trouble, watchPage } from './watch-page.ts';
 

@@ -1,5 +1,5 @@
 import type { Request } from 'express';
-import { AppError } from '../../http/problem.ts';
+import { AppError } from './problem.ts';
 
 /**
  * A whole number from 1 in the address. Anything else names nothing.
