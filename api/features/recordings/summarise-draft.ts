@@ -33,7 +33,8 @@ export function summariseDraft(draft: Draft): Omit<ReadingSummary, 'id' | 'taken
     pieces: draft.pieces.map(summarisePiece),
     verdicts,
     toLook: counted.length - verdicts.agrees,
-    unread: all.flatMap(({ unread }) => unread ?? []),
+    // A word's moment is worked out within its caption and falls between milliseconds.
+    unread: all.flatMap(({ unread }) => (unread ? [{ quote: unread.quote, atMs: Math.round(unread.atMs) }] : [])),
     notice: draft.notice,
   };
 }
