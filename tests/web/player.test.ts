@@ -84,6 +84,7 @@ describe('with a clip', () => {
     expect(video.currentTime).toBeCloseTo(12.3);
     expect(video.playbackRate).toBe(0.75);
     expect(play).toHaveBeenCalled();
+    player.request({ kind: 'pause' });
   });
 
   test('a clip that cannot be played is said so, and the time goes on by the transcript', () => {

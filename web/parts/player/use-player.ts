@@ -1,10 +1,11 @@
-import { useState, useSyncExternalStore } from 'react';
+import { useEffect, useState, useSyncExternalStore } from 'react';
 import { createPlayer, type Player } from './create-player.ts';
 import { type PlayerState } from './player-state.ts';
 
-/** One player for the life of the component. */
+/** One player for the life of the component; it rests when the component goes. */
 export function useNewPlayer(durationMs = 0): Player {
   const [player] = useState(() => createPlayer(durationMs));
+  useEffect(() => () => player.request({ kind: 'pause' }), [player]);
   return player;
 }
 
