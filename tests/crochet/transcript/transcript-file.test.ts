@@ -67,7 +67,6 @@ describe('a creator who uploads a transcript', () => {
       cues: [{ text: 'Café — a' }],
     });
   });
-  });
 
   test('with rolling captions has each word once', () => {
     const file = read(
