@@ -84,7 +84,8 @@ function isPair(tokens: readonly Token[], i: number, from: number, isNear: boole
 function isAlone(tokens: readonly Token[], i: number): boolean {
   const before = tokens[i - 1]?.kind ?? '.';
   const after = tokens[i + 1]?.kind ?? '.';
-  const isHead = '.|~&a'.includes(before) && after === 'w';
+  const isHead =
+    ('.|,'.includes(before) || /^(?:so|now|and|okay|the)$/.test(tokens[i - 1]?.text ?? '')) && after === 'w';
   return isHead || (',~.|w'.includes(before) && ('.,|'.includes(after) || after === 'o'));
 }
 

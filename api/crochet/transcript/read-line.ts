@@ -70,7 +70,7 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
   const named = linesNamed(tokens, from, to, announced.from ?? 0);
   const setting: Setting = {
     bases,
-    stitch: stitchNamed(words, events) ?? before.stitch,
+    stitch: stitchNamed(words, events) ?? (isSlipRow(words, before) ? 'slst' : before.stitch),
     chainCounts: chainRule(words) ?? before.chainCounts,
     corner: cornerBefore(before, stitchNamed(words, events) ?? before.stitch),
     isDoubtful: before.piece.at(-1)?.isDoubtful ?? false,
@@ -144,6 +144,15 @@ function verdictOf(choice: Choice, makes: number, wasDoubtful: boolean): ReadSoF
 
 /** A reading below this neither fits nor agrees. */
 const DOUBTFUL = 0;
+
+/** A single row along a chain that names no other stitch than the slip stitch is made of it. */
+function isSlipRow(words: readonly Token[], before: Before): boolean {
+  return (
+    before.chains !== null &&
+    before.piece.length === 0 &&
+    words.some((token) => token.kind === 'S' && token.value === 'slst')
+  );
+}
 
 function isPlainLine(words: readonly Token[], events: readonly Event[], { from, to }: Announced): boolean {
   const plain = words.some(

@@ -88,7 +88,7 @@ function fromBefore(tokens: readonly Token[], i: number, unit: 'round' | 'row', 
     return [{ ...base, lines: { type: 'next', many: 1 }, strength: 1.1 }];
   if (before.kind === 'N' && plural) return counted(tokens, i, j, base, sentences);
   const isOne = before.kind === 'N' && Number(before.value) === 1 && /[Fm]/.test(kindsOf(tokens, j + 1, i));
-  if (isOne && !plural) return [{ ...base, lines: { type: 'next', many: 1 }, strength: 1 }];
+  if (isOne && !plural) return [{ ...base, mark: i, lines: { type: 'next', many: 1 }, strength: 1 }];
   return [];
 }
 

@@ -135,7 +135,8 @@ function weigh(
   for (const resolved of resolve(settled, setting.bases, totals, { mayImply, mayLeave: setting.mayLeave })) {
     const { makes } = sumOf(resolved.units);
     const said = saidTotal(idle, makes);
-    const isSoft = resolved.fit === 'misfit' && setting.isDoubtful && said === makes;
+    const isSoft =
+      resolved.fit === 'misfit' && setting.isDoubtful && said === makes && makes * 2 >= (setting.bases[0]?.n ?? 0);
     const fits = isSoft ? 'unknown' : resolved.fit;
     const fit = fits === 'fits' ? FIT_GAIN : fits === 'unknown' ? 1 : 0;
     const agrees = said === makes ? saidGain(idle, makes, fits === 'misfit') : 0;
@@ -164,7 +165,7 @@ function saidGain(idle: Casting['idle'], makes: number, isMisfit: boolean): numb
 function saidTotal(idle: Casting['idle'], makes: number): number | null {
   const equal = idle.find((event) => event.n === makes && event.asTotal > (makes < 3 ? 1 : -0.9));
   if (equal !== undefined) return makes;
-  const likely = idle.filter((event) => event.asTotal >= SURE_TOTAL && event.n > 2);
+  const likely = idle.filter((event) => event.asTotal >= SURE_TOTAL && event.n > 2 && event.n * 3 >= makes);
   return likely.sort((a, b) => b.asTotal - a.asTotal)[0]?.n ?? null;
 }
 

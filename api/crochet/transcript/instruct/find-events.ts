@@ -104,9 +104,10 @@ function numberEvent(letters: Letters, i: number): Event | null {
   const isThing = after === 'w';
   const closes = isThing && /[,.&|F]/.test(letters.text[i + 2] ?? '.');
   if (token.text === 'counted by steps') asTotal += 1.4;
-  if (after === 'U') asTotal -= 3;
+  const namesLines = after === 'U' && letters.tokens[i + 1]!.text.endsWith('s');
+  if (namesLines) asTotal -= 3;
   const asItem =
-    (after === 'U' || token.text.startsWith('counted') ? -2 : 0) +
+    (namesLines || token.text.startsWith('counted') ? -2 : 0) +
     ('&,.|~pwFmYIgNTDP'.includes(before) ? 0.6 : 0) +
     ('&,F.RNTDP'.includes(after) ? 0.6 : 0) +
     (isThing ? (closes ? 0.4 : -0.2) - (token.value === 1 ? 0.3 : 0) : 0) -

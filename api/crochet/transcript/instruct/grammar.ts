@@ -68,6 +68,12 @@ export const RULES: readonly Rule[] = [
         ? null
         : either([st(stitch(m), 1, number(m))], [st(stitch(m), number(m))]),
   },
+  { pattern: /IS(?=[,.|&])/y, make: (m) => (SPECIAL.has(stitch(m)) ? nothing : null) },
+  { pattern: /NIO(?=NNT|NST)/y, make: (m) => unit(st(BARE, 1, number(m))) },
+  {
+    pattern: /NS?b(?=[,.|&])/y,
+    make: (m) => either([st(stitch(m), number(m)), st(BARE, 1, 2)], [st(stitch(m), number(m)), tog(BARE, 2)]),
+  },
   // unlike stitches in one place
   { pattern: /N?S(?:[,&m]*N?S)+[,&]?(?:E?o?I[XLOM]*N?[GZC]|E?T)/y, make: unlikeInOne },
   { pattern: /NI?V/y, make: (m) => unit(st(BARE, number(m))) },
@@ -237,6 +243,8 @@ function inOne(matched: readonly Token[], letters: string): Made | null {
 /** `a single and a double together`, `a half double, a double and a half double, all in the one stitch`. */
 function unlikeInOne(matched: readonly Token[], letters: string): Made | null {
   if (!/M|EI|EoI|IN|T/.test(letters)) return null;
+  // "a slip stitch, three half trebles in one stitch": the place is the last ones' alone
+  if (/[,&]NS[,&]?IN/.test(letters)) return null;
   const parts: string[] = [];
   let many = 1;
   for (const token of matched) {

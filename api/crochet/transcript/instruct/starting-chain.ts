@@ -14,6 +14,7 @@ export function startingChains(
   const first = elements[at];
   const chain = first?.type === 'unit' && first.options.length === 1 ? first.options[0]![0] : undefined;
   if (first?.type !== 'unit' || chain?.type !== 'chain' || chain.many > 5) return [{ elements, cost: 0 }];
+  if (elements.slice(0, at).some((element) => element.type === 'oneplace')) return [{ elements, cost: 0 }];
   const without = elements.filter((_, n) => n !== at);
   if (chain.many === 1) return [{ elements: without, cost: 0 }];
   const asUnits = (...units: Unit[]): readonly Element[] =>
