@@ -1,16 +1,19 @@
 import { type Span } from '../span.ts';
-import { type Item, type LineTree, type ReadLine, type Totals } from '../language/tree.ts';
-import { allItems, type FreeLoop } from './base.ts';
+import { type Item, type LineTree, type ReadLine } from '../language/tree.ts';
+import { type FreeLoop } from './base.ts';
 import { type LineInput } from './input.ts';
-import { judgeLine, type Given, type Judged } from './judge.ts';
-import { plainLeft, type Left } from './places.ts';
-import { isMixed, relativeOf, withMore } from './relative.ts';
-import { type LineCount, type RoundCount, type RowCount, type Verdict } from './result.ts';
-import { leftOfTotals, type State } from './state.ts';
+import { judgeLine, type Given } from './judge.ts';
+import { plainLeft } from './places.ts';
+import { relativeOf } from './relative.ts';
+import { type LineCount, type Verdict } from './result.ts';
+import { type State } from './state.ts';
 import { madeOf, workOf } from './tally.ts';
 import { messageOf } from './message.ts';
 import { type ChainPolicy } from './start.ts';
 import { type Setting } from './work-line.ts';
+import { type SizeRun, startFor, runSize } from './runs.ts';
+import { type Pass, withUntil, passesOf } from './passes.ts';
+import { lastSpan, countOf, loopsOf, roundsOf, rowsOf } from './told.ts';
 
 /** What a line takes from its piece and pattern. */
 export interface Around {
@@ -39,13 +42,6 @@ const WORST: readonly Verdict[] = ['unread', 'does-not-fit', 'differs', 'agrees'
 /** The worse of two verdicts; no-total is no judgement and gives way to any. */
 export const worse = (a: Verdict, b: Verdict): Verdict => (WORST.indexOf(a) <= WORST.indexOf(b) ? a : b);
 
-/** One pass of a line: a tree and the number of the round it is. */
-interface Pass {
-  readonly n: number;
-  readonly read: ReadLine;
-  readonly source: number | null;
-}
-
 /** Counts one line after the state that the lines before left. */
 export function countLine(line: LineInput, read: ReadLine, state: State, around: Around): Counted {
   const given: Given = { written: read.total ?? line.written, said: line.said };
@@ -58,188 +54,6 @@ export function countLine(line: LineInput, read: ReadLine, state: State, around:
   const given2 = withUntil(read.tree, given);
   const sizes = Array.from({ length: around.sizes }, (_, size) => runSize(line, passes, given2, state, around, size));
   return joined(line, read, given2, sizes, passes, state, around);
-}
-
-/** `until 54 sts` is a total like any other. */
-function withUntil(tree: LineTree, given: Given): Given {
-  const shaped = tree.items.find((item) => item.type === 'shaped');
-  return shaped?.type === 'shaped' && shaped.until && !given.written
-    ? { ...given, written: { sts: shaped.until } }
-    : given;
-}
-
-/** The rounds that a line stands for, each with its tree; null where it names a line that is not there. */
-function passesOf(line: LineInput, read: ReadLine, state: State, around: Around): Pass[] | null {
-  const first = line.from ?? state.number + 1;
-  const relative = isMixed(read.tree) ? null : relativeOf(read.tree);
-  const range = line.from !== null && line.to !== null && line.to > line.from ? line.to - line.from + 1 : 0;
-  if (!relative) {
-    const n = Math.min(Math.max(1, range), 2000);
-    return Array.from({ length: n }, (_, i) => ({ n: first + i, read, source: null }));
-  }
-  const lines =
-    relative.lines.length > 0 ? relative.lines.map((n) => (n < 0 ? state.number + 1 + n : n)) : [state.number];
-  const trees = lines.map((n) => around.trees.get(n));
-  if (trees.some((tree) => tree === undefined)) return null;
-  const times = relative.times?.[0] ?? 1;
-  const until = relative.until === null ? 0 : relative.until - first + 1;
-  const total = Math.min(range || until || lines.length * times, 2000);
-  return Array.from({ length: Math.max(1, total) }, (_, i) => {
-    const tree = trees[i % lines.length]!;
-    const more = relative.more * (1 + (lines.length === 1 ? i : 0));
-    return { n: first + i, read: { ...read, tree: withMore(tree, more) }, source: lines[i % lines.length]! };
-  });
-}
-
-interface SizeRun {
-  readonly judged: readonly Judged[];
-  readonly verdict: Verdict;
-  readonly left: Left;
-  readonly follows: LineCount['follows'];
-}
-
-function runSize(
-  line: LineInput,
-  passes: readonly Pass[],
-  given: Given,
-  state: State,
-  around: Around,
-  size: number,
-): SizeRun {
-  const shapedRows = rowsUntil(passes[0]!.read.tree, size);
-  if (shapedRows) return runUntil(line, passes[0]!, given, state, around, size, shapedRows);
-  let start = startFor(state, size);
-  let run = runPasses(passes, given, start.left, state, around, size);
-  // What the line before made does not fit: perhaps its total does.
-  if (run.verdict === 'does-not-fit') {
-    for (const other of otherStarts(state, size)) {
-      const again = runPasses(passes, given, other.left, state, around, size);
-      if (again.verdict !== 'does-not-fit') {
-        run = again;
-        start = other;
-        break;
-      }
-    }
-  }
-  return { ...run, follows: start.follows };
-}
-
-interface Start { readonly left: Left; readonly follows: LineCount['follows'] }
-
-/** What the line works into: what was made, or, after a fault, what was written or said. */
-function startFor(state: State, size: number): Start {
-  const made = state.lefts[size] ?? state.lefts[0]!;
-  const { before } = state;
-  if (before?.verdict !== 'does-not-fit' && before?.verdict !== 'unread') return { left: made, follows: null };
-  return otherStarts(state, size)[0] ?? { left: made, follows: { line: before.id, as: 'made' } };
-}
-
-function otherStarts(state: State, size: number): Start[] {
-  const { before } = state;
-  if (!before || before.verdict === 'agrees' || before.verdict === 'no-total') return [];
-  const starts: Start[] = [];
-  for (const as of ['written', 'said'] as const) {
-    const totals = before[as];
-    const left = totals ? leftOfTotals(totals, size) : null;
-    if (left) starts.push({ left, follows: { line: before.id, as } });
-  }
-  return starts;
-}
-
-function runPasses(
-  passes: readonly Pass[],
-  given: Given,
-  start: Left,
-  state: State,
-  around: Around,
-  size: number,
-): Omit<SizeRun, 'follows'> {
-  const judged: Judged[] = [];
-  let left = start;
-  const figures = (given.written ?? given.said)?.sts;
-  const perRound = around.sizes === 1 && figures !== undefined && figures.length === passes.length && passes.length > 1;
-  const none: Given = { written: null, said: null };
-  let verdict: Verdict = 'no-total';
-  let isEven = false;
-  passes.forEach((pass, i) => {
-    const setting: Setting = {
-      left,
-      ring: around.ring,
-      size,
-      policy: around.policy,
-      own: around.own,
-      stitch: state.stitch,
-      free: around.free,
-      rows: state.rows + i,
-      comesBack: around.comesBack,
-      label: pass.n,
-      blocks: given.written?.group !== undefined,
-    };
-    const isLast = i === passes.length - 1;
-    // Where every round is the same, its total is that of each; where they shape, of the last.
-    const isGiven = perRound || isLast || isEven;
-    const one = judgeLine(pass.read, isGiven ? given : none, setting, perRound ? i : size);
-    if (i === 0 && passes.length > 1)
-      isEven = one.work.tally.sts === one.work.base && passes.every((other) => other.read === pass.read);
-    if (i === 0 && isEven) {
-      const again = judgeLine(pass.read, given, setting, perRound ? i : size);
-      judged.push(again);
-      verdict = worse(verdict, again.verdict);
-      left = again.work.left;
-      return;
-    }
-    judged.push(one);
-    verdict = worse(verdict, one.verdict);
-    left = one.work.left;
-  });
-  return { judged, verdict, left };
-}
-
-/** Rows that shape until a number is reached; null where the line is no such thing. */
-function rowsUntil(tree: LineTree, size: number): { until: number; every: number; change: number } | null {
-  const item = tree.items.find((one) => one.type === 'shaped');
-  if (item?.type !== 'shaped' || !item.until) return null;
-  return { until: item.until[size] ?? item.until[0]!, every: item.every, change: item.change[size] ?? item.change[0]! };
-}
-
-function runUntil(
-  line: LineInput,
-  pass: Pass,
-  given: Given,
-  state: State,
-  around: Around,
-  size: number,
-  rows: { until: number; every: number; change: number },
-): SizeRun {
-  const start = startFor(state, size);
-  const from = start.left.count ?? start.left.made.length;
-  const shapings = (rows.until - from) / rows.change;
-  const n = Number.isInteger(shapings) && shapings > 0 && shapings < 500 ? (shapings - 1) * rows.every + 1 : 1;
-  const plain: ReadLine = {
-    ...pass.read,
-    tree: {
-      ...pass.read.tree,
-      items: [{ type: 'straight', span: line.text ? pass.read.tree.span : pass.read.tree.span, open: false }],
-    },
-  };
-  const passes = Array.from({ length: n }, (_, i) => ({
-    ...pass,
-    n: pass.n + i,
-    read: i % rows.every === 0 ? pass.read : plain,
-  }));
-  const run = runPasses(passes, given, start.left, state, around, size);
-  return { ...run, follows: start.follows };
-}
-
-function loopsOf(read: ReadLine): LineCount['loops'] {
-  const works = allItems(read.tree.items).filter(
-    (item) => item.type === 'work' && item.stitch !== 'ch' && item.stitch !== 'slst',
-  );
-  const kinds = new Set(
-    works.map((item) => (item.type === 'work' ? (item.loops ?? read.tree.loops ?? 'both') : 'both')),
-  );
-  if (kinds.size > 1) return 'mixed';
-  return [...kinds][0] ?? read.tree.loops ?? 'both';
 }
 
 /** The line as it is told, from what came out for each size and round. */
@@ -306,58 +120,6 @@ function joined(
   const isLooped = (loops === 'back' || loops === 'front') && count.uses !== null;
   const free = isLooped ? ([passes.at(-1)!.n, { loops, n: count.uses }] as const) : null;
   return { count, state: nextState(line, count, sizes, passes, state), chain: unsaid, trees, free };
-}
-
-/** Stitches; or blocks and groups, where the total counts those and comes out. */
-function countOf({ work, verdict }: Judged, given: Given): number {
-  const kinds = Object.entries(given.written ?? {});
-  const [kind, figures] = kinds[0] ?? ['sts', []];
-  const isGrouped = kinds.length === 1 && ['group', 'shell', 'vst'].includes(kind) && verdict === 'agrees';
-  return isGrouped ? (figures[0] ?? work.tally.sts) : work.tally.sts;
-}
-
-/** One entry a round where the rounds of a range do not all come out the same. */
-function roundsOf(
-  judged: readonly Judged[],
-  passes: readonly Pass[],
-  given: Given,
-  around: Around,
-): RoundCount[] | null {
-  if (judged.length < 2) return null;
-  const isEven = judged.every(
-    (one) => one.work.tally.sts === judged[0]!.work.tally.sts && one.work.base === judged[0]!.work.base,
-  );
-  if (isEven) return null;
-  const figures = given.written?.sts;
-  const perRound = around.sizes === 1 && figures?.length === judged.length;
-  return judged.map((one, i) => {
-    const isLast = i === judged.length - 1;
-    const stated: Totals | null = perRound ? { sts: [figures[i]!] } : isLast ? given.written : null;
-    return { n: passes[i]?.n ?? i + 1, base: one.work.base, stated, count: one.work.tally.sts, verdict: one.verdict };
-  });
-}
-
-/** One entry a row where a group of rows is repeated. */
-function rowsOf(judged: readonly Judged[], passes: readonly Pass[], given: Given): RowCount[] | null {
-  const isGroup = new Set(passes.map((pass) => pass.source)).size > 1;
-  if (!isGroup) return null;
-  return judged.map(({ work, verdict }, i) => ({
-    from: passes[i]!.n,
-    to: passes[i]!.n,
-    source: passes[i]!.source ?? passes[i]!.n,
-    work: workOf(work.walk),
-    base: work.base,
-    uses: work.uses,
-    stated: i === judged.length - 1 ? given.written : null,
-    count: work.tally.sts,
-    made: madeOf(work.tally),
-    verdict,
-  }));
-}
-
-function lastSpan(tree: LineTree): Span | null {
-  const working = tree.items.filter((item) => item.type !== 'note' && item.type !== 'step');
-  return working.at(-1)?.span ?? null;
 }
 
 function nextState(

@@ -1,7 +1,7 @@
 import { type Item, type Target } from '../language/tree.ts';
 import { isAt } from './places.ts';
 import { pick, type Job } from './job.ts';
-import { make } from './perform.ts';
+import { make } from './make.ts';
 
 /**
  * Lines that give a rule for each kind of place instead of an order:
@@ -21,7 +21,7 @@ export function isRuleSet(items: readonly Item[]): boolean {
   );
   return (
     kinds.size === rules.length &&
-    others.every((item) => item.type === 'work' && item.stitch === 'ch' && (item.between || items.indexOf(item) === 0))
+    others.every((item) => item.type === 'work' && item.stitch === 'ch' && (item.between ?? items.indexOf(item) === 0))
   );
 }
 

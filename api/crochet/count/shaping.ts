@@ -1,6 +1,7 @@
 import { type Shaped } from '../language/tree.ts';
 import { pick, type Job } from './job.ts';
-import { make, takeOne } from './perform.ts';
+import { make } from './make.ts';
+import { takeOne } from './take.ts';
 
 /**
  * Shaping told by its sum, over the places that are left (`rest` of them kept): spread evenly, or at both ends.

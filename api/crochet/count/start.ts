@@ -1,7 +1,7 @@
 import { type ChainCounts, type Item, type Work } from '../language/tree.ts';
 import { stitchOf } from '../stitches.ts';
 import { pick, type Job } from './job.ts';
-import { takeOne } from './perform.ts';
+import { takeOne } from './take.ts';
 
 /** What the pattern says of its starting chains, by the stitch they stand for. Null is unsaid. */
 export type ChainPolicy = Readonly<Record<string, boolean | null>>;

@@ -1,15 +1,16 @@
 import { type Span } from '../span.ts';
 import { type Item, type LineTree, type Target } from '../language/tree.ts';
-import { stitchOf } from '../stitches.ts';
 import { allItems, chainBase, foundationOf, ownChain, ownRing, targetsIn, type FreeLoops } from './base.ts';
 import { aimsIn, namedIn, travelling } from './named.ts';
-import { pick, type Job } from './job.ts';
-import { perform, takeOne } from './perform.ts';
-import { NOTHING, placesOf, plainLeft, type Left, type Named, type Place } from './places.ts';
+import { type Job } from './job.ts';
+import { perform } from './perform.ts';
+import { NOTHING, placesOf, plainLeft, type Left, type Named } from './places.ts';
 import { shaped, type Choices } from './readings.ts';
-import { firstStitch, performStart, startOf, type ChainPolicy } from './start.ts';
+import { type ChainPolicy } from './start.ts';
 import { grouped, tallyOf, type Tally } from './tally.ts';
 import { Walker, type Step } from './walker.ts';
+import { closingSlip, sideEndOf, travelled, marksOf, firstPlain } from './line-signs.ts';
+import { begin } from './begin.ts';
 
 /** What a line needs to know of the piece it stands in. */
 export interface Setting {
@@ -113,32 +114,6 @@ function loopBase(line: number | null, setting: Setting): Left {
   return free ? plainLeft(free.n) : NOTHING;
 }
 
-/** `with dc in 4th ch from hook` on a foundation: whether the chains passed over are a stitch. */
-function hookStart(
-  items: readonly Item[],
-  hook: number,
-  job: Job,
-  policy: ChainPolicy,
-): { stitch: string | null; extra: number; unsaid: boolean } {
-  const stitch = firstStitch(items);
-  const row = stitch ? stitchOf(stitch) : undefined;
-  const height = row?.height ?? 1;
-  if (!stitch || hook <= 2 || height < 2) return { stitch: null, extra: 0, unsaid: false };
-  const over = hook - 1 - height;
-  const spaces = allItems(items).flatMap((item) =>
-    item.type === 'work' && item.stitch === 'ch' && item.times.type === 'n' ? [item.times.n[0]!] : [],
-  );
-  const extra = over > 0 ? (spaces.find((n) => over === 2 * n || over === n) ?? 0) : 0;
-  const usual = (over >= 0 && height >= 3) || extra > 0;
-  const known = policy[stitch] ?? null;
-  const counts = extra > 0 ? true : (known ?? (job.choices.chain === 'usual' ? usual : !usual));
-  return {
-    stitch: counts && row?.family === 'plain' ? stitch : null,
-    extra: counts ? extra : 0,
-    unsaid: known === null && extra === 0,
-  };
-}
-
 function onPlaces(
   items: readonly Item[],
   choices: Choices,
@@ -200,110 +175,6 @@ function onPlaces(
   const begun = begin(job, body, setting, hook, isOpen);
   perform(job, begun.items, 0);
   return finish(job, aimsIn(begun.items), setting, told, begun.unsaid, isOpen);
-}
-
-function begin(
-  job: Job,
-  body: readonly Item[],
-  setting: Setting,
-  hook: number,
-  isOpen: boolean,
-): { items: readonly Item[]; unsaid: boolean } {
-  if (hook > 0) {
-    if (setting.blocks && hook > 3) {
-      job.walker.chain(hook - 1);
-      return { items: withoutSkips(body), unsaid: false };
-    }
-    const start = hookStart(body, hook, job, setting.policy);
-    if (start.stitch) job.walker.stitch(start.stitch, []);
-    job.walker.chain(start.extra);
-    return { items: withoutSkips(body), unsaid: start.unsaid };
-  }
-  const start = startOf(body, 0, job, setting.policy, setting.left.turningChain);
-  if (!start) return { items: body, unsaid: false };
-  const after = body.slice(start.index);
-  if (start.stitch || start.extra > 0) performStart(job, start, after, isOpen);
-  return { items: after, unsaid: start.unsaid };
-}
-
-/** `skip first 3 ch` on a foundation has been reckoned with in its places already. */
-function withoutSkips(items: readonly Item[]): readonly Item[] {
-  const index = items.findIndex((item) => item.type === 'work' || item.type === 'group' || item.type === 'skip');
-  const first = items[index];
-  const isLead = first?.type === 'skip' && (first.of?.what === 'ch' || first.of?.which === 'first');
-  return isLead ? [...items.slice(0, index), ...items.slice(index + 1)] : items;
-}
-
-/** Where the first side of a chain ends that is worked along both sides. */
-function sideEndOf(items: readonly Item[], places: number, hook: number): number {
-  const isBoth = hook > 0 && allItems(items).some((item) => item.type === 'step' && item.what === 'far');
-  return isBoth ? (places + 1) / 2 : 0;
-}
-
-/** Index of the place that travelling slip stitches end on. */
-function travelled(places: readonly Place[], slips: readonly Item[], size: number): number {
-  const walker = new Walker(places, false);
-  for (const item of slips) {
-    if (item.type !== 'work') continue;
-    const n = item.times.type === 'n' ? pick(item.times.n, size) : 1;
-    for (let i = 0; i < n; i += 1) {
-      const target = item.into;
-      takeOne(
-        { walker } as Job,
-        target?.which === 'first' || target?.which === 'same'
-          ? { ...target, which: 'next', what: target.what === 'other' ? 'st' : target.what }
-          : target,
-        item,
-      );
-    }
-  }
-  return walker.last;
-}
-
-/** The first plain stitch named, which a bare `inc` or `dec` takes. */
-function firstPlain(items: readonly Item[]): string | null {
-  for (const item of allItems(items)) {
-    if (item.type !== 'work') continue;
-    const family = stitchOf(item.stitch)?.family;
-    if (family === 'plain') return item.stitch;
-    const together = /^([a-z]+?)\d+tog$/.exec(item.stitch);
-    if (together) return together[1]!;
-  }
-  return null;
-}
-
-/** A last slip stitch after everything: it finishes off and is no stitch of the line. */
-function closingSlip(items: readonly Item[]): Item | null {
-  const works = items.filter((item) => item.type === 'work' || item.type === 'group' || item.type === 'skip');
-  const last = works.at(-1);
-  const isSlip =
-    last?.type === 'work' &&
-    last.stitch === 'slst' &&
-    last.times.type === 'n' &&
-    last.times.n[0] === 1 &&
-    (last.into === null || last.into.what === 'st' || last.into.what === 'sp');
-  return isSlip &&
-    works.length > 1 &&
-    works.slice(0, -1).every((item) => item.type !== 'work' || item.stitch !== 'slst')
-    ? last
-    : null;
-}
-
-/** Markers stand where the maker put them; unknown, they are taken as evenly placed. */
-function marksOf(items: readonly Item[], places: readonly Place[], size: number): number[] {
-  let n = 0;
-  const visit = (list: readonly Item[], factor: number): void => {
-    for (const item of list) {
-      if (item.type === 'group') visit(item.items, factor * (item.times.type === 'n' ? pick(item.times.n, size) : 1));
-      else if (
-        item.type === 'work' &&
-        (item.into?.what === 'mark' || (item.times.type === 'fill' && item.times.to?.what === 'mark'))
-      )
-        n += factor;
-    }
-  };
-  visit(items, 1);
-  return Array.from({ length: Math.min(n, places.length) }, (_, i) => Math.floor(((i + 0.5) * places.length) / n));
 }
 
 function finish(

@@ -4,7 +4,7 @@ import { readMultiple, readSized } from './amounts.ts';
 import { readTarget } from './target.ts';
 import { FILL, readFill, readTimes, times } from './times.ts';
 import { isGroupAfterAll, pushTotal, totalBetween } from './totals.ts';
-import { readChainCounts } from './works.ts';
+import { readChainCounts } from './chain.ts';
 
 const ONCE: Times = { type: 'unsaid' };
 

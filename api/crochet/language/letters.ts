@@ -1,6 +1,6 @@
 /** Letters of other alphabets and forms that look Latin, one unit for one unit, so that positions stay. */
 const LOOKALIKE = new Map<string, string>();
-const pair = (from: string, to: string) => [...from].forEach((letter, i) => LOOKALIKE.set(letter, to[i]!));
+const pair = (from: string, to: string) => Array.from(from).forEach((letter, i) => LOOKALIKE.set(letter, to[i]!));
 pair('асеорхуіјѕԁһкмтнвгпԛԝɡ', 'aceopxyijsdhkmthbrnqwg');
 pair('АСЕОРХУІЈЅКМТНВЗ', 'aceopxyijskmthb3');
 pair('αοενρτυικχΑΒΕΖΗΙΚΜΝΟΡΤΥΧ', 'aoevptuikxabezhikmnoptyx');

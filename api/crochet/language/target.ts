@@ -2,6 +2,8 @@ import { type Loops, type Sized, type Target } from './tree.ts';
 import { readSized } from './amounts.ts';
 import { isMark, isPlain, isWord, peek, take, takeAll, type Reading } from './reading.ts';
 import { readNoun, type Noun } from './noun.ts';
+import { readLoops, freeLoops } from './loops.ts';
+import { qualifiers } from './qualifiers.ts';
 
 /** Where a stitch goes. `count` is a number of places said with it, `fill` that it goes on until the places run out. */
 export interface TargetRead {
@@ -15,18 +17,6 @@ export interface TargetRead {
   readonly each?: true;
   /** Only the loops were named (`in BLO`), no place. */
   readonly loopsOnly?: true;
-}
-
-const LOOPS: Readonly<Record<string, Loops>> = { blo: 'back', flo: 'front', third: 'third', bothloops: 'both' };
-
-/** Loops named here (`BLO`, `in back loop only`), or null and nothing taken. */
-export function readLoops(reading: Reading): Loops | null {
-  const lex = peek(reading);
-  const loops = lex.kind === 'w' ? LOOPS[lex.text] : undefined;
-  if (!loops) return null;
-  reading.at += 1;
-  while (isPlain(peek(reading), 'only') || isWord(peek(reading), 'loop', 'st')) reading.at += 1;
-  return loops;
 }
 
 /**
@@ -145,36 +135,6 @@ export function plainTarget(
 function fromNoun(noun: Noun, which: Target['which'], count: Sized | null, fill: boolean): TargetRead {
   const { also, ...place } = noun;
   return { target: { ...place, which }, count, fill, loops: null, also: also ? { ...also, which } : null };
-}
-
-/** `front loops left in R10`. */
-function freeLoops(reading: Reading, loops: Loops): TargetRead | null {
-  const start = reading.at;
-  let free = isPlain(reading.lexes[start - 2] ?? peek(reading), 'free', 'unused', 'remaining', 'exposed', 'unworked');
-  while (
-    isPlain(peek(reading), 'left', 'free', 'unused', 'unworked', 'exposed', 'remaining') ||
-    isWord(peek(reading), 'remain', 'skipped', 'of', 'the', 'in', 'on', 'from')
-  ) {
-    if (!isWord(peek(reading), 'of', 'the', 'in', 'on', 'from')) free = true;
-    reading.at += 1;
-  }
-  if (isWord(peek(reading), 'round', 'row') || (isPlain(peek(reading), 'r') && peek(reading, 1).kind === 'num')) {
-    reading.at += 1;
-    const number = peek(reading);
-    if (number.kind === 'num') {
-      reading.at += 1;
-      return {
-        target: { what: 'loop', which: 'each', line: number.value },
-        count: null,
-        fill: true,
-        loops,
-        also: null,
-      };
-    }
-  }
-  if (free) return { target: { what: 'loop', which: 'each' }, count: null, fill: true, loops, also: null };
-  reading.at = start;
-  return null;
 }
 
 function same(reading: Reading): TargetRead {
@@ -343,54 +303,4 @@ function centre(reading: Reading): TargetRead {
   }
   const base = noun ?? { what: 'st' as const };
   return { target: { ...base, which: 'centre' }, count: null, fill: false, loops: null, also: null };
-}
-
-const OF_ROUND = new Set([
-  'previous',
-  'prev',
-  'preceding',
-  'below',
-  'prior',
-  'before',
-  'down',
-  'under',
-  'beneath',
-  'above',
-  'left',
-  'made',
-  'just',
-]);
-
-/** Words after a place that say again what is known: `of previous round`, `two rows below`, `around the post of`. */
-function qualifiers(reading: Reading): void {
-  for (;;) {
-    const start = reading.at;
-    takeAll(reading, 'of', 'from', 'in', 'on', 'the', 'same');
-    if (peek(reading).kind === 'num' && isWord(peek(reading, 1), 'round', 'row') && peek(reading, 2).kind === 'word')
-      reading.at += 2;
-    let named = false;
-    while (
-      (peek(reading).kind === 'word' && OF_ROUND.has(peek(reading).text)) ||
-      isWord(peek(reading), 'last', 'first')
-    ) {
-      named = true;
-      reading.at += 1;
-    }
-    if (named && isWord(peek(reading), 'group')) {
-      reading.at += 1;
-      continue;
-    }
-    if (isWord(peek(reading), 'round', 'row') && (named || start < reading.at)) {
-      reading.at += 1;
-      if (peek(reading).kind === 'num') reading.at += 1;
-      continue;
-    }
-    if (isPlain(peek(reading), 'r') && peek(reading, 1).kind === 'num' && start < reading.at) {
-      reading.at += 2;
-      continue;
-    }
-    if (named && peek(reading).kind !== 'stitch' && !isWord(peek(reading), 'st')) continue;
-    reading.at = start;
-    return;
-  }
 }

@@ -128,8 +128,8 @@ function readGoal(reading: Reading): Target | null {
   }
   const noun = readNoun(reading);
   if (!noun) return null;
-  const { also: _also, ...place } = noun;
-  _also;
+  const place = { ...noun };
+  delete (place as { also?: unknown }).also;
   return { ...place, which };
 }
 

@@ -215,7 +215,7 @@ function continues(state: State, entry: Entry, source: string, read: ReadLine, t
   if (onlyTotal) return !hasTotal(before);
   if (/[,;:*+(&-]\s*$/.test(before) || /\b(in|of|next|each|and|the|to|from|rep|repeat|sc|\d+)$/i.test(before))
     return true;
-  const isSmall = /^[a-z*(\[]/.test(source.trim());
+  const isSmall = /^[a-z*([]/.test(source.trim());
   if (isSmall && !hasTotal(before) && (hasWork(read.tree.items) || !isEnded)) return true;
   const opens = (before.match(/[([{]/g) ?? []).length > (before.match(/[)\]}]/g) ?? []).length;
   return opens;

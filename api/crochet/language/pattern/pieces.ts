@@ -49,8 +49,7 @@ export function piecesOf(
       if (current === null || restarts || chainRestarts) current = begin(null, 1, part.start);
       if (!isChain) last = part.label?.to ?? from ?? last + Math.max(1, part.label?.next ?? 1);
       current.lines.push({ part, read });
-    } else if (current)
-      current.lines.push({ part: part, read: readLine('', {}) });
+    } else if (current) current.lines.push({ part: part, read: readLine('', {}) });
   });
   return drafts
     .filter((draft) => draft.lines.some((line) => line.part.type === 'line'))

@@ -73,7 +73,7 @@ function isDefining(definition: SpecialStitch, terms: Terms): boolean {
 
 /** `Sizes: S (M, L)` gives three. */
 function sizesIn(text: string): string[] {
-  const match = /\bsizes?\b[^\n:]{0,20}:\s*([A-Za-z0-9\/.\- ]+?)\s*[([]([^)\]\n]+)[)\]]/i.exec(text.slice(0, 20_000));
+  const match = /\bsizes?\b[^\n:]{0,20}:\s*([A-Za-z0-9/.\- ]+?)\s*[([]([^)\]\n]+)[)\]]/i.exec(text.slice(0, 20_000));
   if (!match) return [];
   const others = match[2]!
     .split(/[,:;]/)

@@ -3,8 +3,7 @@ import { type Terms } from '../../span.ts';
 import { formsOf } from '../../stitches.ts';
 
 /** `cluster (cl): …`, `Shell = 5 dc in one st`, `Puff st (PS) - yo, …`: a stitch that the pattern defines. */
-const SHAPE =
-  /^[\s•*\-–]*([A-Za-z][A-Za-z0-9 \-]{0,34}?)\s*(?:\(([A-Za-z0-9 \-]{1,14})\))?\s*(?:[:=–—]|\s-\s)\s*(\S.*)$/;
+const SHAPE = /^[\s•*\-–]*([A-Za-z][A-Za-z0-9 -]{0,34}?)\s*(?:\(([A-Za-z0-9 -]{1,14})\))?\s*(?:[:=–—]|\s-\s)\s*(\S.*)$/;
 
 /**
  * The stitch that a line defines, or null. A name of the stitch table whose words behind it are only its long name is
@@ -26,7 +25,7 @@ export function definitionOf(line: string, terms: Terms): SpecialStitch | null {
 
 /** `sc = single crochet`, `inc: 2 sc in same st`: an entry of a list of abbreviations, not a line of work. */
 export function isAbbreviation(line: string, terms: Terms): boolean {
-  const match = /^[\s•*\-–]*([A-Za-z][A-Za-z0-9 .\/-]{0,18}?)\s*(?:=|:|–|—|\s-\s)\s*([A-Za-z].*)$/.exec(line);
+  const match = /^[\s•*\-–]*([A-Za-z][A-Za-z0-9 ./-]{0,18}?)\s*(?:=|:|–|—|\s-\s)\s*([A-Za-z].*)$/.exec(line);
   if (!match) return false;
   const left = match[1]!.trim().toLowerCase().replace(/[-.]/g, ' ');
   const forms = formsOf(terms);

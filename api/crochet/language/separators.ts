@@ -1,0 +1,112 @@
+import { type Item } from './tree.ts';
+import { hasWork } from './groups.ts';
+import { isMark, isPlain, isSeparator, isTimesSign, isWord, peek, spanFrom, takeAll, type Reading } from './reading.ts';
+import { readBareTotal } from './totals.ts';
+
+/** Separators between items; a total without a bracket may stand behind one. */
+export function skipSeparator(reading: Reading, limit: number, items: readonly Item[]): boolean {
+  const lex = peek(reading);
+  if (!isSeparator(lex)) return bareEnd(reading, limit, items);
+  if (isMark(lex, '|') && bar(reading, limit) !== null) return false;
+  const from = reading.at;
+  reading.at += 1;
+  if (isMark(lex, '=')) {
+    if (isMark(peek(reading), '>')) reading.at += 1;
+    if (readBareTotal(reading, limit, from)) return true;
+    return true;
+  }
+  if (!hasWork(items) || reading.at >= limit) return true;
+  if (isMark(lex, '<')) {
+    if (readBareTotal(reading, limit, from)) return true;
+    return true;
+  }
+  const next = peek(reading);
+  const after = peek(reading, 1);
+  if (next.kind !== 'num') return true;
+  const ends = after.kind === 'end' || reading.at + 1 >= limit || isMark(after, '.') || isMark(after, '(');
+  if (ends || isWord(after, 'st') || after.kind === 'stitch' || isWord(after, 'sp', 'sp2', 'group', 'loop', 'total')) {
+    if (isTotalHere(reading, lex.text, items, limit, ends)) readBareTotal(reading, limit, from);
+  }
+  return true;
+}
+
+/** Whether figures behind this separator are a total and not the next work. */
+export function isTotalHere(
+  reading: Reading,
+  separator: string,
+  items: readonly Item[],
+  limit: number,
+  ends: boolean,
+): boolean {
+  const next = peek(reading, 1);
+  if (isWord(peek(reading, 2), 'in', 'on', 'around', 'across', 'to', 'each')) return false;
+  if (ends) return true;
+  if (separator === ',' && !isWord(next, 'st')) return false;
+  if (isWord(next, 'st'))
+    return isClosed(items) || separator === '-' || separator === '.' || separator === ':' || separator === ';'
+      ? reading.at + 2 >= limit || endsSoon(reading, 2)
+      : false;
+  return isClosed(items) && endsSoon(reading, 2) && separator !== ',';
+}
+
+export function endsSoon(reading: Reading, ahead: number): boolean {
+  for (let i = ahead; i < ahead + 12; i += 1) {
+    const lex = peek(reading, i);
+    if (lex.kind === 'end' || isMark(lex, '.') || isWord(lex, 'join', 'turn', 'total', 'round', 'row')) return true;
+    if (isPlain(lex, 'fasten', 'fo')) return true;
+    if (
+      !isMark(lex, ',') &&
+      !isMark(lex, '+') &&
+      !isWord(lex, 'and', 'sp', 'sp2', 'st', 'group', 'loop') &&
+      lex.kind !== 'num' &&
+      lex.kind !== 'stitch' &&
+      !isMark(lex, '-')
+    )
+      return false;
+  }
+  return false;
+}
+
+/** Whether the work so far has said how far it goes, so that figures now can only be its total. */
+export function isClosed(items: readonly Item[]): boolean {
+  const last = items.findLast((item) => item.type !== 'note');
+  if (!last) return false;
+  if (last.type === 'group') return last.times.type !== 'unsaid';
+  if (last.type === 'work')
+    return last.times.type === 'fill' || last.into?.what === 'ring' || last.into?.which === 'last' || last.multiplied;
+  return last.type === 'step' || last.type === 'straight' || last.type === 'relative' || last.type === 'shaped';
+}
+
+/** `inc x 6 18`: a bare number at the very end. */
+export function bareEnd(reading: Reading, limit: number, items: readonly Item[]): boolean {
+  if (peek(reading).kind !== 'num' || !hasWork(items)) return false;
+  const next = peek(reading, 1);
+  const atEnd = reading.at + 1 === limit || (isMark(next, '.') && reading.at + 2 >= limit);
+  const withUnit = isWord(next, 'st') && (reading.at + 2 >= limit || isMark(peek(reading, 2), '.')) && isClosed(items);
+  return (atEnd || withUnit) && readBareTotal(reading, limit, reading.at);
+}
+
+/** `you will have 18 stitches`. */
+export function readSentenceTotal(reading: Reading, limit: number): Item[] | null {
+  const from = reading.at;
+  reading.at += 1;
+  takeAll(reading, 'total', 'of', 'the');
+  while (peek(reading).kind === 'word' && !isTimesSign(peek(reading))) reading.at += 1;
+  if (isMark(peek(reading), ':') || isMark(peek(reading), '=')) reading.at += 1;
+  if (peek(reading).kind === 'num' && readBareTotal(reading, limit, from)) return [];
+  reading.at = from + 1;
+  return [{ type: 'note', span: spanFrom(reading, from), text: 'total' }];
+}
+
+export function bar(reading: Reading, limit: number): number | null {
+  for (let at = reading.at + 1; at < Math.min(limit, reading.at + 40); at += 1) {
+    if (isMark(reading.lexes[at]!, '|'))
+      return at > reading.at + 1 &&
+        (isTimesSign(reading.lexes[at + 1]!) ||
+          reading.lexes[at + 1]!.kind === 'num' ||
+          isWord(reading.lexes[at + 1]!, 'rep', 'around'))
+        ? at
+        : null;
+  }
+  return null;
+}
