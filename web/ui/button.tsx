@@ -4,7 +4,7 @@ import { cx } from '../lib/class-names.ts';
 import { inside, look, shortcuts, type Look } from './button-look.tsx';
 import { Icon } from './icon.tsx';
 
-export { type ButtonKind, type ButtonSize } from './button-look.tsx';
+export { type ButtonKind } from './button-look.tsx';
 
 export type ButtonProps = Look & {
   /** Why it cannot be pressed yet. It keeps the focus and its reason is read out; show the reason in words beside it too. */
