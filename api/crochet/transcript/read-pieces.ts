@@ -52,10 +52,12 @@ export function readPieces(
   let chainCounts: boolean | null = null;
   let stitch = 'sc';
   let introFrom = 0;
+  let passed = 0;
   chain.forEach((announced, n) => {
     const { candidate } = announced;
     const next = chain[n + 1]?.candidate.at ?? talk.tokens.length;
-    const between = steps.filter((step) => step.at >= candidate.end && step.at < next);
+    while (passed < steps.length && steps[passed]!.at < candidate.end) passed += 1;
+    const between = stepsUntil(steps, passed, next);
     const firstStep = between.find((step) => step.at > candidate.end);
     const to = endOfLine(talk, candidate.end, Math.min(next, firstStep?.trigger ?? next), silenceAfter);
     if (announced.begins) {
@@ -94,6 +96,13 @@ export function readPieces(
     introFrom = to;
   });
   return pieces.map(finish);
+}
+
+/** The steps from one on that come before a token. */
+function stepsUntil(steps: readonly SpokenStep[], from: number, before: number): readonly SpokenStep[] {
+  let end = from;
+  while (end < steps.length && steps[end]!.at < before) end += 1;
+  return steps.slice(from, end);
 }
 
 /** Several earlier lines named as a set give one line for each; otherwise the line is read as it stands. */

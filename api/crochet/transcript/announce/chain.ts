@@ -120,6 +120,7 @@ function isOwnRing(top: State, candidate: Candidate, tokens: readonly Token[]): 
   if (candidate.needs !== 'start' || top.announced?.from !== 1) return false;
   const { at, end } = top.announced.candidate;
   const since = candidate.at - end;
+  if (since >= OWN_RING_AGAIN) return false;
   const hasRing = tokens.slice(at, candidate.at).some((token) => token.kind === 'V');
   return since < (hasRing ? OWN_RING_AGAIN : OWN_RING);
 }
