@@ -67,7 +67,7 @@ function countPiece(
 }
 
 function readOnce(line: LineInput, input: PatternInput, memo: Memo | undefined): ReadLine {
-  if (memo && memo.line.text === line.text && memo.line.kind === line.kind) return memo.read;
+  if (memo?.line.text === line.text && memo.line.kind === line.kind) return memo.read;
   return readLine(line.text, {
     terms: input.terms,
     special: input.specialStitches ?? [],

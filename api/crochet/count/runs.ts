@@ -77,7 +77,7 @@ export function runPasses(
   const judged: Judged[] = [];
   let left = start;
   const figures = (given.written ?? given.said)?.sts;
-  const perRound = around.sizes === 1 && figures !== undefined && figures.length === passes.length && passes.length > 1;
+  const perRound = around.sizes === 1 && figures?.length === passes.length && passes.length > 1;
   const none: Given = { written: null, said: null };
   let verdict: Verdict = 'no-total';
   let isEven = false;

@@ -1,5 +1,5 @@
 import { type Item } from './tree.ts';
-import { finishGroup, hasWork, readBracket, readStars } from './groups.ts';
+import { finishGroup, hasWork, readBracket } from './groups.ts';
 import { isMark, isWord, peek, spanFrom, take, type Reading } from './reading.ts';
 import { readRelative } from './relatives.ts';
 import { readSlipJoin, readStep } from './steps.ts';
@@ -10,6 +10,7 @@ import { readLeadingTimes, readColour, readLay, readSkip, isColour, readFar } fr
 import { leftover } from './leftover.ts';
 import { readShaped, readStraight } from './shaped-lines.ts';
 import { readJoinedLoops, readPrefixed } from './prefixed.ts';
+import { readStars } from './stars.ts';
 
 /** Items up to an index. What begins no item becomes a note, or an unread stretch where it could change the count. */
 export function readItems(reading: Reading, limit: number): Item[] {

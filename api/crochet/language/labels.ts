@@ -70,7 +70,7 @@ function ranged(lexes: readonly Lex[], i: number, kind: Label['kind'], word: Lex
     let j = after + 1;
     while (isRoundWord(at(lexes, j)) || isPlain(at(lexes, j), 'r') || isWord(at(lexes, j), 'and', 'the')) j += 1;
     const second = at(lexes, j);
-    if (!isNumber(second) || second.value <= (to ?? 0) || !endsRange(lexes, j, joint, word)) break;
+    if (!isNumber(second) || second.value <= to || !endsRange(lexes, j, joint, word)) break;
     to = second.value;
     after = j + 1;
     if (second.kind === 'ord' && isRoundWord(at(lexes, after))) after += 1;
