@@ -58,7 +58,7 @@ describe('who gets what answer', () => {
 
 describe('a body with a field that nobody asked for', () => {
   const writing = Object.keys(ROUTES).filter((entry) => entry.startsWith('P') && !entry.includes('/parts/'));
-  test.each(writing)('%s', { timeout: 30_000 }, async (entry) => {
+  test.each(writing)('%s', { timeout: 60_000 }, async (entry) => {
     for (const more of [{ owner_id: 'x' }, { role: 'owner', isOperator: true }, { version: 7 }]) {
       const call = await ROUTES[entry]!.ask(world, 'owner');
       // A call without a body of its own, or with a field of that name, has nothing to be slipped into.

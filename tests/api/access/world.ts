@@ -124,7 +124,7 @@ export class World {
     const { pattern, recording } = await this.recording();
     const sent = await this.sendTranscript(recording.id, await this.at.as(this.cast.loft.owner));
     const { id } = sent.body as { id: string };
-    await this.at.workAll();
+    await this.at.work('read-transcript', { transcriptId: id });
     const cue = await this.at
       .db<Row>('cues')
       .where({ transcript_id: id } as never)
@@ -136,9 +136,10 @@ export class World {
     return { patternId: pattern.id, transcriptId: id, cueId: cue!.id, readingId: reading!.id };
   }
 
-  /** A pattern with one agreeing round, a clip, and one edition out. */
+  /** A pattern with one agreeing round, a clip with captions, and one edition out. */
   async edition(visibility: 'private' | 'unlisted' | 'listed' = 'unlisted') {
     const { patternId, recordingId } = await this.clip();
+    await this.sendTranscript(recordingId, await this.at.as(this.cast.loft.owner));
     const piece = await buildPiece(this.at.db, { pattern_id: patternId });
     const line = await buildLine(this.at.db, { piece_id: piece.id });
     await buildMark(this.at.db, {
