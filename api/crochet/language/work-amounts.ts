@@ -15,7 +15,7 @@ export function amounts(
   if (into?.which === 'skipped') return { per: ONE, times: times(target?.count ?? count ?? ONE), into };
   if (into?.what === 'ring' || into?.which === 'hook') return { per: count ?? ONE, times: times(more ?? ONE), into };
   if (target?.count) {
-    const isEach = !target.each && count !== null && count[0] === target.count[0] && count[0]! > 1;
+    const isEach = !target.each && count?.[0] === target.count[0] && target.count[0]! > 1;
     return {
       per: isEach || !count ? ONE : count,
       times: fill && target.count[0] === 1 ? fill : times(target.count),
