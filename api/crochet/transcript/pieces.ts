@@ -95,6 +95,9 @@ const NO_NAME = new Set(
   ),
 );
 
+/** Below this a name would be a guess: two signs of three are asked for. */
+const SURE_NAME = 2;
+
 /** What the piece is called: a noun that heads a sentence of its introduction or follows "the" there, the latest such. */
 export function readPieceName(tokens: readonly Token[], from: number, to: number): string | null {
   let best: { text: string; score: number } | null = null;
@@ -106,10 +109,14 @@ export function readPieceName(tokens: readonly Token[], from: number, to: number
     const after = tokens[i + 1]?.kind ?? '.';
     const closes = '.,|'.includes(after);
     const heads = '.|'.includes(before);
-    const led =
-      /^(?:the|a|an|your|my|now|next|for|with)$/.test(tokens[i - 1]?.text ?? '') || before === 'N' || before === 'O';
-    const score = (closes ? 1 : 0) + (heads ? 0.8 : 0) + (led ? 1 : 0) + (i - from) / 1000;
+    const led = /^(?:the|a|an|now|next|for|with)$/.test(tokens[i - 1]?.text ?? '') || before === 'N' || before === 'O';
+    const lead = tokens
+      .slice(Math.max(from, i - 4), i)
+      .map((one) => one.text)
+      .join(' ');
+    const isStarted = /\b(?:starts?|start with|begins?|now|next|make|making|need|first)\b/.test(lead);
+    const score = (isStarted ? 1.3 : 0) + (closes ? 1 : 0) + (heads ? 0.8 : 0) + (led ? 1 : 0) + (i - from) / 1000;
     if (best === null || score > best.score + 0.2) best = { text: token.text, score };
   }
-  return best === null || best.score < 0.9 ? null : `${best.text[0]!.toUpperCase()}${best.text.slice(1)}`;
+  return best === null || best.score < SURE_NAME ? null : `${best.text[0]!.toUpperCase()}${best.text.slice(1)}`;
 }

@@ -63,7 +63,7 @@ export function readPieces(
     if (announced.begins) {
       const from = Math.max(introFrom, candidate.at - INTRO);
       chainCounts = n === 0 ? chainRule(talk.tokens.slice(from, candidate.at)) : chainCounts;
-      pieces.push(beginPiece(talk, from, announced, n === 0));
+      pieces.push(beginPiece(talk, from, announced, pieces.length + 1));
     }
     const piece = pieces.at(-1)!;
     if (candidate.kind === 'foundation') {
@@ -164,11 +164,11 @@ function copiesOfPiece(
   return lines.map((line) => ({ ...foundation(0), ...line, verdict: 'no-total', said: null, isRing: line.from === 1 }));
 }
 
-function beginPiece(talk: Talk, from: number, announced: Announced, isFirst: boolean): Building {
+function beginPiece(talk: Talk, from: number, announced: Announced, nth: number): Building {
   const { candidate } = announced;
   return {
-    name: readPieceName(talk.tokens, from, candidate.mark) ?? 'Piece',
-    make: readMake(talk.tokens, from, candidate.mark, talk.sentences, isFirst),
+    name: readPieceName(talk.tokens, from, candidate.mark) ?? `Piece ${nth}`,
+    make: readMake(talk.tokens, from, candidate.mark, talk.sentences, nth === 1),
     unit: candidate.unit,
     entries: [],
     lines: [],

@@ -35,9 +35,9 @@ export function wordsOf(cues: readonly Cue[]): readonly Word[] {
     const lasts = Math.min(cue.endMs - cue.startMs, (length * 1000) / rate);
     let passed = 0;
     for (const text of texts) {
-      const startMs = cue.startMs + (lasts * passed) / length;
+      const startMs = Math.round(cue.startMs + (lasts * passed) / length);
       passed += text.length + 1;
-      const endMs = cue.startMs + (lasts * passed) / length;
+      const endMs = Math.round(cue.startMs + (lasts * passed) / length);
       const silenceMs = spokenUntil === null ? 0 : Math.max(0, startMs - spokenUntil);
       words.push({
         text,
