@@ -12,7 +12,6 @@ export interface Candidate {
     | { readonly type: 'named'; readonly from: number; readonly to: number }
     | { readonly type: 'next'; readonly many: number }
     | { readonly type: 'until'; readonly last: number }
-    | { readonly type: 'again'; readonly of: number; readonly until: number }
     | { readonly type: 'chain'; readonly n: number };
   readonly strength: number;
   /** Only right after a starting chain (`slip stitch in the second chain …`) or where a piece begins. */
