@@ -76,13 +76,18 @@ function readOnce(line: LineInput, input: PatternInput, memo: Memo | undefined):
 }
 
 /** How many sizes the figures of a line speak of. */
+const SIZES = new WeakMap<ReadLine, number>();
+
 function sizesOf(read: ReadLine): number {
+  const known = SIZES.get(read);
+  if (known !== undefined) return known;
   let most = 1;
   for (const item of allItems(read.tree.items)) {
     if (item.type === 'work' && item.times.type === 'n') most = Math.max(most, item.times.n.length);
     if (item.type === 'group' && item.times.type === 'n') most = Math.max(most, item.times.n.length);
     if (item.type === 'skip') most = Math.max(most, item.n.length);
   }
+  SIZES.set(read, most);
   return most;
 }
 

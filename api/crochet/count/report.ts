@@ -39,19 +39,24 @@ export function countReport(
 ): unknown {
   const pattern = readPattern(text, options.terms ?? undefined);
   const counted = countPattern(inputOf(pattern, options.base ?? null));
+  /** A line followed is named by its label. */
+  const labelOf = (id: string): string => {
+    const [piece, line] = id.split('.').map(Number);
+    return pattern.pieces[piece ?? 0]?.lines[line ?? 0]?.label ?? id;
+  };
   return {
     terms: pattern.terms,
     pieces: pattern.pieces.map((piece, p) => ({
       name: piece.name,
       make: piece.make,
-      lines: piece.lines.flatMap((line, i) => linesOf(line, counted.pieces[p]!.lines[i]!)),
+      lines: piece.lines.flatMap((line, i) => linesOf(line, counted.pieces[p]!.lines[i]!, labelOf)),
     })),
   };
 }
 
 const place = (start: number, span: Span): Span => ({ start: start + span.start, end: start + span.end });
 
-function linesOf(line: LineText, count: LineCount): unknown[] {
+function linesOf(line: LineText, count: LineCount, labelOf: (id: string) => string): unknown[] {
   if (line.kind === 'note') return [];
   const { start, end } = line.span;
   if (line.kind === 'step')
@@ -90,7 +95,7 @@ function linesOf(line: LineText, count: LineCount): unknown[] {
     verdict: count.verdict,
     unread: count.unread.map((span) => place(line.textSpan.start, span)),
     ...(count.countedWith && { countedWith: count.countedWith }),
-    ...(count.follows && { follows: count.follows }),
+    ...(count.follows && { follows: { ...count.follows, line: labelOf(count.follows.line) } }),
     ...(count.rounds && { rounds: count.rounds.map((round) => ({ ...round, stated: statedOf(round.stated) })) }),
     ...(count.message && { message: count.message }),
     ...(count.asks.length > 0 && { asks: count.asks }),
