@@ -116,7 +116,9 @@ function performWork(job: Job, item: Work, need: () => number): void {
       ? 2
       : legsOf(item.stitch) * (target?.through === 'layers' ? 2 : 1);
   const once = (): void => {
-    const on = placesFor(job, item, hooked ? null : target, legs);
+    const at = placesFor(job, item, hooked ? null : target, legs);
+    // All of a round in one chain is a ring begun without one: its stitches stand each for themselves.
+    const on = hooked && walker.places.length === 1 && per > 2 ? [] : at;
     if (item.stitch === 'slst' && target?.what === 'sp') {
       // A slip stitch into a space only fastens what comes next.
       walker.walk.push({ stitch: 'slst', on, makes: 0, colour: null });

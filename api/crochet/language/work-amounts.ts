@@ -22,7 +22,7 @@ export function amounts(
       into,
     };
   }
-  if (target?.fill) return { per: count ?? ONE, times: fill && fill.type === 'fill' ? fill : FILL, into };
+  if (target?.fill) return { per: count ?? ONE, times: fill?.type === 'fill' ? fill : FILL, into };
   if (fill) {
     // `24 sc around` is a count; `1 sc around` goes on.
     if (count && !into && count[0]! > 2) return { per: ONE, times: times(count), into };
