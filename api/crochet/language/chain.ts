@@ -42,6 +42,7 @@ export function readChainCounts(reading: Reading): ChainCounts | null {
     reading.at += 1;
     // `3 ch (1 tr)`: the chain stands for it.
     if (
+      isBehindChain(reading, open) &&
       peek(reading).kind === 'num' &&
       peek(reading).value === 1 &&
       peek(reading, 1).kind === 'stitch' &&
@@ -93,4 +94,10 @@ export function clauseEnd(reading: Reading): number {
   )
     at += 1;
   return at;
+}
+
+/** Right behind `3 ch` or `ch 3`: only there does `(1 tr)` say what the chain stands for. */
+function isBehindChain(reading: Reading, open: number): boolean {
+  const isChain = (at: number): boolean => reading.lexes[at]?.kind === 'stitch' && reading.lexes[at].text === 'ch';
+  return isChain(open - 1) || (reading.lexes[open - 1]?.kind === 'num' && (isChain(open - 2) || isChain(open - 3)));
 }
