@@ -88,35 +88,3 @@ function isAlone(tokens: readonly Token[], i: number): boolean {
     ('.|,'.includes(before) || /^(?:so|now|and|okay|the)$/.test(tokens[i - 1]?.text ?? '')) && after === 'w';
   return isHead || (',~.|w'.includes(before) && ('.,|'.includes(after) || after === 'o'));
 }
-
-const NO_NAME = new Set(
-  'first last now okay the welcome back hello new piece part thing bit next one and then going make made two need small that this good well start starting begin beginning time today here there out let see look right color colour brown green white red pink dark light yarn same done cut tail long mine way hand hands put sew stitch hold find join what all day just more turn upside down get hey over fun side sides wool hook cotton bell bus kettle front top bottom end ends number loops fluff stuffing needle sorry pause want wants doing dog cat'.split(
-    ' ',
-  ),
-);
-
-/** Below this a name would be a guess: two signs of three are asked for. */
-const SURE_NAME = 2;
-
-/** What the piece is called: a noun that heads a sentence of its introduction or follows "the" there, the latest such. */
-export function readPieceName(tokens: readonly Token[], from: number, to: number): string | null {
-  let best: { text: string; score: number } | null = null;
-  for (let i = Math.max(from, to - NEAR); i < to; i++) {
-    const token = tokens[i]!;
-    if (token.kind !== 'w' || token.text.length < 3 || NO_NAME.has(token.text) || !/^[a-z'-]+$/.test(token.text))
-      continue;
-    const before = tokens[i - 1]?.kind ?? '.';
-    const after = tokens[i + 1]?.kind ?? '.';
-    const closes = '.,|'.includes(after);
-    const heads = '.|'.includes(before);
-    const led = /^(?:the|a|an|now|next|for|with)$/.test(tokens[i - 1]?.text ?? '') || before === 'N' || before === 'O';
-    const lead = tokens
-      .slice(Math.max(from, i - 4), i)
-      .map((one) => one.text)
-      .join(' ');
-    const isStarted = /\b(?:starts?|start with|begins?|now|next|make|making|need|first)\b/.test(lead);
-    const score = (isStarted ? 1.3 : 0) + (closes ? 1 : 0) + (heads ? 0.8 : 0) + (led ? 1 : 0) + (i - from) / 1000;
-    if (best === null || score > best.score + 0.2) best = { text: token.text, score };
-  }
-  return best === null || best.score < SURE_NAME ? null : `${best.text[0]!.toUpperCase()}${best.text.slice(1)}`;
-}

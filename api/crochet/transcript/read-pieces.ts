@@ -1,6 +1,7 @@
 import { type Announced } from './announce/chain.ts';
 import { type ReadSoFar } from './bases.ts';
-import { readMake, readPieceName } from './pieces.ts';
+import { readPieceName } from './piece-name.ts';
+import { readMake } from './pieces.ts';
 import { chainRule, chainUnits, type ReadLineResult, readSpokenLine, type Talk } from './read-line.ts';
 import { linesNamed } from './references.ts';
 import { type SpokenStep } from './steps.ts';
@@ -166,9 +167,13 @@ function copiesOfPiece(
 
 function beginPiece(talk: Talk, from: number, announced: Announced, nth: number): Building {
   const { candidate } = announced;
+  const make = readMake(talk.tokens, from, candidate.mark, talk.sentences, nth === 1);
+  const nameFrom = nth === 1 ? 0 : from;
   return {
-    name: readPieceName(talk.tokens, from, candidate.mark) ?? `Piece ${nth}`,
-    make: readMake(talk.tokens, from, candidate.mark, talk.sentences, nth === 1),
+    name:
+      readPieceName(talk.tokens, { from: nameFrom, to: candidate.mark, sentences: talk.sentences, make }) ??
+      `Piece ${nth}`,
+    make,
     unit: candidate.unit,
     entries: [],
     lines: [],

@@ -1,23 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { type Cue, type DraftLine, readTranscript, spellWork } from '#crochet';
-
-/** Cues of about eight words, four seconds each; `|` is a silence of twenty seconds. */
-function talk(text: string): readonly Cue[] {
-  let at = 2000;
-  return text.split('|').flatMap((part, n) => {
-    if (n > 0) at += 20_000;
-    const words = part.trim().split(/\s+/);
-    const cues: Cue[] = [];
-    for (let i = 0; i < words.length; i += 8) {
-      const said = words.slice(i, i + 8).join(' ');
-      const lasts = said.length * 70;
-      cues.push({ startMs: at, endMs: at + lasts, text: said });
-      at += lasts;
-    }
-    return cues;
-  });
-}
+import { type DraftLine, readTranscript, spellWork } from '#crochet';
+import { talk } from './talk.ts';
 
 function lines(text: string): readonly DraftLine[] {
   return readTranscript(talk(text)).pieces.flatMap((piece) => piece.lines);
@@ -112,7 +96,7 @@ describe('a maker who talks', () => {
     );
     expect(draft.pieces.map((piece) => [piece.name, piece.make])).toEqual([
       [expect.any(String), 1],
-      ['Ears', 2],
+      ['Ear', 2],
     ]);
   });
 
