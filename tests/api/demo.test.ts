@@ -25,11 +25,8 @@ describe('the demo', () => {
   beforeAll(async () => {
     house = await buildApp();
     await seed(house.deps);
-    const { id } = await house
-      .db<{ id: string }>('people')
-      .where({ email: SIGN_INS[0]!.email } as never)
-      .first();
-    ismay = await house.as({ id });
+    const [person] = await house.db('people').where({ email: SIGN_INS[0]!.email }).select<{ id: string }[]>('id');
+    ismay = await house.as(person!);
   }, 180_000);
   afterAll(() => house.close());
 
