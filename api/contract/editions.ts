@@ -124,6 +124,8 @@ export const PublishDesk = z.object({
   visibility: Visibility,
   mayPublish: z.boolean(),
   lines: z.int(),
+  /** Rounds and rows: what can agree. Steps and notes cannot. */
+  counted: z.int(),
   agreeing: z.int(),
   blocks: z.array(Block),
   /** Signs that none of the sheet's fonts has; they would be left out. */

@@ -51,6 +51,7 @@ export async function readPublishDesk(db: Knex, who: Person, patternId: string):
     visibility: content.visibility,
     mayPublish: canPublish(who, pattern) && pattern.deletedAt === null,
     lines: lines.length,
+    counted: lines.filter(({ kind }) => kind === 'round' || kind === 'row').length,
     agreeing: lines.filter((line) => line.studio.verdict === 'agrees').length,
     blocks: blocksOf(document).map(answerBlock),
     unprintable: [...missingSigns(document)],

@@ -79,7 +79,7 @@ function Open({ patternId, desk, canAsk }: { patternId: string; desk: PublishDes
   return (
     <div className="grid gap-3 p-3.5">
       <p className="text-walnut2">
-        {desk.agreeing} of {desk.lines} lines agree.{' '}
+        {desk.agreeing} of {desk.counted} rounds and rows agree.{' '}
         {desk.number > 1 && !desk.countsChanged && desk.errata.length > 0 && 'No count changed.'}
         {desk.number > 1 && desk.errata.length === 0 && 'Nothing changed since the edition before.'}
       </p>
