@@ -1,22 +1,14 @@
-import { lexesOf } from '../language/lexer.ts';
-import { printTotals } from '../language/totals-text.ts';
+import { editsOf, type Edit } from './edits.ts';
 import { type LineInput, type PatternInput, type PieceInput } from './input.ts';
 import { countPattern } from './pattern.ts';
 import { type LineCount, type PatternCount, type Repair, type Verdict } from './result.ts';
+import { repeatedWords } from './repeated-words.ts';
 
 const MOST = 3;
 
-interface Edit {
-  readonly text: string;
-  readonly written?: LineInput['written'];
-  readonly sentence: string;
-  /** The smaller, the likelier. */
-  readonly weight: number;
-}
-
 /**
  * The smallest edits that mend a line: a repeat number, one stitch number, inc for dec, the written total, or the same
- * in the line before. Each is worked again; only those that make this line fit and equal its totals, and keep the next
+ * in the line before; for a line not understood, the words that were, repeated as often as fits. Each is worked again; only those that make this line fit and equal its totals, and keep the next
  * line fitting, are returned.
  *
  * @returns three at most, the likeliest first; none for a line that needs no mending.
@@ -34,13 +26,17 @@ export function repairsFor(input: PatternInput, lineId: string): Repair[] {
   const line = piece.lines[index]!;
   const verdict = verdictAt(now, index);
   if (verdict === 'agrees' || verdict === 'no-total') return [];
-  const repairs = mend(near, now, index, index, editsOf(line, input, now.pieces[0]!.lines[index]!));
   const before = previousWork(piece, index);
-  if (repairs.length < MOST && before !== null && now.pieces[0]!.lines[index]!.verdict !== 'unread') {
+  if (verdict === 'unread') {
+    const words = repeatedWords(near, now, index, before === null ? null : piece.lines[before]!.label);
+    return words ? mend(near, now, index, index, [words]) : [];
+  }
+  const repairs = mend(near, now, index, index, editsOf(line, input, now.pieces[0]!.lines[index]!));
+  if (repairs.length < MOST && before !== null) {
     const label = piece.lines[before]!.label || 'The line before';
     const edits = editsOf(piece.lines[before]!, input, now.pieces[0]!.lines[before]!).map((edit) => ({
       ...edit,
-      sentence: `${label}: ${edit.sentence}`,
+      sentence: `${label}: ${edit.sentence.charAt(0).toLowerCase()}${edit.sentence.slice(1)}`,
     }));
     repairs.push(...mend(near, now, before, index, edits));
   }
@@ -101,59 +97,4 @@ function keepsOthers(before: readonly LineCount[], after: readonly LineCount[], 
       !FAULTS.has(line.verdict) ||
       (FAULTS.has(before[i]!.verdict) && before[i]!.verdict === line.verdict),
   );
-}
-
-/** Edits of one line's text, each with its sentence. */
-function editsOf(line: LineInput, input: PatternInput, count: LineCount): Edit[] {
-  const edits: Edit[] = [];
-  const total = count.writtenSpan;
-  const lexes = lexesOf(line.text, input.terms);
-  const replace = (start: number, end: number, word: string): string =>
-    line.text.slice(0, start) + word + line.text.slice(end);
-  lexes.forEach((lex, i) => {
-    if (total && lex.start >= total.start && lex.end <= total.end) return;
-    if (lex.kind === 'num' && lex.value < 1000) {
-      const isRepeat = ['×', 'x', '*'].includes(lexes[i - 1]?.text ?? '') || lexes[i + 1]?.text === 'times';
-      for (let by = 1; by <= 6; by += 1) {
-        for (const value of [lex.value + by, lex.value - by]) {
-          if (value < 1) continue;
-          const weight = by + (isRepeat ? 0 : 0.5);
-          edits.push({
-            text: replace(lex.start, lex.end, String(value)),
-            sentence: isRepeat
-              ? `fits with ${String(value)} repeats instead of ${String(lex.value)}`
-              : `fits with ${String(value)} in place of ${String(lex.value)}`,
-            weight,
-          });
-        }
-      }
-    }
-    if (lex.kind === 'stitch' && (lex.text === 'inc' || lex.text === 'dec' || lex.text === 'invdec')) {
-      const word = lex.text === 'inc' ? 'dec' : 'inc';
-      edits.push({
-        text: replace(lex.start, lex.end, word),
-        sentence: `fits with ${word} in place of ${line.text.slice(lex.start, lex.end)}`,
-        weight: 1.2,
-      });
-    }
-  });
-  edits.push(...totalEdits(line, count, replace));
-  return edits;
-}
-
-/** The written total, changed to what was worked out. */
-function totalEdits(
-  line: LineInput,
-  count: LineCount,
-  replace: (start: number, end: number, word: string) => string,
-): Edit[] {
-  if (count.verdict !== 'differs' || count.count === null || !count.written?.sts || count.written.sts.length > 1)
-    return [];
-  const figure = String(count.count);
-  const sentence = `works out to ${figure}, not ${String(count.written.sts[0])}`;
-  if (!count.writtenSpan) return [{ text: line.text, written: { sts: [count.count] }, sentence, weight: 0.8 }];
-  const { start, end } = count.writtenSpan;
-  const stretch = line.text.slice(start, end);
-  const changed = /\d/.test(stretch) ? stretch.replace(/\d+/, figure) : `(${printTotals({ sts: [count.count] })})`;
-  return [{ text: replace(start, end, changed), sentence, weight: 0.8 }];
 }

@@ -1,5 +1,5 @@
 import { type Item } from './tree.ts';
-import { isMark, isSeparator, peek, spanFrom, type Reading } from './reading.ts';
+import { isMark, isSeparator, isWord, peek, spanFrom, type Reading } from './reading.ts';
 import { readWork } from './works.ts';
 
 /** Words in which a stitch, a number, a place or a repeat could hide are hot. */
@@ -26,17 +26,25 @@ export const HOT = new Set([
 
 /** A stretch that begins no item: prose is a note, anything hot is unread. */
 export function leftover(reading: Reading, limit: number): Item {
-  const from = reading.at;
+  // "And so on" begins with its "and", which was passed over as a separator.
+  const isTrailing = isLeftOpen(reading) && reading.at > 0 && isWord(reading.lexes[reading.at - 1]!, 'and');
+  const here = reading.at;
+  const from = isTrailing ? here - 1 : here;
   let hot = false;
   while (reading.at < limit) {
     const lex = peek(reading);
-    if (reading.at > from && (isSeparator(lex) || isMark(lex, '*') || isMark(lex, '**'))) break;
-    if (reading.at > from && (isMark(lex, '(') || isMark(lex, '[') || isMark(lex, '{'))) break;
-    if (reading.at > from && (lex.kind === 'num' || lex.kind === 'stitch') && !hot) {
+    if (hot && isMark(lex, ',') && isLeftOpen(reading, 1)) {
+      // "And so on, tapering as you like" is one stretch.
+      reading.at += 1;
+      continue;
+    }
+    if (reading.at > here && (isSeparator(lex) || isMark(lex, '*') || isMark(lex, '**'))) break;
+    if (reading.at > here && (isMark(lex, '(') || isMark(lex, '[') || isMark(lex, '{'))) break;
+    if (reading.at > here && (lex.kind === 'num' || lex.kind === 'stitch') && !hot) {
       // A work may begin in the middle of a sentence: prose before it is only prose.
-      const here = reading.at;
+      const back = reading.at;
       const work = readWork(reading);
-      reading.at = here;
+      reading.at = back;
       if (work) break;
     }
     if (lex.kind === 'num' || lex.kind === 'stitch' || lex.kind === 'ord' || (lex.kind === 'w' && HOT.has(lex.text)))
@@ -44,7 +52,7 @@ export function leftover(reading: Reading, limit: number): Item {
     if (isLeftOpen(reading)) hot = true;
     reading.at += 1;
   }
-  if (reading.at === from) reading.at += 1;
+  if (reading.at === here) reading.at += 1;
   const span = spanFrom(reading, from);
   if (hot) return { type: 'unread', span };
   const text = reading.lexes
@@ -55,7 +63,8 @@ export function leftover(reading: Reading, limit: number): Item {
 }
 
 /** "And so on", "tapering": work that nobody has written down. */
-export function isLeftOpen(reading: Reading): boolean {
-  const [word, then] = [reading.lexes[reading.at]?.text ?? '', reading.lexes[reading.at + 1]?.text ?? ''];
+export function isLeftOpen(reading: Reading, ahead = 0): boolean {
+  const at = reading.at + ahead;
+  const [word, then] = [reading.lexes[at]?.text ?? '', reading.lexes[at + 1]?.text ?? ''];
   return ['etc', 'taper', 'tapering'].includes(word) || (word === 'so' && ['on', 'forth'].includes(then));
 }
