@@ -1,9 +1,6 @@
 import { type Group, type Item, type LineTree, type Relative, type Work } from '../language/tree.ts';
 import { stitchOf } from '../stitches.ts';
 
-/** Trees of the lines of a piece that have a number, for lines that are told by another. */
-export type Trees = ReadonlyMap<number, LineTree>;
-
 /** The one item of a line that is told by another line, or null. */
 export function relativeOf(tree: LineTree): Relative | null {
   const working = tree.items.filter((item) => item.type !== 'note' && item.type !== 'step' && item.type !== 'loops');

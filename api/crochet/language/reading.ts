@@ -68,13 +68,6 @@ export function takeAll(reading: Reading, ...names: readonly string[]): void {
   while (take(reading, ...names));
 }
 
-export function takeMark(reading: Reading, ...marks: readonly string[]): boolean {
-  const lex = peek(reading);
-  if (lex.kind !== 'mark' || !marks.includes(lex.text)) return false;
-  reading.at += 1;
-  return true;
-}
-
 /** The stretch from a meaning to the one before where we are now. */
 export function spanFrom(reading: Reading, from: number): Span {
   const last = Math.max(from, reading.at - 1);

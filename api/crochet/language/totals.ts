@@ -1,5 +1,5 @@
 import { type Span } from '../span.ts';
-import { isMark, isPlain, isTimesSign, isWord, peek, type Reading } from './reading.ts';
+import { isMark, isPlain, isTimesSign, isWord, type Reading } from './reading.ts';
 import { figuresBetween } from './amounts.ts';
 import { stitchOf } from '../stitches.ts';
 
@@ -216,5 +216,3 @@ export function isGroupAfterAll(reading: Reading, close: number): boolean {
   if (isWord(next, 'twice', 'thrice', 'rep', 'around', 'across', 'times', 'once')) return true;
   return isWord(next, 'to') && isWord(after, 'end', 'last', 'the');
 }
-
-export const nothing = (reading: Reading): boolean => peek(reading).kind === 'end';

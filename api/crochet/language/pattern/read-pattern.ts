@@ -3,7 +3,7 @@ import { type SpecialStitch } from '../../count/input.ts';
 import { readLine } from '../read-line.ts';
 import { ownForms } from '../special.ts';
 import { entriesOf } from './cut.ts';
-import { gather, type Gathered } from './gather.ts';
+import { gather } from './gather.ts';
 import { piecesOf } from './pieces.ts';
 import { type PatternText } from './pattern-text.ts';
 import { definitionOf } from './special-lines.ts';
@@ -35,8 +35,6 @@ export function readPattern(text: string, terms?: Terms): PatternText {
     base: null,
   };
 }
-
-export type { Gathered };
 
 /** Definitions of stitches, in their own section or before the first line. */
 function specialIn(text: string, terms: Terms): (SpecialStitch & { readonly span: Span })[] {
