@@ -1,26 +1,32 @@
 import { type Terms } from '../span.ts';
-import { type Confidence, type DraftLine, type DraftPiece, type Evidence } from './draft.ts';
+import { type Confidence, type DraftLine, type DraftPiece } from './draft.ts';
+import { evidence, evidenceOf, quote, unreadSpan } from './evidence.ts';
 import { type ReadEntry, type ReadPiece } from './read-pieces.ts';
+import { type Sentences } from './sentences.ts';
+import { stepText } from './step-text.ts';
 import { type Token } from './tokens.ts';
 import { type Word } from './words.ts';
 import { printWork } from './work/print-work.ts';
 
+/** What the lines were read from. */
+export interface Spoken {
+  readonly tokens: readonly Token[];
+  readonly words: readonly Word[];
+  readonly sentences: Sentences;
+}
+
 /** Turns what was read into the draft that people see: labels, shorthand, times, evidence, confidence. */
-export function draftPieces(
-  pieces: readonly ReadPiece[],
-  tokens: readonly Token[],
-  words: readonly Word[],
-  terms: Terms,
-): readonly DraftPiece[] {
+export function draftPieces(pieces: readonly ReadPiece[], spoken: Spoken, terms: Terms): readonly DraftPiece[] {
   return pieces.map((piece) => ({
     name: piece.name,
     make: piece.make,
     worked: piece.worked,
-    lines: [...piece.entries].sort((a, b) => a.at - b.at).map((entry) => draftLine(entry, tokens, words, terms)),
+    lines: [...piece.entries].sort((a, b) => a.at - b.at).map((entry) => draftLine(entry, spoken, terms)),
   }));
 }
 
-function draftLine(entry: ReadEntry, tokens: readonly Token[], words: readonly Word[], terms: Terms): DraftLine {
+function draftLine(entry: ReadEntry, spoken: Spoken, terms: Terms): DraftLine {
+  const { tokens, words, sentences } = spoken;
   const first = tokens[entry.at]!.first;
   const last = tokens[Math.max(entry.at, entry.to - 1)]!.last;
   const times = { startMs: words[first]!.startMs, endMs: words[last]!.endMs };
@@ -31,9 +37,9 @@ function draftLine(entry: ReadEntry, tokens: readonly Token[], words: readonly W
       label: '',
       from: null,
       to: null,
-      text: quote(words, first, last),
+      text: stepText(quote(words, tokens[entry.textFrom]!.first, last)),
       said: null,
-      evidence: [evidence('work', words, first, last)],
+      evidence: [evidence('work', { from: entry.trigger, to: Math.max(entry.trigger + 1, entry.to) }, tokens, words)],
       unread: null,
       confidence: 'sure',
       verdict: 'no-total',
@@ -43,34 +49,27 @@ function draftLine(entry: ReadEntry, tokens: readonly Token[], words: readonly W
       topic: entry.topic,
     };
   }
-  const { read, kind, announced } = entry;
+  const { read, kind } = entry;
   const text = printWork(read.units, {
     isUk: terms === 'UK',
     isRows: kind === 'row',
     loops: read.loops,
     base: read.base,
     isRing: read.isRing,
+    isInvisible: read.isInvisible,
   });
-  const { candidate } = announced;
-  const workFirst = tokens[Math.min(candidate.end, tokens.length - 1)]!.first;
-  const isUnread = read.verdict === 'unread';
-  const announcementLast = tokens[Math.max(entry.at, candidate.end - 1)]!.last;
+  const unread = unreadSpan(entry, tokens, sentences);
+  const unreadQuote = unread === null ? '' : quote(words, tokens[unread.from]!.first, tokens[unread.to - 1]!.last);
   return {
     ...times,
     kind,
     label: labelOf(kind, read.from, read.to),
     from: read.from,
     to: read.to,
-    text,
+    text: read.vague === null ? text : withOpenEnd(text, unreadQuote),
     said: read.said === null ? null : { sts: [read.said] },
-    evidence: [
-      evidence('announcement', words, first, announcementLast),
-      ...(workFirst <= last ? [evidence(isUnread ? 'unread' : 'work', words, workFirst, last)] : []),
-      ...totalEvidence(entry, tokens, words),
-    ],
-    unread: isUnread
-      ? { quote: quote(words, Math.min(workFirst, last), last), atMs: words[Math.min(workFirst, last)]!.startMs }
-      : null,
+    evidence: evidenceOf(entry, tokens, words, sentences),
+    unread: unread === null ? null : { quote: unreadQuote, atMs: words[tokens[unread.from]!.first]!.startMs },
     confidence: confidenceOf(entry),
     verdict: read.verdict,
     count: read.count,
@@ -80,14 +79,10 @@ function draftLine(entry: ReadEntry, tokens: readonly Token[], words: readonly W
   };
 }
 
-function totalEvidence(
-  entry: Extract<ReadEntry, { type: 'line' }>,
-  tokens: readonly Token[],
-  words: readonly Word[],
-): Evidence[] {
-  const { said, events } = entry.read;
-  const event = events.findLast((one) => one.type === 'number' && one.n === said);
-  return event === undefined ? [] : [evidence('total', words, tokens[event.at]!.first, tokens[event.at]!.last)];
+/** What was told of the work, then in the maker's own words what leaves it open: `2 sc, dec, and so on as you like`. */
+function withOpenEnd(text: string, open: string): string {
+  const words = open.replace(/[\s.,;:!?…]+$/u, '');
+  return text === '' ? words : `${text}, ${words}`;
 }
 
 function confidenceOf({ read }: Extract<ReadEntry, { type: 'line' }>): Confidence {
@@ -102,22 +97,4 @@ function labelOf(kind: 'foundation' | 'round' | 'row', from: number | null, to: 
   const isRange = to !== null && to !== from;
   if (kind === 'row') return isRange ? `Rows ${from}–${to}` : `Row ${from}`;
   return isRange ? `R${from}–${to}` : `R${from}`;
-}
-
-function evidence(role: Evidence['role'], words: readonly Word[], firstWord: number, lastWord: number): Evidence {
-  return {
-    role,
-    firstWord,
-    lastWord,
-    startMs: words[firstWord]!.startMs,
-    endMs: words[lastWord]!.endMs,
-    words: quote(words, firstWord, lastWord),
-  };
-}
-
-function quote(words: readonly Word[], first: number, last: number): string {
-  return words
-    .slice(first, last + 1)
-    .map((word) => word.text)
-    .join(' ');
 }

@@ -9,10 +9,11 @@ import { findEvents } from './instruct/find-events.ts';
 import { lettersOf } from './instruct/letters.ts';
 import { prune } from './instruct/prune.ts';
 import { type Base } from './instruct/resolve.ts';
-import { loopsOf } from './loops.ts';
+import { isInvisible, loopsOf } from './loops.ts';
 import { copiesFor, linesNamed } from './references.ts';
 import { type Sentences } from './sentences.ts';
 import { type Token } from './tokens.ts';
+import { findVague, type TokenSpan } from './vague.ts';
 import { sumOf, type Unit } from './work/units.ts';
 
 /** The whole talk, with what is known of it before lines are read. */
@@ -44,10 +45,15 @@ export interface Before {
 export interface ReadLineResult extends ReadSoFar {
   readonly count: number | null;
   readonly isRing: boolean;
+  readonly isInvisible: boolean;
+  /** Words that leave it open how the work goes on. */
+  readonly vague: TokenSpan | null;
   readonly lead: number;
   readonly score: number;
   readonly cost: number;
+  /** All phrases heard, and those that the work was taken from. */
   readonly events: readonly Event[];
+  readonly used: readonly Event[];
 }
 
 /** Reads one announced line: its phrases, the places before it, and of all ways to take them the one that fits best. */
@@ -78,8 +84,18 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
     mayLeave: LEAVING.test(words.map((token) => token.text).join(' ')),
     isPlain: isPlainLine(words, events, announced),
   };
-  const choice = chooseWork(events, setting);
-  return result(choice, announced, bases, events, { loops, isRing }, setting.isDoubtful);
+  const vague = findVague(tokens, candidate.end, to, talk.sentences, events);
+  const told = vague === null ? events : firstTelling(events, vague);
+  const choice = chooseWork(told, vague === null ? setting : { ...setting, bases: [], isPlain: false, copies: [] });
+  const rest = { loops, isRing, isInvisible: isInvisible(tokens, from, to), vague };
+  return result(choice, announced, bases, events, rest, setting.isDoubtful);
+}
+
+/** Of a line whose end is left open, what its first sentence tells before that; bare totals left out. */
+function firstTelling(events: readonly Event[], vague: TokenSpan): readonly Event[] {
+  const before = events.filter((event) => event.at < vague.from && event.type !== 'around');
+  const sentence = before.find((event) => event.type === 'unit')?.sentence;
+  return before.filter((event) => event.sentence === sentence && !(event.type === 'number' && event.asTotal > 1));
 }
 
 /** Numbers that name lines and count nothing: `so that's 22 and 23`, `same as round 9`, `six in a ring, that's one`. */
@@ -142,6 +158,8 @@ function verdictOf(choice: Choice, makes: number, wasDoubtful: boolean): ReadSoF
   return isMisfit ? 'does-not-fit' : 'differs';
 }
 
+/** How plainly a number must be said as a total to be taken for one where the work is not known. */
+const SURE_SAID = 1.5;
 /** A reading below this neither fits nor agrees. */
 const DOUBTFUL = 0;
 
@@ -183,19 +201,19 @@ function result(
   announced: Announced,
   bases: readonly Base[],
   events: readonly Event[],
-  rest: { loops: 'both' | 'back' | 'front'; isRing: boolean },
+  rest: Pick<ReadLineResult, 'loops' | 'isRing' | 'isInvisible' | 'vague'>,
   wasDoubtful: boolean,
 ): ReadLineResult {
   const { from, to } = announced;
   const heard = events.filter((event) => event.type === 'number').sort((a, b) => b.asTotal - a.asTotal)[0];
-  if (choice === null) {
-    const said = heard !== undefined && heard.asTotal >= 1.5 ? heard.n : null;
+  if (choice === null || rest.vague !== null) {
+    const said = heard !== undefined && heard.asTotal >= SURE_SAID ? heard.n : null;
     return {
       isDoubtful: true,
       ...rest,
       from,
       to,
-      units: [],
+      units: choice?.units ?? [],
       base: bases[0]?.n ?? null,
       said,
       verdict: 'unread',
@@ -204,6 +222,7 @@ function result(
       score: 0,
       cost: 9,
       events,
+      used: choice?.used ?? events,
     };
   }
   const { makes } = sumOf(choice.units);
@@ -224,6 +243,7 @@ function result(
     score: choice.score,
     cost: choice.cost,
     events,
+    used: choice.used,
   };
 }
 

@@ -1,10 +1,12 @@
 import { type Announced } from './announce/chain.ts';
+import { ownChain } from './announce/start-candidates.ts';
 import { type ReadSoFar } from './bases.ts';
+import { foundation } from './foundation.ts';
 import { readPieceName } from './piece-name.ts';
 import { readMake } from './pieces.ts';
-import { chainRule, chainUnits, type ReadLineResult, readSpokenLine, type Talk } from './read-line.ts';
+import { chainRule, type ReadLineResult, readSpokenLine, type Talk } from './read-line.ts';
 import { linesNamed } from './references.ts';
-import { type SpokenStep } from './steps.ts';
+import { endOfStep, type SpokenStep, startOfTelling } from './steps.ts';
 import { type Token } from './tokens.ts';
 import { spell, type Unit } from './work/units.ts';
 
@@ -18,7 +20,16 @@ export type ReadEntry =
       readonly announced: Announced;
       readonly read: ReadLineResult;
     }
-  | { readonly type: 'step'; readonly at: number; readonly to: number; readonly topic: string };
+  | {
+      readonly type: 'step';
+      readonly at: number;
+      readonly to: number;
+      /** Where the doing itself is named. */
+      readonly trigger: number;
+      /** Where the sentence that tells it begins. */
+      readonly textFrom: number;
+      readonly topic: string;
+    };
 
 export interface ReadPiece {
   readonly name: string;
@@ -76,6 +87,7 @@ export function readPieces(
       piece.entries.push({ type: 'line', kind: 'foundation', at: candidate.at, to, announced, read: foundation(many) });
     } else {
       chainCounts = chainRule(talk.tokens.slice(candidate.at, to)) ?? chainCounts;
+      const line = withOwnChain(talk, announced, to, piece);
       const before = {
         piece: piece.lines,
         all: pieces.slice(-9, -1).map((one) => one.lines),
@@ -87,16 +99,55 @@ export function readPieces(
       };
       piece.unit = candidate.unit ?? piece.unit;
       const kind = candidate.unit ?? piece.unit ?? (piece.chains === null ? 'round' : 'row');
-      for (const read of readExpanded(talk, announced, to, before)) {
+      for (const read of readExpanded(talk, line, to, before)) {
         piece.lines.push(read);
-        piece.entries.push({ type: 'line', kind, at: candidate.at, to, announced, read });
+        piece.entries.push({ type: 'line', kind, at: candidate.at, to, announced: line, read });
         stitch = mainStitch(read.units) ?? stitch;
       }
     }
-    for (const step of between) piece.entries.push({ type: 'step', at: step.at, to: step.end, topic: step.topic });
+    between.forEach((step, m) => {
+      const { at, trigger, topic } = step;
+      const to = endOfStep(step, Math.min(next, between[m + 1]?.at ?? next), talk.sentences);
+      const textFrom = startOfTelling(
+        talk.tokens,
+        talk.sentences,
+        step,
+        Math.max(candidate.end, between[m - 1]?.end ?? 0),
+      );
+      piece.entries.push({ type: 'step', at, to, trigger, textFrom, topic });
+    });
     introFrom = to;
   });
   return pieces.map(finish);
+}
+
+/**
+ * `Row one. Chain twenty-five, slip stitch in the second chain from the hook`: a first row that makes its own chain gives
+ * a foundation too, and is read from behind it.
+ */
+function withOwnChain(talk: Talk, announced: Announced, to: number, piece: Building): Announced {
+  const { candidate } = announced;
+  if (piece.lines.length > 0 || piece.chains !== null || candidate.unit !== 'row') return announced;
+  const own = ownChain(talk.tokens, candidate.end, to);
+  if (own === null) return announced;
+  const { at, end, n } = own;
+  const lines = { type: 'chain' as const, n };
+  const chain: Announced = {
+    ...announced,
+    candidate: { ...candidate, kind: 'foundation', at, mark: at, end, lines },
+    from: null,
+    to: null,
+  };
+  piece.chains = n;
+  piece.entries.push({
+    type: 'line',
+    kind: 'foundation',
+    at: candidate.at,
+    to: end,
+    announced: chain,
+    read: foundation(n),
+  });
+  return { ...announced, candidate: { ...candidate, end } };
 }
 
 /** The steps from one on that come before a token. */
@@ -191,25 +242,6 @@ function endOfLine(talk: Talk, from: number, to: number, silenceAfter: (token: T
     if ('SPDFEBRM'.includes(token.kind)) hasWork = true;
   }
   return to;
-}
-
-function foundation(many: number): ReadLineResult {
-  return {
-    isDoubtful: false,
-    from: null,
-    to: null,
-    units: chainUnits(many),
-    base: null,
-    said: null,
-    verdict: 'no-total',
-    loops: 'both',
-    count: many,
-    isRing: false,
-    lead: 9,
-    score: 9,
-    cost: 0,
-    events: [],
-  };
 }
 
 function mainStitch(units: readonly Unit[]): string | null {

@@ -43,7 +43,7 @@ export function readTranscript(cues: readonly Cue[], options: { readonly terms?:
   return {
     terms,
     termsReason: options.terms === undefined ? inferred.reason : 'Chosen by hand.',
-    pieces: draftPieces(pieces, tokens, words, terms),
+    pieces: draftPieces(pieces, { tokens, words, sentences }, terms),
     suggestions: findSuggestions(words, chain[0] === undefined ? words.length : tokens[chain[0].candidate.at]!.first),
     corrections: corrections.map((one) => ({ ...one, atMs: words[one.firstWord]!.startMs })),
     notice: pieces.length > 0 ? null : noticeFor(words),

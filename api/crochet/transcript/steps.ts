@@ -12,6 +12,8 @@ export interface SpokenStep {
 }
 
 const AHEAD = 12;
+/** Without full stops a step goes on for about so many words after the last that names a doing. */
+const SPOKEN_LENGTH = 9;
 /** Pulling a ring shut belongs to the first round. */
 const RING_REACH = 14;
 const IDLE = /\b(?:if|before|don't|do not|dinnae|never|when|unless|because|you can fasten|instead of|later|until|no)\b/;
@@ -38,6 +40,25 @@ export function findSteps(
     found.push({ topic, at: startOfStep(tokens, i, sentences), trigger: i, end: i + 1 });
   }
   return found;
+}
+
+/** The token after a step's words: its whole sentence, as far as nothing else begins before. */
+export function endOfStep(step: SpokenStep, next: number, sentences: Sentences): number {
+  const sentence = sentences.endOf[step.end - 1]!;
+  const spoken = sentences.isPunctuated ? sentence : Math.min(sentence, step.end + SPOKEN_LENGTH);
+  return Math.max(step.end, Math.min(next, spoken));
+}
+
+/** Where the sentence that tells a step begins: with its doings, not with stitches or another step before them. */
+export function startOfTelling(
+  tokens: readonly Token[],
+  sentences: Sentences,
+  step: SpokenStep,
+  after: number,
+): number {
+  const start = sentences.startOf[step.at]!;
+  const isOwn = start >= after && !tokens.slice(start, step.at).some((token) => 'SPDU'.includes(token.kind));
+  return sentences.isPunctuated && isOwn ? start : step.at;
 }
 
 /** A clause of the same kind close by, or any in the same sentence, goes on with the step before it. */

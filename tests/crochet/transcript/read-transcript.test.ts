@@ -20,7 +20,7 @@ describe('a maker who talks', () => {
   test('gets a round with its work, its total and the words it came from', () => {
     const line = lines(`${START}Round two, increase in every stitch, and that's twelve.`)[1]!;
     expect(line.label).toBe('R2');
-    expect(line.text).toBe('2 sc in each st around');
+    expect(line.text).toBe('inc in each st around');
     expect(line.said).toEqual({ sts: [12] });
     expect(line.verdict).toBe('agrees');
     expect(line.evidence.map((one) => one.role)).toEqual(['announcement', 'work', 'total']);

@@ -24,7 +24,7 @@ export function startCandidates(
     if (token.kind === 'C') found.push(...chainCandidate(tokens, i, sentences));
     if (token.kind === 'V') found.push(...ringCandidate(tokens, i, sentences, firsts.slice(passed, passed + 4)));
     if (token.kind === 'H' || token.kind === 'K' || token.kind === 'U' || token.kind === 'S') {
-      found.push(...firstRow(tokens, i, sentences));
+      found.push(...firstRow(tokens, i, sentences, firsts.slice(passed, passed + 4)));
     }
   });
   return found;
@@ -71,6 +71,20 @@ function chainCandidate(tokens: readonly Token[], i: number, sentences: Sentence
   ];
 }
 
+/** A starting chain told first thing in a row, before its stitches: `chain twenty-five, slip stitch in the second …`. */
+export function ownChain(
+  tokens: readonly Token[],
+  from: number,
+  to: number,
+): { readonly at: number; readonly end: number; readonly n: number } | null {
+  let at = from;
+  while (at < to && '.,|~&av'.includes(tokens[at]!.kind) && at - from < 5) at += 1;
+  const number = tokens[at + 1];
+  if (tokens[at]?.kind !== 'C' || number?.kind !== 'N' || at + 1 >= to || Number(number.value) < 4) return null;
+  const fromHook = tokens.slice(at, Math.min(to, at + REACH)).some((token) => token.kind === 'H');
+  return fromHook ? { at, end: at + 2, n: Number(number.value) } : null;
+}
+
 /** `four chain and a treble at its foot`: a chain that goes on into stitches begins no piece. */
 function joinsStitch(tokens: readonly Token[], after: number): boolean {
   let i = after;
@@ -112,8 +126,22 @@ function ringCandidate(
   return [{ ...base, end: at, mark: at, lines, strength: 2 }];
 }
 
+/** How far behind its work a row may be given its number (`… that's row one`), and what it gains to hold both together. */
+const LABEL_REACH = 45;
+const LABEL_GAIN = 1.2;
+
+/** Whether the number names what was just done. */
+function isLabel(tokens: readonly Token[], mark: number): boolean {
+  return /^(?:that is|that was|is|'s|it is|so that is|there is)$/.test(tokens[mark - 1]?.text ?? '');
+}
+
 /** Right after a starting chain: `slip stitch in the second chain from the hook`, `one row of slip stitch`. */
-function firstRow(tokens: readonly Token[], i: number, sentences: Sentences): Candidate[] {
+function firstRow(
+  tokens: readonly Token[],
+  i: number,
+  sentences: Sentences,
+  numbered: readonly Candidate[],
+): Candidate[] {
   const token = tokens[i]!;
   const start = sentences.startOf[i]!;
   const end = Math.min(sentences.endOf[i]!, i + NEAR);
@@ -128,6 +156,8 @@ function firstRow(tokens: readonly Token[], i: number, sentences: Sentences): Ca
     return [];
   if (!ahead.some((one) => one.kind === 'S') && token.kind !== 'U' && token.kind !== 'H') return [];
   const at = i - start < 12 ? start : i;
+  const named = numbered.find((one) => one.mark > i && one.mark - i < LABEL_REACH && isLabel(tokens, one.mark));
+  if (named !== undefined) return [{ ...named, at, needs: 'chain', strength: named.strength + LABEL_GAIN }];
   return [
     {
       kind: 'line',

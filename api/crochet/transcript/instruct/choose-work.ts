@@ -1,4 +1,4 @@
-import { settleStitches } from '../work/settle.ts';
+import { merged, settleStitches } from '../work/settle.ts';
 import { spell, sumOf, type Unit } from '../work/units.ts';
 import { assemble } from './assemble.ts';
 import { type Event } from './event.ts';
@@ -34,6 +34,14 @@ export interface Choice {
   readonly cost: number;
   /** How far ahead of the next different reading. */
   readonly lead: number;
+  /** The phrases that it was taken from; what was told again, or only spoken of, is not among them. */
+  readonly used: readonly Event[];
+}
+
+interface Heard {
+  /** Numbers left over, which may be totals. */
+  readonly idle: Casting['idle'];
+  readonly used: readonly Event[];
 }
 
 const FIT_GAIN = 4;
@@ -59,7 +67,8 @@ export function chooseWork(events: readonly Event[], setting: Setting): Choice |
         if (isHopeless(before, found)) continue;
         for (const assembly of assemble(elements.elements, setting.corner)) {
           if (isHopeless(before + assembly.cost, found)) break;
-          if (assembly.units.length > 0) weigh(assembly.units, before + assembly.cost, idle, setting, mayImply, found);
+          if (assembly.units.length > 0)
+            weigh(assembly.units, before + assembly.cost, { idle, used: kept }, setting, mayImply, found);
         }
       }
     }
@@ -114,18 +123,18 @@ const isExplained = (event: Event): boolean => event.type === 'unit' && event.ex
 
 /** Readings of the whole line at once: plain work, and copies of other lines. */
 function addWhole(events: readonly Event[], setting: Setting, found: Found): void {
-  const numbers = events.filter((event) => event.type === 'number');
+  const heard = { idle: events.filter((event) => event.type === 'number'), used: events };
   const units = events.filter((event) => event.type === 'unit').length;
   const times = events.some((event) => event.type === 'times') ? 3 : 0;
   const plain: Unit = { type: 'repeat', units: [{ type: 'stitch', stitch: '?', inOne: 1, times: 1 }], times: 0 };
-  if (setting.isPlain) weigh([plain], 0.4 + units * 0.8 + times, numbers, setting, false, found);
-  for (const copy of setting.copies) weigh(copy.units, copy.cost + units * 1.1 + times, numbers, setting, true, found);
+  if (setting.isPlain) weigh([plain], 0.4 + units * 0.8 + times, heard, setting, false, found);
+  for (const copy of setting.copies) weigh(copy.units, copy.cost + units * 1.1 + times, heard, setting, true, found);
 }
 
 function weigh(
   units: readonly Unit[],
   cost: number,
-  idle: Casting['idle'],
+  { idle, used }: Heard,
   setting: Setting,
   mayImply: boolean,
   found: Found,
@@ -142,13 +151,14 @@ function weigh(
     const agrees = said === makes ? saidGain(idle, makes, fits === 'misfit') : 0;
     const score = fit + agrees - cost - resolved.cost;
     found.choices.push({
-      units: resolved.units,
+      units: merged(resolved.units),
       said,
       fit: fits,
       base: resolved.base,
       score,
       cost: cost + resolved.cost,
       lead: 0,
+      used,
     });
     found.best = Math.max(found.best, score);
   }

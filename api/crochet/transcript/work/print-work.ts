@@ -17,6 +17,8 @@ export interface PrintSetting {
   /** Places there were to work into; a single kind of stitch in all of them is "in each st". */
   readonly base: number | null;
   readonly isRing: boolean;
+  /** Whether the maker's decreases are the invisible ones. */
+  readonly isInvisible: boolean;
 }
 
 /** Prints work as shorthand in house style: `(sc, inc) × 6`, `BLO: sc in each st around`. */
@@ -33,9 +35,17 @@ function wholeLine(units: readonly Unit[], setting: PrintSetting): string | null
   const end = setting.isRows ? 'across' : 'around';
   if (unit.type === 'stitch' && unit.times === setting.base && unit.times > 1) {
     const name = nameOf(unit.stitch, setting);
-    return unit.inOne === 1 ? `${name} in each st ${end}` : `${unit.inOne} ${name} in each st ${end}`;
+    const work = unit.inOne === 1 ? name : isIncrease(unit) ? 'inc' : `${unit.inOne} ${name}`;
+    return `${work} in each st ${end}`;
   }
   return null;
+}
+
+/** One thing repeated is that thing so many times, without brackets. */
+function timesOver(unit: Unit, times: number): Unit {
+  return unit.type === 'chain' || unit.type === 'skip'
+    ? { ...unit, many: unit.many * times }
+    : { ...unit, times: unit.times * times };
 }
 
 function printUnit(unit: Unit, setting: PrintSetting): string {
@@ -43,7 +53,7 @@ function printUnit(unit: Unit, setting: PrintSetting): string {
     case 'stitch':
       return printStitch(unit, setting);
     case 'together': {
-      const name = `${nameOf(unit.stitch, setting)}${unit.many}tog`;
+      const name = nameOfTogether(unit, setting);
       return unit.times === 1 ? name : `${name} × ${unit.times}`;
     }
     case 'chain':
@@ -55,16 +65,27 @@ function printUnit(unit: Unit, setting: PrintSetting): string {
       return unit.times === 1 ? inside : `[${inside}] × ${unit.times}`;
     }
     case 'repeat':
+      if (unit.units.length === 1) return printUnit(timesOver(unit.units[0]!, unit.times), setting);
       return `(${unit.units.map((one) => printUnit(one, setting)).join(', ')}) × ${unit.times}`;
   }
+}
+
+/** A plain decrease by its short name, as it is spoken. */
+function nameOfTogether(unit: Extract<Unit, { type: 'together' }>, setting: PrintSetting): string {
+  if (unit.stitch === 'sc' && unit.many === 2) return setting.isInvisible ? 'inv dec' : 'dec';
+  return `${nameOf(unit.stitch, setting)}${unit.many}tog`;
 }
 
 function printStitch(unit: Extract<Unit, { type: 'stitch' }>, setting: PrintSetting): string {
   const name = nameOf(unit.stitch, setting);
   if (unit.inOne === 1) return unit.times === 1 ? name : `${unit.times} ${name}`;
-  const one = unit.inOne === 2 && unit.stitch === 'sc' ? 'inc' : `${unit.inOne} ${name} in next st`;
+  const one = isIncrease(unit) ? 'inc' : `${unit.inOne} ${name} in next st`;
   if (unit.times === 1) return one;
   return one === 'inc' ? `${unit.times} inc` : `(${one}) × ${unit.times}`;
+}
+
+function isIncrease(unit: Extract<Unit, { type: 'stitch' }>): boolean {
+  return unit.inOne === 2 && unit.stitch === 'sc';
 }
 
 function joinParts(parts: readonly string[], setting: PrintSetting): string {

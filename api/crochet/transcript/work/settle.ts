@@ -41,14 +41,34 @@ function firstNamed(units: readonly Unit[]): string | null {
   return null;
 }
 
-/** Two singles and one single are three; a repeat of once is what it holds. */
-function merged(units: readonly Unit[]): readonly Unit[] {
+/**
+ * Two singles and one single are three; a group said once before its repeat, or repeated again after it, is one repeat.
+ */
+export function merged(units: readonly Unit[]): readonly Unit[] {
   const out: Unit[] = [];
   for (const unit of units) {
     const last = out.at(-1);
     if (unit.type === 'stitch' && last?.type === 'stitch' && last.stitch === unit.stitch && last.inOne === unit.inOne) {
       out[out.length - 1] = { ...last, times: last.times + unit.times };
-    } else out.push(unit);
+    } else if (unit.type === 'repeat' && unit.times > 0) out.push(withEarlier(out, unit));
+    else out.push(unit);
   }
   return out;
+}
+
+/** Takes from the end of the row the tellings of a group that the repeat goes on with. */
+function withEarlier(row: Unit[], repeat: Extract<Unit, { type: 'repeat' }>): Unit {
+  const group = JSON.stringify(repeat.units);
+  let { times } = repeat;
+  const { length } = repeat.units;
+  for (;;) {
+    const last = row.at(-1);
+    if (last?.type === 'repeat' && last.times > 0 && JSON.stringify(last.units) === group) {
+      times += last.times;
+      row.pop();
+    } else if (row.length >= length && JSON.stringify(row.slice(-length)) === group) {
+      times += 1;
+      row.length -= length;
+    } else return { ...repeat, times };
+  }
 }
