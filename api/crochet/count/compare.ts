@@ -11,28 +11,41 @@ export interface Compared {
   readonly ways: readonly CountedWith[];
 }
 
+/** Whether a plain number under the line can mean more than its stitches. */
+export const hasChains = (tally: Tally): boolean => tally.chains > 0 || tally.spaces > 0;
+
 /** Senses in which a plain number equals what was made: stitches, stitches and chains, stitches and spaces. */
-export function waysOf(n: number, tally: Tally): CountedWith[] {
+function waysOf(n: number, tally: Tally, sense: CountedWith | null): CountedWith[] {
   const ways: CountedWith[] = [];
   if (n === tally.sts) ways.push('stitches');
   if (tally.chains > 0 && (n === tally.sts + tally.chains || n === tally.sts + tally.chainsOutside))
     ways.push('chains');
   if (tally.spaces > 0 && n === tally.sts + tally.spaces) ways.push('spaces');
-  return ways;
+  return sense === null || !hasChains(tally) ? ways : ways.filter((way) => way === sense);
 }
 
-/** Compares a total kind by kind, for one size (or one round). */
-export function compareTotals(totals: Totals, tally: Tally, index: number): Compared {
+/**
+ * Compares a total kind by kind, for one size (or one round).
+ *
+ * @param sense how a plain number is meant in this piece; null where that is open. Beside figures for other kinds it
+ * says the stitches.
+ */
+export function compareTotals(totals: Totals, tally: Tally, index: number, sense: CountedWith | null): Compared {
   let equal = true;
   let comparable = false;
   let ways: CountedWith[] = [];
   const kinds = Object.keys(totals);
+  const namesChains = kinds.some((kind) => kind === 'ch' || kind.endsWith('sp'));
   for (const [kind, figures] of Object.entries(totals)) {
     const n = figures[index] ?? figures[0];
     if (n === undefined) continue;
     if (kind === 'sts') {
-      ways = waysOf(n, tally);
       comparable = true;
+      if (namesChains) {
+        if (n !== tally.sts) equal = false;
+        continue;
+      }
+      ways = waysOf(n, tally, sense);
       if (ways.length === 0) equal = false;
       continue;
     }

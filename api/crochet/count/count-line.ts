@@ -2,6 +2,7 @@ import { type Span } from '../span.ts';
 import { type Item, type LineTree, type ReadLine } from '../language/tree.ts';
 import { type FreeLoop } from './base.ts';
 import { type LineInput } from './input.ts';
+import { hasChains, type CountedWith } from './compare.ts';
 import { judgeLine, type Given } from './judge.ts';
 import { plainLeft } from './places.ts';
 import { relativeOf } from './relative.ts';
@@ -22,6 +23,8 @@ export interface Around {
   readonly own: ReadonlyMap<string, readonly Item[]>;
   readonly ring: boolean;
   readonly comesBack: boolean;
+  /** In which sense the plain totals of the piece's lace are meant, where that is settled. */
+  readonly sense: CountedWith | null;
   /** Trees of the numbered lines so far, and loops left free: added to as the piece is gone through. */
   readonly trees: Map<number, LineTree>;
   readonly free: Map<number, FreeLoop>;
@@ -32,6 +35,8 @@ export interface Counted {
   readonly state: State;
   /** Starting chains about which nothing is said, by stitch: which way they were taken. */
   readonly chain: { readonly stitch: string; readonly other: boolean; readonly matters: boolean } | null;
+  /** For a line with chains that agrees with a plain total: every sense in which it does. */
+  readonly senses: readonly CountedWith[] | null;
   /** What the line adds to the piece for later lines to name. */
   readonly trees: readonly (readonly [number, LineTree])[];
   readonly free: readonly [number, FreeLoop] | null;
@@ -96,7 +101,7 @@ function joined(
     rounds,
     rows: rowsOf(first.judged, passes, given),
     asks: opening.asks,
-    countedWith: final === 'agrees' && given.written?.sts ? (shown.ways[0] ?? null) : null,
+    countedWith: final === 'agrees' ? (shown.ways[0] ?? null) : null,
     walk: opening.work.walk.map(({ stitch, on, makes }) => ({ stitch, on, makes })),
     sizes: sizes.slice(1).map(({ judged, verdict: each }) => {
       const one = judged.at(-1)!;
@@ -119,7 +124,23 @@ function joined(
   const trees = passes.map((pass) => [pass.n, pass.read.tree] as const);
   const isLooped = (loops === 'back' || loops === 'front') && count.uses !== null;
   const free = isLooped ? ([passes.at(-1)!.n, { loops, n: count.uses }] as const) : null;
-  return { count, state: nextState(line, count, sizes, passes, state), chain: unsaid, trees, free };
+  return {
+    count,
+    state: nextState(line, count, sizes, passes, state),
+    chain: unsaid,
+    senses: final === 'agrees' ? sensesOf(sizes) : null,
+    trees,
+    free,
+  };
+}
+
+/** Senses in which the totals of every round and size come out; null where no chains are made. */
+function sensesOf(sizes: readonly SizeRun[]): CountedWith[] | null {
+  const judged = sizes
+    .flatMap((run) => run.judged)
+    .filter((one) => one.verdict === 'agrees' && one.ways.length > 0 && hasChains(one.work.tally));
+  const [first, ...others] = judged;
+  return first ? first.ways.filter((way) => others.every((one) => one.ways.includes(way))) : null;
 }
 
 function nextState(
@@ -160,6 +181,7 @@ function unreadLine(
     comesBack: around.comesBack,
     label: line.from,
     blocks: false,
+    sense: around.sense,
   };
   const judged = judgeLine(read, { written: null, said: null }, setting, 0);
   const count: LineCount = {
@@ -197,6 +219,7 @@ function unreadLine(
       rows: state.rows + 1,
     },
     chain: null,
+    senses: null,
     trees: line.from === null ? [] : [[line.from, read.tree]],
     free: null,
   };

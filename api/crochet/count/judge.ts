@@ -79,7 +79,7 @@ function tryReading(tree: LineTree, choices: Choices, given: Given, setting: Set
     const inferred = inferBase(tree, choices, given, setting, index);
     if (inferred) return inferred;
   }
-  return { ...verdictOf(work, given, index), work, choices, asks: [], inferred: false };
+  return { ...verdictOf(work, given, index, setting.sense), work, choices, asks: [], inferred: false };
 }
 
 /** Where the base is not known, the one base that gives the total. */
@@ -91,7 +91,7 @@ function inferBase(tree: LineTree, choices: Choices, given: Given, setting: Sett
     const work = workLine(tree, choices, { ...setting, left: plainLeft(n) });
     if (!work.fits || work.tally.sts !== total) continue;
     return {
-      ...verdictOf(work, given, index),
+      ...verdictOf(work, given, index, setting.sense),
       work: { ...work, base: null, uses: null },
       choices,
       asks: [],
@@ -101,16 +101,29 @@ function inferBase(tree: LineTree, choices: Choices, given: Given, setting: Sett
   return null;
 }
 
-function verdictOf(work: LineWork, given: Given, index: number): Pick<Judged, 'verdict' | 'ways' | 'odd'> {
-  const written = given.written ? compareTotals(given.written, work.tally, index) : null;
-  const said = given.said ? compareTotals(given.said, work.tally, index) : null;
-  const ways = written?.ways ?? said?.ways ?? [];
+function verdictOf(
+  work: LineWork,
+  given: Given,
+  index: number,
+  sense: CountedWith | null,
+): Pick<Judged, 'verdict' | 'ways' | 'odd'> {
+  const written = given.written ? compareTotals(given.written, work.tally, index, sense) : null;
+  const said = given.said ? compareTotals(given.said, work.tally, index, sense) : null;
+  const ways = sharedWays(written?.ways ?? [], said?.ways ?? []);
   const isWritten = written?.comparable ? written.equal : null;
   const isSaid = said?.comparable ? said.equal : null;
-  if (!work.fits) return { verdict: 'does-not-fit', ways, odd: ['worked'] };
-  if (isWritten === null && isSaid === null) return { verdict: 'no-total', ways, odd: [] };
-  if (isWritten !== false && isSaid !== false) return { verdict: 'agrees', ways, odd: [] };
-  return { verdict: 'differs', ways, odd: oddOf(isWritten, isSaid, given) };
+  if (!work.fits) return { verdict: 'does-not-fit', ways: ways ?? [], odd: ['worked'] };
+  if (isWritten === null && isSaid === null) return { verdict: 'no-total', ways: [], odd: [] };
+  if (isWritten !== false && isSaid !== false)
+    return ways ? { verdict: 'agrees', ways, odd: [] } : { verdict: 'differs', ways: [], odd: ['said', 'written'] };
+  return { verdict: 'differs', ways: ways ?? [], odd: oddOf(isWritten, isSaid, given) };
+}
+
+/** Null where each of two plain totals comes out, but not in one sense: 36 with the chains and 28 without. */
+function sharedWays(written: readonly CountedWith[], said: readonly CountedWith[]): readonly CountedWith[] | null {
+  if (written.length === 0 || said.length === 0) return written.length > 0 ? written : said;
+  const shared = written.filter((way) => said.includes(way));
+  return shared.length > 0 ? shared : null;
 }
 
 /** The total unlike the other two; where only two are given, or all three are unlike, all of them. */

@@ -1,12 +1,14 @@
 import { readLine } from '../language/read-line.ts';
 import { type Item, type ReadLine } from '../language/tree.ts';
 import { allItems, targetsIn } from './base.ts';
+import { type CountedWith } from './compare.ts';
 import { countLine, type Around, type Counted } from './count-line.ts';
 import { type LineInput, type PatternInput, type PieceInput } from './input.ts';
 import { type Left } from './places.ts';
 import { relativeOf } from './relative.ts';
 import { type LineCount, type PatternCount, type PieceCount } from './result.ts';
 import { ownStitches } from './special.ts';
+import { sensesToTry } from './senses.ts';
 import { type ChainPolicy } from './start.ts';
 import { startState, type State } from './state.ts';
 
@@ -53,17 +55,28 @@ function countPiece(
   const reads = piece.lines.map((line) => readOnce(line, input, old.get(line.id)));
   const sizes = Math.max(1, input.sizes.length, ...reads.map((read) => sizesOf(read)));
   const said = saidPolicy(reads);
-  const work = (policy: ChainPolicy): Counted[] => workPiece(piece, reads, { sizes, own, policy, base }, old);
+  const settle = (sense: CountedWith | null): Counted[] =>
+    settleChains(said, (policy) => workPiece(piece, reads, { sizes, own, policy, base, sense }, old));
+  const open = settle(null);
+  const tries = sensesToTry(open).map((sense) => settle(sense));
+  const best = tries.length > 0 ? mostAgreeing(tries) : open;
+  return { id: piece.id, lines: best.map((one) => one.count) };
+}
+
+/** The same chain cannot count in one line and not in another: takes the way in which more lines come out. */
+function settleChains(said: ChainPolicy, work: (policy: ChainPolicy) => Counted[]): Counted[] {
   const first = work(said);
   const unsure = contested(first);
-  if (unsure.length === 0) return { id: piece.id, lines: first.map((one) => one.count) };
-  // The same chain cannot count in one line and not in another: take the way in which more lines come out.
-  const both = [true, false].map((counts) =>
-    work({ ...said, ...Object.fromEntries(unsure.map((stitch) => [stitch, counts])) }),
+  if (unsure.length === 0) return first;
+  return mostAgreeing(
+    [true, false].map((counts) => work({ ...said, ...Object.fromEntries(unsure.map((stitch) => [stitch, counts])) })),
   );
+}
+
+/** The attempt in which most lines agree; the first of those that are alike. */
+function mostAgreeing(attempts: readonly (readonly Counted[])[]): Counted[] {
   const agreeing = (counted: readonly Counted[]) => counted.filter((one) => one.count.verdict === 'agrees').length;
-  const best = both.reduce((a, b) => (agreeing(b) > agreeing(a) ? b : a));
-  return { id: piece.id, lines: best.map((one) => one.count) };
+  return [...attempts.reduce((a, b) => (agreeing(b) > agreeing(a) ? b : a))];
 }
 
 function readOnce(line: LineInput, input: PatternInput, memo: Memo | undefined): ReadLine {
@@ -120,6 +133,7 @@ interface PieceWork {
   readonly own: ReadonlyMap<string, readonly Item[]>;
   readonly policy: ChainPolicy;
   readonly base: number | null;
+  readonly sense: CountedWith | null;
 }
 
 function workPiece(
@@ -135,7 +149,7 @@ function workPiece(
   const free: Around['free'] = new Map();
   piece.lines.forEach((line, i) => {
     if (line.kind === 'note' || line.kind === 'step') {
-      counted.push({ count: quiet(line), state, chain: null, trees: [], free: null });
+      counted.push({ count: quiet(line), state, chain: null, senses: null, trees: [], free: null });
       return;
     }
     const read = reads[i]!;
@@ -145,10 +159,11 @@ function workPiece(
       own: work.own,
       ring: piece.worked !== 'rows' || line.kind === 'round',
       comesBack: backFrom > i,
+      sense: work.sense,
       trees,
       free,
     };
-    const key = `${String(work.sizes)} ${JSON.stringify(work.policy)} ${String(around.ring)} ${String(around.comesBack)}`;
+    const key = `${String(work.sizes)} ${JSON.stringify(work.policy)} ${String(around.ring)} ${String(around.comesBack)} ${String(work.sense)}`;
     const memo = old.get(line.id);
     const one =
       memo && isStill(memo, line, read, state, key)

@@ -94,6 +94,7 @@ export function runPasses(
       comesBack: around.comesBack,
       label: pass.n,
       blocks: given.written?.group !== undefined,
+      sense: around.sense,
     };
     const isLast = i === passes.length - 1;
     // Where every round is the same, its total is that of each; where they shape, of the last.

@@ -3,6 +3,7 @@ import { type Item, type LineTree, type Target } from '../language/tree.ts';
 import { allItems, chainBase, foundationOf, ownChain, ownRing, targetsIn, type FreeLoops } from './base.ts';
 import { aimsIn, namedIn, travelling } from './named.ts';
 import { type Job } from './job.ts';
+import { type CountedWith } from './compare.ts';
 import { perform } from './perform.ts';
 import { NOTHING, placesOf, plainLeft, type Left, type Named } from './places.ts';
 import { shaped, type Choices } from './readings.ts';
@@ -29,6 +30,8 @@ export interface Setting {
   readonly label: number | null;
   /** Counted in blocks: the chains passed over at a start are a space of the block, no stitch. */
   readonly blocks: boolean;
+  /** The sense of plain totals in this piece; null while it is open. */
+  readonly sense: CountedWith | null;
 }
 
 /** A line worked once, under one choice of what its words leave open. */
