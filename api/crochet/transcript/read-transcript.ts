@@ -26,7 +26,7 @@ export function readTranscript(cues: readonly Cue[], options: { readonly terms?:
   const inferred = inferTerms(heard);
   const terms = options.terms ?? inferred.terms;
   const tokens = withAliases(inUsTerms(heard, terms));
-  const sentences = sentencesOf(tokens);
+  const sentences = sentencesOf(tokens, spoken);
   const skipped = findSkipped(tokens, sentences);
   const candidates = findCandidates(tokens, sentences).filter(
     (one) => !sentences.isPunctuated || skipped[one.mark] !== true,

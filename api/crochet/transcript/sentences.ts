@@ -1,4 +1,5 @@
 import { type Token } from './tokens.ts';
+import { type Word } from './words.ts';
 
 /** Where sentences begin and end among the tokens: by full stops, by silences, and a little by words. */
 export interface Sentences {
@@ -11,7 +12,7 @@ export interface Sentences {
 }
 
 /** Splits tokens into sentences. The break belongs to the sentence that it ends. */
-export function sentencesOf(tokens: readonly Token[]): Sentences {
+export function sentencesOf(tokens: readonly Token[], words: readonly Word[]): Sentences {
   const startOf: number[] = [];
   const endOf: number[] = new Array<number>(tokens.length).fill(tokens.length);
   let start = 0;
@@ -22,6 +23,7 @@ export function sentencesOf(tokens: readonly Token[]): Sentences {
       start = i + 1;
     }
   });
-  const stops = tokens.filter((token) => token.kind === '.').length;
+  // counted by the words: before a silence the token for the break is the silence's
+  const stops = words.filter((word) => word.mark === '.').length;
   return { startOf, endOf, isPunctuated: stops * 40 > tokens.length };
 }
