@@ -58,7 +58,7 @@ function phraseAt(tokens: readonly Token[], from: number, to: number): Phrase | 
   if (before?.kind === 'w' && !AFTER.has(before.text) && !SHADES.has(before.text)) return null;
   const words: string[] = [];
   let end = from;
-  while (end < to && tokens[end]!.kind === 'w' && !AFTER.has(tokens[end]!.text)) {
+  while (end < to && isPlainWord(tokens, end) && !AFTER.has(tokens[end]!.text)) {
     words.push(tokens[end]!.text);
     end += 1;
   }
@@ -69,6 +69,13 @@ function phraseAt(tokens: readonly Token[], from: number, to: number): Phrase | 
     return null;
   if (named.slice(0, -1).some((word) => word.endsWith('ing'))) return null;
   return { name: named.join(' '), head, end };
+}
+
+/** "Leaves" also means what is left over; after a number or an article it is a thing. */
+function isPlainWord(tokens: readonly Token[], at: number): boolean {
+  const { kind, text } = tokens[at]!;
+  const before = tokens[at - 1];
+  return kind === 'w' || (text === 'leaves' && (before?.kind === 'N' || before?.kind === 'a'));
 }
 
 /** How plainly the words before and after say that this is what is made: 0 where they don't. */

@@ -40,7 +40,7 @@ export function readMake(
       .join(' ');
     if (
       MAKING.test(before) ||
-      (isNear && BEING.test(before)) ||
+      (isNear && BEING.test(before) && !countsPlaces(tokens, i, from)) ||
       (isNear && !isFirst && isAlone(tokens, i)) ||
       isNeeded(tokens, i)
     )
@@ -62,6 +62,12 @@ function isNeeded(tokens: readonly Token[], i: number): boolean {
   );
 }
 
+/** `Find the front loops. There's fifteen of them.`: places, not pieces. */
+function countsPlaces(tokens: readonly Token[], i: number, from: number): boolean {
+  const before = tokens.slice(Math.max(from, i - 16), i);
+  return before.some((token) => (token.kind === 'G' || token.kind === 'B') && token.text.endsWith('s'));
+}
+
 function isFree(tokens: readonly Token[], i: number, to: number): boolean {
   const next = tokens[i + 1];
   if (next === undefined || i + 1 >= to) return true;
@@ -77,6 +83,9 @@ function isPair(tokens: readonly Token[], i: number, from: number, isNear: boole
     .map((one) => one.text)
     .join(' ');
   if (token.text === 'pair') return isNear && !/\beyes\b|\bknit/.test(around);
+  if (token.text === 'a pair of') return isNear && /^(?:them|these|those)$/.test(tokens[i + 1]?.text ?? '');
+  if (token.text === 'a pair')
+    return isNear && tokens[i - 1]?.kind === ',' && '.|'.includes(tokens[i + 1]?.kind ?? '.');
   return token.kind === 't' && Number(token.value) === 2 && /\b(?:make|making|everything|do|you do)\b/.test(around);
 }
 
@@ -85,6 +94,7 @@ function isAlone(tokens: readonly Token[], i: number): boolean {
   const before = tokens[i - 1]?.kind ?? '.';
   const after = tokens[i + 1]?.kind ?? '.';
   const isHead =
-    ('.|,'.includes(before) || /^(?:so|now|and|okay|the)$/.test(tokens[i - 1]?.text ?? '')) && after === 'w';
+    ('.|,'.includes(before) || /^(?:so|now|and|okay|the)$/.test(tokens[i - 1]?.text ?? '')) &&
+    (after === 'w' || tokens[i + 1]?.text === 'leaves');
   return isHead || (',~.|w'.includes(before) && ('.,|'.includes(after) || after === 'o'));
 }

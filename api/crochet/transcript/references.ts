@@ -4,7 +4,7 @@ import { type Token } from './tokens.ts';
 import { periodOf, type Unit } from './work/units.ts';
 
 const LIKE =
-  /\b(?:same|as|like|repeat|repeating|repeats|again|copy|yer|did|over|back to|repetition|returning|what|'s a|is a)\b/;
+  /\b(?:same|as|like|repeat|repeating|repeats|again|copy|yer|did|over|back to|repetition|returning|what|'s a|is a|alternate|alternating|turn about|in turn)\b/;
 
 /** Lines named as the model of this one: `the same as row three`, `repeat rows two and three`. */
 export function linesNamed(tokens: readonly Token[], from: number, to: number, before: number): readonly number[] {
