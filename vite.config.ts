@@ -9,8 +9,23 @@ const here = (file: string) => fileURLToPath(new URL(file, import.meta.url));
 /** Brings up the database, storage and mailbox that tests share. */
 const HOUSE = ['tests/support/house.ts'];
 
-/** One vitest project a kind of test; a test that hangs is cut, and none asserts speed. */
-const project = (name: string, testTimeout: number, extra: Record<string, unknown> = {}) => ({
+type Kind = readonly [name: string, testTimeoutMs: number, extra?: Readonly<Record<string, unknown>>];
+
+const KINDS: readonly Kind[] = [
+  ['crochet', 20_000],
+  ['outside', 20_000],
+  ['architecture', 30_000],
+  ['web', 10_000, { environment: 'jsdom', setupFiles: ['tests/support/quiet-console.ts'] }],
+  ['migrations', 60_000, { globalSetup: HOUSE }],
+  ['api', 20_000, { globalSetup: HOUSE }],
+  ['browser', 120_000, { globalSetup: HOUSE, fileParallelism: false, expect: { poll: { timeout: 15_000 } } }],
+];
+
+/**
+ * One vitest project a kind of test; a test that hangs is cut, and none asserts speed. They run one after the other in
+ * this order, so that browsers do not compete with databases.
+ */
+const project = ([name, testTimeout, extra = {}]: Kind, groupOrder: number) => ({
   extends: true as const,
   test: {
     name,
@@ -19,6 +34,7 @@ const project = (name: string, testTimeout: number, extra: Record<string, unknow
     testTimeout,
     hookTimeout: Math.max(testTimeout, 60_000),
     execArgv: ['--import', 'tsx'],
+    sequence: { groupOrder },
     ...extra,
   },
 });
@@ -34,18 +50,6 @@ export default defineConfig({
   },
   test: {
     root: '.',
-    projects: [
-      project('crochet', 20_000),
-      project('outside', 20_000),
-      project('architecture', 30_000),
-      project('web', 10_000, { environment: 'jsdom', setupFiles: ['tests/support/quiet-console.ts'] }),
-      project('migrations', 60_000, { globalSetup: HOUSE }),
-      project('api', 20_000, { globalSetup: HOUSE, maxWorkers: 2 }),
-      project('browser', 120_000, {
-        globalSetup: HOUSE,
-        fileParallelism: false,
-        expect: { poll: { timeout: 15_000 } },
-      }),
-    ],
+    projects: KINDS.map(project),
   },
 });
