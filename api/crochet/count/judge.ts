@@ -1,4 +1,5 @@
 import { type LineTree, type ReadLine, type Totals } from '../language/tree.ts';
+import { asksOf } from './asks.ts';
 import { compareTotals, type CountedWith } from './compare.ts';
 import { plainLeft } from './places.ts';
 import { mixtures, usualFor, type Choices } from './readings.ts';
@@ -19,6 +20,8 @@ export interface Judged {
   readonly ways: readonly CountedWith[];
   readonly odd: readonly ('said' | 'written' | 'worked')[];
   readonly asks: readonly Ask[];
+  /** The plain total in force for this size and round; null where none was given. */
+  readonly total: number | null;
   /** The text did not tell a base, and the total was taken for it. */
   readonly inferred: boolean;
 }
@@ -43,7 +46,8 @@ export function judgeLine(read: ReadLine, given: Given, setting: Setting, index:
     }
     if (score === most && best === judged) break;
   }
-  return best!;
+  const attempt = (choices: Choices) => tryReading(read.tree, choices, given, setting, index);
+  return { ...best!, asks: asksOf(read.tree, best!, usual, attempt) };
 }
 
 function scoreOf(judged: Judged): number {
@@ -79,14 +83,25 @@ function tryReading(tree: LineTree, choices: Choices, given: Given, setting: Set
     const inferred = inferBase(tree, choices, given, setting, index);
     if (inferred) return inferred;
   }
-  return { ...verdictOf(work, given, index, setting.sense), work, choices, asks: [], inferred: false };
+  return {
+    ...verdictOf(work, given, index, setting.sense),
+    work,
+    choices,
+    asks: [],
+    total: totalOf(given, index),
+    inferred: false,
+  };
+}
+
+function totalOf(given: Given, index: number): number | null {
+  const figures = (given.written ?? given.said)?.sts;
+  return figures?.[index] ?? figures?.[0] ?? null;
 }
 
 /** Where the base is not known, the one base that gives the total. */
 function inferBase(tree: LineTree, choices: Choices, given: Given, setting: Setting, index: number): Judged | null {
-  const figures = (given.written ?? given.said)?.sts;
-  const total = figures?.[index] ?? figures?.[0];
-  if (total === undefined || total > 2000) return null;
+  const total = totalOf(given, index);
+  if (total === null || total > 2000) return null;
   for (let n = 1; n <= total * 2; n += 1) {
     const work = workLine(tree, choices, { ...setting, left: plainLeft(n) });
     if (!work.fits || work.tally.sts !== total) continue;
@@ -95,6 +110,7 @@ function inferBase(tree: LineTree, choices: Choices, given: Given, setting: Sett
       work: { ...work, base: null, uses: null },
       choices,
       asks: [],
+      total,
       inferred: true,
     };
   }

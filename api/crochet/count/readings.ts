@@ -137,13 +137,15 @@ function hasIncrease(items: readonly Item[]): boolean {
   );
 }
 
+/** The choices with one of them taken the other way. */
+export const turned = (choices: Choices, key: Key): Choices => ({
+  ...choices,
+  [key]: choices[key] === USUAL[key] ? OTHER[key] : USUAL[key],
+});
+
 /** Every mixture of what is open, the usual one first, then one turned at a time, then two. */
 export function mixtures(tree: LineTree, usual: Choices): Choices[] {
   const open = openChoices(tree);
-  const turned = (choices: Choices, key: Key): Choices => ({
-    ...choices,
-    [key]: choices[key] === USUAL[key] ? OTHER[key] : USUAL[key],
-  });
   const one = open.map((key) => turned(usual, key));
   const two = open.flatMap((key, i) => open.slice(i + 1).map((other) => turned(turned(usual, key), other)));
   return [usual, ...one, ...two];
