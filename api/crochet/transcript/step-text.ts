@@ -1,4 +1,4 @@
-const LEADS = /^(?:(?:now|then|so|and|okay|ok|right|well|next|but|um|uh|alright)(?![\p{L}'’-])[,.…]*\s*)+/iu;
+const LEADS = /^(?:(?:now|then|so|and|okay|ok|right|well|but|um|uh|alright)(?![\p{L}'’-])[,.…]*\s*)+/iu;
 
 /** A step's words as a sentence: without the little words before it, with a capital and a full stop. */
 export function stepText(spoken: string): string {

@@ -46,7 +46,7 @@ export function findSteps(
 export function endOfStep(step: SpokenStep, next: number, sentences: Sentences): number {
   const sentence = sentences.endOf[step.end - 1]!;
   const spoken = sentences.isPunctuated ? sentence : Math.min(sentence, step.end + SPOKEN_LENGTH);
-  return Math.max(step.end, Math.min(next, spoken));
+  return Math.max(step.trigger + 1, Math.min(next, Math.max(step.end, spoken)));
 }
 
 /** Where the sentence that tells a step begins: with its doings, not with stitches or another step before them. */

@@ -6,25 +6,25 @@ describe('of the spoken tutorials with known answers', () => {
   const figures = score(examplesOf('dev'));
 
   test('the reader finds the lines and the pieces', () => {
-    expect(figures.foundShare).toBeGreaterThanOrEqual(95);
-    expect(figures.spuriousShare).toBeLessThanOrEqual(4);
-    expect(figures.pieceShare).toBeGreaterThanOrEqual(90);
+    expect(figures.foundShare).toBeGreaterThanOrEqual(97);
+    expect(figures.spuriousShare).toBeLessThanOrEqual(2.6);
+    expect(figures.pieceShare).toBeGreaterThanOrEqual(95);
   });
 
   test('it reads their work, their totals and how they come out', () => {
-    expect(figures.workShare).toBeGreaterThanOrEqual(82);
-    expect(figures.saidShare).toBeGreaterThanOrEqual(89);
-    expect(figures.verdictShare).toBeGreaterThanOrEqual(86);
+    expect(figures.workShare).toBeGreaterThanOrEqual(86);
+    expect(figures.saidShare).toBeGreaterThanOrEqual(93);
+    expect(figures.verdictShare).toBeGreaterThanOrEqual(89);
   });
 
   test('it finds what makers got wrong and blames hardly anybody else', () => {
-    expect(figures.faultsFound).toBeGreaterThanOrEqual(14);
-    expect(figures.falseAlarms).toBeLessThanOrEqual(7);
+    expect(figures.faultsFound).toBeGreaterThanOrEqual(15);
+    expect(figures.falseAlarms).toBeLessThanOrEqual(3);
   });
 
   test('it finds what is done between the rounds', () => {
-    expect(figures.stepsShare).toBeGreaterThanOrEqual(85);
-    expect(figures.stepsSpuriousShare).toBeLessThanOrEqual(15);
+    expect(figures.stepsShare).toBeGreaterThanOrEqual(90);
+    expect(figures.stepsSpuriousShare).toBeLessThanOrEqual(11.5);
   });
 });
 
@@ -32,11 +32,11 @@ describe('of six voices it was not written with', () => {
   const figures = score(examplesOf('fresh'));
 
   test('the reader reads nearly everything', () => {
-    expect(figures.foundShare).toBeGreaterThanOrEqual(95);
-    expect(figures.workShare).toBeGreaterThanOrEqual(91);
-    expect(figures.verdictShare).toBeGreaterThanOrEqual(92);
+    expect(figures.foundShare).toBeGreaterThanOrEqual(96);
+    expect(figures.workShare).toBeGreaterThanOrEqual(96);
+    expect(figures.verdictShare).toBeGreaterThanOrEqual(96);
     expect(figures.faultsFound).toBe(2);
-    expect(figures.falseAlarms).toBeLessThanOrEqual(1);
+    expect(figures.falseAlarms).toBe(0);
   });
 });
 

@@ -102,3 +102,20 @@ describe('a first row', () => {
     expect([row?.text, row?.verdict]).toEqual(['sl st in each st across', 'agrees']);
   });
 });
+
+describe('a pattern of rows', () => {
+  test('worked turn about is written row by row', () => {
+    const rows = lines(
+      "Chain eleven. Row one, single crochet in each chain across, ten. | Row two, single crochet in each stitch across, ten. | Row three, half double crochet in each stitch across, ten. | So now it's turn about, row two, row three, row two, row three, till you have seven rows.",
+    ).filter((line) => line.kind === 'row');
+    expect(rows.map((row) => [row.label, row.text])).toEqual([
+      ['Row 1', 'sc in each st across'],
+      ['Row 2', 'sc in each st across'],
+      ['Row 3', 'hdc in each st across'],
+      ['Row 4', 'sc in each st across'],
+      ['Row 5', 'hdc in each st across'],
+      ['Row 6', 'sc in each st across'],
+      ['Row 7', 'hdc in each st across'],
+    ]);
+  });
+});

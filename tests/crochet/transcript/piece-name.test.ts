@@ -27,7 +27,14 @@ describe('the name of a piece', () => {
     ['Last of all, the tail. Make one.', ['Tail', 1]],
     ['Leave an end of twenty-five centimetres. Change to the red yarn.', ['Piece 2', 1]],
     ['Next the green stalk.', ['Stalk', 1]],
+    ['Arms, a pair of them.', ['Arm', 2]],
+    ['Two leaves, in moss.', ['Leaf', 2]],
+    ["Now the skirt. Find the front loops we left. There's fifteen of them.", ['Skirt', 1]],
   ])('of a later piece likewise: %s', (intro, expected) => {
-    expect(named(`We start with the cap. ${FIRST} Fasten off. ${intro} ${FIRST}`)).toEqual([['Cap', 1], expected]);
+    expect(
+      named(
+        `We start with the cap. ${FIRST} Round two, increase in every stitch, twelve. | Fasten off. ${intro} ${FIRST}`,
+      ),
+    ).toEqual([['Cap', 1], expected]);
   });
 });

@@ -25,7 +25,7 @@ const RESTART_COST = 0.9;
 const CHAIN_REACH = 70;
 const STATES_KEPT = 4;
 const CHAINS_KEPT = 3;
-const OWN_RING = 16;
+const OWN_RING = 24;
 const OWN_RING_AGAIN = 44;
 /** Weak announcements are taken only where they join others. */
 const TAKING_COST = 0.45;

@@ -46,7 +46,7 @@ function firstNamed(units: readonly Unit[]): string | null {
  */
 export function merged(units: readonly Unit[]): readonly Unit[] {
   const out: Unit[] = [];
-  for (const unit of units) {
+  for (const unit of units.flatMap((one) => (one.type === 'repeat' && one.times === 1 ? one.units : [one]))) {
     const last = out.at(-1);
     if (unit.type === 'stitch' && last?.type === 'stitch' && last.stitch === unit.stitch && last.inOne === unit.inOne) {
       out[out.length - 1] = { ...last, times: last.times + unit.times };
