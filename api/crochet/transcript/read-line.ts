@@ -124,7 +124,7 @@ function namesOfLines(tokens: readonly Token[], { announced, from, to }: Stretch
 }
 
 const LEAVING =
-  /\b(?:leave|leaving)\b.{0,12}\b(?:last|rest|alone|unworked|hat)\b|\bstop dead\b|\bjust the \w+\b|\bhalf the\b/;
+  /\b(?:leave|leaving)\b(?! (?:one|two|three|four|five|six|\d+) alone).{0,12}\b(?:last|rest|alone|unworked|hat)\b|\bstop dead\b|\bjust the \w+\b|\bhalf the\b/;
 
 const FABRIC = new Set(['sc', 'hdc', 'dc', 'tr']);
 

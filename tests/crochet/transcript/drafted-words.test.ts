@@ -119,3 +119,10 @@ describe('a pattern of rows', () => {
     ]);
   });
 });
+
+test('leaving two alone is skipping them, not stopping short', () => {
+  const line = lines(
+    'Chain nine. Row one, single crochet in each chain across, eight. | Row two. Three singles, then chain two and leave two alone, and three singles.',
+  ).at(-1);
+  expect(line?.text).toBe('3 sc, ch 2, sk 2, 3 sc');
+});
