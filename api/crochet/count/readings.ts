@@ -87,8 +87,7 @@ function look(items: readonly Item[], keys: Set<Key>, depth: number): void {
     } else if (item.type === 'work') {
       if (isPair(item) && (isSeries || depth > 0) && (item.glued || isBesideItself(items, i))) keys.add('pair');
       if (item.stitch === 'ch' && i <= 3 && depth === 0) keys.add('chain');
-      if ((item.stitch === 'dec' || item.stitch === 'invdec') && item.times.type === 'n' && item.times.n[0] === 2)
-        keys.add('dec');
+      if (item.behind) keys.add('dec');
       if (item.times.type === 'fill' || item.into === null) keys.add('chains');
     }
   });

@@ -102,6 +102,7 @@ function printWork(item: Work, terms: Terms): string {
   if (item.times.type === 'n') {
     if (!item.into) {
       if (item.multiplied) return `${name} × ${printSized(item.times.n)}${loops}`;
+      if (item.behind) return `${name} ${printSized(item.times.n)}${loops}`;
       if (item.times.n.length === 1 && item.times.n[0] === 1) return `${name}${loops}`;
       return `${printSized(item.times.n)}${item.glued ? '' : ' '}${name}${loops}`;
     }

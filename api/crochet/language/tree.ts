@@ -35,6 +35,8 @@ export interface Work {
   readonly glued: boolean;
   /** The count was said as a multiple (`inc × 6`), which at the end of a series may mean all of it. */
   readonly multiplied: boolean;
+  /** `dec 2`, with its figure behind: two decreases in most patterns, one over two stitches in others. */
+  readonly behind?: true;
   /** A chain that stands between the groups of the line: `ch 1 between`. */
   readonly between?: true;
   /** Colour letter, where the line is told in colours (`A 4, B 2`). */

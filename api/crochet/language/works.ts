@@ -80,10 +80,13 @@ function placed(
 ): Item[] {
   let loops = lead;
   let after: Sized | null = null;
+  let isBehind = false;
   belowWords(reading);
   if (!before) {
     if (isMark(peek(reading), '-') && peek(reading, 1).kind === 'num' && peek(reading, 1).glued) reading.at += 1;
-    after = readMultiple(reading) ?? suffix(reading);
+    after = readMultiple(reading);
+    isBehind = after === null && key === 'dec';
+    after ??= suffix(reading);
   }
   const more = before ? readMultiple(reading) : null;
   loops ??= readLoops(reading);
@@ -122,6 +125,7 @@ function placed(
     loops,
     glued,
     multiplied: multiple !== null,
+    ...(isBehind && after?.[0] === 2 && !target && !fill && { behind: true as const }),
   };
   const isSeries = before !== null && multiple !== null && !target;
   const found = amounts(before ?? after, isSeries ? null : multiple, target, fill);
