@@ -16,9 +16,10 @@ export function wrongNode() {
 
 /**
  * @param {string} root
+ * @param {() => void} [onInstall] called before anything is installed: it takes a while
  * @returns {boolean} whether packages were installed now
  */
-export function installNodePackages(root) {
+export function installNodePackages(root, onInstall) {
   const lock = path.join(root, 'package-lock.json');
   const installed = path.join(root, 'node_modules/.package-lock.json');
   const mark = path.join(root, 'node_modules/.roundelay-lock');
@@ -27,6 +28,7 @@ export function installNodePackages(root) {
   // Somebody who installed by hand after the lock was written has done it already.
   const byHand = !existsSync(mark) && existsSync(installed) && statSync(installed).mtimeMs >= statSync(lock).mtimeMs;
   if (!byHand) {
+    onInstall?.();
     const done = spawnSync('npm', ['ci', '--no-audit', '--no-fund', '--loglevel=error'], {
       cwd: root,
       stdio: ['ignore', 'ignore', 'inherit'],

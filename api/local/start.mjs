@@ -187,7 +187,8 @@ async function main() {
   if (other) throw new Error(`Roundelay is running already, at ${other}`);
   mkdirSync(LOGS, { recursive: true });
   console.log('Starting Roundelay');
-  await step('packages', () => (installNodePackages(ROOT) ? 'installed' : 'in place'));
+  const installing = () => console.log('  packages             installing; this takes a minute or so, once');
+  await step('packages', () => (installNodePackages(ROOT, installing) ? 'installed' : 'in place'));
   await step('postgresql', () => {
     if (findPrograms() === null && !installPackages(['postgresql'], (line) => console.log(`  ${line}`))) {
       throw new Error('PostgreSQL is needed');

@@ -33,7 +33,7 @@ function SheetRoom({ patternId }: { patternId: string }) {
       </TopStrip>
       <main className="grid grow grid-cols-[minmax(400px,5fr)_minmax(0,6fr)] max-lg:grid-cols-[minmax(0,1fr)]">
         <div className="border-r border-rule max-lg:order-2 max-lg:border-r-0">
-          <PublishPanel patternId={patternId} version={pattern.lastChange} canAsk={isSaved} />
+          <PublishPanel patternId={patternId} code={pattern.code} version={pattern.lastChange} canAsk={isSaved} />
           <SheetForms desk={bench} />
         </div>
         <SheetPreview patternId={patternId} version={pattern.lastChange} paper="A4" terms={pattern.terms} />

@@ -23,11 +23,17 @@ const SAYS: Readonly<Record<PublishDesk['visibility'], string>> = {
   listed: 'Whoever finds it sees it, search engines too.',
 };
 
-/**
- * What the next edition would be: who will see it, what holds it back line by line, what it changes, and the button.
- * @param canAsk false while something of one's own is not saved yet: then the server would judge an older pattern
- */
-export function PublishPanel({ patternId, version, canAsk }: { patternId: string; version: number; canAsk: boolean }) {
+interface PublishPanelProps {
+  patternId: string;
+  /** Of its public address. */
+  code: string;
+  version: number;
+  /** False while something of one's own is not saved yet: then the server would judge an older pattern. */
+  canAsk: boolean;
+}
+
+/** What the next edition would be: who will see it, what holds it back line by line, what it changes, and the button. */
+export function PublishPanel({ patternId, code, version, canAsk }: PublishPanelProps) {
   const desk = useQuery(publishDeskQuery(patternId, version));
   return (
     <section aria-labelledby="publish" className="border-b border-rule">
@@ -47,20 +53,24 @@ export function PublishPanel({ patternId, version, canAsk }: { patternId: string
           </ErrorNote>
         </div>
       )}
-      {desk.data && <Open key={desk.data.lastChange} patternId={patternId} desk={desk.data} canAsk={canAsk} />}
+      {desk.data && (
+        <Open key={desk.data.lastChange} patternId={patternId} code={code} desk={desk.data} canAsk={canAsk} />
+      )}
     </section>
   );
 }
 
-function reasonNot(desk: PublishDesk, canAsk: boolean): string | undefined {
+function reasonNot(desk: PublishDesk, canAsk: boolean, visibility: PublishDesk['visibility']): string | undefined {
   if (!desk.mayPublish) return 'Only its creator or the owner of the studio publishes.';
   if (desk.lines === 0) return 'There is no line yet.';
   if (desk.blocks.length > 0)
     return desk.blocks.length === 1 ? '1 line holds it back' : `${desk.blocks.length} lines hold it back`;
-  return canAsk ? undefined : 'Not everything is saved yet';
+  if (!canAsk) return 'Not everything is saved yet';
+  const isSame = desk.number > 1 && desk.errata.length === 0 && visibility === desk.visibility;
+  return isSame ? `Nothing changed since edition ${desk.number - 1}` : undefined;
 }
 
-function Open({ patternId, desk, canAsk }: { patternId: string; desk: PublishDesk; canAsk: boolean }) {
+function Open({ patternId, code, desk, canAsk }: Omit<PublishPanelProps, 'version'> & { desk: PublishDesk }) {
   const [visibility, setVisibility] = useState(
     desk.visibility === 'private' && desk.number === 1 ? 'unlisted' : desk.visibility,
   );
@@ -69,7 +79,7 @@ function Open({ patternId, desk, canAsk }: { patternId: string; desk: PublishDes
   );
   const publish = usePublish(patternId);
   const toast = useToast();
-  const notYet = reasonNot(desk, canAsk);
+  const notYet = reasonNot(desk, canAsk, visibility);
   // A promise, not the call's own callback: the new number draws this form anew, and with it that callback is gone.
   const send = () =>
     void publish.mutateAsync({ lastChange: desk.lastChange, visibility, errata: [...settled] }).then(
@@ -81,7 +91,6 @@ function Open({ patternId, desk, canAsk }: { patternId: string; desk: PublishDes
       <p className="text-walnut2">
         {desk.agreeing} of {desk.counted} rounds and rows agree.{' '}
         {desk.number > 1 && !desk.countsChanged && desk.errata.length > 0 && 'No count changed.'}
-        {desk.number > 1 && desk.errata.length === 0 && 'Nothing changed since the edition before.'}
       </p>
       {desk.blocks.length > 0 && <Blocks patternId={patternId} desk={desk} />}
       {desk.unprintable.length > 0 && (
@@ -98,6 +107,12 @@ function Open({ patternId, desk, canAsk }: { patternId: string; desk: PublishDes
         </div>
         <p className="small mt-1 text-walnut2">{SAYS[visibility]}</p>
       </div>
+      {desk.number > 1 && desk.visibility !== 'private' && (
+        <p>
+          Edition {desk.number - 1} is out at{' '}
+          <a className="link" href={`/w/${code}`}>{`${location.origin}/w/${code}`}</a>
+        </p>
+      )}
       {publish.isError && <ErrorNote what="It is not out.">{publish.error.message}</ErrorNote>}
       <div className="flex flex-wrap items-center gap-3">
         <Button kind="primary" notYet={notYet} disabled={publish.isPending} onClick={send}>

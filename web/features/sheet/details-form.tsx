@@ -1,7 +1,7 @@
 import type { Details } from '#contract/pattern-details';
 import { TickBox } from '../../ui/field.tsx';
 import { Switch } from '../../ui/switch.tsx';
-import { KeptField } from './kept-field.tsx';
+import { KeptField } from '../../ui/kept-field.tsx';
 import type { SheetDesk } from './sheet-desk.ts';
 
 const LEVELS = [

@@ -2,7 +2,7 @@ import { Trash2 } from 'lucide-react';
 import type { Material } from '#contract/pattern-details';
 import { Button, IconButton } from '../../ui/button.tsx';
 import { SelectField } from '../../ui/field.tsx';
-import { KeptField } from './kept-field.tsx';
+import { KeptField } from '../../ui/kept-field.tsx';
 import type { SheetDesk } from './sheet-desk.ts';
 
 const KINDS = { yarn: 'Yarn', hook: 'Hook', notion: 'Notion', filling: 'Filling' } as const;

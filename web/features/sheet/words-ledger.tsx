@@ -3,7 +3,7 @@ import { type ReactNode } from 'react';
 import type { Caution } from '#contract/pattern-details';
 import { Button, IconButton } from '../../ui/button.tsx';
 import { Icon } from '../../ui/icon.tsx';
-import { KeptField } from './kept-field.tsx';
+import { KeptField } from '../../ui/kept-field.tsx';
 import type { SheetDesk } from './sheet-desk.ts';
 
 function Ledger({

@@ -13,6 +13,7 @@ import { AlsoSaid } from './also-said.tsx';
 import { Heard } from './heard.tsx';
 import { InstructionField } from './instruction-field.tsx';
 import { isRow, LINE_GRID, VerdictCell, WorkedCell } from './line-cells.tsx';
+import { LeaveAsIs } from './leave-as-is.tsx';
 import { LineTools } from './line-tools.tsx';
 import { Moment } from './moment.tsx';
 import { Suggestion } from './suggestion.tsx';
@@ -116,6 +117,7 @@ export function OpenLine({
           />
         )}
         <AlsoSaid line={line} count={count} />
+        <LeaveAsIs line={line} count={count} />
         <Heard lineId={line.id} />
       </div>
       <div className="flex min-h-[38px] flex-wrap items-center gap-x-3.5 gap-y-1 border-t border-feint px-3.5 py-1">

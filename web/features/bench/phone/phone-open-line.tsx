@@ -17,6 +17,7 @@ import { Heard } from '../pattern/heard.tsx';
 import { InstructionField } from '../pattern/instruction-field.tsx';
 import { isRow } from '../pattern/line-cells.tsx';
 import { workedFigure } from '../pattern/line-figures.ts';
+import { LeaveAsIs } from '../pattern/leave-as-is.tsx';
 import { LineTools } from '../pattern/line-tools.tsx';
 import { Moment } from '../pattern/moment.tsx';
 import { Suggestion } from '../pattern/suggestion.tsx';
@@ -79,6 +80,7 @@ export function PhoneOpenLine({
       {repair && mayEdit && <Suggestion repair={repair} lineName={null} onUse={() => takeIt(repair)} />}
       <div className="border-t border-feint px-4 py-1.5">
         <AlsoSaid line={line} count={count} />
+        <LeaveAsIs line={line} count={count} />
         <Heard lineId={line.id} />
       </div>
       <div className="flex items-center justify-between border-t border-feint px-2">

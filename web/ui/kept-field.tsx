@@ -1,5 +1,5 @@
 import { useState } from 'react';
-import { Field, TextField } from '../../ui/field.tsx';
+import { Field, TextField } from './field.tsx';
 
 interface Kept {
   label: string;
