@@ -25,7 +25,7 @@ export function Suggestion({
             {fits.count}
           </b>
         </p>
-        <p className="small">{asSentence(sentence)}</p>
+        <p className="small">{sentence}</p>
       </div>
       <Button kind="primary" keys={['Ctrl', 'Enter']} className="h-[34px]! max-sm:h-11!" onClick={onUse}>
         Use this
@@ -33,7 +33,3 @@ export function Suggestion({
     </div>
   );
 }
-
-/** The count says why in a clause; here it stands alone. */
-const asSentence = (clause: string) =>
-  `${clause.slice(0, 1).toUpperCase()}${clause.slice(1)}${/[.!?]$/.test(clause) ? '' : '.'}`;
