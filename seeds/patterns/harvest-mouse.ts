@@ -122,7 +122,7 @@ export const HARVEST_MOUSE: PatternSpec = {
   materials: [
     {
       kind: 'yarn',
-      name: 'DK cotton, wheat',
+      name: 'DK cotton',
       details: { amount: '12 m, and 2 m for ends', weight: 3, colour: 'wheat' },
     },
     { kind: 'hook', name: 'Hook', details: { sizeMm: 2.5 } },
@@ -130,5 +130,5 @@ export const HARVEST_MOUSE: PatternSpec = {
     { kind: 'filling', name: 'Toy filling', details: { amount: 'about 6 g' } },
     { kind: 'notion', name: 'Stitch marker, yarn needle', details: {} },
   ],
-  notes: ['Right side out. Spiral: do not join, move the marker up.'],
+  notes: ['Right side out.'],
 };

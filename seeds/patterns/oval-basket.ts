@@ -72,5 +72,5 @@ export const OVAL_BASKET: PatternSpec = {
     { kind: 'hook', name: 'Hook', details: { sizeMm: 5.5 } },
     { kind: 'notion', name: 'Stitch marker, yarn needle', details: {} },
   ],
-  notes: ['Two strands held together throughout.', 'Spiral: do not join, move the marker up.'],
+  notes: ['Two strands held together throughout.'],
 };

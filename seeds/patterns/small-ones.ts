@@ -52,7 +52,7 @@ export const PLUM_PINCUSHION: PatternSpec = {
     { kind: 'hook', name: 'Hook', details: { sizeMm: 3 } },
     { kind: 'filling', name: 'Wool for filling', details: { amount: '20 g' } },
   ],
-  notes: ['Spiral: do not join, move the marker up.'],
+  notes: [],
 };
 
 /** At rest in the archive. */
