@@ -1,4 +1,13 @@
-import { createContext, useCallback, useContext, useEffect, useMemo, useReducer, useState } from 'react';
+import {
+  createContext,
+  useCallback,
+  useContext,
+  useEffect,
+  useEffectEvent,
+  useMemo,
+  useReducer,
+  useState,
+} from 'react';
 import type { PublicEdition } from '#contract/editions';
 import { type Player } from '../parts/player/create-player.ts';
 import { lengthOf, lineAt, momentIn, momentOf } from './moments.ts';
@@ -68,7 +77,8 @@ export function useWatchPage(edition: PublicEdition, player: Player): Watch | nu
 
   useEffect(() => keep(edition, state, localStorage), [edition, state]);
 
-  useEffect(() => {
+  // Where the page opens is decided once; what changes afterwards comes through the parts of the page.
+  const open = useEffectEvent(() => {
     const named = momentIn(location.search);
     const opened = currentStep(steps, state);
     const moment = opened && momentOf(edition, opened.line);
@@ -78,15 +88,17 @@ export function useWatchPage(edition: PublicEdition, player: Player): Watch | nu
       const there = line && location.hash === '' ? steps.find((one) => one.line === line) : undefined;
       if (there) act({ kind: 'go', key: there.key });
     } else if (moment) seek(moment.recordingNumber, moment.startMs);
+  });
+  useEffect(() => open(), []);
+
+  useEffect(() => {
     const follow = () => {
       const to = stepAt(steps, location.hash);
       if (to) show(to);
     };
     window.addEventListener('hashchange', follow);
     return () => window.removeEventListener('hashchange', follow);
-    // Where the page opens is decided once; what changes afterwards comes through the parts of the page.
-    // eslint-disable-next-line react-hooks/exhaustive-deps
-  }, []);
+  }, [steps, show]);
 
   const isFirst = step === steps[0];
   useEffect(() => {
