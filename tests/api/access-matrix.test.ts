@@ -6,7 +6,8 @@ import { afterAll, beforeAll, beforeEach, describe, expect, test } from 'vitest'
 import { buildApp, FROM_OUR_PAGE, type TestApp } from '../support/app.ts';
 import { mountedRoutes } from './access/mounted-routes.ts';
 import { buildCast, PEOPLE, type Who } from './access/people.ts';
-import { routeOf, ROUTES, type Call } from './access/routes.ts';
+import { type Call } from './access/entry.ts';
+import { routeOf, ROUTES } from './access/routes.ts';
 import { World } from './access/world.ts';
 
 let at: TestApp;

@@ -5,7 +5,7 @@ import { CREATING, limit } from '../../http/limits.ts';
 import { answer, AppError } from '../../http/problem.ts';
 import { sessionOf, signedIn } from '../../http/session.ts';
 import type { Deps } from '../../platform/deps.ts';
-import { askingIn, idIn } from './asking.ts';
+import { askingIn, idIn } from '../../http/asking.ts';
 import { removeClip } from './clip-remove.service.ts';
 import { findWatchableClip, sendClip } from './clips.service.ts';
 import { PartBuffers } from './part-buffers.ts';

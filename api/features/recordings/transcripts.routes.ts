@@ -6,7 +6,7 @@ import { ifMatchVersion, sendVersioned } from '../../http/preconditions.ts';
 import { answer, AppError } from '../../http/problem.ts';
 import { signedIn } from '../../http/session.ts';
 import type { Deps } from '../../platform/deps.ts';
-import { askingIn, idIn } from './asking.ts';
+import { askingIn, idIn } from '../../http/asking.ts';
 import {
   addTranscript,
   correctCue,
