@@ -1,7 +1,7 @@
 import { useCallback, useMemo } from 'react';
 import { PHONE, useMedia } from '../lib/use-media.ts';
 import { useWidth } from '../lib/use-width.ts';
-import { type RingLine } from '../parts/ring-map/ring-geometry.ts';
+import { type RingLine } from '#crochet/shape';
 import { RingMap } from '../parts/ring-map/ring-map.tsx';
 import { Staff } from '../parts/ring-map/staff.tsx';
 import { Neighbours } from './neighbours.tsx';
@@ -42,7 +42,7 @@ export function PieceMap() {
       const one = find(key);
       const total = one && stepTotal(one, state.terms);
       return one
-        ? `Round ${one.round}, ${total === '' ? 'no total' : `${total} stitches`}${state.done.has(key) ? ', done' : ''}`
+        ? `${one.piece.worked === 'rows' ? 'Row' : 'Round'} ${one.round}, ${total === '' ? 'no total' : `${total} stitches`}${state.done.has(key) ? ', done' : ''}`
         : '';
     },
     [find, state.terms, state.done],
@@ -63,7 +63,15 @@ export function PieceMap() {
         {counted.length > 0 && size > 0 && (
           <div className="watch-map-picture">
             {isRows ? (
-              <Staff lines={lines} openId={step.key} width={size} name={title} onOpen={open} />
+              <Staff
+                lines={lines}
+                openId={step.key}
+                width={size}
+                name={title}
+                nameOf={nameOf}
+                onOpen={open}
+                isMirrored={state.mirrored}
+              />
             ) : (
               <RingMap
                 lines={lines}

@@ -1,15 +1,8 @@
-import { type KeyboardEvent, memo, useMemo, useRef } from 'react';
+import { memo, useMemo } from 'react';
+import { type Ring, type RingLine, ringMap } from '#crochet/shape';
 import { verdictShape } from '../verdict-mark.tsx';
-import { type Ring, type RingLine, ringMap, type RingState } from './ring-geometry.ts';
-
-const COLOURS: Record<RingState, string> = {
-  done: 'var(--color-woad)',
-  now: 'var(--color-now)',
-  'to-come': 'var(--color-tocome)',
-  differs: 'var(--color-madder)',
-  'does-not-fit': 'var(--color-madder)',
-  unread: 'var(--color-unreadring)',
-};
+import { RING_COLOURS } from './ring-colours.ts';
+import { useRingKeys } from './use-ring-keys.ts';
 
 export interface RingMapProps {
   lines: readonly RingLine[];
@@ -38,21 +31,13 @@ export const RingMap = memo(function RingMap({
   openWeight = 2.6,
   isMirrored = false,
 }: RingMapProps) {
-  const root = useRef<SVGSVGElement>(null);
+  const { root, walk } = useRingKeys();
   const map = useMemo(
     () => ringMap(lines, { size, openId, openWeight, isMirrored }),
     [lines, size, openId, openWeight, isMirrored],
   );
   const centre = size / 2;
   const openAt = map.rings.findIndex((ring) => ring.lineId === openId);
-
-  const walk = (event: KeyboardEvent) => {
-    const way = { ArrowUp: 1, ArrowRight: 1, ArrowDown: -1, ArrowLeft: -1 }[event.key];
-    if (way === undefined) return;
-    event.preventDefault();
-    const rings = [...(root.current?.querySelectorAll<SVGGElement>('[role=button]') ?? [])];
-    rings[rings.indexOf(document.activeElement as unknown as SVGGElement) + way]?.focus();
-  };
 
   return (
     <svg
@@ -94,7 +79,7 @@ function RingButton({
   onOpen: (lineId: string) => void;
 }) {
   const { state, inner, band, dashes, stems, lineId, label, mark, radius } = ring;
-  const colour = COLOURS[state];
+  const colour = RING_COLOURS[state];
   const middle = inner + band / 2;
   const ground =
     ring.isOpen && state !== 'unread' ? 'var(--color-woadwash)' : state === 'unread' ? 'var(--color-weldwash)' : null;

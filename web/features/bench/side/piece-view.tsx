@@ -39,6 +39,7 @@ export function PieceView({ piece }: { piece: Piece }) {
     lines: rings,
     openId: line?.pieceId === piece.id ? lineId : null,
     onOpen: open,
+    nameOf,
     name: `${piece.name}, ${rounds} ${isRows ? 'rows' : 'rounds'}`,
   };
   return (
@@ -52,7 +53,7 @@ export function PieceView({ piece }: { piece: Piece }) {
         </span>
       </div>
       <div className="flex justify-center pt-1 pb-1.5">
-        {isRows ? <Staff {...shared} width={286} /> : <RingMap {...shared} size={MAP_PX} nameOf={nameOf} />}
+        {isRows ? <Staff {...shared} width={286} /> : <RingMap {...shared} size={MAP_PX} />}
       </div>
       <p className="small leading-[17px]! text-walnut2">
         One dash is one stitch{hasUnread ? `; ${isRows ? 'row' : 'R'}${hasUnread.label} is tacked until it counts` : ''}

@@ -1,6 +1,6 @@
 import { type LineCount } from '#crochet';
 import { type Line } from '#contract/rows';
-import { type RingLine } from '../../../parts/ring-map/ring-geometry.ts';
+import { type RingLine } from '#crochet/shape';
 import { type Counts, isCounted } from '../desk/bench-count.ts';
 import { knotLabel } from '../desk/line-name.ts';
 
