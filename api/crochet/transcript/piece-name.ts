@@ -8,6 +8,8 @@ export interface Introduction {
   readonly to: number;
   readonly sentences: Sentences;
   readonly make: number;
+  /** The words that are spoken of as things anywhere in the talk. */
+  readonly things: ReadonlySet<string>;
 }
 
 /** How far before its first line a part is named; what the whole thing is may be told long before. */
@@ -83,7 +85,7 @@ function scoreOf(
   tokens: readonly Token[],
   at: number,
   phrase: Phrase,
-  { from, to, sentences, make }: Introduction,
+  { from, to, sentences, make, things }: Introduction,
   isFirst: boolean,
 ): number {
   const start = Math.max(from, sentences.startOf[at]!);
@@ -105,7 +107,7 @@ function scoreOf(
     .every((token) => '~&aOXLNp,'.includes(token.kind) || /^(?:for|on|to|now|next)$/.test(token.text));
   const goesOn = closes || /^(?:make|makes|making|next|now|is|are|you|we|worked|which|go|and|in)$/.test(after.text);
   const isMany = make > 1 && singular(phrase.head) !== phrase.head;
-  const isNamed = isLed || isMany || isThing(tokens, phrase.head);
+  const isNamed = isLed || isMany || isThing(things, phrase.head);
   if (isNear && heads && sentences.isPunctuated && goesOn && isNamed) return closes ? 4 : 3.5;
   if (isNear && BEGINS.test(bare === '' ? bare : `${bare.trim()} `) && isNamed && goesOn) return 3;
   const isWhole = isFirst && OPENS.test(lead.trim());
@@ -113,11 +115,17 @@ function scoreOf(
 }
 
 /** A bare word may be a verb or a call; a thing is somewhere spoken of as `the …`, `each …`. */
-function isThing(tokens: readonly Token[], head: string): boolean {
-  const forms = [head, singular(head)];
-  return tokens.some(
-    (token, n) => forms.includes(token.text) && /^(?:the|a|an|your|each|both|every)$/.test(tokens[n - 1]?.text ?? ''),
-  );
+function isThing(things: ReadonlySet<string>, head: string): boolean {
+  return things.has(head) || things.has(singular(head));
+}
+
+/** The words that are spoken of as things: once for the whole talk. */
+export function thingsNamed(tokens: readonly Token[]): ReadonlySet<string> {
+  const out = new Set<string>();
+  tokens.forEach((token, n) => {
+    if (/^(?:the|a|an|your|each|both|every)$/.test(tokens[n - 1]?.text ?? '')) out.add(token.text);
+  });
+  return out;
 }
 
 function singular(name: string): string {

@@ -2,7 +2,7 @@ import { type Announced } from './announce/chain.ts';
 import { ownChain } from './announce/start-candidates.ts';
 import { type ReadSoFar } from './bases.ts';
 import { foundation } from './foundation.ts';
-import { readPieceName } from './piece-name.ts';
+import { readPieceName, thingsNamed } from './piece-name.ts';
 import { readMake } from './pieces.ts';
 import { chainRule, type ReadLineResult, readSpokenLine, type Talk } from './read-line.ts';
 import { linesNamed } from './references.ts';
@@ -61,6 +61,7 @@ export function readPieces(
   silenceAfter: (token: Token) => number,
 ): readonly ReadPiece[] {
   const pieces: Building[] = [];
+  const things = thingsNamed(talk.tokens);
   let chainCounts: boolean | null = null;
   let stitch = 'sc';
   let introFrom = 0;
@@ -75,7 +76,7 @@ export function readPieces(
     if (announced.begins) {
       const from = Math.max(introFrom, candidate.at - INTRO);
       chainCounts = n === 0 ? chainRule(talk.tokens.slice(from, candidate.at)) : chainCounts;
-      pieces.push(beginPiece(talk, from, announced, pieces.length + 1));
+      pieces.push(beginPiece(talk, from, announced, pieces.length + 1, things));
     }
     const piece = pieces.at(-1)!;
     if (candidate.kind === 'foundation') {
@@ -216,13 +217,19 @@ function copiesOfPiece(
   return lines.map((line) => ({ ...foundation(0), ...line, verdict: 'no-total', said: null, isRing: line.from === 1 }));
 }
 
-function beginPiece(talk: Talk, from: number, announced: Announced, nth: number): Building {
+function beginPiece(
+  talk: Talk,
+  from: number,
+  announced: Announced,
+  nth: number,
+  things: ReadonlySet<string>,
+): Building {
   const { candidate } = announced;
   const make = readMake(talk.tokens, from, candidate.mark, talk.sentences, nth === 1);
   const nameFrom = nth === 1 ? 0 : from;
   return {
     name:
-      readPieceName(talk.tokens, { from: nameFrom, to: candidate.mark, sentences: talk.sentences, make }) ??
+      readPieceName(talk.tokens, { from: nameFrom, to: candidate.mark, sentences: talk.sentences, make, things }) ??
       `Piece ${nth}`,
     make,
     unit: candidate.unit,
