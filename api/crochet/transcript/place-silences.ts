@@ -8,20 +8,19 @@ const NEARBY = 40;
 
 /**
  * Moves the silences of paragraphs to where people fall silent: before a line is announced. A paragraph's time only says
- * when it begins. Where the next begins with an announcement, or so late that the silence must have ended this one,
- * nothing is moved; else the silence lies before the last line announced inside.
- * @param announced indices of words at which a line or a step is announced, ascending
+ * when it begins. Where the next paragraph begins with an announcement, or so late that the silence must have ended this one, nothing is moved; else the silence lies before the
+ * last line announced inside.
+ * @param moments indices of words at which a line or a step is announced, ascending
  */
-export function placeSilences(words: readonly Word[], announced: readonly number[]): readonly Word[] {
+export function placeSilences(words: readonly Word[], moments: readonly number[]): readonly Word[] {
   const out = [...words];
   const usualMs = usualLength(words);
   let first = 0;
   let passed = 0;
   for (let next = 1; next < out.length; next++) {
-    const word = out[next]!;
-    if (word.cue === out[next - 1]!.cue) continue;
-    while (passed < announced.length && announced[passed]! <= first) passed += 1;
-    const at = placeFor(out, first, next, announced.slice(passed, passed + NEARBY), usualMs);
+    if (out[next]!.cue === out[next - 1]!.cue) continue;
+    while (passed < moments.length && moments[passed]! <= first) passed += 1;
+    const at = placeFor(out, first, next, moments.slice(passed, passed + NEARBY), usualMs);
     if (at !== null) shift(out, at, next);
     first = next;
   }
@@ -42,25 +41,32 @@ function placeFor(
   words: readonly Word[],
   first: number,
   next: number,
-  announced: readonly number[],
+  moments: readonly number[],
   usualMs: number,
 ): number | null {
-  const word = words[next]!;
-  if (!words[first]!.isInParagraph || word.silenceMs < MOVABLE_MS) return null;
-  if (announced.some((at) => at >= next && at <= next + 4)) return null;
+  const { silenceMs, startMs } = words[next]!;
+  if (!words[first]!.isInParagraph || silenceMs < MOVABLE_MS) return null;
+  if (beginsAnnounced(words, next, moments)) return null;
   let sentence = next - 1;
   while (sentence > first && words[sentence - 1]!.mark !== '.') sentence -= 1;
   const lastSentenceMs = words[next - 1]!.endMs - words[sentence]!.startMs;
-  if (word.startMs - words[first]!.startMs > usualMs + lastSentenceMs + SLACK_MS) return null;
-  return announced.findLast((at) => at < next && at > first) ?? null;
+  if (startMs - words[first]!.startMs > usualMs + lastSentenceMs + SLACK_MS) return null;
+  return moments.findLast((word) => word < next && word > first) ?? null;
+}
+
+/** Whether the first sentence of a paragraph announces something first thing. */
+function beginsAnnounced(words: readonly Word[], from: number, moments: readonly number[]): boolean {
+  const moment = moments.find((word) => word >= from);
+  if (moment === undefined || moment > from + 4) return false;
+  return words.slice(from, moment).every((word) => word.mark !== '.');
 }
 
 function shift(words: Word[], at: number, next: number): void {
-  const by = words[next]!.silenceMs;
+  const byMs = words[next]!.silenceMs;
   for (let i = at; i < next; i++) {
     const word = words[i]!;
-    const silenceMs = i === at ? word.silenceMs + by : word.silenceMs;
-    words[i] = { ...word, startMs: word.startMs + by, endMs: word.endMs + by, silenceMs };
+    const silenceMs = i === at ? word.silenceMs + byMs : word.silenceMs;
+    words[i] = { ...word, startMs: word.startMs + byMs, endMs: word.endMs + byMs, silenceMs };
   }
   words[next] = { ...words[next]!, silenceMs: 0 };
 }

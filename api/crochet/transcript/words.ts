@@ -17,8 +17,9 @@ export interface Word {
 /** Nobody speaks slower than this for long, in characters a second; longer times hold a silence. */
 const SLOWEST = 11;
 const FASTEST = 15;
-/** Cues of more characters than this are paragraphs, whose times run across silences. */
+/** Cues of more characters or longer than this are paragraphs, whose times run across silences. */
 const PARAGRAPH = 160;
+const PARAGRAPH_MS = 12_000;
 
 /**
  * Splits cues into words and gives each a time: its cue's start plus its share of the cue by length, but never slower
@@ -31,7 +32,8 @@ export function wordsOf(cues: readonly Cue[]): readonly Word[] {
   cues.forEach((cue, index) => {
     const texts = cue.text.split(/\s+/).filter((text) => /[\p{L}\p{N}]/u.test(text));
     const length = texts.reduce((sum, text) => sum + text.length + 1, 0);
-    const rate = length > PARAGRAPH ? paragraphRate : SLOWEST;
+    const isInParagraph = isParagraph(cue);
+    const rate = isInParagraph ? paragraphRate : SLOWEST;
     const lasts = Math.min(cue.endMs - cue.startMs, (length * 1000) / rate);
     let passed = 0;
     for (const text of texts) {
@@ -46,13 +48,15 @@ export function wordsOf(cues: readonly Cue[]): readonly Word[] {
         mark: markAfter(text),
         silenceMs,
         cue: index,
-        isInParagraph: length > PARAGRAPH,
+        isInParagraph,
       });
       spokenUntil = endMs;
     }
   });
   return words;
 }
+
+const isParagraph = (cue: Cue): boolean => cue.text.length > PARAGRAPH || cue.endMs - cue.startMs > PARAGRAPH_MS;
 
 /** Paragraphs without a silence show how fast a person speaks: nearly the fastest of them, within what people can. */
 function speakingRate(cues: readonly Cue[]): number {

@@ -41,7 +41,7 @@ function fromNamed(
   sentences: Sentences,
 ): Candidate[] {
   const word = String(tokens[i]!.value);
-  const mention = isMention(tokens, i, named.end, sentences);
+  const mention = isMention(tokens, i, named, sentences);
   const at = deedBefore(tokens, i, sentences) ?? announcementStart(tokens, i, sentences);
   const base = { kind: 'line' as const, at, end: named.end, mark: i, unit, needs: null };
   if (mention === 'until')
@@ -87,7 +87,10 @@ function fromBefore(tokens: readonly Token[], i: number, unit: 'round' | 'row', 
   if (before.kind === 'L' && !plural && tokens[j - 1]?.kind !== 'I')
     return [{ ...base, lines: { type: 'next', many: 1 }, strength: 1.1 }];
   if (before.kind === 'N' && plural) return counted(tokens, i, j, base, sentences);
-  const isOne = before.kind === 'N' && Number(before.value) === 1 && /[Fm]/.test(kindsOf(tokens, j + 1, i));
+  const isOne =
+    before.kind === 'N' &&
+    Number(before.value) === 1 &&
+    /[Fm]/.test(kindsOf(tokens, j + 1, i) + (tokens[i + 1]?.kind ?? ''));
   if (isOne && !plural) return [{ ...base, mark: i, lines: { type: 'next', many: 1 }, strength: 1 }];
   return [];
 }

@@ -21,6 +21,9 @@ interface State {
 
 /** What it costs to pass over the number of a line, and to begin a piece where nothing else says so. */
 const SKIP_COST = 2.2;
+/** However many lines were missed, more than this is not asked. */
+const MOST_SKIP_COST = 6;
+const NEAR_GAP = 3;
 const RESTART_COST = 0.9;
 const CHAIN_REACH = 70;
 const STATES_KEPT = 4;
@@ -82,22 +85,29 @@ function options(
       if (isFree(top, candidate) && !isOwnRing(top, candidate, tokens))
         out.push(begin(candidate, top, lines.to, candidate.strength - restartCost(top, candidate, tokens)));
     }
-    for (let gap = 0; gap <= 3; gap++) {
-      const before = best.get(lines.from - 1 - gap);
-      if (
-        before === undefined ||
-        (before.to === 0 && before.announced === null && lines.from > 1 && candidate.strength < 2)
-      )
-        continue;
+    for (const before of statesBefore(lines.from, best, top)) {
+      if (before.to === 0 && before.announced === null && lines.from > 1 && candidate.strength < 2) continue;
       if (lines.from === 1 && (before.announced !== null || candidate.needs === 'start')) continue;
       if (!isFree(before, candidate)) continue;
-      out.push(go(candidate, before, lines.from, lines.to, candidate.strength - gap * SKIP_COST));
+      const cost = Math.min(MOST_SKIP_COST, (lines.from - 1 - before.to) * SKIP_COST);
+      out.push(go(candidate, before, lines.from, lines.to, candidate.strength - cost));
     }
     return out;
   }
   const reach = [...new Set([top, ...[...best.values()].sort((a, b) => b.score - a.score).slice(0, STATES_KEPT)])];
   const from = [...open, ...reach];
   return from.flatMap((before) => relative(candidate, before));
+}
+
+/** The chains that a numbered line may go on from: those up to shortly before it, and the best where more are missing. */
+function statesBefore(from: number, best: ReadonlyMap<number, State>, top: State): readonly State[] {
+  const near: State[] = [];
+  for (let gap = 0; gap <= NEAR_GAP; gap++) {
+    const before = best.get(from - 1 - gap);
+    if (before !== undefined) near.push(before);
+  }
+  const isFar = top.announced !== null && top.to < from - 1 - NEAR_GAP;
+  return isFar ? [...near, top] : near;
 }
 
 function relative(candidate: Candidate, before: State): State[] {

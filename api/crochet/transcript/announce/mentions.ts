@@ -1,5 +1,6 @@
 import { type Sentences } from '../sentences.ts';
 import { type Token } from '../tokens.ts';
+import { type NumberList } from './number-list.ts';
 
 const MENTIONING = new Set([
   'before',
@@ -49,7 +50,7 @@ const PAST = new Set(['was', 'were', 'had', 'did']);
 export function isMention(
   tokens: readonly Token[],
   i: number,
-  end: number,
+  { from, to, end }: NumberList,
   sentences: Sentences,
 ): 'until' | 'mention' | null {
   let j = i - 1;
@@ -57,12 +58,17 @@ export function isMention(
   const before = j >= sentences.startOf[i]! ? tokens[j] : undefined;
   if (PAST.has(tokens[end]?.text ?? '') || /^(?:finished|done|over|behind)$/.test(tokens[end]?.text ?? ''))
     return 'mention';
-  if (before === undefined) return null;
+  if (before === undefined || (from < to && tellsRange(tokens, j))) return null;
   if (REACHING.has(before.text) || (before.text === 'with' && /^(?:finish|done|end)$/.test(tokens[j - 1]?.text ?? '')))
     return 'until';
   if (before.text === 'of' && /^(?:end|finish)$/.test(tokens[j - 1]?.text ?? '')) return 'until';
-  if (PAST.has(before.text) || PAST.has(tokens[j - 1]?.text ?? '')) return 'mention';
+  if (PAST.has(before.text) || (before.kind !== 'N' && PAST.has(tokens[j - 1]?.text ?? ''))) return 'mention';
   if (before.kind === 'b' || before.kind === 'R' || before.kind === 'n' || MENTIONING.has(before.text))
     return 'mention';
   return null;
+}
+
+/** `from round six to round ten`, `on each of rows two to four`, `for every one of rounds 5-8`: all of them are told here. */
+function tellsRange(tokens: readonly Token[], j: number): boolean {
+  return tokens[j]!.text === 'from' || (tokens[j]!.text === 'of' && tokens[j - 1]?.kind === 'E');
 }
