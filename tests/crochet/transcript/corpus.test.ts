@@ -6,9 +6,9 @@ describe('of the spoken tutorials with known answers', () => {
   const figures = score(examplesOf('dev'));
 
   test('the reader finds the lines and the pieces', () => {
-    expect(figures.foundShare).toBeGreaterThanOrEqual(97);
-    expect(figures.spuriousShare).toBeLessThanOrEqual(2.6);
-    expect(figures.pieceShare).toBeGreaterThanOrEqual(95);
+    expect(figures.foundShare).toBeGreaterThanOrEqual(98);
+    expect(figures.spuriousShare).toBeLessThanOrEqual(1.5);
+    expect(figures.pieceShare).toBeGreaterThanOrEqual(96);
   });
 
   test('it reads their work, their totals and how they come out', () => {
@@ -23,8 +23,8 @@ describe('of the spoken tutorials with known answers', () => {
   });
 
   test('it finds what is done between the rounds', () => {
-    expect(figures.stepsShare).toBeGreaterThanOrEqual(90);
-    expect(figures.stepsSpuriousShare).toBeLessThanOrEqual(11.5);
+    expect(figures.stepsShare).toBeGreaterThanOrEqual(89);
+    expect(figures.stepsSpuriousShare).toBeLessThanOrEqual(12);
   });
 });
 
