@@ -22,7 +22,9 @@ export function hookStart(
   );
   const extra = over > 0 ? (spaces.find((n) => over === 2 * n || over === n) ?? 0) : 0;
   const usual = (over >= 0 && height >= 3) || extra > 0;
-  const known = policy[stitch] ?? null;
+  const own = allItems(items).find((item) => item.type === 'work' && item.into?.which === 'hook');
+  const said = own?.type === 'work' && own.counts ? own.counts.as !== null : null;
+  const known = said ?? policy[stitch] ?? null;
   const counts = extra > 0 ? true : (known ?? (job.choices.chain === 'usual' ? usual : !usual));
   return {
     stitch: counts && row?.family === 'plain' ? stitch : null,

@@ -62,9 +62,29 @@ export function openChoices(tree: LineTree): Key[] {
   )
     keys.add('tail');
   if (works.length > 1 && works.every((item) => isSmall(item))) keys.add('whole');
+  if (isUnitRound(works)) keys.add('whole');
   look(tree.items, keys, 0);
   return [...keys];
 }
+
+/** `sc, inc around`: the words of the last stitch may be meant for all before it. */
+function isUnitRound(works: readonly Item[]): boolean {
+  const last = works.at(-1);
+  return (
+    works.length > 1 &&
+    works[0]?.type === 'work' &&
+    works[0].stitch !== 'ch' &&
+    isOpenEnd(last) &&
+    works.slice(0, -1).every((item) => isSmall(item))
+  );
+}
+
+const isOpenEnd = (item: Item | undefined): item is Work =>
+  item?.type === 'work' &&
+  item.times.type === 'fill' &&
+  item.times.leave[0] === 0 &&
+  item.times.to === null &&
+  (item.into === null || (item.into.what === 'st' && item.into.which === 'next'));
 
 const isSmall = (item: Item): boolean =>
   item.type === 'skip' ||
@@ -107,7 +127,12 @@ export const isPair = (item: Work): boolean =>
 
 /** A writer who says `sc, 2 sc` cannot mean three plain stitches: the second is an increase. */
 export function usualFor(tree: LineTree): Choices {
-  return hasNeighbours(tree.items) && !hasIncrease(tree.items) ? { ...USUAL, pair: 'increase' } : USUAL;
+  const pair = hasNeighbours(tree.items) && !hasIncrease(tree.items) ? 'increase' : USUAL.pair;
+  // `sc, inc around` shapes all round; `dec, sc around` goes on plain to the end.
+  const works = tree.items.filter((item) => item.type === 'work' || item.type === 'group' || item.type === 'skip');
+  const last = works.at(-1);
+  const isShaping = last?.type === 'work' && /^(inc|dec|invdec|.*tog)$/.test(last.stitch);
+  return { ...USUAL, pair, whole: isShaping && isUnitRound(works) ? 'round' : USUAL.whole };
 }
 
 function hasNeighbours(items: readonly Item[]): boolean {
@@ -163,7 +188,7 @@ export function shaped(tree: LineTree, choices: Choices): readonly Item[] {
   if (choices.tail === 'all' && last.type === 'work' && last.multiplied) {
     group = { ...wrapped([...before, { ...last, times: { type: 'n', n: [1] } }]), times: last.times };
   } else if (choices.tail === 'all' && last.type === 'group') group = { ...last, items: [...before, ...last.items] };
-  else group = wrapped([...before, last]);
+  else group = wrapped([...before, isOpenEnd(last) ? { ...last, times: { type: 'n', n: [1] } } : last]);
   return [...tree.items.slice(0, first), group, ...tree.items.slice(end + 1)];
 }
 

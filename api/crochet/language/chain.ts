@@ -1,6 +1,7 @@
 import { type ChainCounts, type Sized, type Work } from './tree.ts';
 import { ONE, readMultiple, readSized } from './amounts.ts';
 import { isMark, isPlain, isWord, peek, spanFrom, take, type Reading } from './reading.ts';
+import { type Lex } from './lexer.ts';
 import { groupsAfterGap } from './noun.ts';
 import { times } from './times.ts';
 
@@ -55,7 +56,8 @@ export function readChainCounts(reading: Reading): ChainCounts | null {
   }
   while (
     isPlain(peek(reading), 'this', 'which', 'that', 'will', 'always', 'throughout', 'here', 'these', 'ch') ||
-    isWord(peek(reading), 'turningchain', 'the')
+    isWord(peek(reading), 'turningchain', 'the', 'skipped', 'skip', 'first') ||
+    (peek(reading).kind === 'num' && isSkippedChain(reading))
   )
     reading.at += 1;
   if (peek(reading).kind === 'stitch' && peek(reading).text === 'ch') reading.at += 1;
@@ -84,6 +86,13 @@ export function readChainCounts(reading: Reading): ChainCounts | null {
   reading.at = close === null ? end : close + 1;
   if (negative) return { as: null, chains: 0 };
   return { as: as ?? 'st', chains };
+}
+
+/** `3 skipped ch`, `first 3 chs` before *count*. */
+function isSkippedChain(reading: Reading): boolean {
+  const [next, after] = [peek(reading, 1), peek(reading, 2)];
+  const isChain = (lex: Lex): boolean => lex.kind === 'stitch' && lex.text === 'ch';
+  return isChain(next) || (isWord(next, 'skipped', 'skip') && isChain(after));
 }
 
 export function clauseEnd(reading: Reading): number {

@@ -1,4 +1,4 @@
-import { type Group, type Item, type Sized, type Target, type Times } from './tree.ts';
+import { type ChainCounts, type Group, type Item, type Sized, type Target, type Times } from './tree.ts';
 import { isMark, isPlain, isTimesSign, isWord, peek, spanFrom, take, type Reading } from './reading.ts';
 import { readMultiple, readSized } from './amounts.ts';
 import { readTarget } from './target.ts';
@@ -34,13 +34,17 @@ export function readBracket(reading: Reading, limit: number, before: readonly It
   }
   const kinds = totalBetween(reading, open + 1, close);
   const isBareNumber = close === open + 2;
-  if (kinds && !isGroupAfterAll(reading, close) && (hasWork(before) || isBareNumber)) {
+  const isLeading = before.length === 0 && kinds !== null && Object.keys(kinds).join('') === 'sts';
+  if (kinds && !isGroupAfterAll(reading, close) && (hasWork(before) || isBareNumber || isLeading)) {
     pushTotal(reading, kinds, { start: reading.lexes[open]!.start, end: reading.lexes[close]!.end });
     reading.at = close + 1;
     return [];
   }
   const counts = readChainCounts(reading);
-  if (counts) return [];
+  if (counts) {
+    sayCounts(before, counts);
+    return [];
+  }
   if (isMadeRemark(reading, open, close)) {
     reading.at = close + 1;
     return [{ type: 'note', span: spanFrom(reading, open), text: 'made' }];
@@ -51,6 +55,13 @@ export function readBracket(reading: Reading, limit: number, before: readonly It
   if (!hasWork(items)) return items;
   const mark = reading.lexes[open]!.text as Group['mark'];
   return [finishGroup(reading, open, items, mark, null)];
+}
+
+/** `dc in 4th ch from hook (3 skipped ch count as dc)`: said of the chains before the last stitch. */
+function sayCounts(before: readonly Item[], counts: ChainCounts): void {
+  const last = before.at(-1);
+  if (last?.type !== 'work' || last.into?.which !== 'hook' || last.counts) return;
+  (before as Item[])[before.length - 1] = { ...last, counts };
 }
 
 /** `(shell made)`, `(first dc made)`: what has just been worked, said again. */
@@ -82,7 +93,8 @@ export function finishGroup(
     if (
       isWord(ahead, 'rep', 'around', 'across') ||
       isPlain(ahead, 'all', 'both') ||
-      (isMark(peek(reading), '-') && isTimesSign(ahead))
+      isTimesSign(ahead) ||
+      (isMark(peek(reading), '-') && ahead.kind === 'num' && isWord(peek(reading, 2), 'times'))
     )
       reading.at += 1;
   }

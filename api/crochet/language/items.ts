@@ -1,13 +1,25 @@
 import { type Item } from './tree.ts';
 import { finishGroup, hasWork, readBracket } from './groups.ts';
-import { isMark, isWord, peek, spanFrom, take, type Reading } from './reading.ts';
+import { type Lex } from './lexer.ts';
+import { isMark, isPlain, isWord, peek, spanFrom, take, type Reading } from './reading.ts';
 import { readRelative } from './relatives.ts';
 import { readSlipJoin, readStep } from './steps.ts';
 import { readFill, readTimes } from './times.ts';
 import { readWork } from './works.ts';
 import { skipSeparator, readSentenceTotal, bar } from './separators.ts';
-import { readLeadingTimes, readColour, readLay, readSkip, isColour, readFar } from './small-items.ts';
+import {
+  readLeadingTimes,
+  readColour,
+  readHookStart,
+  readLay,
+  readRingCount,
+  readSkip,
+  isColour,
+  readFar,
+} from './small-items.ts';
 import { leftover } from './leftover.ts';
+import { combine } from './combine.ts';
+import { readLeadingTotal, readToldTotal } from './told-totals.ts';
 import { readShaped, readStraight } from './shaped-lines.ts';
 import { readJoinedLoops, readPrefixed } from './prefixed.ts';
 import { readStars } from './stars.ts';
@@ -21,7 +33,7 @@ export function readItems(reading: Reading, limit: number): Item[] {
     while (isWord(peek(reading), 'and', 'of') || (isWord(peek(reading), 'the') && !isColour(reading))) reading.at += 1;
     if (reading.at >= limit) break;
     const found = readItem(reading, limit, items);
-    if (found) items.push(...found);
+    if (found) combine(items, found);
     else if (reading.at < limit) items.push(leftover(reading, limit));
     if (reading.at === here) reading.at += 1;
   }
@@ -37,17 +49,24 @@ function readItem(reading: Reading, limit: number, items: Item[]): Item[] | null
     if (lex.text === '|') return readBars(reading, limit);
     return null;
   }
+  if (items.length === 0 && readLeadingTotal(reading)) return [];
+  if (hasWork(items) && readToldTotal(reading, limit)) return [];
   if (isWord(lex, 'total')) return readSentenceTotal(reading, limit);
   const relative = readRelative(reading, limit) ?? readShaped(reading, limit) ?? readStraight(reading, limit);
-  if (relative?.type === 'shaped' && relative.how === 'evenly') {
-    // `sc in each st, increasing 7 evenly`: the increases are spread over what was just said.
-    const last = items.at(-1);
-    if (last?.type === 'work' && last.times.type === 'fill' && last.per[0] === 1) items.pop();
-  }
   if (relative) return [relative];
-  if (isWord(lex, 'rep')) return readRepeat(reading, items);
+  if (isWord(lex, 'rep')) return readLeadingTimes(reading, limit) ?? readRepeat(reading, items);
+  if (isPlain(lex, 'begin', 'start', 'continue') && startsWork(peek(reading, 1))) {
+    reading.at += 1;
+    return [];
+  }
   const slip = readSlipJoin(reading, limit);
   if (slip) return [slip];
+  const start = readHookStart(reading);
+  if (start) {
+    const first = items.findIndex((item) => item.type === 'work' && item.stitch !== 'ch');
+    items.splice(first < 0 ? items.length : first, 0, start);
+    return [];
+  }
   const skip = readSkip(reading);
   if (skip) return [skip];
   const lead = readLeadingTimes(reading, limit);
@@ -58,6 +77,8 @@ function readItem(reading: Reading, limit: number, items: Item[]): Item[] | null
   if (work) return work;
   const lay = readLay(reading);
   if (lay) return [lay];
+  const ringed = readRingCount(reading);
+  if (ringed) return [ringed];
   const joined = readJoinedLoops(reading, limit);
   if (joined) return joined;
   const far = readFar(reading);
@@ -75,6 +96,27 @@ function readItem(reading: Reading, limit: number, items: Item[]): Item[] | null
       items[items.length - 1] = { ...last, times: fill };
     return [];
   }
+  const again = items.length > 0 ? readOnceMore(reading, items.at(-1)!) : null;
+  if (again) {
+    items[items.length - 1] = again;
+    return [];
+  }
+  return null;
+}
+
+/** A count or a stitch: `begin 6 sc in ring`. */
+const startsWork = (lex: Lex): boolean => lex.kind === 'num' || (lex.kind === 'stitch' && lex.text !== 'ch');
+
+/** `inc once, then once more`: the last is worked so many times again. */
+function readOnceMore(reading: Reading, last: Item): Item | null {
+  const start = reading.at;
+  const said = readTimes(reading);
+  if (said?.type === 'n' && isWord(reading.lexes[reading.at - 1]!, 'more', 'again', 'times')) {
+    if (last.type === 'work' && last.times.type === 'n')
+      return { ...last, times: { type: 'n', n: last.times.n.map((n) => n * (said.n[0] ?? 1)) } };
+    if (last.type === 'group' && last.times.type === 'unsaid') return { ...last, times: said };
+  }
+  reading.at = start;
   return null;
 }
 
@@ -91,7 +133,13 @@ function readBars(reading: Reading, limit: number): Item[] | null {
 /** `rep around` without a star: everything before it that is not a start is repeated. */
 function readRepeat(reading: Reading, items: Item[]): Item[] | null {
   const from = reading.at;
-  if (isMark(peek(reading, 1), '(') || isMark(peek(reading, 1), '[')) {
+  const next = peek(reading, 1);
+  if (
+    next.kind === 'mark' &&
+    '([{*|'.includes(next.text) &&
+    !isMark(peek(reading, 2), ')') &&
+    !isMark(peek(reading, 2), ']')
+  ) {
     reading.at += 1;
     return [];
   }

@@ -12,6 +12,8 @@ export interface Label {
   /** `next round`, `next 5 rows`: how many, where no number is given. */
   readonly next: number;
   readonly uncertain: boolean;
+  /** A label in words: `set-up round`, `foundation chain`. */
+  readonly titled?: true;
 }
 
 const at = (lexes: readonly Lex[], i: number): Lex => lexes[Math.min(i, lexes.length - 1)]!;
@@ -26,7 +28,7 @@ export function readLabel(lexes: readonly Lex[], start: number): Label | null {
     isMark(at(lexes, i), '#')
   )
     i += 1;
-  return named(lexes, i) ?? ordinal(lexes, i) ?? next(lexes, i) ?? bare(lexes, i);
+  return ordinal(lexes, i) ?? named(lexes, i) ?? next(lexes, i) ?? titled(lexes, i) ?? bare(lexes, i);
 }
 
 const isRoundWord = (lex: Lex): boolean => isWord(lex, 'round', 'row');
@@ -65,7 +67,7 @@ function ranged(lexes: readonly Lex[], i: number, kind: Label['kind'], word: Lex
       isMark(joint, '+') ||
       isMark(joint, '&') ||
       isMark(joint, '/') ||
-      (isPlain(joint, 'a') && isNumber(at(lexes, after + 1)));
+      (isWord(joint, 'the') && joint.end - joint.start === 1 && isNumber(at(lexes, after + 1)));
     if (!isTo) break;
     let j = after + 1;
     while (isRoundWord(at(lexes, j)) || isPlain(at(lexes, j), 'r') || isWord(at(lexes, j), 'and', 'the')) j += 1;
@@ -197,6 +199,45 @@ function next(lexes: readonly Lex[], start: number): Label | null {
   const kind = isWord(at(lexes, i), 'row') ? 'row' : 'round';
   return { kind, from: null, to: null, after: closing(lexes, i + 1), next: count, uncertain: false };
 }
+
+const TITLES = [
+  'foundation',
+  'base',
+  'setup',
+  'set',
+  'up',
+  'edging',
+  'border',
+  'final',
+  'plain',
+  'even',
+  'shaping',
+  'brim',
+  'ribbing',
+  'rib',
+  'decreasing',
+];
+
+/** `Foundation chain:`, `Set-up round:`, `Increase rnd:`, `Edging row -`: a label in words without a number. */
+function titled(lexes: readonly Lex[], start: number): Label | null {
+  let i = start;
+  while (
+    i < start + 4 &&
+    (isPlain(at(lexes, i), ...TITLES) || isTitleWord(at(lexes, i)) || (i > start && isMark(at(lexes, i), '-')))
+  )
+    i += 1;
+  const noun = at(lexes, i);
+  const isChain = noun.kind === 'stitch' && noun.text === 'ch';
+  if (i === start || (!isRoundWord(noun) && !isChain)) return null;
+  const close = at(lexes, i + 1);
+  if (!isMark(close, ':') && !(isMark(close, '-') && !close.glued) && !(isMark(close, '.') && !isChain)) return null;
+  const kind = isWord(noun, 'row') ? 'row' : 'round';
+  return { kind, from: null, to: null, after: closing(lexes, i + 1), next: 1, uncertain: false, titled: true };
+}
+
+/** Words of the trade that may name a line: `increase`, `decrease`, `first` and `last`. */
+const isTitleWord = (lex: Lex): boolean =>
+  isWord(lex, 'last', 'first', 'join', 'even') || (lex.kind === 'stitch' && ['inc', 'dec'].includes(lex.text));
 
 /** `4.`, `4)`, `4:`, `4 -`, `5) 8) sc`: a number alone. Never certain by itself. */
 function bare(lexes: readonly Lex[], start: number): Label | null {

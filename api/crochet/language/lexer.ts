@@ -1,7 +1,9 @@
 import { type Terms } from '../span.ts';
-import { lexiconOf, type Trie } from './lexicon.ts';
+import { lexiconOf, vocabularyOf, type Trie } from './lexicon.ts';
+import { mendMarks } from './mend-marks.ts';
+import { mendTokens, type MendedToken as Token } from './mend-tokens.ts';
 import { NUMBER_WORDS, ORDINAL_TAILS, ORDINAL_WORDS } from './numbers.ts';
-import { tokensOf, type Token } from './tokens.ts';
+import { tokensOf } from './tokens.ts';
 
 /** A token with its meaning. `text` is a stitch's key, a grammar word's name, a mark, or the word as it stands. */
 export interface Lex {
@@ -12,6 +14,8 @@ export interface Lex {
   readonly end: number;
   readonly glued: boolean;
   readonly broken: boolean;
+  /** A misspelling or a scanner's slip: what it was read as. */
+  readonly readAs?: string;
 }
 
 const UNITS = new Set([
@@ -36,8 +40,8 @@ const LONGEST_NUMBER = 6;
 
 /** The text as a list of meanings, ended by one of kind `end`. Linear in the length of the text. */
 export function lexesOf(text: string, terms: Terms, own?: readonly (readonly [string, string])[]): Lex[] {
-  const tokens = tokensOf(text);
   const trie = lexiconOf(terms, own);
+  const tokens = mendTokens(tokensOf(text), vocabularyOf(trie));
   const out: Lex[] = [];
   let at = 0;
   while (at < tokens.length) {
@@ -51,11 +55,13 @@ export function lexesOf(text: string, terms: Terms, own?: readonly (readonly [st
     at += length;
   }
   out.push({ kind: 'end', text: '', value: 0, start: text.length, end: text.length, glued: false, broken: false });
-  return out;
+  return mendMarks(out);
 }
 
 function make(kind: Lex['kind'], text: string, value: number, first: Token, last: Token): Lex {
-  return { kind, text, value, start: first.start, end: last.end, glued: first.glued, broken: first.broken };
+  const { start, glued, broken } = first;
+  const readAs = first.readAs ?? last.readAs;
+  return { kind, text, value, start, end: last.end, glued, broken, ...(readAs !== undefined && { readAs }) };
 }
 
 function pushMark(tokens: readonly Token[], at: number, out: Lex[]): number {
@@ -64,8 +70,29 @@ function pushMark(tokens: readonly Token[], at: number, out: Lex[]): number {
     out.push(make('mark', '**', 0, token, tokens[at + 1]!));
     return 2;
   }
-  out.push(make('mark', token.text, 0, token, token));
+  if (!isAbbreviating(tokens, at, out)) out.push(make('mark', token.text, 0, token, token));
   return 1;
+}
+
+/** Words that a sentence does not begin with in small letters: a full stop before them belongs to a short form. */
+const GO_ON = new Set(
+  'in into on over each ea every next nxt around across to until of tog together from through same first last'.split(
+    ' ',
+  ),
+);
+
+/** The full stop of `1 tr. in next st`, which ends a short form and no sentence. */
+function isAbbreviating(tokens: readonly Token[], at: number, out: readonly Lex[]): boolean {
+  const token = tokens[at]!;
+  const next = tokens[at + 1];
+  if (token.text !== '.' || !token.glued || next === undefined) return false;
+  const before = out.at(-1);
+  const isShort =
+    before !== undefined && (before.kind === 'stitch' || before.kind === 'w') && before.end - before.start <= 5;
+  return (
+    isShort &&
+    ((next.kind === 'word' && !next.capital && GO_ON.has(next.text)) || next.text === ',' || next.text === ')')
+  );
 }
 
 function pushNumber(tokens: readonly Token[], at: number, out: Lex[]): number {
@@ -203,7 +230,10 @@ function longestMatch(
       best = { ...node.meaning, length: next - at + (dotted ? 1 : 0) };
     }
     const mark = tokens[next];
-    if (mark && (mark.text === '-' || mark.text === '.') && mark.glued && tokens[next + 1]?.glued && node.next.size > 0)
+    if (!mark || !mark.glued || node.next.size === 0) continue;
+    // `sl-st`, `d.c.`, and `sl. st.` or `inv. dec.` with a space.
+    const isShort = tokens[next - 1]!.text.length <= 4 && tokens[next + 1]?.capital !== true;
+    if ((mark.text === '-' && tokens[next + 1]?.glued) || (mark.text === '.' && (tokens[next + 1]?.glued || isShort)))
       next += 1;
   }
   return best;

@@ -16,6 +16,7 @@ const WORDS: Readonly<Record<string, string>> = {
   of: 'of, from the',
   the: 'the, a, an, your, all the, its',
   each: 'each, every, ea, per, all, each of, every one of, each and every, eachof',
+  allbut: 'all but, in all but, all but the, in all but the, each but, in each but, in each st but, in each st except',
   next: 'next, nxt, nex, following, foll, subsequent',
   same: 'same, the same, base of, at base of, at the base of',
   first: 'first, beginning, beg, 1st',
@@ -110,6 +111,26 @@ function build(terms: Terms, own: readonly (readonly [string, string])[]): Trie 
     enter(trie, form, { kind: 'stitch', value }, false);
   for (const [form, value] of own) enter(trie, form, { kind: 'stitch', value }, true);
   return trie;
+}
+
+const WORDS_OF = new WeakMap<Trie, ReadonlySet<string>>();
+
+/** Every single word that stands somewhere in the lexicon. */
+export function vocabularyOf(trie: Trie): ReadonlySet<string> {
+  let words = WORDS_OF.get(trie);
+  if (!words) {
+    const found = new Set<string>();
+    const walk = (node: Trie): void => {
+      for (const [word, next] of node.next) {
+        found.add(word);
+        walk(next);
+      }
+    };
+    walk(trie);
+    words = found;
+    WORDS_OF.set(trie, words);
+  }
+  return words;
 }
 
 /** Lexicons kept ready: those of the last patterns with stitches of their own. */

@@ -106,7 +106,7 @@ function printWork(item: Work, terms: Terms): string {
       if (item.times.n.length === 1 && item.times.n[0] === 1) return `${name}${loops}`;
       return `${printSized(item.times.n)}${item.glued ? '' : ' '}${name}${loops}`;
     }
-    return `${count}${name} in ${printPlace(item.into, item.times.n[0] ?? 1, terms, item.times.n)}${loops}`;
+    return `${count}${name} in ${printPlace(item.into, item.times.n[0] ?? 1, terms, item.times.n)}${loops}${printCounts(item, terms)}`;
   }
   const where = item.into ? ` in ${printPlace(item.into, 1, terms)}` : '';
   return `${count}${name}${where}${printFill(item.times, terms)}${loops}`;
@@ -114,13 +114,16 @@ function printWork(item: Work, terms: Terms): string {
 
 function printChain(item: Work, terms: Terms): string {
   const n = item.times.type === 'n' ? item.times.n : [1];
-  const counts = item.counts
-    ? item.counts.as
-      ? ` (counts as ${item.counts.as === 'st' ? 'st' : nameOf(item.counts.as, terms)}${item.counts.chains > 0 ? ` and ch ${String(item.counts.chains)}` : ''})`
-      : ' (does not count)'
-    : '';
   const between = item.between ? ' between' : '';
-  return `ch ${printSized(n)}${between}${counts}`;
+  return `ch ${printSized(n)}${between}${printCounts(item, terms)}`;
+}
+
+/** `(counts as dc and ch 2)`, `(does not count)`. */
+function printCounts({ counts }: Work, terms: Terms): string {
+  if (!counts) return '';
+  if (!counts.as) return ' (does not count)';
+  const chains = counts.chains > 0 ? ` and ch ${String(counts.chains)}` : '';
+  return ` (counts as ${counts.as === 'st' ? 'st' : nameOf(counts.as, terms)}${chains})`;
 }
 
 function printFill(times: Times, terms: Terms): string {

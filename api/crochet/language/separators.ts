@@ -2,6 +2,7 @@ import { type Item } from './tree.ts';
 import { hasWork } from './groups.ts';
 import { isMark, isPlain, isSeparator, isTimesSign, isWord, peek, spanFrom, takeAll, type Reading } from './reading.ts';
 import { readBareTotal } from './totals.ts';
+import { readEachRoundTotal, readToldTotal } from './told-totals.ts';
 
 /** Separators between items; a total without a bracket may stand behind one. */
 export function skipSeparator(reading: Reading, limit: number, items: readonly Item[]): boolean {
@@ -22,12 +23,26 @@ export function skipSeparator(reading: Reading, limit: number, items: readonly I
   }
   const next = peek(reading);
   const after = peek(reading, 1);
+  if (readToldTotal(reading, limit)) return true;
   if (next.kind !== 'num') return true;
-  const ends = after.kind === 'end' || reading.at + 1 >= limit || isMark(after, '.') || isMark(after, '(');
+  if (isClosed(items) && readEachRoundTotal(reading)) return true;
+  const ends =
+    after.kind === 'end' ||
+    reading.at + 1 >= limit ||
+    isMark(after, '.') ||
+    isMark(after, '(') ||
+    onlyMarks(reading, limit);
   if (ends || isWord(after, 'st') || after.kind === 'stitch' || isWord(after, 'sp', 'sp2', 'group', 'loop', 'total')) {
     if (isTotalHere(reading, lex.text, items, limit, ends)) readBareTotal(reading, limit, from);
   }
   return true;
+}
+
+/** `--- 18 ---`, `|18|`: nothing but marks behind the figure. */
+function onlyMarks(reading: Reading, limit: number): boolean {
+  let at = reading.at + 1;
+  while (at < limit && at < reading.at + 8 && isSeparator(reading.lexes[at]!)) at += 1;
+  return at >= limit;
 }
 
 /** Whether figures behind this separator are a total and not the next work. */
@@ -41,6 +56,7 @@ export function isTotalHere(
   const next = peek(reading, 1);
   if (isWord(peek(reading, 2), 'in', 'on', 'around', 'across', 'to', 'each')) return false;
   if (ends) return true;
+  if (isWord(peek(reading, 2), 'total')) return true;
   if (separator === ',' && !isWord(next, 'st')) return false;
   if (isWord(next, 'st'))
     return isClosed(items) || separator === '-' || separator === '.' || separator === ':' || separator === ';'
@@ -52,7 +68,8 @@ export function isTotalHere(
 export function endsSoon(reading: Reading, ahead: number): boolean {
   for (let i = ahead; i < ahead + 12; i += 1) {
     const lex = peek(reading, i);
-    if (lex.kind === 'end' || isMark(lex, '.') || isWord(lex, 'join', 'turn', 'total', 'round', 'row')) return true;
+    if (lex.kind === 'end' || isMark(lex, '.') || isWord(lex, 'join', 'turn', 'total', 'round', 'row', 'remain'))
+      return true;
     if (isPlain(lex, 'fasten', 'fo')) return true;
     if (
       !isMark(lex, ',') &&
@@ -81,7 +98,7 @@ export function isClosed(items: readonly Item[]): boolean {
 export function bareEnd(reading: Reading, limit: number, items: readonly Item[]): boolean {
   if (peek(reading).kind !== 'num' || !hasWork(items)) return false;
   const next = peek(reading, 1);
-  const atEnd = reading.at + 1 === limit || (isMark(next, '.') && reading.at + 2 >= limit);
+  const atEnd = onlyMarks(reading, limit);
   const withUnit = isWord(next, 'st') && (reading.at + 2 >= limit || isMark(peek(reading, 2), '.')) && isClosed(items);
   return (atEnd || withUnit) && readBareTotal(reading, limit, reading.at);
 }

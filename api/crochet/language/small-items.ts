@@ -34,14 +34,27 @@ export function readSkip(reading: Reading): Item | null {
 /** `6x (sc, inc)`, `6 × inc`, `6 times (…)`. */
 export function readLeadingTimes(reading: Reading, limit: number): Item[] | null {
   const from = reading.at;
-  const n = readSized(reading);
-  if (!n) return null;
-  if (isTimesSign(peek(reading)) || isWord(peek(reading), 'times')) {
+  if (isWord(peek(reading), 'rep') && peek(reading, 1).kind === 'num' && isWord(peek(reading, 2), 'times'))
     reading.at += 1;
-    if (isMark(peek(reading), ':')) reading.at += 1;
+  const n = readSized(reading);
+  if (!n) {
+    reading.at = from;
+    return null;
+  }
+  const open = reading.closes.get(reading.at);
+  const isBare =
+    open !== undefined && open < limit && reading.lexes.slice(reading.at, open).some((lex) => lex.kind === 'stitch');
+  if (isBare || isTimesSign(peek(reading)) || isWord(peek(reading), 'times')) {
+    if (!isBare) reading.at += 1;
+    if (isMark(peek(reading), ':') && !isBare) {
+      reading.at += 1;
+      const group = timesOfRest(reading, from, limit, n);
+      if (group) return [group];
+    }
     const next = peek(reading);
     const close = reading.closes.get(reading.at);
-    if (close !== undefined && close < limit) {
+    const isWork = close !== undefined && reading.lexes.slice(reading.at, close).some((lex) => lex.kind === 'stitch');
+    if (close !== undefined && close < limit && isWork) {
       const mark = next.text as '(' | '[' | '{';
       reading.at += 1;
       const inner = readItems(reading, close);
@@ -59,6 +72,57 @@ export function readLeadingTimes(reading: Reading, limit: number): Item[] | null
   }
   reading.at = from;
   return null;
+}
+
+/**
+ * `starting in 2nd ch from hook`, `beginning with the 4th ch`: the chains before it are passed over. Stands before the
+ * stitches, whether it was said before or after them.
+ */
+export function readHookStart(reading: Reading): Item | null {
+  const from = reading.at;
+  if (!isPlain(peek(reading), 'start', 'starting', 'begin', 'commencing') && !isWord(peek(reading), 'first'))
+    return null;
+  reading.at += 1;
+  takeAll(reading, 'in', 'on', 'from', 'with', 'the');
+  const nth = peek(reading);
+  if (nth.kind === 'ord' && peek(reading, 1).kind === 'stitch' && peek(reading, 1).text === 'ch' && nth.value > 1) {
+    reading.at += 2;
+    takeAll(reading, 'from', 'the', 'hook');
+    return { type: 'skip', span: spanFrom(reading, from), n: [nth.value - 1], of: { what: 'ch', which: 'first' } };
+  }
+  reading.at = from;
+  return null;
+}
+
+/** `MR 6`, `magic ring, 6x`: a ring and a number alone, which are stitches in it. */
+export function readRingCount(reading: Reading): Work | null {
+  if (!isWord(peek(reading), 'ring')) return null;
+  const from = reading.at;
+  const skip = isMark(peek(reading, 1), ',') || isMark(peek(reading, 1), '-') || isMark(peek(reading, 1), ':') ? 2 : 1;
+  const number = peek(reading, skip);
+  const tail = isTimesSign(peek(reading, skip + 1)) ? 1 : 0;
+  if (number.kind !== 'num' || !isSeparatorOrEnd(reading, skip + 1 + tail)) return null;
+  reading.at += skip + 1 + tail;
+  return {
+    type: 'work',
+    span: spanFrom(reading, from),
+    stitch: reading.stitch ?? 'sc',
+    per: [number.value],
+    times: times(ONE),
+    into: { what: 'ring', which: 'next' },
+    loops: null,
+    glued: false,
+    multiplied: false,
+  };
+}
+
+/** `6 times: sc, inc`: all that follows, up to its total. */
+function timesOfRest(reading: Reading, from: number, limit: number, n: Sized): Item | null {
+  if (reading.closes.has(reading.at)) return null;
+  const items = readItems(reading, limit);
+  return items.some((item) => item.type === 'work')
+    ? { type: 'group', span: spanFrom(reading, from), items, times: times(n), into: null, mark: '(', stop: null }
+    : null;
 }
 
 export const isColour = (reading: Reading): boolean =>

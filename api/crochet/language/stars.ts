@@ -1,5 +1,5 @@
 import { type Group, type Item } from './tree.ts';
-import { isMark, isPlain, isWord, peek, take, takeAll, type Reading } from './reading.ts';
+import { isMark, isPlain, isWord, peek, spanFrom, take, takeAll, type Reading } from './reading.ts';
 import { times } from './times.ts';
 import { isGroupAfterAll, totalBetween } from './totals.ts';
 import { finishGroup, hasWork } from './groups.ts';
@@ -27,6 +27,8 @@ export function readStars(reading: Reading, limit: number): Item[] {
     if (isWord(again, 'rep') && (isMark(peek(reading), ',') || isMark(peek(reading), ';'))) reading.at += 1;
   }
   if (!hasWork(items)) return items;
+  const opened = end.kind === 'open' ? timesOfLast(items) : null;
+  if (opened) return [{ type: 'group', span: spanFrom(reading, from), ...opened, into: null, mark: '*', stop: null }];
   const group = finishGroup(reading, from, lifted(items), '*', stop);
   const last = items.at(-1);
   const ownFill =
@@ -37,6 +39,13 @@ export function readStars(reading: Reading, limit: number): Item[] {
     !last.into;
   const whole: Group = ownFill ? { ...group, times: last.times } : group;
   return [withEnding(reading, whole)];
+}
+
+/** `*sc, inc x6`: the times of a star that was never closed stand behind its last stitch. */
+function timesOfLast(items: readonly Item[]): Pick<Group, 'items' | 'times'> | null {
+  const last = items.at(-1);
+  if (items.length < 2 || last?.type !== 'work' || !last.multiplied || last.times.type !== 'n') return null;
+  return { items: [...items.slice(0, -1), { ...last, times: times([1]), multiplied: false }], times: last.times };
 }
 
 /** A star that was never closed takes the `around` of its last stitch for itself. */

@@ -1,4 +1,5 @@
 import { type Item, type Step } from './tree.ts';
+import { totalBetween } from './totals.ts';
 import { isMark, isPlain, isSeparator, isWord, peek, spanFrom, take, takeAll, type Reading } from './reading.ts';
 
 /** Verbs that begin something done which adds no stitch; figures in such a clause are no counts. */
@@ -38,6 +39,7 @@ export function takeClause(reading: Reading, limit: number, stops: readonly stri
     if (lex.kind === 'mark' && stops.includes(lex.text)) return;
     const close = isMark(lex, '(') || isMark(lex, '[') || isMark(lex, '{') ? reading.closes.get(reading.at) : undefined;
     if (close !== undefined && close < limit && isTotalBracket(reading, reading.at, close)) return;
+    if (close !== undefined && close < limit && totalBetween(reading, reading.at + 1, close)) return;
     if (isMark(lex, '*') || isMark(lex, '**') || isMark(lex, '=')) return;
     if (isMark(lex, '-') && !lex.glued && reading.lexes[reading.at + 1]!.kind === 'num') return;
     reading.at = close !== undefined && close < limit ? close + 1 : reading.at + 1;

@@ -16,6 +16,8 @@ export interface TargetRead {
   readonly also: Target | null;
   /** `each of next 2`: what is counted goes into each. */
   readonly each?: true;
+  /** Said with `over`: the places are what is used up. */
+  readonly over?: true;
   /** Only the loops were named (`in BLO`), no place. */
   readonly loopsOnly?: true;
 }
@@ -58,6 +60,16 @@ function place(reading: Reading): TargetRead | null {
   if (isPlain(lex, 'it', 'there', 'that', 'them')) {
     reading.at += 1;
     return plainTarget('other', 'same');
+  }
+  if (isPlain(lex, 'both')) {
+    reading.at += 1;
+    readNoun(reading);
+    return { ...plainTarget('st', 'next', [2]), each: true };
+  }
+  if (isPlain(lex, 'others') || (isWord(lex, 'other') && isWord(peek(reading, 1), 'st'))) {
+    reading.at += 1;
+    readNoun(reading);
+    return plainTarget('st', 'each', null, true);
   }
   if (isPlain(lex, 'all')) {
     reading.at += 1;

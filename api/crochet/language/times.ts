@@ -36,6 +36,11 @@ export function readFill(reading: Reading): Times | null {
         continue;
       }
     }
+    const rest: Times | null = fill === null ? readRest(reading) : null;
+    if (rest) {
+      fill = rest;
+      continue;
+    }
     const until = readUntil(reading);
     if (until) {
       fill = until;
@@ -46,6 +51,29 @@ export function readFill(reading: Reading): Times | null {
   }
   if (!fill) reading.at = start;
   return fill;
+}
+
+/** `sc the rest`, `rest of the way around`, `in all but the last 2 sts`. */
+function readRest(reading: Reading): Times | null {
+  const start = reading.at;
+  if (take(reading, 'allbut')) {
+    takeAll(reading, 'the');
+    if (take(reading, 'last')) {
+      const n = readSized(reading) ?? [1];
+      const noun = readNoun(reading);
+      return { type: 'fill', leave: n, leaveOf: noun ? { ...noun, which: 'last' } : null, to: null };
+    }
+  }
+  reading.at = start;
+  takeAll(reading, 'the');
+  if (take(reading, 'remain')) {
+    while (isPlain(peek(reading), 'way') || isWord(peek(reading), 'of', 'the', 'around', 'across', 'round', 'row'))
+      reading.at += 1;
+    const next = peek(reading);
+    if (next.kind === 'end' || next.kind === 'mark' || isWord(next, 'join', 'turn', 'and')) return FILL;
+  }
+  reading.at = start;
+  return null;
 }
 
 function isRoundAfter(reading: Reading, ahead: number): boolean {
@@ -139,13 +167,18 @@ function readGoal(reading: Reading): Target | null {
  */
 export function readTimes(reading: Reading): Times | null {
   const start = reading.at;
-  const repeated = take(reading, 'rep');
-  const starred = repeated && skipFromStar(reading);
-  if (repeated) takeAll(reading, 'the', 'in', 'this');
+  const said = take(reading, 'rep');
+  const starred = (said || isFromStar(reading)) && skipFromStar(reading);
+  const repeated = said || starred;
+  if (repeated) {
+    takeEmptyBrackets(reading);
+    takeAll(reading, 'the', 'in', 'this');
+  }
   const fillFirst = readFill(reading);
   if (fillFirst) return fillFirst;
-  takeAll(reading, 'for', 'a', 'total', 'of', 'the', 'in');
-  const inAll = reading.lexes[reading.at - 1]?.text === 'total' || reading.lexes[reading.at - 2]?.text === 'total';
+  if (isPlain(peek(reading), 'for')) reading.at += 1;
+  takeAll(reading, 'total', 'of', 'the', 'in');
+  const inAll = isWord(reading.lexes[reading.at - 1]!, 'total') || reading.lexes[reading.at - 2]?.text === 'total';
   const more = readMore(reading);
   if (more) return times(more.map((n) => n + 1));
   const multiple = readMultiple(reading);
@@ -159,6 +192,15 @@ export function readTimes(reading: Reading): Times | null {
   if (repeated) return FILL;
   reading.at = start;
   return null;
+}
+
+/** `(sc, inc) from * around`, with its *repeat* left out. */
+const isFromStar = (reading: Reading): boolean => isWord(peek(reading), 'from') && isMark(peek(reading, 1), '*');
+
+/** `rep ( ) 6 times`, `rep [] around`: the brackets meant, empty. */
+function takeEmptyBrackets(reading: Reading): void {
+  const isOpen = isMark(peek(reading), '(') || isMark(peek(reading), '[');
+  if (isOpen && reading.closes.get(reading.at) === reading.at + 1) reading.at += 2;
 }
 
 /** `3 more times`, `3 times more`, `twice more`, `once more`, `5 more`. */

@@ -10,9 +10,12 @@ export interface Token {
   readonly glued: boolean;
   /** A line break stands before it. */
   readonly broken: boolean;
+  /** It begins with a capital. */
+  readonly capital: boolean;
 }
 
 const isDigit = (code: number): boolean => code >= 48 && code <= 57;
+const isUpper = (code: number): boolean => code >= 65 && code <= 90;
 const isLetter = (code: number): boolean =>
   (code >= 97 && code <= 122) || (code > 127 && code !== 0xd7 && code !== 0xbd && code !== 0xbc && code !== 0xbe);
 
@@ -27,7 +30,8 @@ export function tokensOf(text: string): Token[] {
   let broken = false;
   let last = 0;
   const push = (kind: Token['kind'], start: number, end: number, word = plain.slice(start, end)) => {
-    tokens.push({ kind, text: word, start, end, glued: tokens.length > 0 && last === start, broken });
+    const capital = kind === 'word' && text[start] !== plain[start] && isUpper(text.charCodeAt(start));
+    tokens.push({ kind, text: word, start, end, glued: tokens.length > 0 && last === start, broken, capital });
     broken = false;
     last = end;
   };

@@ -45,6 +45,12 @@ const PLAIN_FILLER = new Set([
   'all',
   's',
   'r',
+  'at',
+  'this',
+  'point',
+  'has',
+  'will',
+  'be',
 ]);
 
 /**
@@ -60,14 +66,19 @@ export function totalBetween(reading: Reading, from: number, to: number): Kinds 
   if (several && several.length > 1) return { sts: several };
   while (at < to) {
     const lex = reading.lexes[at]!;
-    if (lex.kind === 'mark' && [',', ';', '+', '=', '>', '-', '.', ':', '&', '/'].includes(lex.text)) {
+    if (lex.kind === 'mark' && ',;+=>-.:&/~"|)]}'.includes(lex.text)) {
       at += 1;
       continue;
     }
     if (
-      isWord(lex, 'and', ...FILLER.filter((word) => word !== 'the' || lex.end - lex.start > 1)) ||
+      isWord(lex, 'and', ...FILLER.filter((word) => word !== 'the' || isArticle(reading, at))) ||
       (lex.kind === 'word' && PLAIN_FILLER.has(lex.text))
     ) {
+      at += 1;
+      continue;
+    }
+    // `at this point` is no group that is counted.
+    if (isWord(lex, 'group') && isPlain(reading.lexes[at - 1]!, 'this')) {
       at += 1;
       continue;
     }
@@ -99,6 +110,12 @@ export function totalBetween(reading: Reading, from: number, to: number): Kinds 
     return null;
   }
   return figures > 0 ? kinds : null;
+}
+
+/** `the`, and the `a` of `18 stitches a row`, but not colour A. */
+function isArticle(reading: Reading, at: number): boolean {
+  const lex = reading.lexes[at]!;
+  return lex.end - lex.start > 1 || isWord(reading.lexes[at + 1]!, 'round', 'row', 'total');
 }
 
 function sizedAt(reading: Reading, at: number, to: number): { figures: number[]; after: number } {

@@ -1,4 +1,5 @@
 import { type Sized, type Times, type Work } from './tree.ts';
+import { stitchOf } from '../stitches.ts';
 import { ONE } from './amounts.ts';
 import { type TargetRead } from './target.ts';
 import { FILL, times } from './times.ts';
@@ -45,4 +46,13 @@ export function amounts(
     times: times(count && more ? count.map((n, i) => n * (more[i] ?? more[0]!)) : (count ?? more ?? ONE)),
     into,
   };
+}
+
+/** `dec over next 2 sts`, `inv dec in next 2 sts`: the stitches that are drawn together, not so many decreases. */
+export function drawnInto(key: string, found: Amounts, target: TargetRead | null): Amounts {
+  const uses = stitchOf(key)?.family === 'decrease' ? (stitchOf(key)?.uses ?? 2) : 0;
+  const n = target?.count?.[0] ?? 0;
+  const isPlace = target?.target.what === 'st' && (target.target.which === 'next' || target.target.which === 'first');
+  if (uses < 2 || !isPlace || target.each || found.per[0] !== 1 || n % uses !== 0) return found;
+  return n === uses || target.over ? { ...found, times: times([n / uses]), into: null } : found;
 }

@@ -2,10 +2,11 @@ import { type Item, type Loops, type Sized, type Work } from './tree.ts';
 import { stitchOf } from '../stitches.ts';
 import { ONE, readMultiple, readSized } from './amounts.ts';
 import { isMark, isPlain, isWord, peek, spanFrom, take, takeAll, type Reading } from './reading.ts';
-import { readTarget, type TargetRead } from './target.ts';
+import { readInto } from './into.ts';
+import { readTarget } from './target.ts';
 import { readFill, times } from './times.ts';
 import { chain } from './chain.ts';
-import { amounts } from './work-amounts.ts';
+import { amounts, drawnInto } from './work-amounts.ts';
 import { suffix, readEdge, readThrough, readTogether, belowWords } from './work-tails.ts';
 import { readLoops } from './loops.ts';
 
@@ -81,14 +82,17 @@ function placed(
   let loops = lead;
   let after: Sized | null = null;
   let isBehind = false;
+  let isMultiple = false;
   belowWords(reading);
   if (!before) {
     if (isMark(peek(reading), '-') && peek(reading, 1).kind === 'num' && peek(reading, 1).glued) reading.at += 1;
     after = readMultiple(reading);
+    isMultiple = after !== null;
     isBehind = after === null && key === 'dec';
     after ??= suffix(reading);
   }
   const more = before ? readMultiple(reading) : null;
+  if (isMark(peek(reading), '-') && isWord(peek(reading, 1), 'blo', 'flo', 'third')) reading.at += 1;
   loops ??= readLoops(reading);
   belowWords(reading);
   const through = readThrough(reading);
@@ -124,11 +128,11 @@ function placed(
     stitch,
     loops,
     glued,
-    multiplied: multiple !== null,
+    multiplied: multiple !== null || isMultiple,
     ...(isBehind && after?.[0] === 2 && !target && !fill && { behind: true as const }),
   };
   const isSeries = before !== null && multiple !== null && !target;
-  const found = amounts(before ?? after, isSeries ? null : multiple, target, fill);
+  const found = drawnInto(key, amounts(before ?? after, isSeries ? null : multiple, target, fill), target);
   const work = { ...base, ...found, per: isIncrease ? found.per.map((n) => n * 2) : found.per };
   const into = through ? { ...(work.into ?? { what: 'st' as const, which: 'next' as const }), through } : work.into;
   const only: Work = edge
@@ -156,55 +160,6 @@ function placed(
   if (target?.also) items.push({ ...work, into: target.also });
   items.push(...conjoined(reading, base, into ? before : null));
   return items;
-}
-
-/** `in next st`, `each st`, and `next 6 sts` or `around` where the preposition is left out. */
-function readInto(reading: Reading): TargetRead | null {
-  const start = reading.at;
-  const prep =
-    isWord(peek(reading), 'in', 'on', 'through') ||
-    isSlipTo(reading) ||
-    (isWord(peek(reading), 'around') && isPost(reading));
-  if (prep) {
-    reading.at += 1;
-    if (isPlain(peek(reading), 'ring') || isWord(peek(reading), 'ring')) takeAll(reading, 'the');
-    const target = readTarget(reading);
-    if (target) return target;
-    reading.at = start;
-    return null;
-  }
-  if (
-    isWord(peek(reading), 'each', 'next', 'same', 'last') ||
-    (isWord(peek(reading), 'first') && isWord(peek(reading, 1), 'st'))
-  ) {
-    const target = readTarget(reading);
-    if (target) return target;
-    reading.at = start;
-  }
-  return null;
-}
-
-/** `sl st to next ch-2 sp`, `sl st to centre of shell`: a slip stitch may go to a place. */
-function isSlipTo(reading: Reading): boolean {
-  if (!isWord(peek(reading), 'to') || reading.lexes[reading.at - 1]?.text !== 'slst') return false;
-  const next = peek(reading, isWord(peek(reading, 1), 'the') ? 2 : 1);
-  return (
-    isWord(next, 'next', 'same', 'centre', 'corner', 'sp', 'sp2', 'first', 'loop') ||
-    (next.kind === 'stitch' && next.text === 'ch') ||
-    next.kind === 'ord'
-  );
-}
-
-/** `fpdc around next dc`, `around the post of each st`. */
-function isPost(reading: Reading): boolean {
-  const next = peek(reading, 1);
-  return (
-    isWord(next, 'next', 'each', 'same', 'first', 'last') ||
-    isPlain(next, 'post') ||
-    (isWord(next, 'the') && (isPlain(peek(reading, 2), 'post') || peek(reading, 2).kind === 'num')) ||
-    next.kind === 'stitch' ||
-    next.kind === 'ord'
-  );
 }
 
 /** `… and in each ch across`, `… and next 2`: the same stitch goes on in another place. */

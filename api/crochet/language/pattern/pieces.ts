@@ -44,10 +44,12 @@ export function piecesOf(
     if (part.type === 'line' && read) {
       const from = part.label?.from ?? null;
       const isChain = foundationOf(read.tree.items, 0) !== null && part.label === null;
+      // A foundation or set-up line without a number stands before round 1 of the same piece.
+      const isSetUp = part.label?.titled === true && last === 0 && (nextNumber(parts, i) ?? 2) <= 1;
       const restarts = from !== null && from <= 1 && last >= 1;
       const chainRestarts = isChain && last >= 1 && nextNumber(parts, i) !== null && nextNumber(parts, i)! <= 1;
       if (current === null || restarts || chainRestarts) current = begin(null, 1, part.start);
-      if (!isChain) last = part.label?.to ?? from ?? last + Math.max(1, part.label?.next ?? 1);
+      if (!isChain && !isSetUp) last = part.label?.to ?? from ?? last + Math.max(1, part.label?.next ?? 1);
       current.lines.push({ part, read });
     } else if (current) current.lines.push({ part: part, read: readLine('', {}) });
   });
@@ -76,14 +78,18 @@ function pieceOf(text: string, draft: Draft, index: number): PieceText {
     const count = Math.max(1, label?.next ?? 1);
     const from = kind === 'foundation' ? null : (label?.from ?? last + 1);
     const open = label !== null && label.from !== null && label.to === null;
+    const isSetUp =
+      label?.titled === true &&
+      last === 0 &&
+      draft.lines.some((line) => line.part.type === 'line' && line.part.label?.from === 1);
     const to = kind === 'foundation' ? null : open ? null : (label?.to ?? last + count);
-    if (kind !== 'foundation') last = to ?? from ?? last + 1;
+    if (kind !== 'foundation' && !isSetUp) last = to ?? from ?? last + 1;
     const end = endOf(text, part.bodyStart, part.end, read);
     return {
       kind,
       label: part.labelText,
-      from,
-      to,
+      from: isSetUp ? 0 : from,
+      to: isSetUp ? 0 : to,
       text: oneLine(text.slice(part.bodyStart, part.end)).trimEnd(),
       textSpan: { start: part.bodyStart, end: part.end },
       span: { start: part.start, end },
