@@ -1,7 +1,7 @@
 import { type Item, type Loops, type Sized, type Work } from './tree.ts';
 import { stitchOf } from '../stitches.ts';
 import { ONE, readMultiple, readSized } from './amounts.ts';
-import { isMark, isPlain, isWord, peek, spanFrom, take, takeAll, type Reading } from './reading.ts';
+import { isMark, isPlain, isWord, peek, spanFrom, take, type Reading } from './reading.ts';
 import { readInto } from './into.ts';
 import { readTarget } from './target.ts';
 import { readFill, times } from './times.ts';
