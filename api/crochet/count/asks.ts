@@ -1,5 +1,5 @@
 import { type Item, type LineTree } from '../language/tree.ts';
-import { allItems } from './base.ts';
+import { allItems } from './tree-walk.ts';
 import { type Judged } from './judge.ts';
 import { openChoices, turned, type Choices } from './readings.ts';
 import { type Ask } from './result.ts';

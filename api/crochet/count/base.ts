@@ -1,8 +1,9 @@
-import { type Item, type Target, type Work } from '../language/tree.ts';
+import { type Item, type Work } from '../language/tree.ts';
 import { stitchOf } from '../stitches.ts';
-import { NOTHING, PLAIN, plainLeft, type Left, type Made } from './places.ts';
+import { NOTHING, plainLeft, type Left } from './places.ts';
 import { firstStitch } from './start.ts';
 import { pick } from './job.ts';
+import { allItems, targetsIn } from './tree-walk.ts';
 
 /** Loops that a back- or front-loop line left free, by line number. */
 export type FreeLoops = ReadonlyMap<number, FreeLoop>;
@@ -12,14 +13,6 @@ export interface FreeLoop {
   readonly loops: 'back' | 'front';
   readonly n: number;
 }
-
-/** Every item at any depth. */
-export function allItems(items: readonly Item[]): Item[] {
-  return items.flatMap((item) => (item.type === 'group' ? [item, ...allItems(item.items)] : [item]));
-}
-
-export const targetsIn = (items: readonly Item[]): Target[] =>
-  allItems(items).flatMap((item) => ((item.type === 'work' || item.type === 'group') && item.into ? [item.into] : []));
 
 /** A chain at the start that the same line works into: `ch 14, sc in 2nd ch from hook and in each ch across`. */
 export function ownChain(items: readonly Item[], size: number): { chains: number; index: number } | null {
@@ -77,9 +70,6 @@ export interface Base {
   readonly told: number | null;
 }
 
-const chainPlaces = (n: number): Made[] =>
-  Array.from({ length: Math.max(0, n) }, (_, i) => ({ ...PLAIN, stitch: 'st', on: [i] }));
-
 /** Places along a chain, once or along both sides, from the chain that the first stitch goes into. */
 export function chainBase(chains: number, items: readonly Item[], isRing: boolean): Base {
   const all = allItems(items);
@@ -98,7 +88,7 @@ export function chainBase(chains: number, items: readonly Item[], isRing: boolea
     (item) => (item.type === 'step' && item.what === 'far') || (item.type === 'work' && item.into?.which === 'far'),
   );
   const n = far ? 2 * places - 1 : places;
-  return { left: { ...NOTHING, made: chainPlaces(n), open: false, count: n }, hook, told: null };
+  return { left: plainLeft(n), hook, told: null };
 }
 
 /** Which chain from the hook the first stitch goes into: the one named, else what its height asks for. */

@@ -1,6 +1,6 @@
 import { type Item } from '../language/tree.ts';
 import { stitchOf } from '../stitches.ts';
-import { allItems } from './base.ts';
+import { allItems } from './tree-walk.ts';
 import { type Job } from './job.ts';
 import { firstStitch, performStart, startOf, type ChainPolicy } from './start.ts';
 import { type Setting } from './work-line.ts';

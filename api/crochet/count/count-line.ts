@@ -11,8 +11,7 @@ import { type State } from './state.ts';
 import { madeOf, workOf } from './tally.ts';
 import { messageOf } from './message.ts';
 import { type ChainPolicy } from './start.ts';
-import { type Setting } from './work-line.ts';
-import { type SizeRun, startFor, runSize } from './runs.ts';
+import { type SizeRun, settingFor, startFor, runSize } from './runs.ts';
 import { type Pass, withUntil, passesOf } from './passes.ts';
 import { lastSpan, countOf, loopsOf, roundsOf, rowsOf } from './told.ts';
 
@@ -57,7 +56,7 @@ export function countLine(line: LineInput, read: ReadLine, state: State, around:
     return unreadLine(line, read, given, spans, state, around);
   }
   const given2 = withUntil(read.tree, given);
-  const sizes = Array.from({ length: around.sizes }, (_, size) => runSize(line, passes, given2, state, around, size));
+  const sizes = Array.from({ length: around.sizes }, (_, size) => runSize(passes, given2, state, around, size));
   return joined(line, read, given2, sizes, passes, state, around);
 }
 
@@ -169,21 +168,13 @@ function unreadLine(
   state: State,
   around: Around,
 ): Counted {
-  const setting: Setting = {
-    left: state.lefts[0]!,
-    ring: around.ring,
-    size: 0,
-    policy: around.policy,
-    own: around.own,
-    stitch: state.stitch,
-    free: around.free,
+  const nothing: Given = { written: null, said: null };
+  const setting = settingFor(state, around, 0, state.lefts[0]!, {
     rows: state.rows,
-    comesBack: around.comesBack,
     label: line.from,
-    blocks: false,
-    sense: around.sense,
-  };
-  const judged = judgeLine(read, { written: null, said: null }, setting, 0);
+    given: nothing,
+  });
+  const judged = judgeLine(read, nothing, setting, 0);
   const count: LineCount = {
     id: line.id,
     verdict: 'unread',

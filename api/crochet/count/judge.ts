@@ -1,7 +1,7 @@
 import { type LineTree, type ReadLine, type Totals } from '../language/tree.ts';
 import { asksOf } from './asks.ts';
 import { compareTotals, type CountedWith } from './compare.ts';
-import { plainLeft } from './places.ts';
+import { MOST, plainLeft } from './places.ts';
 import { mixtures, usualFor, type Choices } from './readings.ts';
 import { type Ask, type Verdict } from './result.ts';
 import { workLine, type LineWork, type Setting } from './work-line.ts';
@@ -44,10 +44,10 @@ export function judgeLine(read: ReadLine, given: Given, setting: Setting, index:
       best = judged;
       bestScore = score;
     }
-    if (score === most && best === judged) break;
+    if ((score === most && best === judged) || judged.work.full) break;
   }
   const attempt = (choices: Choices) => tryReading(read.tree, choices, given, setting, index);
-  return { ...best!, asks: asksOf(read.tree, best!, usual, attempt) };
+  return best!.work.full ? best! : { ...best!, asks: asksOf(read.tree, best!, usual, attempt) };
 }
 
 function scoreOf(judged: Judged): number {
@@ -98,12 +98,26 @@ function totalOf(given: Given, index: number): number | null {
   return figures?.[index] ?? figures?.[0] ?? null;
 }
 
+/** Places that one repeat may take, as far as a base not known is looked for. */
+const WIDEST = 40;
+/** Stitches worked in trying bases, about: large totals are looked for more narrowly. */
+const MOST_TRIED = 10_000;
+
 /** Where the base is not known, the one base that gives the total. */
 function inferBase(tree: LineTree, choices: Choices, given: Given, setting: Setting, index: number): Judged | null {
   const total = totalOf(given, index);
-  if (total === null || total > 2000) return null;
-  for (let n = 1; n <= total * 2; n += 1) {
-    const work = workLine(tree, choices, { ...setting, left: plainLeft(n) });
+  if (total === null || total > MOST) return null;
+  const on = (n: number) => workLine(tree, choices, { ...setting, left: plainLeft(n) });
+  // The more places, the more stitches: near the one base on which so many are made, each is tried.
+  let [low, high] = [0, total * 2];
+  while (low < high) {
+    const middle = Math.floor((low + high) / 2);
+    if (on(middle).tally.sts < total) low = middle + 1;
+    else high = middle;
+  }
+  const wide = Math.min(WIDEST, Math.ceil(MOST_TRIED / Math.max(1, total)));
+  for (let n = Math.max(1, low - wide); n <= low + wide; n += 1) {
+    const work = on(n);
     if (!work.fits || work.tally.sts !== total) continue;
     return {
       ...verdictOf(work, given, index, setting.sense),

@@ -1,6 +1,7 @@
 import { type Item } from '../language/tree.ts';
 import { stitchOf } from '../stitches.ts';
-import { allItems } from './base.ts';
+import { allItems } from './tree-walk.ts';
+import { type Ground } from './ground.ts';
 import { pick, type Job } from './job.ts';
 import { type Place } from './places.ts';
 import { Walker } from './walker.ts';
@@ -13,8 +14,8 @@ export function sideEndOf(items: readonly Item[], places: number, hook: number):
 }
 
 /** Index of the place that travelling slip stitches end on. */
-export function travelled(places: readonly Place[], slips: readonly Item[], size: number): number {
-  const walker = new Walker(places, false);
+export function travelled(ground: Ground, slips: readonly Item[], size: number): number {
+  const walker = new Walker(ground);
   for (const item of slips) {
     if (item.type !== 'work') continue;
     const n = item.times.type === 'n' ? pick(item.times.n, size) : 1;

@@ -5,6 +5,9 @@ import { isMixed, relativeOf, withMore } from './relative.ts';
 import { type State } from './state.ts';
 import { type Around } from './count-line.ts';
 
+/** Rounds that one line may stand for. */
+export const MOST_PASSES = 2000;
+
 /** One pass of a line: a tree and the number of the round it is. */
 export interface Pass {
   readonly n: number;
@@ -26,7 +29,7 @@ export function passesOf(line: LineInput, read: ReadLine, state: State, around: 
   const relative = isMixed(read.tree) ? null : relativeOf(read.tree);
   const range = line.from !== null && line.to !== null && line.to > line.from ? line.to - line.from + 1 : 0;
   if (!relative) {
-    const n = Math.min(Math.max(1, range), 2000);
+    const n = Math.min(Math.max(1, range), MOST_PASSES);
     return Array.from({ length: n }, (_, i) => ({ n: first + i, read, source: null }));
   }
   const lines =
@@ -35,7 +38,7 @@ export function passesOf(line: LineInput, read: ReadLine, state: State, around: 
   if (trees.some((tree) => tree === undefined)) return null;
   const times = relative.times?.[0] ?? 1;
   const until = relative.until === null ? 0 : relative.until - first + 1;
-  const total = Math.min(range || until || lines.length * times, 2000);
+  const total = Math.min(range || until || lines.length * times, MOST_PASSES);
   return Array.from({ length: Math.max(1, total) }, (_, i) => {
     const tree = trees[i % lines.length]!;
     const more = relative.more * (1 + (lines.length === 1 ? i : 0));

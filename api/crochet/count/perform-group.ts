@@ -17,8 +17,18 @@ export function performInto(job: Job, item: Group, need: () => number): void {
     fill(job, target, stopAt(job, item.times.type === 'fill' ? item.times : null, need()), once);
     return;
   }
-  const n = countOf(job, item);
-  for (let i = 0; i < n && !job.walker.full; i += 1) once();
+  repeat(job, countOf(job, item), once);
+}
+
+/** Does the same so often, and no further where it comes to nothing: a hostile number of empty repeats ends at once. */
+function repeat(job: Job, n: number, once: (i: number) => void): void {
+  const { walker } = job;
+  for (let i = 0; i < n && !walker.full; i += 1) {
+    const { at, short } = walker;
+    const worked = walker.walk.length;
+    once(i);
+    if (walker.walk.length === worked && walker.at === at && walker.short === short) return;
+  }
 }
 
 export const countOf = (job: Job, item: Group): number =>
@@ -30,15 +40,15 @@ export const countOf = (job: Job, item: Group): number =>
 
 export function performGroup(job: Job, item: Group, need: () => number, ending: boolean): void {
   const part = item.stop === null ? null : item.items.slice(0, item.stop);
-  const { walker } = job;
   const isFill = item.times.type === 'fill' || (item.times.type === 'unsaid' && job.choices.unsaid === 'fill');
   if (!isFill) {
     const n = countOf(job, item);
     const unit = usesOf(item.items, job);
-    for (let i = 0; i < n && !walker.full; i += 1) {
+    const after = need();
+    repeat(job, n, (i) => {
       const isLast = i === n - 1;
-      perform(job, isLast && part ? part : item.items, isLast ? need() : need() + unit * (n - 1 - i));
-    }
+      perform(job, isLast && part ? part : item.items, isLast ? after : after + unit * (n - 1 - i));
+    });
     return;
   }
   fillGroup(job, item, part, need(), ending);

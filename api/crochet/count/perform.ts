@@ -1,5 +1,6 @@
 import { type Item, type Skip, type Target, type Work } from '../language/tree.ts';
 import { stitchOf } from '../stitches.ts';
+import { MOST } from './places.ts';
 import { isPair } from './readings.ts';
 import { legsOf, pick, usesOf, type Job } from './job.ts';
 import { isRuleSet, performRules } from './rules.ts';
@@ -15,17 +16,18 @@ export function perform(job: Job, items: readonly Item[], rest: number): void {
     performRules(job, items);
     return;
   }
-  items.forEach((item, i) => {
-    const after = items.slice(i + 1);
-    const need = () => rest + usesOf(after, job);
+  for (const [i, item] of items.entries()) {
+    if (job.walker.full) return;
+    job.walker.toil += 1;
+    const need = () => rest + usesOf(items.slice(i + 1), job);
     switch (item.type) {
       case 'work':
-        if (item.stitch === 'ch') performChain(job, item, after);
+        if (item.stitch === 'ch') performChain(job, item, items.slice(i + 1));
         else performWork(job, item, need);
         break;
       case 'group':
         if (item.into && item.into.what !== 'loop') performInto(job, item, need);
-        else performGroup(job, item, need, isEnding(after[0]));
+        else performGroup(job, item, need, isEnding(items[i + 1]));
         break;
       case 'skip':
         performSkip(job, item, need);
@@ -42,7 +44,7 @@ export function perform(job: Job, items: readonly Item[], rest: number): void {
         performStep(job, item);
         break;
     }
-  });
+  }
 }
 
 /** `ending with sc in last st`: the last repeat is cut where these words take over. */
@@ -163,7 +165,7 @@ function workLocal(job: Job, item: Work, per: number): boolean {
   const { local } = job;
   if (!local || local.left < n) return false;
   local.left -= n;
-  for (let i = 0; i < n * per; i += 1) make(job, item.stitch, []);
+  for (let i = 0; i < n * per && !walker.full; i += 1) make(job, item.stitch, []);
   return true;
 }
 
@@ -175,7 +177,7 @@ function performEvery(job: Job, item: Work, target: Target, per: number, rest: n
   if (target.what === 'row-end') {
     fill(job, null, stop, () => {
       const on: number[] = [];
-      for (let i = 0; i < n && !walker.full; i += 1) on.push(...takeOne(job, null, item));
+      for (let i = 0; i < Math.min(n, MOST) && walker.short === 0; i += 1) on.push(...takeOne(job, null, item));
       for (let i = 0; i < per && !walker.full; i += 1) make(job, item.stitch, on.slice(i, i + 1));
     });
     return;

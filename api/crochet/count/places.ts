@@ -44,11 +44,17 @@ export const NOTHING: Left = {
   open: true,
 };
 
+/** Stitches that one line is worked to at most: more is a slip of the key or meant ill, and is said to be too many. */
+export const MOST = 100_000;
+
 /** A row of plain places of which only the number is known. */
 export function plainLeft(n: number): Left {
-  const made = Array.from({ length: Math.max(0, n) }, (_, i): Made => ({ ...PLAIN, on: [i] }));
+  const made = Array.from({ length: placesIn(n) }, (_, i): Made => ({ ...PLAIN, on: [i] }));
   return { ...NOTHING, made, count: n, open: false };
 }
+
+/** How many places are laid out for so many: one more than can be worked is enough to find that they are too many. */
+export const placesIn = (n: number): number => Math.min(Math.max(0, Math.floor(n)), MOST + 1);
 
 export const PLAIN: Made = {
   kind: 'st',
@@ -82,6 +88,17 @@ export interface Named {
   readonly sps: readonly Target[];
 }
 
+const placeOf = (one: Made, kind: Place['kind'], counted: boolean): Place => ({
+  kind,
+  stitch: kind === 'ch' ? 'ch' : one.stitch,
+  chains: one.chains,
+  group: one.group,
+  nth: one.nth,
+  size: one.size,
+  inside: one.inside,
+  counted,
+});
+
 /** Places along what the line before left, in working order, for a line that names these kinds. */
 export function placesOf(left: Left, named: Named): Place[] {
   const places: Place[] = [];
@@ -91,10 +108,14 @@ export function placesOf(left: Left, named: Named): Place[] {
   const wantGaps = named.gap || noSpaces;
   let gaps = 0;
   made.forEach((one, i) => {
-    if (one.kind === 'st') places.push({ ...one, kind: 'st', counted: named.st });
+    if (one.kind === 'st') places.push(placeOf(one, 'st', named.st));
     else if (named.ch) {
-      for (let n = 0; n < one.chains; n += 1) places.push({ ...one, kind: 'ch', stitch: 'ch', counted: true });
-    } else places.push({ ...one, kind: 'sp', counted: named.sps.some((target) => isSpace(target, one, spaces)) });
+      const chain = placeOf(one, 'ch', true);
+      for (let n = 0; n < one.chains && n < MOST; n += 1) places.push(chain);
+    } else {
+      const isNamed = named.sps.some((target) => isSpace(target, one, spaces));
+      places.push(placeOf(one, 'sp', isNamed));
+    }
     const next = made[i + 1] ?? (left.shape === 'ring' ? made[0] : undefined);
     if (wantGaps && next && isGap(one, next, made.length)) {
       places.push({ ...PLAIN, kind: 'gap', counted: true });

@@ -167,12 +167,12 @@ export const turned = (choices: Choices, key: Key): Choices => ({
   [key]: choices[key] === USUAL[key] ? OTHER[key] : USUAL[key],
 });
 
-/** Every mixture of what is open, the usual one first, then one turned at a time, then two. */
-export function mixtures(tree: LineTree, usual: Choices): Choices[] {
+/** Every mixture of what is open, the usual one first, then one turned at a time, then two. Made only as asked for. */
+export function* mixtures(tree: LineTree, usual: Choices): Generator<Choices> {
+  yield usual;
   const open = openChoices(tree);
-  const one = open.map((key) => turned(usual, key));
-  const two = open.flatMap((key, i) => open.slice(i + 1).map((other) => turned(turned(usual, key), other)));
-  return [usual, ...one, ...two];
+  for (const key of open) yield turned(usual, key);
+  for (const [i, key] of open.entries()) for (const other of open.slice(i + 1)) yield turned(turned(usual, key), other);
 }
 
 /** The tree with `tail` and `whole` taken as chosen. */

@@ -60,7 +60,7 @@ export function performRules(job: Job, items: readonly Item[]): void {
     walker.last = at;
     const { item } = rule;
     const per = item.type === 'work' ? pick(item.per, job.size) : 1;
-    for (let i = 0; i < per; i += 1) {
+    for (let i = 0; i < per && !walker.full; i += 1) {
       if (item.type === 'work') make(job, item.stitch, [at]);
       else for (const inner of item.items) workInner(job, inner, at);
     }
@@ -75,5 +75,5 @@ function workInner(job: Job, inner: Item, at: number): void {
   if (inner.type !== 'work') return;
   const n = (inner.times.type === 'n' ? pick(inner.times.n, job.size) : 1) * pick(inner.per, job.size);
   if (inner.stitch === 'ch') job.walker.chain(n);
-  else for (let i = 0; i < n; i += 1) make(job, inner.stitch, [at]);
+  else for (let i = 0; i < n && !job.walker.full; i += 1) make(job, inner.stitch, [at]);
 }

@@ -1,12 +1,11 @@
 import { type ReadLine } from '../language/tree.ts';
-import { type LineInput } from './input.ts';
 import { judgeLine, type Given, type Judged } from './judge.ts';
 import { type Left } from './places.ts';
 import { type LineCount, type Verdict } from './result.ts';
 import { leftOfTotals, type State } from './state.ts';
 import { type Setting } from './work-line.ts';
 import { type Around, worse } from './count-line.ts';
-import { rowsUntil, type Pass } from './passes.ts';
+import { MOST_PASSES, rowsUntil, type Pass } from './passes.ts';
 
 export interface SizeRun {
   readonly judged: readonly Judged[];
@@ -15,16 +14,9 @@ export interface SizeRun {
   readonly follows: LineCount['follows'];
 }
 
-export function runSize(
-  line: LineInput,
-  passes: readonly Pass[],
-  given: Given,
-  state: State,
-  around: Around,
-  size: number,
-): SizeRun {
+export function runSize(passes: readonly Pass[], given: Given, state: State, around: Around, size: number): SizeRun {
   const shapedRows = rowsUntil(passes[0]!.read.tree, size);
-  if (shapedRows) return runUntil(line, passes[0]!, given, state, around, size, shapedRows);
+  if (shapedRows) return runUntil(passes[0]!, given, state, around, size, shapedRows);
   let start = startFor(state, size);
   let run = runPasses(passes, given, start.left, state, around, size);
   // What the line before made does not fit: perhaps its total does.
@@ -66,6 +58,10 @@ export function otherStarts(state: State, size: number): Start[] {
   return starts;
 }
 
+/** Stitches worked in all rounds of one line together, beyond which the rest of them is not worked. */
+const MOST_WORKED = 400_000;
+
+/** Works the rounds of a line one after another. Rounds that can only come out as the one before are not worked again. */
 export function runPasses(
   passes: readonly Pass[],
   given: Given,
@@ -81,43 +77,63 @@ export function runPasses(
   const none: Given = { written: null, said: null };
   let verdict: Verdict = 'no-total';
   let isEven = false;
-  passes.forEach((pass, i) => {
-    const setting: Setting = {
-      left,
-      ring: around.ring,
-      size,
-      policy: around.policy,
-      own: around.own,
-      stitch: state.stitch,
-      free: around.free,
-      rows: state.rows + i,
-      comesBack: around.comesBack,
-      label: pass.n,
-      blocks: given.written?.group !== undefined,
-      sense: around.sense,
-    };
+  let worked = 0;
+  for (const [i, pass] of passes.entries()) {
+    const setting = settingFor(state, around, size, left, { rows: state.rows + i, label: pass.n, given });
     const isLast = i === passes.length - 1;
+    const index = perRound ? i : size;
     // Where every round is the same, its total is that of each; where they shape, of the last.
-    const isGiven = perRound || isLast || isEven;
-    const one = judgeLine(pass.read, isGiven ? given : none, setting, perRound ? i : size);
-    if (i === 0 && passes.length > 1)
+    let one = judgeLine(pass.read, perRound || isLast || isEven ? given : none, setting, index);
+    if (i === 0 && passes.length > 1) {
       isEven = one.work.tally.sts === one.work.base && passes.every((other) => other.read === pass.read);
-    if (i === 0 && isEven) {
-      const again = judgeLine(pass.read, given, setting, perRound ? i : size);
-      judged.push(again);
-      verdict = worse(verdict, again.verdict);
-      left = again.work.left;
-      return;
+      if (isEven) one = judgeLine(pass.read, given, setting, index);
     }
     judged.push(one);
     verdict = worse(verdict, one.verdict);
+    if (isEven && !isLast && i > 0 && isSameLeft(left, one.work.left)) {
+      while (judged.length < passes.length) judged.push(one);
+      return { judged, verdict, left: one.work.left };
+    }
     left = one.work.left;
-  });
+    worked += one.work.walk.length;
+    if (one.work.full) break;
+    if (worked > MOST_WORKED && !isLast) {
+      judged.push({ ...one, verdict: 'does-not-fit', work: { ...one.work, fits: false, full: true } });
+      verdict = worse(verdict, 'does-not-fit');
+      break;
+    }
+  }
   return { judged, verdict, left };
 }
 
+/** What a line, or one round of it, finds around it. */
+export function settingFor(
+  state: State,
+  around: Around,
+  size: number,
+  left: Left,
+  { rows, label, given }: { readonly rows: number; readonly label: number | null; readonly given: Given },
+): Setting {
+  return {
+    left,
+    ring: around.ring,
+    size,
+    policy: around.policy,
+    own: around.own,
+    stitch: state.stitch,
+    free: around.free,
+    rows,
+    comesBack: around.comesBack,
+    label,
+    blocks: given.written?.group !== undefined,
+    sense: around.sense,
+  };
+}
+
+const isSameLeft = (one: Left, other: Left): boolean =>
+  one.made.length === other.made.length && JSON.stringify(one) === JSON.stringify(other);
+
 export function runUntil(
-  line: LineInput,
   pass: Pass,
   given: Given,
   state: State,
@@ -128,12 +144,13 @@ export function runUntil(
   const start = startFor(state, size);
   const from = start.left.count ?? start.left.made.length;
   const shapings = (rows.until - from) / rows.change;
-  const n = Number.isInteger(shapings) && shapings > 0 && shapings < 500 ? (shapings - 1) * rows.every + 1 : 1;
+  const whole = Number.isInteger(shapings) && shapings > 0 ? (shapings - 1) * rows.every + 1 : 1;
+  const n = whole <= MOST_PASSES ? whole : 1;
   const plain: ReadLine = {
     ...pass.read,
     tree: {
       ...pass.read.tree,
-      items: [{ type: 'straight', span: line.text ? pass.read.tree.span : pass.read.tree.span, open: false }],
+      items: [{ type: 'straight', span: pass.read.tree.span, open: false }],
     },
   };
   const passes = Array.from({ length: n }, (_, i) => ({

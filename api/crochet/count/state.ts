@@ -1,5 +1,5 @@
 import { type Totals } from '../language/tree.ts';
-import { NOTHING, PLAIN, plainLeft, type Left, type Made } from './places.ts';
+import { MOST, NOTHING, PLAIN, plainLeft, type Left, type Made } from './places.ts';
 import { type Verdict } from './result.ts';
 
 /** What is handed from line to line of a piece. One `Left` a size. */
@@ -35,7 +35,7 @@ export function leftOfTotals(totals: Totals, index: number): Left | null {
   let known = false;
   for (const [kind, figures] of Object.entries(totals)) {
     const n = figures[index] ?? figures[0];
-    if (n === undefined || n > 20_000) continue;
+    if (n === undefined || n > MOST) continue;
     const length = /^ch-(\d+) sp$/.exec(kind);
     if (length || kind === 'sp') for (let i = 0; i < n; i += 1) spaces.push(length ? Number(length[1]) : 1);
     else if (kind === 'inc' || kind === 'dec' || kind === 'group' || kind === 'corner' || kind === 'shell') continue;

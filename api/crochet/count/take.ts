@@ -1,6 +1,6 @@
 import { type Group, type Item, type Target, type Work } from '../language/tree.ts';
 import { pick, type Job } from './job.ts';
-import { isAt } from './places.ts';
+import { isAt, MOST } from './places.ts';
 import { endOf } from './fill.ts';
 
 /** Takes the places of one stitch: several for a stitch drawn together. */
@@ -8,7 +8,12 @@ export function takeOne(job: Job, target: Target | null, item: { readonly span: 
   const on: number[] = [];
   for (let leg = 0; leg < legs; leg += 1) {
     const at = job.walker.take(leg === 0 ? target : target?.what === 'sp' ? target : null, item.span);
-    if (at >= 0) on.push(at);
+    if (at < 0) {
+      job.walker.short += legs - leg - 1;
+      break;
+    }
+    on.push(at);
+    if (leg > MOST) break;
   }
   return on;
 }
@@ -68,6 +73,7 @@ export function takeNth(job: Job, item: { readonly span: Item['span'] }, target:
   if (target.of !== undefined || target.which === 'centre') return takeOne(job, target, item);
   // `in 2nd st` at the start is told from the edge, later from where the hook is.
   const ahead = (target.n ?? 1) - 1 - (walker.at <= 1 ? walker.at : 0);
-  for (let i = 0; i < ahead; i += 1) walker.take({ ...target, which: 'next' }, item.span);
+  for (let i = 0; i < ahead && i < MOST && walker.short === 0; i += 1)
+    walker.take({ ...target, which: 'next' }, item.span);
   return takeOne(job, { ...target, which: 'next' }, item);
 }

@@ -50,11 +50,14 @@ export function grouped(made: readonly Made[], ring: boolean): Made[] {
       runs[0] = [...last, ...chains, ...first];
     }
   }
-  const out = made.map((one) => ({ ...one }));
+  const out = [...made];
   runs.forEach((indices, group) => {
-    const stitches = indices.filter((i) => made[i]!.kind === 'st');
-    stitches.forEach((i, nth) => (out[i] = { ...out[i]!, group, nth: nth + 1, size: stitches.length }));
-    for (const i of indices) if (made[i]!.kind === 'chs') out[i] = { ...out[i]!, inside: true };
+    const size = indices.reduce((n, i) => (made[i]!.kind === 'st' ? n + 1 : n), 0);
+    let nth = 0;
+    for (const i of indices) {
+      const one = made[i]!;
+      out[i] = one.kind === 'chs' ? { ...one, inside: true } : { ...one, group, nth: (nth += 1), size };
+    }
   });
   return out;
 }

@@ -1,6 +1,6 @@
 import { type Span } from '../span.ts';
 import { type LineTree, type ReadLine, type Totals } from '../language/tree.ts';
-import { allItems } from './base.ts';
+import { allItems } from './tree-walk.ts';
 import { type Given, type Judged } from './judge.ts';
 import { type LineCount, type RoundCount, type RowCount } from './result.ts';
 import { madeOf, workOf } from './tally.ts';

@@ -1,6 +1,7 @@
 import { type Span } from '../span.ts';
 import { type Target } from '../language/tree.ts';
-import { isAt, spacesOf, type Made, type Place, type Spaces } from './places.ts';
+import { type Ground } from './ground.ts';
+import { isAt, MOST, type Made, type Place, type Spaces } from './places.ts';
 import { type Stitch } from './result.ts';
 
 /** One entry of the walk with what the tally needs beside. */
@@ -19,9 +20,6 @@ export interface Bookmark {
   readonly skipped: readonly number[];
   readonly fault: Span | null;
 }
-
-/** Stitches in a line at most. */
-const MOST = 20_000;
 
 /** Hands on the work: a cursor along the places, and what has been made so far. */
 export class Walker {
@@ -42,16 +40,16 @@ export class Walker {
   fault: Span | null = null;
   /** Places kept back on purpose at the end. */
   kept = 0;
+  /** Words of the line followed so far, over and over in a repeat. */
+  toil = 0;
   readonly counted: readonly number[];
   readonly spaces: Spaces;
 
-  constructor(places: readonly Place[], open: boolean) {
+  constructor({ places, counted, spaces, open }: Ground) {
     this.places = places;
     this.open = open;
-    const counted = [0];
-    for (const place of places) counted.push(counted.at(-1)! + (place.counted ? 1 : 0));
     this.counted = counted;
-    this.spaces = spacesOf(places);
+    this.spaces = spaces;
   }
 
   mark(): Bookmark {
@@ -123,7 +121,7 @@ export class Walker {
 
   /** More than any line has: a hostile figure, not worked further. */
   get full(): boolean {
-    return this.walk.length > MOST;
+    return this.walk.length > MOST || this.toil > MOST * 6;
   }
 
   /** A stitch made on these places. */

@@ -1,11 +1,13 @@
 import { type Span } from '../span.ts';
 import { type Item, type LineTree, type Target } from '../language/tree.ts';
-import { allItems, chainBase, foundationOf, ownChain, ownRing, targetsIn, type FreeLoops } from './base.ts';
+import { chainBase, foundationOf, ownChain, ownRing, type FreeLoops } from './base.ts';
+import { allItems, isAlongRows, takesBack } from './tree-walk.ts';
 import { aimsIn, namedIn, travelling } from './named.ts';
 import { type Job } from './job.ts';
 import { type CountedWith } from './compare.ts';
 import { perform } from './perform.ts';
-import { NOTHING, placesOf, plainLeft, type Left, type Named } from './places.ts';
+import { groundOf, groundTurned, OPEN_GROUND } from './ground.ts';
+import { NOTHING, placesIn, plainLeft, type Left, type Named } from './places.ts';
 import { shaped, type Choices } from './readings.ts';
 import { type ChainPolicy } from './start.ts';
 import { grouped, tallyOf, type Tally } from './tally.ts';
@@ -50,6 +52,8 @@ export interface LineWork {
   /** Whether a starting chain counts was settled by nothing. */
   readonly chainUnsaid: boolean;
   readonly isFoundation: boolean;
+  /** More stitches than a line can have: not worked to its end. */
+  readonly full: boolean;
 }
 
 /** Works a line on what the line before left. Pure; linear in the stitches made. */
@@ -83,18 +87,19 @@ export function workLine(tree: LineTree, choices: Choices, setting: Setting): Li
       true,
     );
   }
-  if (
-    left.open &&
-    allItems(items).some((item) => (item.type === 'work' || item.type === 'group') && item.into?.what === 'row-end') &&
-    setting.rows > 0
-  ) {
+  if (isAlongRows(items) && setting.rows > 0) {
     return onPlaces(items, choices, { ...setting, left: plainLeft(setting.rows) }, 0, null);
   }
   return onPlaces(items, choices, setting, 0, null);
 }
 
 function foundationWork(left: Left): LineWork {
-  const walk = Array.from({ length: left.chains }, (): Step => ({ stitch: 'ch', on: [], makes: 0, colour: null }));
+  const walk = Array.from({ length: placesIn(left.chains) }, (): Step => ({
+    stitch: 'ch',
+    on: [],
+    makes: 0,
+    colour: null,
+  }));
   const tally = { ...tallyOf([]), sts: left.chains };
   return {
     fits: true,
@@ -109,6 +114,7 @@ function foundationWork(left: Left): LineWork {
     endless: false,
     chainUnsaid: false,
     isFoundation: true,
+    full: false,
   };
 }
 
@@ -129,11 +135,8 @@ function onPlaces(
   const first = namedIn(items);
   const wide = onChain ? { ...first, st: true } : first;
   const named: Named = choices.chains === 'places' && wide.sps.length === 0 && wide.st ? { ...wide, ch: true } : wide;
-  const wantsSkipped =
-    targetsIn(items).some((target) => target.which === 'skipped') &&
-    !allItems(items).some((item) => item.type === 'skip');
   const base =
-    wantsSkipped && left.unworked > 0 ? { ...left, made: [...left.made, ...plainLeft(left.unworked).made] } : left;
+    takesBack(items) && left.unworked > 0 ? { ...left, made: [...left.made, ...plainLeft(left.unworked).made] } : left;
   const isOpen =
     left.open ||
     (hook === 0 &&
@@ -141,17 +144,17 @@ function onPlaces(
         (item) =>
           (item.type === 'work' || item.type === 'group') && (item.into?.what === 'ring' || item.into?.what === 'edge'),
       ));
-  let places = isOpen ? [] : placesOf(base, named);
+  let ground = isOpen ? OPEN_GROUND : groundOf(base, named);
   const travels = hook > 0 ? 0 : travelling(items);
   let pointed = -1;
   let at = 0;
   if (travels > 0 && !isOpen) {
-    const standing = travelled(places, items.slice(0, travels), setting.size);
-    if (standing >= 0 && setting.ring) places = [...places.slice(standing), ...places.slice(0, standing)];
+    const standing = travelled(ground, items.slice(0, travels), setting.size);
+    if (standing >= 0 && setting.ring) ground = groundTurned(ground, standing);
     else at = standing;
     pointed = standing < 0 ? -1 : setting.ring ? 0 : standing;
   }
-  const walker = new Walker(places, isOpen);
+  const walker = new Walker(ground);
   if (pointed >= 0) {
     // In a row the hook stands on the last slip stitch; in a ring the place reached is where the round begins.
     walker.at = setting.ring ? 0 : at + 1;
@@ -167,9 +170,9 @@ function onPlaces(
     named,
     own: setting.own,
     ring: setting.ring,
-    sideEnd: sideEndOf(items, places.length, hook),
+    sideEnd: sideEndOf(items, ground.places.length, hook),
     local: null,
-    marks: marksOf(items, places, setting.size),
+    marks: marksOf(items, ground.places, setting.size),
     endless: false,
     turned: false,
     turningChain: 0,
@@ -223,5 +226,6 @@ function finish(
     endless: job.endless,
     chainUnsaid,
     isFoundation: false,
+    full: walker.full,
   };
 }
