@@ -22,7 +22,7 @@ async function serve(env: Env): Promise<void> {
   server.keepAliveTimeout = KEEP_ALIVE_MS;
   const worker = env.worker ? await startWorker(deps) : null;
 
-  const end = orderlyEnd({
+  const close = orderlyEnd({
     server,
     readiness,
     drainMs: env.drainMs,
@@ -33,6 +33,8 @@ async function serve(env: Env): Promise<void> {
     log: deps.log,
     exit: (code) => process.exit(code),
   });
+  // Streams would hold the door open for as long as somebody listens.
+  const end = () => Promise.all([deps.notices.close(), close()]);
   process.on('SIGTERM', () => void end());
   process.on('SIGINT', () => void end());
   // The one who started it is gone.

@@ -54,6 +54,14 @@ interface SessionRow {
   memberships: Person['memberships'];
 }
 
+const toPerson = ({ id, name, email, is_operator, memberships }: SessionRow): Person => ({
+  id,
+  name,
+  email,
+  isOperator: is_operator,
+  memberships,
+});
+
 async function findSession(db: Knex, tokenHash: Buffer, now: Date): Promise<SessionRow | undefined> {
   const found = await db.raw<{ rows: SessionRow[] }>(
     `select s.seen_at, p.id, p.name, p.email, p.is_operator,
@@ -64,6 +72,13 @@ async function findSession(db: Knex, tokenHash: Buffer, now: Date): Promise<Sess
     [tokenHash, new Date(now.getTime() - IDLE_MS), new Date(now.getTime() - ABSOLUTE_MS)],
   );
   return found.rows[0];
+}
+
+/** The person of a request that goes on for long, looked up anew: null once signed out or ended. */
+export async function personStillIn({ db, clock }: Pick<Deps, 'db' | 'clock'>, req: Request): Promise<Person | null> {
+  const session = sessions.get(req);
+  const row = session && (await findSession(db, Buffer.from(session.tokenHash, 'hex'), clock.now()));
+  return row ? toPerson(row) : null;
 }
 
 const tokenIn = (req: Request): string | undefined => parse(req.get('Cookie') ?? '')[SESSION_COOKIE];
@@ -77,11 +92,7 @@ export function readSession({ db, clock }: Pick<Deps, 'db' | 'clock'>): RequestH
       const now = clock.now();
       const row = await findSession(db, hash, now);
       if (row) {
-        const { id, name, email, memberships } = row;
-        sessions.set(req, {
-          person: { id, name, email, isOperator: row.is_operator, memberships },
-          tokenHash: hash.toString('hex'),
-        });
+        sessions.set(req, { person: toPerson(row), tokenHash: hash.toString('hex') });
         if (now.getTime() - row.seen_at.getTime() >= SEEN_EVERY_MS) {
           await db('sessions').where({ token_hash: hash }).update({ seen_at: now });
         }

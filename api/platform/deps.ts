@@ -4,6 +4,7 @@ import { systemClock, type Clock } from './clock.ts';
 import { openDatabase } from './database.ts';
 import { openLog, type Logger } from './log.ts';
 import { openMail, type Mailer } from './mail.ts';
+import { openNotices, type Notices } from './notices.ts';
 import { openStorage, type Storage } from './storage.ts';
 
 /** What every part of the server is handed. */
@@ -14,17 +15,20 @@ export interface Deps {
   readonly mail: Mailer;
   readonly clock: Clock;
   readonly log: Logger;
+  readonly notices: Notices;
 }
 
 /** Opens everything a process needs; nothing is connected until it is first used. */
 export function openDeps(env: Env): Deps {
+  const log = openLog(env);
   return {
     env,
     db: openDatabase(env.database),
     storage: openStorage(env.s3),
     mail: openMail(env.mail),
     clock: systemClock,
-    log: openLog(env),
+    log,
+    notices: openNotices(env.database, log),
   };
 }
 
@@ -32,5 +36,6 @@ export function openDeps(env: Env): Deps {
 export async function closeDeps(deps: Deps): Promise<void> {
   deps.storage.close();
   deps.mail.close();
+  await deps.notices.close();
   await deps.db.destroy();
 }

@@ -75,7 +75,9 @@ test('reading changes nothing', { timeout: 60_000 }, async () => {
   const ASIDE = ['rate_limits', 'sessions', 'knex_migrations_lock'];
   const calls: [Who, string][] = [];
   for (const entry of Object.keys(ROUTES).filter((name) => name.startsWith('GET '))) {
-    const { url } = await ROUTES[entry]!.ask(world, 'owner');
+    const { url, send } = await ROUTES[entry]!.ask(world, 'owner');
+    // A stream that stays open has no end to wait for.
+    if (send) continue;
     for (const who of ['nobody', 'viewer', 'owner'] as const) calls.push([who, url]);
   }
   await at.workAll();

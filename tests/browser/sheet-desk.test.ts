@@ -1,9 +1,9 @@
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import { buildApp, type TestApp } from '../support/app.ts';
-import { axeFindings, DESK, listen, openBrowser, openPage, PHONE, type Listening } from '../support/browser.ts';
-import { TEST_PASSWORD, type PersonRow } from '../support/builders.ts';
+import { axeFindings, DESK, listen, openBrowser, PHONE, type Listening } from '../support/browser.ts';
 import { buildMouse, type MousePattern } from '../support/mouse-pattern.ts';
+import { openAs } from '../support/open-as.ts';
 
 let house: TestApp;
 let server: Listening;
@@ -22,18 +22,6 @@ afterAll(async () => {
   await house.close();
 });
 
-/** A page of somebody who has signed in as everybody does. */
-async function openAs(person: PersonRow, options: typeof DESK): Promise<{ page: Page; quiet: () => void }> {
-  const opened = await openPage(browser, options);
-  const { page } = opened;
-  await page.goto(`${server.url}/sign-in`);
-  await page.getByLabel(/e-?mail/i).fill(person.email);
-  await page.getByLabel('Password', { exact: true }).fill(TEST_PASSWORD);
-  await page.getByRole('button', { name: 'Sign in' }).click();
-  await page.waitForURL((url) => !url.pathname.startsWith('/sign-in'));
-  return opened;
-}
-
 const at = (rest: string) => `${server.url}/patterns/${mouse.patternId}/${rest}`;
 /** Whatever makes the page wider than the screen. */
 const runningOut = (page: Page) =>
@@ -47,7 +35,7 @@ const runningOut = (page: Page) =>
 const pages = (page: Page) => page.getByRole('img', { name: /^Page \d+ of/ });
 
 test('the creator writes what a sheet says, sees the real page follow, and publishes it', async () => {
-  const { page, quiet } = await openAs(mouse.house.creator, DESK);
+  const { page, quiet } = await openAs(browser, server.url, mouse.house.creator, DESK);
   await page.goto(at('sheet'));
   await pages(page).first().waitFor();
 
@@ -87,7 +75,7 @@ test('the creator writes what a sheet says, sees the real page follow, and publi
 
 test('a line that holds it back is named, with the way to it, and the button says why it waits', async () => {
   await house.db('lines').where({ id: mouse.lines[1] }).update({ text: 'inc × 6 (13)' });
-  const { page, quiet } = await openAs(mouse.house.owner, DESK);
+  const { page, quiet } = await openAs(browser, server.url, mouse.house.owner, DESK);
   await page.goto(at('sheet'));
   await expect.poll(() => page.getByText('Body, R2 differs: its totals are not equal.').isVisible()).toBe(true);
   const publish = page.getByRole('button', { name: /^Publish edition/ });
@@ -98,7 +86,7 @@ test('a line that holds it back is named, with the way to it, and the button say
 });
 
 test('on a phone the sheet, its forms and the editions fit and can be used', async () => {
-  const { page, quiet } = await openAs(mouse.house.editor, PHONE);
+  const { page, quiet } = await openAs(browser, server.url, mouse.house.editor, PHONE);
   for (const tab of ['sheet', 'editions']) {
     await page.goto(at(tab));
     await page.locator('main').waitFor();

@@ -8,6 +8,7 @@ import { createSession, SESSION_COOKIE } from '../../api/http/session.ts';
 import type { Deps } from '../../api/platform/deps.ts';
 import { openLog } from '../../api/platform/log.ts';
 import { openMail } from '../../api/platform/mail.ts';
+import { openNotices } from '../../api/platform/notices.ts';
 import { openStorage } from '../../api/platform/storage.ts';
 import { movableClock, type MovableClock } from './clock.ts';
 import { cloneDatabase, type ScratchDatabase } from './database.ts';
@@ -67,13 +68,15 @@ export async function buildApp(
   await storage.prepare();
   const logged: string[] = [];
   const clock = movableClock();
+  const log = openLog({ logLevel: 'debug' }, { write: (line) => void logged.push(line) });
   const deps: Deps = {
     env,
     db: scratch.db,
     storage,
     mail: openMail(env.mail),
     clock,
-    log: openLog({ logLevel: 'debug' }, { write: (line) => void logged.push(line) }),
+    log,
+    notices: openNotices(env.database, log),
     ...options.deps,
   };
   const tasks = allTasks(deps);
@@ -109,6 +112,7 @@ export async function buildApp(
     async close() {
       storage.close();
       deps.mail.close();
+      await deps.notices.close();
       await scratch.drop();
     },
   };

@@ -1,5 +1,6 @@
 import type { Knex } from 'knex';
 import type { Entity } from '#contract/changes';
+import { tell, type Notice } from '../../platform/notices.ts';
 import type { Deed } from './deed.service.ts';
 import type { Fields } from './entities.ts';
 
@@ -20,8 +21,11 @@ export interface ChangeRow extends NewChange {
   readonly undoesDeedId: string | null;
 }
 
-/** Channel on which every save of a pattern is told: `{"patternId","change"}`. */
-export const CHANNEL = 'pattern_changes';
+/** A save, told to every bench that is open on the pattern; `change` is its number in the log. */
+export interface SavedNotice extends Notice {
+  readonly kind: 'saved';
+  readonly change: number;
+}
 
 /** Logs changes, marks the pattern as touched, and tells whoever listens once the transaction is through. */
 export async function insertChanges(trx: Knex.Transaction, deed: Deed, changes: readonly NewChange[]): Promise<void> {
@@ -42,7 +46,7 @@ export async function insertChanges(trx: Knex.Transaction, deed: Deed, changes: 
     .returning<{ id: number }[]>('id');
   await trx('patterns').where({ id: deed.patternId }).update({ touched_at: deed.at });
   const change = Math.max(...made.map(({ id }) => id));
-  await trx.raw('select pg_notify(?, ?)', [CHANNEL, JSON.stringify({ patternId: deed.patternId, change })]);
+  await tell(trx, { about: deed.patternId, kind: 'saved', change } satisfies SavedNotice);
 }
 
 /** Whether the deed's id was used already by somebody else or in another pattern. */

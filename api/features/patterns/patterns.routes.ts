@@ -11,6 +11,7 @@ import { askingIn, idIn, tellDeed } from '../../http/asking.ts';
 import { readPattern } from './document.service.ts';
 import { duplicatePattern } from './duplicate.service.ts';
 import { historyRoutes } from './history.routes.ts';
+import { liveRoutes } from './live.routes.ts';
 import { createPattern, editPattern, stepPattern } from './patterns.service.ts';
 import { rowRoutes } from './rows.routes.ts';
 import { readShelf } from './shelf.service.ts';
@@ -65,6 +66,6 @@ export function patternRoutes(deps: Deps): Router {
     sendVersioned(res, answer(PatternHead, head), head.version);
   });
 
-  router.use(historyRoutes(deps), rowRoutes(deps));
+  router.use(historyRoutes(deps), rowRoutes(deps), liveRoutes(deps));
   return router;
 }

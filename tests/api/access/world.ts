@@ -4,7 +4,9 @@ import path from 'node:path';
 import request from 'supertest';
 import { PROJECT_ROOT } from '../../../api/platform/project-root.ts';
 import type { TestApp } from '../../support/app.ts';
+import { listen } from '../../support/browser.ts';
 import { buildLine, buildMark, buildPattern, buildPiece, buildRecording } from '../../support/builders.ts';
+import { listenTo } from '../../support/event-source.ts';
 import type { Cast } from './people.ts';
 
 export const CLIP = readFileSync(path.join(PROJECT_ROOT, 'seeds/clips/kettle-holder.mp4'));
@@ -117,6 +119,15 @@ export class World {
       .post(`/api/recordings/${recordingId}/transcripts`)
       .set(headers)
       .attach('file', VTT, { filename: 'talk.vtt', contentType: 'text/vtt' });
+  }
+
+  /** Listens to a stream for as long as it takes to be let in. */
+  async listen(url: string, headers: Record<string, string>): Promise<{ status: number }> {
+    const server = await listen(this.at.app);
+    const stream = await listenTo(server.url + url, headers);
+    stream.close();
+    await server.close();
+    return stream;
   }
 
   /** A transcript that has been read, with its first caption. */

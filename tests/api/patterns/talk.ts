@@ -8,7 +8,7 @@ export interface Sent {
   readonly headers?: Readonly<Record<string, string>>;
 }
 
-type Method = 'get' | 'post' | 'patch' | 'delete';
+type Method = 'get' | 'post' | 'patch' | 'put' | 'delete';
 
 /** Asks the server as somebody, on a page of ours. The clock goes on a little, so that nobody asks too often. */
 export const talkTo =

@@ -211,26 +211,4 @@ describe('history', () => {
     expect((await call(owner, 'get', `patterns/${pattern}/changes`)).status).toBe(404);
     expect((await undo(owner, pattern)).status).toBe(404);
   });
-
-  test('every save is told to whoever listens, once it is through', async () => {
-    const pattern = await aPattern();
-    const heard: string[] = [];
-    const pool = server.db.client as {
-      acquireConnection(): Promise<unknown>;
-      releaseConnection(c: unknown): Promise<void>;
-    };
-    const client = (await pool.acquireConnection()) as {
-      query(sql: string): Promise<unknown>;
-      on(event: 'notification', listen: (message: { payload: string }) => void): void;
-      removeAllListeners(event: string): void;
-    };
-    client.on('notification', ({ payload }) => heard.push(payload));
-    await client.query('listen pattern_changes');
-    await addPiece(house.creator, pattern);
-    await client.query('select 1');
-    await client.query('unlisten *');
-    client.removeAllListeners('notification');
-    await pool.releaseConnection(client);
-    expect(heard.map((payload) => (JSON.parse(payload) as { patternId: string }).patternId)).toEqual([pattern]);
-  });
 });

@@ -3,7 +3,7 @@ import { Outlet, ScrollRestoration, useLocation, useMatch } from 'react-router-d
 import { useEffect } from 'react';
 import { UploadDock } from '../../features/recordings/upload-dock.tsx';
 import { cx } from '../../lib/class-names.ts';
-import { initialsOf } from '../../features/studio/initials.tsx';
+import { initialsOf } from '../../ui/initials.tsx';
 import { sessionQuery } from '../../lib/session.ts';
 import { SkipLink } from '../../ui/skip-link.tsx';
 import { ToastProvider } from '../../ui/toast.tsx';

@@ -8,6 +8,7 @@ import { useToast } from '../../ui/toast.tsx';
 import { BenchPhone } from './bench-phone.tsx';
 import { useCues } from './cues.queries.ts';
 import { useBench } from './data/use-bench.ts';
+import { Company, useTellSeat } from './desk/company.tsx';
 import { KeysSheet } from './desk/keys-sheet.tsx';
 import { Notices } from './desk/notices.tsx';
 import { ProofButton } from './desk/proof-button.tsx';
@@ -41,6 +42,7 @@ export function BenchRoom({
   const bench = useBench(patternId);
   const cues = useCues(bench.pattern.recordings);
   const desk = useNewDesk(bench, cues.byRecording, startLineId);
+  useTellSeat(desk);
   const toast = useToast();
   const isPhone = useMedia(ONE_COLUMN);
   const isNarrow = useMedia(NARROW);
@@ -78,12 +80,18 @@ export function BenchRoom({
       <ProofButton />
     </>
   );
+  const saving = (
+    <span className="flex items-center gap-2.5">
+      <Company />
+      <SaveWords />
+    </span>
+  );
   const transcript = <TranscriptPanel isFinding={isFinding} onFind={setFinding} field={findField} cues={cues} />;
 
   return (
     <DeskProvider value={desk}>
       <div className={cx('flex min-h-dvh grow flex-col', !isPhone && 'tall:h-dvh tall:overflow-hidden')}>
-        {head({ pattern: bench.pattern, saving: <SaveWords />, controls })}
+        {head({ pattern: bench.pattern, saving, controls })}
         <Notices />
         {isPhone ? (
           <BenchPhone transcript={transcript} />

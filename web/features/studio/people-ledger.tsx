@@ -8,7 +8,7 @@ import { Button } from '../../ui/button.tsx';
 import { SelectField } from '../../ui/field.tsx';
 import { Icon } from '../../ui/icon.tsx';
 import { ErrorNote } from '../../ui/notes.tsx';
-import { Initials } from './initials.tsx';
+import { Initials } from '../../ui/initials.tsx';
 import { usePeopleDeeds } from './studio.queries.ts';
 
 type Deeds = ReturnType<typeof usePeopleDeeds>;

@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import { type Entry } from '../entry.ts';
 import { makers, members } from '../people.ts';
 
@@ -41,6 +42,20 @@ export const patterns: Record<string, Entry> = {
   'POST /api/patterns/:patternId/duplicate': {
     expect: makers(201),
     ask: async (world) => ({ url: `/api/patterns/${(await world.pattern()).id}/duplicate` }),
+  },
+  'GET /api/patterns/:patternId/events': {
+    expect: members(200),
+    ask: async (world) => {
+      const url = `/api/patterns/${(await world.pattern()).id}/events?tab=${randomUUID()}`;
+      return { url, send: (headers) => world.listen(url, headers) };
+    },
+  },
+  'PUT /api/patterns/:patternId/seats/:tabId': {
+    expect: members(204),
+    ask: async (world) => ({
+      url: `/api/patterns/${(await world.pattern()).id}/seats/${randomUUID()}`,
+      body: { lineId: null },
+    }),
   },
   'GET /api/patterns/:patternId/changes': {
     expect: members(200),

@@ -10,6 +10,7 @@ import type {
   SpecialStitchCreate,
 } from '#contract/pattern-details';
 import type { Pattern, PatternEdit } from '#contract/patterns';
+import type { Seat } from '#contract/live';
 import type {
   Line,
   LineCreate,
@@ -125,4 +126,11 @@ export interface BenchActions {
   dismissNotice(id: string): void;
 }
 
-export interface Bench extends BenchSnapshot, BenchActions {}
+/** Who else has the pattern open, and telling them where one sits oneself. */
+export interface Company {
+  readonly seats: readonly Seat[];
+  /** Tells the others which line is in hand. */
+  readonly sit: (lineId: string | null) => void;
+}
+
+export interface Bench extends BenchSnapshot, BenchActions, Company {}

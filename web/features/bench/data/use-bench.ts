@@ -6,10 +6,9 @@ import { benchApi } from './bench-api.ts';
 import { BenchStore } from './bench-store.ts';
 import type { Bench, BenchActions } from './bench-types.ts';
 import { patternQuery } from './bench.queries.ts';
+import { useLive } from './use-live.ts';
 import { keepDrafts } from './kept-drafts.ts';
 
-/** How often others' saves are looked for while the page is looked at. */
-const LOOK_EVERY_MS = 15_000;
 /** After the last save, before what the server works out from it is read. */
 const SETTLE_MS = 800;
 
@@ -72,23 +71,6 @@ function useStoreLife(store: BenchStore): void {
   }, [store]);
 }
 
-/** Looks for others' saves while the page is looked at and nothing of one's own is on the way. */
-function useOthersSaves(store: BenchStore, patternId: string): void {
-  const client = useQueryClient();
-  useEffect(() => {
-    const look = () => {
-      if (document.visibilityState !== 'visible' || !store.isIdle()) return;
-      void client.invalidateQueries({ queryKey: patternQuery(patternId).queryKey, exact: true });
-    };
-    const timer = setInterval(look, LOOK_EVERY_MS);
-    window.addEventListener('focus', look);
-    return () => {
-      clearInterval(timer);
-      window.removeEventListener('focus', look);
-    };
-  }, [client, store, patternId]);
-}
-
 /**
  * A pattern on the bench: what it holds with every change of one's own in it, its count as one types, how saving
  * stands, and everything that can be done with it. Suspends until the pattern is there; an error goes to the page's
@@ -99,9 +81,9 @@ export function useBench(patternId: string): Bench {
   const { data } = useSuspenseQuery({ ...patternQuery(patternId), refetchOnWindowFocus: false });
   const [store] = useState(() => openStore(client, data));
   useStoreLife(store);
-  useOthersSaves(store, patternId);
+  const company = useLive(store, patternId);
   useEffect(() => store.receive(data), [store, data]);
   const snapshot = useSyncExternalStore(store.subscribe, store.snapshot);
   const actions = useMemo(() => actionsOf(store), [store]);
-  return { ...snapshot, ...actions };
+  return { ...snapshot, ...actions, ...company };
 }

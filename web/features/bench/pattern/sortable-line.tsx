@@ -3,6 +3,7 @@ import { GripVertical } from 'lucide-react';
 import { type ReactNode } from 'react';
 import { cx } from '../../../lib/class-names.ts';
 import { Icon } from '../../../ui/icon.tsx';
+import { SittingHere } from '../desk/company.tsx';
 
 /** A line that can be taken by its handle and put elsewhere; the handle is a button, so that the list stays a list. */
 export function SortableLine({
@@ -27,6 +28,7 @@ export function SortableLine({
       className={cx('group relative', isDragging && 'z-20 opacity-90 outline-[1.5px] outline-woad')}
     >
       {children}
+      <SittingHere lineId={id} />
       {canMove && (
         <button
           ref={setActivatorNodeRef}

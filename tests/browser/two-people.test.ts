@@ -1,0 +1,55 @@
+import type { Browser, Page } from 'playwright-core';
+import { afterAll, beforeAll, expect, test } from 'vitest';
+import { buildApp, type TestApp } from '../support/app.ts';
+import { axeFindings, DESK, listen, openBrowser, PHONE, type Listening } from '../support/browser.ts';
+import type { PersonRow } from '../support/builders.ts';
+import { openAs } from '../support/open-as.ts';
+import { buildMouse, type MousePattern } from '../support/mouse-pattern.ts';
+
+let house: TestApp;
+let server: Listening;
+let browser: Browser;
+let mouse: MousePattern;
+
+beforeAll(async () => {
+  house = await buildApp();
+  mouse = await buildMouse(house.db);
+  server = await listen(house.app);
+  browser = await openBrowser();
+});
+afterAll(async () => {
+  await browser.close();
+  await server.close();
+  await house.close();
+});
+
+async function openBench(person: PersonRow, options: typeof DESK) {
+  const opened = await openAs(browser, server.url, person, options);
+  await opened.page.goto(`${server.url}/patterns/${mouse.patternId}/bench`);
+  await opened.page.locator('[data-line]').first().waitFor();
+  return opened;
+}
+const line = (page: Page, n: number) => page.locator('[data-line]').nth(n);
+const others = (page: Page) => page.getByRole('status', { name: 'Also here' });
+
+test('two people at one pattern see each other, and each other’s work as it is saved', async () => {
+  const creator = await openBench(mouse.house.creator, DESK);
+  const editor = await openBench(mouse.house.editor, PHONE);
+  await others(creator.page).getByText(`${mouse.house.editor.name} is here`).waitFor({ state: 'attached' });
+  await others(editor.page).getByText(`${mouse.house.creator.name} is here`).waitFor({ state: 'attached' });
+
+  const words = 'snug but not tight, and no hurry about it';
+  await line(editor.page, 2).click();
+  await others(creator.page).getByText(`${mouse.house.editor.name} is at R3`).waitFor({ state: 'attached' });
+  const field = editor.page.getByRole('textbox', { name: /^Instruction/ });
+  await field.press('End');
+  await field.pressSequentially(`, ${words}`);
+  // Nobody looks at the clock: what was saved is told, and comes within a moment.
+  await expect.poll(() => line(creator.page, 2).innerText(), { timeout: 5_000 }).toContain(words);
+  expect(await axeFindings(creator.page)).toEqual([]);
+
+  await editor.page.close();
+  await expect.poll(() => others(creator.page).getByRole('listitem').count()).toBe(0);
+  creator.quiet();
+  editor.quiet();
+});
