@@ -21,7 +21,7 @@ export interface Notice {
 export const LOOK = 'look';
 
 /** Tells whoever listens to things about this id, once the transaction is through. */
-export async function tell<N extends Notice>(trx: Knex, notice: N): Promise<void> {
+export async function tell(trx: Knex, notice: Notice & Readonly<Record<string, unknown>>): Promise<void> {
   await trx.raw('select pg_notify(?, ?)', [CHANNEL, JSON.stringify(notice)]);
 }
 

@@ -20,7 +20,7 @@ export async function listenTo(url: string, headers: Record<string, string>): Pr
     let rest = '';
     const decoder = new TextDecoder();
     for await (const bytes of answer.body ?? []) {
-      const parts = (rest + decoder.decode(bytes as Uint8Array, { stream: true })).split('\n\n');
+      const parts = (rest + decoder.decode(bytes, { stream: true })).split('\n\n');
       rest = parts.pop() ?? '';
       for (const part of parts) if (part.startsWith('data: ')) heard.push(JSON.parse(part.slice(6)));
     }
