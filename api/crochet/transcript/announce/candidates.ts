@@ -3,7 +3,7 @@ import { type Token } from '../tokens.ts';
 import { bareCandidates } from './bare-candidates.ts';
 import { type Candidate } from './candidate.ts';
 import { isMention } from './mentions.ts';
-import { isCounted, numberAt, readNumberList } from './number-list.ts';
+import { isCounted, numberAt, type NumberList, readNumberList } from './number-list.ts';
 import { oneMore, repeatCandidates } from './repeat-candidates.ts';
 import { startCandidates } from './start-candidates.ts';
 
@@ -13,7 +13,7 @@ export function findCandidates(tokens: readonly Token[], sentences: Sentences): 
   tokens.forEach((token, i) => {
     if (token.kind === 'U') found.push(...unitCandidates(tokens, i, sentences));
     else if (token.kind === '#') found.push(...numberWord(tokens, i, sentences));
-    else if (token.kind === 'X' || token.kind === 'A') found.push(...oneMore(tokens, i, sentences));
+    else if ('XLA'.includes(token.kind)) found.push(...oneMore(tokens, i, sentences));
     else if (token.kind === 't' || token.kind === 'o') found.push(...repeatCandidates(tokens, i, sentences));
     found.push(...bareCandidates(tokens, i, sentences));
   });
@@ -36,7 +36,7 @@ function unitCandidates(tokens: readonly Token[], i: number, sentences: Sentence
 function fromNamed(
   tokens: readonly Token[],
   i: number,
-  named: { from: number; to: number; end: number },
+  named: NumberList,
   unit: 'round' | 'row',
   sentences: Sentences,
 ): Candidate[] {
@@ -48,6 +48,9 @@ function fromNamed(
     return [{ ...base, at: untilStart(tokens, i, sentences), lines: { type: 'until', last: named.to }, strength: 1.2 }];
   if (mention !== null || (word.endsWith('s') && named.from === named.to)) return [];
   const isFirst = startsClause(tokens, i);
+  const renamed = namedAnew(tokens, named);
+  if (renamed !== null)
+    return [{ ...base, end: renamed.end, lines: { type: 'named', from: renamed.from, to: renamed.to }, strength: 3 }];
   const split = tokens[named.end - 1]!.split;
   const out: Candidate[] = [
     { ...base, lines: { type: 'named', from: named.from, to: named.to }, strength: isFirst ? 3 : 2.4 },
@@ -57,6 +60,17 @@ function fromNamed(
     out.push({ ...base, end: named.end - 1, lines: { type: 'named', from: split[0], to: split[0] }, strength: 1.5 });
   }
   return out;
+}
+
+/** `rows one to four again, now they are five to eight`: earlier lines worked as later ones. */
+function namedAnew(tokens: readonly Token[], named: NumberList): NumberList | null {
+  if (named.from === named.to) return null;
+  for (let i = named.end; i < Math.min(tokens.length, named.end + 9) && !'S|'.includes(tokens[i]!.kind); i++) {
+    const list = readNumberList(tokens, i, true);
+    if (list === null) continue;
+    return list.from > named.to && list.to - list.from === named.to - named.from ? list : null;
+  }
+  return null;
 }
 
 /** `fifth round`, `next round`, `the next three rounds`, `three more rounds`, `last row`. */

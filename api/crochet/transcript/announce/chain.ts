@@ -45,6 +45,7 @@ export function chooseChain(candidates: readonly Candidate[], tokens: readonly T
   for (const candidate of candidates) {
     const fresh: State[] = [];
     if (candidate.kind === 'foundation') {
+      if (isToldAgain(candidate, chains[0], top)) continue;
       const state = begin(candidate, top, 0, candidate.strength - restartCost(top, candidate, tokens) / 2);
       chains = [state, ...chains].slice(0, CHAINS_KEPT);
       continue;
@@ -123,6 +124,15 @@ function relative(candidate: Candidate, before: State): State[] {
     return [go(candidate, before, first, lines.last, candidate.strength)];
   }
   return [];
+}
+
+/** `chain forty three … that's my forty three chain`: the same chain spoken of again before anything stands on it. */
+function isToldAgain(candidate: Candidate, last: State | undefined, top: State): boolean {
+  const told = last?.announced?.candidate;
+  const line = top.announced?.candidate;
+  const isPassed = line !== undefined && told !== undefined && line.at > told.end && line.at < candidate.at;
+  if (told === undefined || isPassed || candidate.at - told.end > CHAIN_REACH) return false;
+  return told.lines.type === 'chain' && candidate.lines.type === 'chain' && told.lines.n === candidate.lines.n;
 }
 
 /** A ring named within the first round is that round's own, and begins no other piece. */

@@ -54,7 +54,7 @@ export function isMention(
   sentences: Sentences,
 ): 'until' | 'mention' | null {
   let j = i - 1;
-  while (j >= 0 && 'a~'.includes(tokens[j]!.kind) && !MENTIONING.has(tokens[j]!.text) && i - j < 4) j -= 1;
+  while (j >= 0 && isBeside(tokens[j]!) && !MENTIONING.has(tokens[j]!.text) && i - j < 4) j -= 1;
   const before = j >= sentences.startOf[i]! ? tokens[j] : undefined;
   if (PAST.has(tokens[end]?.text ?? '') || /^(?:finished|done|over|behind)$/.test(tokens[end]?.text ?? ''))
     return 'mention';
@@ -66,6 +66,11 @@ export function isMention(
   if (before.kind === 'b' || before.kind === 'R' || before.kind === 'n' || MENTIONING.has(before.text))
     return 'mention';
   return null;
+}
+
+/** `before your round five`: what may stand between; a pronoun belongs to what was said before it. */
+function isBeside({ kind, text }: Token): boolean {
+  return kind === '~' || (kind === 'a' && !/^(?:it|them|me|us|you|he|she|they|we|i|there|here)$/.test(text));
 }
 
 /** `from round six to round ten`, `on each of rows two to four`, `for every one of rounds 5-8`: all of them are told here. */

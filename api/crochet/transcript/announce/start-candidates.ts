@@ -41,7 +41,11 @@ function chainCandidate(tokens: readonly Token[], i: number, sentences: Sentence
         number = j;
         break;
       }
-      if (!'a~w,'.includes(tokens[j]!.kind) || (tokens[j]!.kind === ',' && tokens[j + 1]?.kind !== '~')) break;
+      if (
+        !'a~w,=v'.includes(tokens[j]!.kind) ||
+        (tokens[j]!.kind === ',' && !'~='.includes(tokens[j + 1]?.kind ?? '.'))
+      )
+        break;
     }
   }
   if (number < 0) return [];
@@ -51,7 +55,8 @@ function chainCandidate(tokens: readonly Token[], i: number, sentences: Sentence
   const rest = textOf(tokens.slice(i, i + 10));
   const lead = tokens[Math.min(i, number) - 1]?.text ?? '';
   const isSpace = /\b(?:stands?|standing|secretly|as a stitch)\b/.test(rest) || lead === "'s" || lead === 'that is';
-  if (n < 4 || isIdle(before) || isSpace || joinsStitch(tokens, Math.max(i, number) + 1)) return [];
+  const isShort = n < 4 && !isWorkedFrom(tokens, Math.max(i, number) + 1);
+  if (isShort || isIdle(before) || isSpace || joinsStitch(tokens, Math.max(i, number) + 1)) return [];
   const next = tokens[Math.max(i, number) + 1]?.kind ?? '.';
   const isCountedSpace = tokens[Math.max(i, number) + 1]?.kind === 'Z';
   if (isCountedSpace || before.some((one) => 'KSPD'.includes(one.kind)) || (n < 5 && next === 'T')) return [];
@@ -69,6 +74,13 @@ function chainCandidate(tokens: readonly Token[], i: number, sentences: Sentence
       needs: null,
     },
   ];
+}
+
+/** `Chain two. Row one, three singles in the second chain from the hook`: a first line that stands on few chains. */
+function isWorkedFrom(tokens: readonly Token[], after: number): boolean {
+  const ahead = tokens.slice(after, after + REACH);
+  const line = ahead.findIndex((one) => one.kind === 'U');
+  return line >= 0 && line < 4 && ahead.some((one, n) => one.kind === 'C' && ahead[n + 1]?.kind === 'H');
 }
 
 /** A starting chain told first thing in a row, before its stitches: `chain twenty-five, slip stitch in the second …`. */
@@ -116,6 +128,8 @@ function ringCandidate(
   const near = tokens.slice(Math.max(start, i - 12), Math.min(end, i + 12));
   if (isIdle(tokens.slice(Math.max(start, i - 10), i + 2))) return [];
   const hasWork = near.some((one) => one.kind === 'N' || one.kind === 'S');
+  if (numbered.some((one) => one.at > i && one.at - i < NEAR && namesRing(tokens, one.end))) return [];
+  if (closesChain(tokens, i, start) && !near.some((one) => one.kind === 'S' && one.value !== 'slst')) return [];
   const at = i - start < 12 ? start : Math.max(start, i - 3);
   const named = numbered.find((one) => one.at >= at && one.at <= i + 14);
   const base = { kind: 'line' as const, at, unit: 'round' as const, needs: 'start' as const };
@@ -124,6 +138,16 @@ function ringCandidate(
     return [{ ...base, end: named.end, mark: named.mark, lines, strength: named.strength + 0.2 }];
   if (!hasWork) return [];
   return [{ ...base, end: at, mark: at, lines, strength: 2 }];
+}
+
+/** A numbered round that speaks of its ring itself needs none spoken of before it. */
+function namesRing(tokens: readonly Token[], from: number): boolean {
+  return tokens.slice(from, from + REACH).some((one) => one.kind === 'V');
+}
+
+/** `Chain five, close it in a ring`: the ring is made of the chain. */
+function closesChain(tokens: readonly Token[], i: number, start: number): boolean {
+  return tokens.slice(Math.max(start, i - 12), i).some((one) => one.kind === 'C');
 }
 
 /** How far behind its work a row may be given its number (`… that's row one`), and what it gains to hold both together. */
