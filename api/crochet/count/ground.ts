@@ -28,7 +28,7 @@ const GROUNDS = new WeakMap<Left, Map<string, Ground>>();
 export function groundOf(left: Left, named: Named): Ground {
   const key = `${String(named.st)} ${String(named.ch)} ${String(named.gap)} ${JSON.stringify(named.sps)}`;
   let known = GROUNDS.get(left);
-  if (!known) GROUNDS.set(left, (known = new Map()));
+  if (!known) GROUNDS.set(left, (known = new Map<string, Ground>()));
   let ground = known.get(key);
   if (!ground) known.set(key, (ground = groundFrom(placesOf(left, named))));
   return ground;

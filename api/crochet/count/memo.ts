@@ -65,7 +65,7 @@ const isAlike = (one: unknown, other: unknown): boolean =>
 
 /** The memo to go on with: the old one where the line is the same, so that nothing is kept twice. */
 export function memoFor(line: LineInput, read: ReadLine, era: string, old: Memo | undefined): Memo {
-  const isSame = old !== undefined && old.read === read && old.era === era && isSameLine(old.line, line);
+  const isSame = old?.read === read && old.era === era && isSameLine(old.line, line);
   return isSame ? old : { line, read, era, tries: new Map() };
 }
 
