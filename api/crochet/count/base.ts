@@ -40,6 +40,10 @@ export function ownRing(items: readonly Item[], size: number): { chains: number;
   return isJoin && goesOn ? { chains: pick(first.times.n, size), index: next } : null;
 }
 
+/** One slip stitch, into the first chain or nowhere named; a row of them is fabric. */
+const isJoining = ({ times, per, into }: Work): boolean =>
+  times.type === 'n' && times.n[0] === 1 && per[0] === 1 && into?.which !== 'hook' && into?.which !== 'each';
+
 /** A line that is only a chain, perhaps joined into a ring. */
 export function foundationOf(items: readonly Item[], size: number): Left | null {
   const works = items.filter(
@@ -53,7 +57,7 @@ export function foundationOf(items: readonly Item[], size: number): Left | null 
   );
   const only = works.every(
     (item): item is Work =>
-      item.type === 'work' && (item.stitch === 'ch' || (item.stitch === 'slst' && works.length > 1)),
+      item.type === 'work' && (item.stitch === 'ch' || (item.stitch === 'slst' && works.length > 1 && isJoining(item))),
   );
   const first = works[0];
   if (!only || first?.type !== 'work' || first.stitch !== 'ch' || first.times.type !== 'n') return null;

@@ -64,3 +64,28 @@ export function withoutSkips(items: readonly Item[]): readonly Item[] {
   const isLead = first?.type === 'skip' && (first.of?.what === 'ch' || first.of?.which === 'first');
   return isLead ? [...items.slice(0, index), ...items.slice(index + 1)] : items;
 }
+
+/**
+ * `(ch 3, dc) in same sp` at the start of a round is `ch 3, dc in same sp`: the chain within the bracket starts the line
+ * like any other.
+ */
+export function opened(items: readonly Item[]): readonly Item[] {
+  const index = items.findIndex(
+    (item) => item.type === 'group' || item.type === 'skip' || (item.type === 'work' && item.stitch !== 'slst'),
+  );
+  const group = items[index];
+  if (group?.type !== 'group' || !group.into || group.into.what === 'ring') return items;
+  const [chain, next] = group.items;
+  const isStart =
+    group.times.type === 'n' &&
+    group.times.n[0] === 1 &&
+    (group.into.which === 'same' || group.into.which === 'first' || group.into.which === 'next') &&
+    chain?.type === 'work' &&
+    chain.stitch === 'ch' &&
+    chain.times.type === 'n' &&
+    chain.times.n[0]! >= 2 &&
+    (next?.type === 'work' || next?.type === 'group');
+  if (!isStart) return items;
+  const rest = { ...group, items: group.items.slice(1), into: { ...group.into, which: 'same' as const } };
+  return [...items.slice(0, index), chain, rest, ...items.slice(index + 1)];
+}

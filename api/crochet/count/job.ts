@@ -25,6 +25,8 @@ export interface Job {
   /** Fills that had no bound: what they make is not known. */
   endless: boolean;
   turned: boolean;
+  /** How many repeats the hands are in. */
+  depth: number;
   /** A chain at the very end, before the turn. */
   turningChain: number;
   /** A picot or another end that makes no stitch. */

@@ -47,7 +47,10 @@ export function firstPlain(items: readonly Item[]): string | null {
 
 /** A last slip stitch after everything: it finishes off and is no stitch of the line. */
 export function closingSlip(items: readonly Item[]): Item | null {
-  const works = items.filter((item) => item.type === 'work' || item.type === 'group' || item.type === 'skip');
+  const all = items.filter((item) => item.type === 'work' || item.type === 'group' || item.type === 'skip');
+  // `sl st, ch 1` closes the round and lifts the hook for the next.
+  const final = all.at(-1);
+  const works = final?.type === 'work' && final.stitch === 'ch' ? all.slice(0, -1) : all;
   const last = works.at(-1);
   const isSlip =
     last?.type === 'work' &&

@@ -45,13 +45,18 @@ export function performGroup(job: Job, item: Group, need: () => number, ending: 
     const n = countOf(job, item);
     const unit = usesOf(item.items, job);
     const after = need();
+    job.depth += 1;
     repeat(job, n, (i) => {
       const isLast = i === n - 1;
       perform(job, isLast && part ? part : item.items, isLast ? after : after + unit * (n - 1 - i));
     });
+    job.depth -= 1;
     return;
   }
-  fillGroup(job, item, part, need(), ending);
+  const after = need();
+  job.depth += 1;
+  fillGroup(job, item, part, after, ending);
+  job.depth -= 1;
 }
 
 export function fillGroup(job: Job, item: Group, part: readonly Item[] | null, rest: number, ending: boolean): void {

@@ -22,7 +22,7 @@ export function perform(job: Job, items: readonly Item[], rest: number): void {
     const need = () => rest + usesOf(items.slice(i + 1), job);
     switch (item.type) {
       case 'work':
-        if (item.stitch === 'ch') performChain(job, item, items.slice(i + 1));
+        if (item.stitch === 'ch') performChain(job, item, items.slice(i + 1), items[i - 1]);
         else performWork(job, item, need);
         break;
       case 'group':
@@ -50,6 +50,9 @@ export function perform(job: Job, items: readonly Item[], rest: number): void {
 /** `ending with sc in last st`: the last repeat is cut where these words take over. */
 const isEnding = (item: Item | undefined): boolean => item?.type === 'note' && item.text.startsWith('end');
 
+/** `ch 3, sl st in first ch`, over and over within a repeat: the chain closes on itself. */
+const FIRST_CHAIN = /^slst in (?:the )?first (?:of )?(?:\d+ ?)?ch\b/;
+
 function performStep(job: Job, item: Extract<Item, { type: 'step' }>): void {
   const { walker } = job;
   if (item.what === 'turn') job.turned = true;
@@ -58,14 +61,15 @@ function performStep(job: Job, item: Extract<Item, { type: 'step' }>): void {
     const n = item.n === -1 ? walker.remaining() : (item.n ?? 1);
     walker.kept += n;
   }
-  if (item.what === 'join') {
+  if (item.what === 'join' && job.depth > 0 && FIRST_CHAIN.test(item.text)) walker.closePicot();
+  else if (item.what === 'join') {
     // `ch 2, join with dc`: the stitch closes the last space.
     const stitch = /with (?:a )?(hdc|dc|tr|dtr|sc)\b/.exec(item.text)?.[1];
     if (stitch && walker.made.at(-1)?.kind === 'chs') walker.lengthen(stitchOf(stitch)?.height ?? 1);
   }
 }
 
-function performChain(job: Job, item: Work, after: readonly Item[]): void {
+function performChain(job: Job, item: Work, after: readonly Item[], before: Item | undefined): void {
   const n = item.times.type === 'n' ? pick(item.times.n, job.size) : 1;
   const next = after.find((other) => other.type !== 'note');
   if (next?.type === 'work' && next.into?.which === 'hook') {
@@ -73,7 +77,11 @@ function performChain(job: Job, item: Work, after: readonly Item[]): void {
     return;
   }
   const isEnd = after.every((other) => other.type === 'step' || other.type === 'note');
-  if (isEnd && (after.some((other) => other.type === 'step' && other.what === 'turn') || job.turned)) {
+  const isClosed =
+    job.depth === 0 &&
+    before !== undefined &&
+    (before === job.lastSlip || (before.type === 'step' && before.what === 'join'));
+  if (isEnd && (isClosed || after.some((other) => other.type === 'step' && other.what === 'turn') || job.turned)) {
     job.turningChain = n;
     return;
   }

@@ -197,7 +197,8 @@ export function isAt(place: Place, target: Target | null, spaces: Spaces): boole
     case 'group':
       return isCentre(place, Math.max(2, Math.ceil((spaces.largest * 2) / 3)));
     case 'st':
-      if (target.corner) return isCentre(place, 3);
+      // Where no corner was made yet, the stitch that is to become one is the next.
+      if (target.corner && spaces.largest >= 3) return isCentre(place, 3);
       if (target.of !== undefined && target.which === 'nth')
         return place.kind === 'st' && place.size > 1 && place.size * 3 > spaces.largest * 2 && place.nth === target.n;
       if (target.of !== undefined && target.which === 'centre')

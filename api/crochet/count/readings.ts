@@ -62,8 +62,10 @@ export function openChoices(tree: LineTree): Key[] {
   )
     keys.add('tail');
   if (works.length > 1 && works.every((item) => isSmall(item))) keys.add('whole');
-  if (isUnitRound(works)) keys.add('whole');
+  if (isUnitRound(works) || (works.length === 1 && isBare(works[0]!))) keys.add('whole');
   look(tree.items, keys, 0);
+  // Who writes `inc` for two in one place writes `2sc` for two stitches in a row.
+  if (hasIncrease(tree.items)) keys.delete('pair');
   return [...keys];
 }
 
@@ -85,6 +87,16 @@ const isOpenEnd = (item: Item | undefined): item is Work =>
   item.times.leave[0] === 0 &&
   item.times.to === null &&
   (item.into === null || (item.into.what === 'st' && item.into.which === 'next'));
+
+/** A line that is only the name of a stitch: `Rounds 6–16: sc`. */
+const isBare = (item: Item): boolean =>
+  item.type === 'work' &&
+  item.into === null &&
+  item.times.type === 'n' &&
+  item.times.n[0] === 1 &&
+  item.per[0] === 1 &&
+  !item.multiplied &&
+  !['ch', 'slst', 'picot'].includes(item.stitch);
 
 const isSmall = (item: Item): boolean =>
   item.type === 'skip' ||

@@ -65,7 +65,7 @@ export function grouped(made: readonly Made[], ring: boolean): Made[] {
 const TOGETHER = /^([a-z]+?)\d+tog$/;
 
 /** Counts what was made. Stitches drawn together count under their own name. */
-export function tallyOf(made: readonly Made[]): Tally {
+export function tallyOf(made: readonly Made[], picots = 0): Tally {
   const byStitch: Record<string, number> = {};
   const byLength: Record<number, number> = {};
   const byColour: Record<string, number> = {};
@@ -91,6 +91,7 @@ export function tallyOf(made: readonly Made[]): Tally {
     if (one.size > 1) groups.add(one.group);
     if (one.colour) byColour[one.colour] = (byColour[one.colour] ?? 0) + 1;
   }
+  if (picots > 0) byStitch.picot = picots;
   const increases = made.filter((one) => one.size === 2 && one.nth === 2).length;
   return {
     sts,

@@ -155,6 +155,14 @@ export class Walker {
     if (last?.kind === 'chs') this.made[this.made.length - 1] = { ...last, chains: last.chains + n };
   }
 
+  /** The run of chains made last becomes a picot: an edge that makes no stitch and no space. */
+  closePicot(): void {
+    if (this.made.at(-1)?.kind !== 'chs') return;
+    this.made.pop();
+    while (this.walk.at(-1)?.stitch === 'ch') this.walk.pop();
+    this.walk.push({ stitch: 'picot', on: [], makes: 0, colour: null });
+  }
+
   /** Counted places behind the cursor that any of these could still go into. */
   left(aims: readonly (Target | null)[]): number {
     if (this.open) return 0;

@@ -13,7 +13,7 @@ import { type ChainPolicy } from './start.ts';
 import { grouped, tallyOf, type Tally } from './tally.ts';
 import { Walker, type Step } from './walker.ts';
 import { closingSlip, sideEndOf, travelled, marksOf, firstPlain } from './line-signs.ts';
-import { begin } from './begin.ts';
+import { begin, opened } from './begin.ts';
 
 /** What a line needs to know of the piece it stands in. */
 export interface Setting {
@@ -60,7 +60,7 @@ export interface LineWork {
 export function workLine(tree: LineTree, choices: Choices, setting: Setting): LineWork {
   const foundation = foundationOf(tree.items, setting.size);
   if (foundation) return foundationWork(foundation);
-  const items = shaped(tree, choices);
+  const items = opened(shaped(tree, choices));
   const loop = items.find((item) => item.type === 'group' && item.into?.what === 'loop');
   if (loop?.type === 'group')
     return onPlaces(loop.items, choices, { ...setting, left: loopBase(loop.into!.line ?? null, setting) }, 0, null);
@@ -175,6 +175,7 @@ function onPlaces(
     marks: marksOf(items, ground.places, setting.size),
     endless: false,
     turned: false,
+    depth: 0,
     turningChain: 0,
     lastSlip: closingSlip(body),
   };
@@ -199,7 +200,7 @@ function finish(
   const carried =
     aims.some((aim) => aim?.which === 'skipped') && walker.skipped.length === 0 ? 0 : setting.left.unworked;
   const made = grouped(walker.made, setting.ring);
-  const tally = tallyOf(made);
+  const tally = tallyOf(made, walker.walk.filter((step) => step.stitch === 'picot').length);
   const turns = job.turned || !setting.ring;
   const counted = walker.counted.at(-1) ?? 0;
   const isBaseKnown = !isOpen;
