@@ -35,6 +35,9 @@ const USUAL: Readonly<Record<CautionKind, string>> = {
     'What is made to be chewed comes loose in time: look it over before each use, and take it away once it is damaged.',
 };
 
+/** The usual words of a caution. */
+export const usualCaution = (kind: CautionKind): string => USUAL[kind];
+
 // Words of the trade as they stand in materials, steps and speech.
 const WORDS: readonly (readonly [CautionKind, RegExp])[] = [
   [

@@ -7,8 +7,8 @@ export interface Flatness {
   readonly ideal: number;
 }
 
-/** Short of a tenth of what would lie flat a round clearly cups. */
-const CLEARLY = 0.9;
+/** Short of a tenth of what would lie flat a round clearly cups; a tenth above it ruffles. */
+export const CLEARLY = 0.9;
 
 /**
  * How each round of a flat piece lies: n stitches more lie flat when n ≈ 2πh/w. The figure is touchy to h/w.
