@@ -1,4 +1,4 @@
-import { allItems } from '../count/base.ts';
+import { allItems } from '../count/tree-walk.ts';
 import { readLine } from '../language/read-line.ts';
 import { type Item, type Work } from '../language/tree.ts';
 import { stitchOf } from '../stitches.ts';

@@ -1,4 +1,4 @@
-import { allItems } from '../count/base.ts';
+import { allItems } from '../count/tree-walk.ts';
 import { type Check, type CheckChange, type CheckRef, finding, listed, many, type Mend } from './check.ts';
 import { isCounted, type Scan, type ScanLine, wordsOf } from './scan.ts';
 
