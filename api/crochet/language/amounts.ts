@@ -86,7 +86,10 @@ export function readMultiple(reading: Reading): Sized | null {
       reading.at += 1;
       return n;
     }
-    if (isTimesSign(peek(reading)) && peek(reading, 1).kind !== 'num') {
+    const next = peek(reading, 1);
+    // `repeat 6x 18`: the figure that ends the line is its total.
+    const isTotal = next.kind === 'num' && peek(reading).glued && !next.glued && peek(reading, 2).kind === 'end';
+    if (isTimesSign(peek(reading)) && (next.kind !== 'num' || isTotal)) {
       reading.at += 1;
       return n;
     }

@@ -7,7 +7,9 @@ import { times } from './times.ts';
 
 export function chain(reading: Reading, from: number, before: Sized | null, glued: boolean): Work {
   if (isMark(peek(reading), '-') && peek(reading, 1).kind === 'num') reading.at += 1;
+  if (!before && isWord(peek(reading), 'of') && peek(reading, 1).kind === 'num') reading.at += 1;
   const after = before ? null : readSized(reading);
+  if (after) take(reading, 'st');
   const multiple = after || before ? null : readMultiple(reading);
   if (isPlain(peek(reading), 'loosely', 'tightly', 'only')) reading.at += 1;
   const counts = readChainCounts(reading);

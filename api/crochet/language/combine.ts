@@ -19,7 +19,11 @@ export function combine(items: Item[], found: readonly Item[]): void {
     const last = items.at(-1);
     if (item.type === 'shaped' && (item.how === 'evenly' || item.how === 'each-end') && isAllRound(last)) items.pop();
     else if (item.type === 'work' && item.into?.which === 'every' && isAllRound(last)) items.pop();
-    else if (item.type === 'skip' && item.of?.which === 'every' && isSpread(items)) {
+    else if (item.type === 'work' && isShaping(item) && isAllRound(last)) {
+      // `sc around and make 6 increases`.
+      items[items.length - 1] = spread(item);
+      continue;
+    } else if (item.type === 'skip' && item.of?.which === 'every' && isSpread(items)) {
       items[items.length - 1] = skipping(last as Work, item, item.of.n ?? 2);
       continue;
     } else if (
@@ -34,6 +38,21 @@ export function combine(items: Item[], found: readonly Item[]): void {
     }
     items.push(item);
   }
+}
+
+const isShaping = ({ stitch, into, times: count }: Work): boolean =>
+  ['inc', 'dec', 'invdec'].includes(stitch) && into === null && count.type === 'n';
+
+function spread({ span, stitch, times: count }: Work): Item {
+  const n = count.type === 'n' ? count.n : [1];
+  return {
+    type: 'shaped',
+    span,
+    change: n.map((k) => (stitch === 'inc' ? k : -k)),
+    how: 'evenly',
+    every: 1,
+    until: null,
+  };
 }
 
 /** The last item is a plain stitch all round, or the only work so far. */

@@ -29,6 +29,9 @@ export function readBracket(reading: Reading, limit: number, before: readonly It
     return [];
   }
   if (isRoundsRemark(reading, open, close)) {
+    // `(3 rounds, 36 sts)`.
+    const rest = isMark(reading.lexes[open + 3]!, ',') ? totalBetween(reading, open + 4, close) : null;
+    if (rest) pushTotal(reading, rest, { start: reading.lexes[open + 4]!.start, end: reading.lexes[close - 1]!.end });
     reading.at = close + 1;
     return [{ type: 'note', span: spanFrom(reading, open), text: 'rounds' }];
   }

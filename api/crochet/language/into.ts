@@ -15,6 +15,8 @@ export function readInto(reading: Reading): TargetRead | null {
     if (isPlain(peek(reading), 'ring') || isWord(peek(reading), 'ring')) takeAll(reading, 'the');
     const isOver = reading.lexes[start]!.end - reading.lexes[start]!.start === 4 && isWord(reading.lexes[start]!, 'on');
     const target = readTarget(reading);
+    if (target && isOver && target.target.what === 'ch' && target.target.which === 'next')
+      return { ...target, target: { ...target.target, what: 'sp' } };
     if (target) return isOver ? { ...target, over: true } : target;
     reading.at = start;
     return null;
@@ -52,6 +54,7 @@ function isSlipTo(reading: Reading): boolean {
   const next = peek(reading, isWord(peek(reading, 1), 'the') ? 2 : 1);
   return (
     isWord(next, 'next', 'same', 'centre', 'corner', 'sp', 'sp2', 'first', 'loop') ||
+    next.kind === 'num' ||
     (next.kind === 'stitch' && next.text === 'ch') ||
     next.kind === 'ord'
   );

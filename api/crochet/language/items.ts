@@ -1,4 +1,5 @@
 import { type Item } from './tree.ts';
+import { stitchOf } from '../stitches.ts';
 import { finishGroup, hasWork, readBracket } from './groups.ts';
 import { type Lex } from './lexer.ts';
 import { isMark, isPlain, isWord, peek, spanFrom, take, type Reading } from './reading.ts';
@@ -7,21 +8,13 @@ import { readSlipJoin, readStep } from './steps.ts';
 import { readFill, readTimes } from './times.ts';
 import { readWork } from './works.ts';
 import { skipSeparator, readSentenceTotal, bar } from './separators.ts';
-import {
-  readLeadingTimes,
-  readColour,
-  readHookStart,
-  readLay,
-  readRingCount,
-  readSkip,
-  isColour,
-  readFar,
-} from './small-items.ts';
+import { readLeadingTimes, readColour, readLay, readSkip, isColour, readFar } from './small-items.ts';
 import { leftover } from './leftover.ts';
+import { readHookStart, readPicot, readRingCount } from './chain-items.ts';
 import { combine } from './combine.ts';
 import { readLeadingTotal, readToldTotal } from './told-totals.ts';
 import { readShaped, readStraight } from './shaped-lines.ts';
-import { readJoinedLoops, readPrefixed } from './prefixed.ts';
+import { readJoinedLoops, readLoopsOf, readPrefixed } from './prefixed.ts';
 import { readStars } from './stars.ts';
 
 /** Items up to an index. What begins no item becomes a note, or an unread stretch where it could change the count. */
@@ -30,6 +23,7 @@ export function readItems(reading: Reading, limit: number): Item[] {
   while (reading.at < limit) {
     const here = reading.at;
     if (skipSeparator(reading, limit, items)) continue;
+    if (isBeginning(reading)) reading.at += 1;
     while (isWord(peek(reading), 'and', 'of') || (isWord(peek(reading), 'the') && !isColour(reading))) reading.at += 1;
     if (reading.at >= limit) break;
     const found = readItem(reading, limit, items);
@@ -55,11 +49,25 @@ function readItem(reading: Reading, limit: number, items: Item[]): Item[] | null
   const relative = readRelative(reading, limit) ?? readShaped(reading, limit) ?? readStraight(reading, limit);
   if (relative) return [relative];
   if (isWord(lex, 'rep')) return readLeadingTimes(reading, limit) ?? readRepeat(reading, items);
-  if (isPlain(lex, 'begin', 'start', 'continue') && startsWork(peek(reading, 1))) {
+  const from = reading.at;
+  const verb = leadVerb(reading);
+  if (verb > 0) {
+    reading.at += verb;
+    const isEnding = isPlain(lex, 'ending', 'finishing');
+    return isEnding ? [{ type: 'note', span: spanFrom(reading, from), text: 'ending with' }] : [];
+  }
+  if (isWord(lex, 'work') && isPlain(peek(reading, 1), 'this', 'that', 'these', 'it') && isTimesSoon(reading)) {
     reading.at += 1;
+    return readRepeat(reading, items);
+  }
+  const rounds = readRoundsRemark(reading);
+  if (rounds) return [rounds];
+  const picot = readPicot(reading, items);
+  if (picot) {
+    items[items.length - 1] = picot;
     return [];
   }
-  const slip = readSlipJoin(reading, limit);
+  const slip = readSlipJoin(reading, limit, hasWork(items));
   if (slip) return [slip];
   const start = readHookStart(reading);
   if (start) {
@@ -75,6 +83,8 @@ function readItem(reading: Reading, limit: number, items: Item[]): Item[] | null
   if (colour) return [colour];
   const work = readWork(reading);
   if (work) return work;
+  const based = readLoopsOf(reading, limit);
+  if (based) return [based];
   const lay = readLay(reading);
   if (lay) return [lay];
   const ringed = readRingCount(reading);
@@ -104,8 +114,33 @@ function readItem(reading: Reading, limit: number, items: Item[]): Item[] | null
   return null;
 }
 
-/** A count or a stitch: `begin 6 sc in ring`. */
-const startsWork = (lex: Lex): boolean => lex.kind === 'num' || (lex.kind === 'stitch' && lex.text !== 'ch');
+/** Words before a count or a stitch that only say that it is done: `begin with 6 sc in ring`, `put 2 sc in each`, `ending sk 1`. */
+function leadVerb(reading: Reading): number {
+  if (!isPlain(peek(reading), 'begin', 'start', 'continue', 'put', 'place', 'add', 'ending', 'finishing')) return 0;
+  let length = 1;
+  while (length < 5 && isWord(peek(reading, length), 'with', 'the', 'in', 'last', 'rep', 'round', 'row')) length += 1;
+  return startsWork(peek(reading, length)) ? length : 0;
+}
+
+const startsWork = (lex: Lex): boolean =>
+  lex.kind === 'num' || isWord(lex, 'skip') || (lex.kind === 'stitch' && lex.text !== 'ch');
+
+/** `do that six times`. */
+const isTimesSoon = (reading: Reading): boolean =>
+  isWord(peek(reading, 2), 'twice', 'thrice', 'around', 'across') ||
+  (peek(reading, 2).kind === 'num' && isWord(peek(reading, 3), 'times'));
+
+/** `for the next 5 rounds`: how many rounds the line stands for, told to the reader of the whole pattern. */
+function readRoundsRemark(reading: Reading): Item | null {
+  if (!isPlain(peek(reading), 'for')) return null;
+  let i = 1;
+  while (isWord(peek(reading, i), 'the', 'next')) i += 1;
+  const number = peek(reading, i);
+  if (number.kind !== 'num' || !isWord(peek(reading, i + 1), 'round', 'row')) return null;
+  const from = reading.at;
+  reading.at += i + 2;
+  return { type: 'note', span: spanFrom(reading, from), text: `rounds ${String(number.value)}` };
+}
 
 /** `inc once, then once more`: the last is worked so many times again. */
 function readOnceMore(reading: Reading, last: Item): Item | null {
@@ -118,6 +153,13 @@ function readOnceMore(reading: Reading, last: Item): Item | null {
   }
   reading.at = start;
   return null;
+}
+
+/** `beg cl`: the cluster that a round begins with. */
+function isBeginning(reading: Reading): boolean {
+  const next = peek(reading, 1);
+  const family = next.kind === 'stitch' ? stitchOf(next.text)?.family : undefined;
+  return isWord(peek(reading), 'first') && (family === 'bunch' || family === 'group');
 }
 
 function readBars(reading: Reading, limit: number): Item[] | null {
@@ -143,6 +185,7 @@ function readRepeat(reading: Reading, items: Item[]): Item[] | null {
     reading.at += 1;
     return [];
   }
+  if (isPlain(peek(reading), 'this', 'that', 'these', 'it')) reading.at += 1;
   const said = readTimes(reading);
   if (!said) return null;
   const last = items.at(-1);

@@ -54,6 +54,9 @@ function ranged(lexes: readonly Lex[], i: number, kind: Label['kind'], word: Lex
   let to: number | null = from;
   let after = i + 1;
   for (;;) {
+    // `11)-14)`.
+    if (isMark(at(lexes, after), ')') && isMark(at(lexes, after + 1), '-') && isNumber(at(lexes, after + 2)))
+      after += 1;
     const joint = at(lexes, after);
     if (isMark(joint, '+') && !isNumber(at(lexes, after + 1))) {
       to = null;
@@ -103,7 +106,7 @@ const isPlural = (word: Lex): boolean => {
 
 /** What closes a label: a colon, stop, bracket, dash; `(RS)`, `(4 rounds)`; `incl`. */
 function closing(lexes: readonly Lex[], start: number): number {
-  let i = start;
+  let i = evenRows(lexes, start);
   for (;;) {
     const lex = at(lexes, i);
     if (isPlain(lex, 'incl', 'inclusive', 'rs', 'ws')) {
@@ -131,6 +134,20 @@ function closing(lexes: readonly Lex[], start: number): number {
     }
     return i;
   }
+}
+
+/** `Row 2 and all even rows:`, `Row 3 and every alt row:`. */
+function evenRows(lexes: readonly Lex[], start: number): number {
+  if (!isWord(at(lexes, start), 'and', 'each')) return start;
+  for (let i = start + 1; i < start + 7; i += 1) {
+    if (isRoundWord(at(lexes, i)) && !isNumber(at(lexes, i + 1))) return i + 1;
+    const isSaid =
+      isWord(at(lexes, i), 'each', 'other', 'the', 'next', 'even', 'remain') ||
+      isPlain(at(lexes, i), 'odd', 'numbered', 'wrong', 'right') ||
+      isMark(at(lexes, i), '-');
+    if (!isSaid && at(lexes, i).kind !== 'ord') return start;
+  }
+  return start;
 }
 
 /** `|3 sc, dec| × 6`: bars round a group, not the cell of a table. */
@@ -184,7 +201,7 @@ function ordinal(lexes: readonly Lex[], start: number): Label | null {
   return { kind, from: first.value, to, after: closing(lexes, i + 1), next: 0, uncertain: false };
 }
 
-const isLabelEnd = (lex: Lex): boolean => lex.kind === 'mark' && [':', '-', '.', ')', '=', '('].includes(lex.text);
+const isLabelEnd = (lex: Lex): boolean => lex.kind === 'mark' && [':', '-', '.', ')', '=', '(', '|'].includes(lex.text);
 
 /** `Next round:`, `next 5 rows`. */
 function next(lexes: readonly Lex[], start: number): Label | null {
@@ -245,6 +262,9 @@ function bare(lexes: readonly Lex[], start: number): Label | null {
   if (number.kind !== 'num') return null;
   let i = start + 1;
   let to = number.value;
+  if (isMark(at(lexes, i), '+') && at(lexes, i).glued && at(lexes, i + 1).kind === 'stitch')
+    return { kind: 'bare', from: number.value, to: null, after: i + 1, next: 0, uncertain: true };
+  if (isMark(at(lexes, i), ')') && isMark(at(lexes, i + 1), '-')) i += 1;
   const joint = at(lexes, i);
   if (isMark(joint, '-') || isWord(joint, 'to') || isMark(joint, ')')) {
     const second = at(lexes, i + 1);
@@ -258,6 +278,7 @@ function bare(lexes: readonly Lex[], start: number): Label | null {
     !isMark(end, '.') &&
     !isMark(end, ')') &&
     !isMark(end, ':') &&
+    !(isMark(end, '|') && start > 0) &&
     !(isMark(end, '-') && !end.glued) &&
     !(isMark(end, '=') && to === number.value)
   )

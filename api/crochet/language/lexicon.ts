@@ -9,7 +9,7 @@ export interface Meaning {
 
 /** Words of the grammar, each with all its spellings. Longest match wins. */
 const WORDS: Readonly<Record<string, string>> = {
-  in: 'in, into, in to, inside, inside of, onto, scin',
+  in: 'in, into, in to, inside, inside of, onto, under',
   on: 'on, upon, over',
   through: 'through, thru, thro',
   to: 'to, until, till, til, up to',
@@ -25,7 +25,7 @@ const WORDS: Readonly<Record<string, string>> = {
   sp: 'sp, sps, space, spaces, hole, holes, spc, spcs',
   loop: 'loop, loops, lp, lps, arch, arches',
   gap: 'gap, gaps, space between, spaces between, sp between, sps between, between',
-  ring: 'ring, circle, magic ring, magic circle, magic loop, mr, mc, mgc, magic rng, adjustable ring, adjustable loop, sliding loop, slip ring, magical ring, magic',
+  ring: 'ring, circle, magic ring, magic circle, magic loop, mr, mc, mgc, magic rng, adjustable ring, adjustable loop, sliding loop, slip ring, magical ring, magic, ml, m r',
   corner: 'corner, corners, cnr, corner sp, corner space, corner sps, corner spaces, corner loop',
   around:
     'around, arround, aroud, all around, all the way around, all the way round, all round, rnd around, around the whole round, entire round, around the circle, throughout, to complete round, to complete rnd',
@@ -58,12 +58,12 @@ const WORDS: Readonly<Record<string, string>> = {
   evenly: 'evenly, evenly spaced, evenly around, evenly spaced around, evenly across',
   remain: 'remain, remaining, rem, left, are left, remains, rest, rest of',
   total:
-    'total, totals, total of, in total, altogether, in all, a total of, you will have, you should have, you have, there should be, makes, sts total',
+    'total, totals, total of, in total, altogether, a total of, you will have, you should have, you have, there should be, makes, sts total',
   counts:
     'counts as, count as, counts, counted as, counting as, counts for, does count as, is counted as, stands for, acts as, takes the place of, count, serves as, considered',
   not: 'not, do not, does not, doesnt, dont, don t, doesn t, without, never, doesn, don',
   as: 'as, like',
-  hook: 'hook, from hook, from the hook, from your hook',
+  hook: 'hook, from hook, from the hook, from your hook, hk, from hk, from the hk',
   layers: 'both layers, both sides, both thicknesses, both pieces, both edges, two layers, layers',
   top: 'top, top of, head, head of, tops',
   side: 'side, sides, edge, edges, opposite side, other side',

@@ -25,13 +25,14 @@ export function freeLoops(reading: Reading, loops: Loops): TargetRead | null {
     if (!isWord(peek(reading), 'of', 'the', 'in', 'on', 'from')) free = true;
     reading.at += 1;
   }
+  const isOwn = !free && !isWord(reading.lexes[reading.at - 1]!, 'in', 'on');
   if (isWord(peek(reading), 'round', 'row') || (isPlain(peek(reading), 'r') && peek(reading, 1).kind === 'num')) {
     reading.at += 1;
     const number = peek(reading);
     if (number.kind === 'num') {
       reading.at += 1;
       return {
-        target: { what: 'loop', which: 'each', line: number.value },
+        target: { what: 'loop', which: 'each', line: number.value, ...(isOwn && { own: true as const }) },
         count: null,
         fill: true,
         loops,

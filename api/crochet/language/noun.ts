@@ -50,6 +50,10 @@ function single(reading: Reading): Noun | null {
   if (lex.kind === 'num') return numbered(reading);
   if (lex.kind === 'stitch') return stitchNoun(reading);
   if (lex.kind === 'word') {
+    if (isPlain(lex, 'long', 'longs')) {
+      reading.at += 1;
+      return { what: 'st', stitch: 'dc' };
+    }
     if (isPlain(lex, 'one', 'stick', 'picots')) {
       reading.at += 1;
       return { what: 'st' };
@@ -137,6 +141,7 @@ function numbered(reading: Reading): Noun | null {
   if (peek(reading).kind === 'stitch') {
     const key = peek(reading).text;
     reading.at += 1;
+    if (key === 'ch' && isMark(peek(reading), '-') && isWord(peek(reading, 1), 'sp', 'loop')) reading.at += 1;
     if (key === 'ch' && take(reading, 'sp', 'loop', 'corner')) return { what: 'sp', chains: n };
     if (take(reading, 'group')) return { what: 'group', stitch: key };
   }

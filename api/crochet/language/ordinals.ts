@@ -21,7 +21,7 @@ export function isSpaceNumber(reading: Reading): boolean {
     isWord(peek(reading, skip), 'sp2') ||
     (peek(reading, skip).kind === 'stitch' &&
       peek(reading, skip).text === 'ch' &&
-      isWord(peek(reading, skip + 1), 'sp', 'loop') &&
+      isWord(peek(reading, isMark(peek(reading, skip + 1), '-') ? skip + 2 : skip + 1), 'sp', 'loop') &&
       peek(reading).value < 12)
   );
 }
@@ -52,6 +52,9 @@ export function ordinal(reading: Reading, n: number): TargetRead {
     }
     reading.at = start;
   }
+  // `2 sc in the third`: after two, simply the next.
+  if (!noun && n > 1 && (peek(reading).kind === 'mark' || peek(reading).kind === 'end'))
+    return plainTarget('st', 'next');
   if (noun?.what === 'ch')
     return { target: { what: 'ch', which: 'hook', n }, count: null, fill: false, loops: null, also: null };
   return {

@@ -24,6 +24,20 @@ export function readPrefixed(reading: Reading, limit: number): Item[] | null {
   if (isMark(peek(reading), ',') || isMark(peek(reading), ':') || isMark(peek(reading), '-')) reading.at += 1;
   takeAll(reading, 'work', 'and');
   if (target.target.what === 'loop') return [loopBase(reading, from, target.target, limit)];
+  const series = target.target.which === 'each' ? wholeSeries(reading, limit) : null;
+  if (series) {
+    return [
+      {
+        type: 'group',
+        span: spanFrom(reading, from),
+        items: series,
+        times: readFillOr(reading),
+        into: target.target,
+        mark: '(',
+        stop: null,
+      },
+    ];
+  }
   const next = peek(reading);
   if (isMark(next, '(') || isMark(next, '[') || isMark(next, '{')) {
     const inner = readBracket(reading, limit, []);
@@ -69,6 +83,28 @@ export function readPrefixed(reading: Reading, limit: number): Item[] | null {
   return work;
 }
 
+/** `in each lp make sc, hdc, 3 dc, hdc, sc`: all of a series, up to a full stop, where none of it names a place. */
+function wholeSeries(reading: Reading, limit: number): Item[] | null {
+  const start = reading.at;
+  const items: Item[] = [];
+  while (reading.at < limit) {
+    const work = readWork(reading);
+    const only = work?.[0];
+    if (work?.length !== 1 || only?.type !== 'work' || only.into || only.times.type !== 'n') break;
+    items.push(only);
+    const isSeparated = isMark(peek(reading), ',') || isWord(peek(reading), 'and');
+    if (!isSeparated) {
+      const end = peek(reading);
+      const ends = end.kind === 'end' || isMark(end, '.') || isMark(end, ';') || isMark(end, '(') || isMark(end, '[');
+      if (ends && items.length > 1) return items;
+      break;
+    }
+    while (isMark(peek(reading), ',') || isWord(peek(reading), 'and')) reading.at += 1;
+  }
+  reading.at = start;
+  return null;
+}
+
 export function readFillOr(reading: Reading) {
   return readFill(reading) ?? ({ type: 'fill', leave: [0], leaveOf: null, to: null } as const);
 }
@@ -98,6 +134,22 @@ export function loopBase(
 ): Item {
   const items = readItems(reading, limit);
   return { type: 'group', span: spanFrom(reading, from), items, times: times(ONE), into: target, mark: '', stop: null };
+}
+
+/** `BL of rnd 16: …`: what follows is worked into the loops of that round. */
+export function readLoopsOf(reading: Reading, limit: number): Item | null {
+  const from = reading.at;
+  const isNamed =
+    isWord(peek(reading), 'blo', 'flo') &&
+    (isWord(peek(reading, 1), 'of', 'in', 'from', 'round', 'row') || isPlain(peek(reading, 1), 'r'));
+  if (!isNamed) return null;
+  const target = readTarget(reading);
+  if (target?.target.what !== 'loop' || target.target.line === undefined) {
+    reading.at = from;
+    return null;
+  }
+  while (isSeparator(peek(reading)) && reading.at < limit) reading.at += 1;
+  return loopBase(reading, from, target.target, limit);
 }
 
 /** `Join yarn in free front loops of R3: …`: what follows is worked into those loops. */

@@ -14,7 +14,9 @@ export function printPlace(target: Target, n: number, terms: Terms, sized?: Size
   if (target.what === 'ring') return 'ring';
   if (target.what === 'edge') return 'the edge';
   if (target.what === 'loop')
-    return target.line === undefined ? 'the free loops left' : `the front loops left in R${String(target.line)}`;
+    return target.line === undefined
+      ? 'the free loops left'
+      : `the front loops ${target.own ? 'of' : 'left in'} R${String(target.line)}`;
   switch (target.which) {
     case 'each':
       return `each ${noun}`;

@@ -32,7 +32,7 @@ const LOOPS: Readonly<Record<Loops, string>> = {
  * @example printLine(readLine('[sc, inc] 6 times').tree) === '(sc, inc) × 6'
  */
 export function printLine(tree: LineTree, options: PrintOptions = {}): string {
-  return printItems(tree.items, options.terms ?? 'US');
+  return printAll(tree.items, options.terms ?? 'US');
 }
 
 /**
@@ -41,9 +41,30 @@ export function printLine(tree: LineTree, options: PrintOptions = {}): string {
 export function houseStyle(text: string, terms: Terms): string | null {
   const read = readLine(text, { terms });
   if (read.unread.length > 0 || read.tree.items.length === 0) return null;
-  const line = printItems(read.tree.items, terms);
+  const line = printAll(read.tree.items, terms);
   const whole = read.total ? `${line}  (${printTotals(read.total, terms)})` : line;
   return whole === text.trim() ? null : whole;
+}
+
+/** A line with one stitch in it says its one; the name alone would be that stitch all round. */
+function printAll(items: readonly Item[], terms: Terms): string {
+  const text = printItems(items, terms);
+  const works = items.filter((item) => item.type !== 'note' && item.type !== 'step' && item.type !== 'loops');
+  const [only] = works;
+  const isOne =
+    works.length === 1 &&
+    only?.type === 'work' &&
+    !only.into &&
+    only.stitch !== 'ch' &&
+    !only.multiplied &&
+    only.times.type === 'n' &&
+    only.times.n.join() === '1' &&
+    only.per.join() === '1';
+  if (!isOne) return text;
+  return printItems(
+    items.map((item) => (item === only ? { ...item, type: 'note', text: `1 ${printItem(only, terms)}` } : item)),
+    terms,
+  );
 }
 
 function printItems(items: readonly Item[], terms: Terms): string {

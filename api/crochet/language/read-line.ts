@@ -3,9 +3,11 @@ import { type SpecialStitch } from '../count/input.ts';
 import { type Item, type LineTree, type Loops, type ReadLine, type Totals } from './tree.ts';
 import { readItems } from './items.ts';
 import { readLabel } from './labels.ts';
-import { lexesOf } from './lexer.ts';
+import { lexesOf, type Lex } from './lexer.ts';
 import { closesOf, type Reading } from './reading.ts';
 import { ownForms } from './special.ts';
+import { stitchOf } from '../stitches.ts';
+import { FILL } from './times.ts';
 
 export interface ReadOptions {
   readonly terms?: Terms;
@@ -34,7 +36,7 @@ export function readLine(text: string, options: ReadOptions = {}): ReadLine {
   };
   reading.at = readLabel(lexes, 0)?.after ?? 0;
   const start = lexes[reading.at]!.start;
-  const items = readItems(reading, lexes.length - 1);
+  const items = allRound(readItems(reading, lexes.length - 1), lexes);
   const tree: LineTree = { span: { start, end: text.length }, items, loops: loopsOf(items) };
   const total = totalOf(reading);
   return { tree, total: total?.kinds ?? null, totalSpan: total?.span ?? null, unread: unreadOf(items) };
@@ -51,6 +53,20 @@ function tooLong(text: string): ReadLine {
     totalSpan: null,
     unread: [span],
   };
+}
+
+/** `Rnds 6-16: sc`, `R5: inc (12)`: a line that is only the name of a stitch is that stitch all round. */
+function allRound(items: Item[], lexes: readonly Lex[]): Item[] {
+  const works = items.filter((item) => item.type !== 'note' && item.type !== 'step' && item.type !== 'loops');
+  const [only] = works;
+  if (works.length !== 1 || only?.type !== 'work' || only.into || only.times.type !== 'n') return items;
+  const isCounted =
+    only.multiplied ||
+    lexes.some((lex) => lex.kind === 'num' && lex.start >= only.span.start && lex.end <= only.span.end);
+  const isName = !isCounted && only.times.n.length === 1 && only.times.n[0] === 1 && only.per[0] === 1;
+  const family = stitchOf(only.stitch)?.family ?? '';
+  if (!isName || !['plain', 'post', 'increase', 'decrease'].includes(family)) return items;
+  return items.map((item) => (item === only ? { ...only, times: FILL } : item));
 }
 
 /** Loops that hold for the whole line: said alone at its start or at its end. */

@@ -1,6 +1,7 @@
 import { type Item } from './tree.ts';
 import { hasWork } from './groups.ts';
 import { isMark, isPlain, isSeparator, isTimesSign, isWord, peek, spanFrom, takeAll, type Reading } from './reading.ts';
+import { isStepWord } from './step-words.ts';
 import { readBareTotal } from './totals.ts';
 import { readEachRoundTotal, readToldTotal } from './told-totals.ts';
 
@@ -11,7 +12,7 @@ export function skipSeparator(reading: Reading, limit: number, items: readonly I
   if (isMark(lex, '|') && bar(reading, limit) !== null) return false;
   const from = reading.at;
   reading.at += 1;
-  if (isMark(lex, '=')) {
+  if (isMark(lex, '=') || isMark(lex, '>') || isMark(lex, '~')) {
     if (isMark(peek(reading), '>')) reading.at += 1;
     if (readBareTotal(reading, limit, from)) return true;
     return true;
@@ -31,16 +32,23 @@ export function skipSeparator(reading: Reading, limit: number, items: readonly I
     reading.at + 1 >= limit ||
     isMark(after, '.') ||
     isMark(after, '(') ||
-    onlyMarks(reading, limit);
+    onlyMarks(reading, limit) ||
+    isStepWord(after) ||
+    isDashed(reading);
   if (ends || isWord(after, 'st') || after.kind === 'stitch' || isWord(after, 'sp', 'sp2', 'group', 'loop', 'total')) {
     if (isTotalHere(reading, lex.text, items, limit, ends)) readBareTotal(reading, limit, from);
   }
   return true;
 }
 
+/** `on rnd`, `in the round`. */
+const isRoundWordAt = (reading: Reading, ahead: number): boolean =>
+  isWord(peek(reading, ahead), 'round', 'row') ||
+  (isWord(peek(reading, ahead), 'the') && isWord(peek(reading, ahead + 1), 'round', 'row'));
+
 /** `--- 18 ---`, `|18|`: nothing but marks behind the figure. */
-function onlyMarks(reading: Reading, limit: number): boolean {
-  let at = reading.at + 1;
+function onlyMarks(reading: Reading, limit: number, ahead = 1): boolean {
+  let at = reading.at + ahead;
   while (at < limit && at < reading.at + 8 && isSeparator(reading.lexes[at]!)) at += 1;
   return at >= limit;
 }
@@ -54,6 +62,7 @@ export function isTotalHere(
   ends: boolean,
 ): boolean {
   const next = peek(reading, 1);
+  if (isWord(peek(reading, 2), 'in', 'on') && isRoundWordAt(reading, 3)) return true;
   if (isWord(peek(reading, 2), 'in', 'on', 'around', 'across', 'to', 'each')) return false;
   if (ends) return true;
   if (isWord(peek(reading, 2), 'total')) return true;
@@ -62,11 +71,12 @@ export function isTotalHere(
     return isClosed(items) || separator === '-' || separator === '.' || separator === ':' || separator === ';'
       ? reading.at + 2 >= limit || endsSoon(reading, 2)
       : false;
+  if (separator === ':' && onlyMarks(reading, limit, 2)) return true;
   return isClosed(items) && endsSoon(reading, 2) && separator !== ',';
 }
 
 export function endsSoon(reading: Reading, ahead: number): boolean {
-  for (let i = ahead; i < ahead + 12; i += 1) {
+  for (let i = ahead; i < ahead + 24; i += 1) {
     const lex = peek(reading, i);
     if (lex.kind === 'end' || isMark(lex, '.') || isWord(lex, 'join', 'turn', 'total', 'round', 'row', 'remain'))
       return true;
@@ -100,7 +110,21 @@ export function bareEnd(reading: Reading, limit: number, items: readonly Item[])
   const next = peek(reading, 1);
   const atEnd = onlyMarks(reading, limit);
   const withUnit = isWord(next, 'st') && (reading.at + 2 >= limit || isMark(peek(reading, 2), '.')) && isClosed(items);
-  return (atEnd || withUnit) && readBareTotal(reading, limit, reading.at);
+  return (atEnd || withUnit || isRoundByRound(reading, limit)) && readBareTotal(reading, limit, reading.at);
+}
+
+/** `20:15:10`: a total for each round of a range. */
+function isRoundByRound(reading: Reading, limit: number): boolean {
+  let at = reading.at;
+  while (at + 2 < limit && reading.lexes[at]!.kind === 'num' && isMark(reading.lexes[at + 1]!, ':')) at += 2;
+  return at > reading.at && at + 1 === limit && reading.lexes[at]!.kind === 'num';
+}
+
+/** `54 – if it ripples, go down half a size`: a figure, a dash and prose. */
+function isDashed(reading: Reading): boolean {
+  const dash = peek(reading, 1);
+  const word = peek(reading, 2);
+  return isMark(dash, '-') && !dash.glued && (word.kind === 'word' || isStepWord(word));
 }
 
 /** `you will have 18 stitches`. */

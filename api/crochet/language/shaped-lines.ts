@@ -18,7 +18,9 @@ export function readShaped(reading: Reading, limit: number): Item | null {
   reading.at += 1;
   const n = lead ?? readSized(reading) ?? [1];
   takeAll(reading, 'st', 'times');
-  if (take(reading, 'evenly')) {
+  const isSpread = isInRound(reading);
+  if (isSpread > 0) reading.at += isSpread;
+  if (isSpread > 0 || take(reading, 'evenly')) {
     takeAll(reading, 'around', 'across', 'in', 'evenlytail');
     while (isWord(peek(reading), 'the', 'round', 'row', 'around', 'each') || isPlain(peek(reading), 'spaced', 'apart'))
       reading.at += 1;
@@ -35,8 +37,9 @@ export function readShaped(reading: Reading, limit: number): Item | null {
   if (isPlain(peek(reading), 'at')) reading.at += 1;
   takeAll(reading, 'in', 'the', 'work');
   const each = isWord(peek(reading), 'each') || isPlain(peek(reading), 'both');
-  if (each && isWord(peek(reading, 1), 'end', 'side')) {
-    reading.at += 2;
+  const one = each ? null : oneEnd(reading);
+  if (one || (each && isWord(peek(reading, 1), 'end', 'side'))) {
+    if (!one) reading.at += 2;
     let every = 1;
     const start = reading.at;
     while (
@@ -55,14 +58,33 @@ export function readShaped(reading: Reading, limit: number): Item | null {
     return {
       type: 'shaped',
       span: spanFrom(reading, from),
-      change: n.map((k) => k * sign * 2),
-      how: 'each-end',
+      change: n.map((k) => k * sign * (one ? 1 : 2)),
+      how: one ?? 'each-end',
       every: until ? every : 1,
       until,
     };
   }
   reading.at = from;
   return null;
+}
+
+/** `inc 6 sc in rnd`: so many more in the round, wherever. How many meanings that is. */
+function isInRound(reading: Reading): number {
+  let i = peek(reading).kind === 'stitch' ? 1 : 0;
+  if (!isWord(peek(reading, i), 'in', 'on', 'each')) return 0;
+  while (isWord(peek(reading, i), 'in', 'on', 'the', 'each')) i += 1;
+  return isWord(peek(reading, i), 'round', 'row') ? i + 1 : 0;
+}
+
+/** `at beg of next and foll alt rows`, `at end of next row`. */
+function oneEnd(reading: Reading): 'begin' | 'finish' | null {
+  let i = isPlain(peek(reading), 'at') ? 1 : 0;
+  while (isWord(peek(reading, i), 'the', 'in')) i += 1;
+  const isEnd = isWord(peek(reading, i), 'first', 'end') && isWord(peek(reading, i + 1), 'of');
+  if (!isEnd) return null;
+  const how = isWord(peek(reading, i), 'first') ? 'begin' : 'finish';
+  reading.at += i + 2;
+  return how;
 }
 
 export function readUntilSts(reading: Reading): Sized | null {

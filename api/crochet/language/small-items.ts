@@ -22,6 +22,11 @@ export function readSkip(reading: Reading): Item | null {
     return { type: 'skip', span: spanFrom(reading, from), n, of: noun ? { ...noun, which: 'next' } : null };
   }
   const target = readTarget(reading);
+  if (isWord(peek(reading), 'tog')) {
+    // `sk next 2 sts tog`: a slip of some kind, and nothing says which.
+    reading.at += 1;
+    return { type: 'unread', span: spanFrom(reading, from) };
+  }
   if (target) {
     if (target.target.which === 'every')
       return { type: 'skip', span: spanFrom(reading, from), n: ONE, of: target.target };
@@ -72,48 +77,6 @@ export function readLeadingTimes(reading: Reading, limit: number): Item[] | null
   }
   reading.at = from;
   return null;
-}
-
-/**
- * `starting in 2nd ch from hook`, `beginning with the 4th ch`: the chains before it are passed over. Stands before the
- * stitches, whether it was said before or after them.
- */
-export function readHookStart(reading: Reading): Item | null {
-  const from = reading.at;
-  if (!isPlain(peek(reading), 'start', 'starting', 'begin', 'commencing') && !isWord(peek(reading), 'first'))
-    return null;
-  reading.at += 1;
-  takeAll(reading, 'in', 'on', 'from', 'with', 'the');
-  const nth = peek(reading);
-  if (nth.kind === 'ord' && peek(reading, 1).kind === 'stitch' && peek(reading, 1).text === 'ch' && nth.value > 1) {
-    reading.at += 2;
-    takeAll(reading, 'from', 'the', 'hook');
-    return { type: 'skip', span: spanFrom(reading, from), n: [nth.value - 1], of: { what: 'ch', which: 'first' } };
-  }
-  reading.at = from;
-  return null;
-}
-
-/** `MR 6`, `magic ring, 6x`: a ring and a number alone, which are stitches in it. */
-export function readRingCount(reading: Reading): Work | null {
-  if (!isWord(peek(reading), 'ring')) return null;
-  const from = reading.at;
-  const skip = isMark(peek(reading, 1), ',') || isMark(peek(reading, 1), '-') || isMark(peek(reading, 1), ':') ? 2 : 1;
-  const number = peek(reading, skip);
-  const tail = isTimesSign(peek(reading, skip + 1)) ? 1 : 0;
-  if (number.kind !== 'num' || !isSeparatorOrEnd(reading, skip + 1 + tail)) return null;
-  reading.at += skip + 1 + tail;
-  return {
-    type: 'work',
-    span: spanFrom(reading, from),
-    stitch: reading.stitch ?? 'sc',
-    per: [number.value],
-    times: times(ONE),
-    into: { what: 'ring', which: 'next' },
-    loops: null,
-    glued: false,
-    multiplied: false,
-  };
 }
 
 /** `6 times: sc, inc`: all that follows, up to its total. */

@@ -63,6 +63,7 @@ export function withEnding(reading: Reading, group: Group): Group {
     const from = reading.at;
     reading.at += 1;
     takeAll(reading, 'last', 'the', 'rep', 'in', 'on', 'to');
+
     if (isPlain(peek(reading), 'at')) reading.at += 1;
     if (isMark(peek(reading), '**')) {
       reading.at += 1;

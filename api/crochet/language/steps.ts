@@ -1,20 +1,7 @@
 import { type Item, type Step } from './tree.ts';
+import { VERBS } from './step-words.ts';
 import { totalBetween } from './totals.ts';
 import { isMark, isPlain, isSeparator, isWord, peek, spanFrom, take, takeAll, type Reading } from './reading.ts';
-
-/** Verbs that begin something done which adds no stitch; figures in such a clause are no counts. */
-const VERBS = new Set(
-  (
-    'stuff insert attach sew cut weave fasten finish fo change switch drop pick pull close tie embroider fold pinch ' +
-    'mark move put add secure start begin continue flatten hold remember note use gather tighten remove draw thread ' +
-    'block press hide bind trim glue pin position slide leave break rejoin introduce carry keep see repeat-for stitch-up ' +
-    'turn-inside lightly firmly filling fill shape attaching sewing stuffing changing counting photo picture pic ' +
-    'colour color yarn tail end invisible steam wash wind wrap push cinch burst separate lay pass-tail ends using ' +
-    'optional tip hint important if when you this these now-you safety eyes eye button buttons work-in measure measures ' +
-    'piece yarn-over right wrong rs ws loosely tightly lengthen approx approximately about it he she we i with cont ' +
-    'do-not-stuff skip-stuffing proceed assemble assembly'
-  ).split(' '),
-);
 
 const KIND: Readonly<Record<string, Step['what']>> = {
   change: 'colour',
@@ -87,10 +74,12 @@ export function readStep(reading: Reading, limit: number): Item | null {
     return step(reading, from, 'do');
   }
   if (lex.kind === 'word' && VERBS.has(lex.text)) {
-    if (lex.text === 'leave') return readLeave(reading, limit);
+    if (lex.text === 'leave' || lex.text === 'leaving') return readLeave(reading, limit);
     if (lex.text === 'with' || lex.text === 'using') return null;
     reading.at += 1;
-    takeClause(reading, limit);
+    // `attach leg: sc 2 through leg and body`: what stands behind the colon is worked.
+    const isAttaching = ['attach', 'add', 'insert', 'pinch'].includes(lex.text);
+    takeClause(reading, limit, isAttaching ? [',', ';', '.', ':'] : undefined);
     return step(reading, from, KIND[lex.text] ?? 'do');
   }
   return null;
@@ -134,12 +123,13 @@ function readLeave(reading: Reading, limit: number): Item {
 }
 
 /** `sl st in first sc`, `sl st to join`, `ss to top of 3 ch`: a slip stitch that joins a round. */
-export function readSlipJoin(reading: Reading, limit: number): Item | null {
+export function readSlipJoin(reading: Reading, limit: number, hasWork: boolean): Item | null {
   const from = reading.at;
   const lex = peek(reading);
   if (lex.kind !== 'stitch' || lex.text !== 'slst') return null;
   reading.at += 1;
   const rest = reading.at;
+  if (hasWork && endsRound(reading, limit)) return step(reading, from, 'join', { into: 'unsaid' });
   if (formsRing(reading)) {
     takeClause(reading, limit);
     return step(reading, from, 'ring');
@@ -163,6 +153,21 @@ export function readSlipJoin(reading: Reading, limit: number): Item | null {
   return null;
 }
 
+/** `…, ss. 27 sc.`, `…, sl st, ch 1 (6)`: a slip stitch alone at the end of a round closes it. */
+function endsRound(reading: Reading, limit: number): boolean {
+  let i = 0;
+  if (isMark(peek(reading, i), ',') || isMark(peek(reading, i), ';')) i += 1;
+  const isChain = peek(reading, i).kind === 'stitch' && peek(reading, i).text === 'ch';
+  if (isChain) i += peek(reading, i + 1).kind === 'num' ? 2 : 1;
+  if (i === 1 && !isChain && !isWord(peek(reading, 1), 'turn')) return false;
+  const lex = peek(reading, i);
+  if (reading.at + i >= limit) return true;
+  const close =
+    isMark(lex, '(') || isMark(lex, '[') || isMark(lex, '{') ? reading.closes.get(reading.at + i) : undefined;
+  if (close !== undefined) return totalBetween(reading, reading.at + i + 1, close) !== null;
+  return isMark(lex, '.') || isMark(lex, '=') || isMark(lex, '>') || isWord(lex, 'turn');
+}
+
 /** `to form a ring`, `in first ch to make ring`, within this clause. */
 function formsRing(reading: Reading): boolean {
   for (let i = 0; i < 12; i += 1) {
@@ -179,7 +184,8 @@ function isChainTop(reading: Reading): boolean {
   const isNth =
     lex.kind === 'ord' &&
     ((peek(reading, 1).kind === 'stitch' && peek(reading, 1).text === 'ch') ||
-      (isWord(peek(reading, 1), 'of') && peek(reading, 2).kind === 'num'));
+      (isWord(peek(reading, 1), 'of') && peek(reading, 2).kind === 'num') ||
+      (isWord(peek(reading, 1), 'st') && isWord(peek(reading, 2), 'of') && peek(reading, 3).text === 'ch'));
   return isNth && !isWord(peek(reading, 2), 'hook');
 }
 

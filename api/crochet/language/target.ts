@@ -132,6 +132,8 @@ function place(reading: Reading): TargetRead | null {
     }
   }
   const noun = readNoun(reading);
+  // `in st at base of ch`.
+  if (noun?.what === 'st' && isWord(peek(reading), 'same')) return same(reading);
   return noun ? fromNoun(noun, 'next', null, false) : null;
 }
 
@@ -230,6 +232,15 @@ function counted(reading: Reading, which: Target['which']): TargetRead {
     reading.at += 1;
     readNoun(reading);
     return plainTarget('mark', 'next', count);
+  }
+  if (
+    count &&
+    isWord(peek(reading), 'remain') &&
+    (peek(reading, 1).kind === 'mark' || peek(reading, 1).kind === 'end')
+  ) {
+    // `sc in the 4 left`.
+    reading.at += 1;
+    return plainTarget('st', 'skipped', count);
   }
   const noun = readNoun(reading);
   // The first three are three in order.

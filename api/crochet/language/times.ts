@@ -185,6 +185,12 @@ export function readTimes(reading: Reading): Times | null {
   if (multiple) {
     if (take(reading, 'more', 'again')) return times(multiple.map((n) => n + 1));
     takeAll(reading, 'total');
+    if (
+      isWord(peek(reading), 'in') &&
+      isWord(peek(reading, 1), 'each') &&
+      peek(reading, 1).end - peek(reading, 1).start === 3
+    )
+      reading.at += 2;
     const after = reading.at;
     if (!readFill(reading)) reading.at = after;
     return starred && !inAll ? { type: 'rep', n: multiple } : times(multiple);

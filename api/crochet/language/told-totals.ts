@@ -3,13 +3,15 @@ import { pushTotal, readBareTotal } from './totals.ts';
 
 /** Words a sentence about a total is made of. */
 const TALK = new Set(
-  'you should will now there are have has had is be this that gives giving making resulting result results count number for and so up ending leaving leaves at'.split(
+  'you should will now there are have has had is be this that gives giving making resulting result results count number for and so up ending leaving leaves at them still us which brings bring down back takes to'.split(
     ' ',
   ),
 );
-const TALK_WORDS = ['total', 'st', 'round', 'row', 'of', 'the', 'with', 'in', 'counts', 'work', 'each'];
+const TALK_WORDS = ['to', 'total', 'st', 'round', 'row', 'of', 'the', 'with', 'in', 'counts', 'work', 'each'];
 /** One of these at least must be among them. */
-const TELLING = new Set('have has be gives giving making resulting result results count number'.split(' '));
+const TELLING = new Set(
+  'have has be gives giving making resulting result results count number brings takes'.split(' '),
+);
 
 /** `You should now have 18 sc`, `for a total of 18`, `there will be 18 sts`, `stitch count: 18`: a total in a sentence. */
 export function readToldTotal(reading: Reading, limit: number): boolean {

@@ -1,4 +1,5 @@
 import { type Span } from '../span.ts';
+import { isStepWord } from './step-words.ts';
 import { isMark, isPlain, isTimesSign, isWord, type Reading } from './reading.ts';
 import { figuresBetween } from './amounts.ts';
 import { stitchOf } from '../stitches.ts';
@@ -51,6 +52,7 @@ const PLAIN_FILLER = new Set([
   'has',
   'will',
   'be',
+  'us',
 ]);
 
 /**
@@ -91,6 +93,14 @@ export function totalBetween(reading: Reading, from: number, to: number): Kinds 
       continue;
     }
     // `sc 18`, `A 14`, `sts 18`.
+    // `(14 dc, counting ch)`: what is said of the chain is no figure of its own.
+    if (figures > 0 && isPlain(lex, 'counting', 'including', 'incl', 'excluding')) return kinds;
+    // `35 dc + ch 3`: the chain apart.
+    if (figures > 0 && isChainApart(reading, at, to)) {
+      kinds.ch = [reading.lexes[at + 1]!.value];
+      at += 2;
+      continue;
+    }
     const unit = unitAt(reading, at, to);
     let after = unit.after;
     while (
@@ -110,6 +120,20 @@ export function totalBetween(reading: Reading, from: number, to: number): Kinds 
     return null;
   }
   return figures > 0 ? kinds : null;
+}
+
+function isChainApart(reading: Reading, at: number, to: number): boolean {
+  const lex = reading.lexes[at]!;
+  const next = reading.lexes[at + 1]!;
+  const after = reading.lexes[at + 2]!;
+  return (
+    lex.kind === 'stitch' &&
+    lex.text === 'ch' &&
+    next.kind === 'num' &&
+    at + 2 <= to &&
+    !isWord(after, 'sp', 'loop', 'corner') &&
+    !isMark(after, '-')
+  );
 }
 
 /** `the`, and the `a` of `18 stitches a row`, but not colour A. */
@@ -139,13 +163,19 @@ function unitAt(reading: Reading, at: number, to: number): { kind: string; after
     if (next.kind === 'stitch') return unitAt(reading, at + 1, to);
   }
   if (isWord(lex, 'st')) return skipSts(reading, at + 1, to, 'sts');
+  if (isTimesSign(lex) && reading.lexes[at + 1]?.kind === 'num' && at + 1 < to) return unitAt(reading, at + 1, to);
   if (lex.kind === 'num') {
     const skip = isMark(reading.lexes[at + 1]!, '-') ? 2 : 1;
     const next = reading.lexes[at + skip];
     if (next && at + skip < to) {
       if (isWord(next, 'sp2', 'corner')) return { kind: `ch-${lex.value} sp`, after: at + skip + 1 };
-      if (next.kind === 'stitch' && next.text === 'ch' && isWord(reading.lexes[at + skip + 1]!, 'sp', 'loop', 'corner'))
-        return { kind: `ch-${lex.value} sp`, after: at + skip + 2 };
+      const hyphen = isMark(reading.lexes[at + skip + 1]!, '-') ? 1 : 0;
+      if (
+        next.kind === 'stitch' &&
+        next.text === 'ch' &&
+        isWord(reading.lexes[at + skip + 1 + hyphen]!, 'sp', 'loop', 'corner')
+      )
+        return { kind: `ch-${lex.value} sp`, after: at + skip + 2 + hyphen };
       if (next.kind === 'stitch' && isWord(reading.lexes[at + skip + 1]!, 'group'))
         return { kind: 'group', after: at + skip + 2 };
       if (next.kind === 'stitch' && stitchOf(next.text)?.family === 'bunch')
@@ -212,7 +242,11 @@ function totalEnd(reading: Reading, limit: number): number | null {
   for (let at = reading.at; at < Math.min(limit, reading.at + 24); at += 1) {
     const lex = reading.lexes[at]!;
     if (isMark(lex, '.') || isWord(lex, 'join', 'turn')) return at > reading.at ? at : null;
-    if (isPlain(lex, 'fasten', 'fo', 'finish') || (isMark(lex, '(') && reading.closes.get(at) === undefined))
+    if (isMark(lex, '-') && !lex.glued && at > reading.at && reading.lexes[at + 1]!.kind === 'word') return at;
+    if (
+      (lex.kind === 'word' && at > reading.at && isStepWord(lex)) ||
+      (isMark(lex, '(') && reading.closes.get(at) === undefined)
+    )
       return at > reading.at ? at : null;
   }
   return limit - reading.at <= 24 && limit > reading.at ? limit : null;

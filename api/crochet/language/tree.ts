@@ -96,6 +96,8 @@ export interface Target {
   readonly corner?: boolean;
   /** Line named: `front loops left in R10`. */
   readonly line?: number;
+  /** The loops are those of the stitches of that line (`back loops of rnd 7`), not those that it left free. */
+  readonly own?: true;
   /** Both layers, or through another piece. */
   readonly through?: 'layers' | 'piece';
 }

@@ -1,11 +1,12 @@
 import { type Item, type Loops, type Sized, type Work } from './tree.ts';
+import { type Lex } from './lexer.ts';
 import { stitchOf } from '../stitches.ts';
 import { ONE, readMultiple, readSized } from './amounts.ts';
 import { isMark, isPlain, isWord, peek, spanFrom, take, type Reading } from './reading.ts';
 import { readInto } from './into.ts';
 import { readTarget } from './target.ts';
 import { readFill, times } from './times.ts';
-import { chain } from './chain.ts';
+import { chain, readChainCounts } from './chain.ts';
 import { amounts, drawnInto } from './work-amounts.ts';
 import { suffix, readEdge, readThrough, readTogether, belowWords } from './work-tails.ts';
 import { readLoops } from './loops.ts';
@@ -42,6 +43,14 @@ export function readWork(reading: Reading): Item[] | null {
     key = 'st';
   } else if (before && isWord(lex, 'in', 'on') && reading.stitch) {
     key = reading.stitch;
+  } else if (!before && isWord(lex, 'twice', 'thrice') && isWord(peek(reading, 1), 'in', 'on') && reading.stitch) {
+    // `3 sc, twice in the next`.
+    before = [lex.text === 'twice' ? 2 : 3];
+    reading.at += 1;
+    key = reading.stitch;
+  } else if (before && isOldName(lex)) {
+    reading.at += 1;
+    key = lex.kind === 'word' ? 'dc' : 'sc';
   } else {
     reading.at = from;
     return null;
@@ -51,6 +60,10 @@ export function readWork(reading: Reading): Item[] | null {
   if (key === 'ch') return [chain(reading, from, before, isGlued)];
   return placed(reading, from, key, before, isGlued, lead);
 }
+
+/** `5 long` and `5 plain` of old print. */
+const isOldName = (lex: Lex): boolean =>
+  isPlain(lex, 'long', 'longs') || (isWord(lex, 'even') && lex.end - lex.start === 5);
 
 /** `hdc inc`, `sc dec`, `inc-sc`, `3-dc cluster`: names of two words, which the lexer leaves apart. */
 function stitchWithTail(reading: Reading, key: string): string {
@@ -94,11 +107,13 @@ function placed(
   const more = before ? readMultiple(reading) : null;
   if (isMark(peek(reading), '-') && isWord(peek(reading, 1), 'blo', 'flo', 'third')) reading.at += 1;
   loops ??= readLoops(reading);
+  if (loops && isWord(peek(reading), 'of')) reading.at += 1;
   belowWords(reading);
   const through = readThrough(reading);
   const read = readInto(reading);
   loops = read?.loops ?? loops ?? readLoops(reading);
   const target = read?.loopsOnly ? null : read;
+  const counts = target?.target.which === 'hook' ? readChainCounts(reading) : null;
   const fill = readFill(reading);
   const trailing = !after && !more ? readMultiple(reading) : null;
   if (take(reading, 'in') || take(reading, 'through')) {
@@ -129,6 +144,7 @@ function placed(
     loops,
     glued,
     multiplied: multiple !== null || isMultiple,
+    ...(counts && { counts }),
     ...(isBehind && after?.[0] === 2 && !target && !fill && { behind: true as const }),
   };
   const isSeries = before !== null && multiple !== null && !target;
