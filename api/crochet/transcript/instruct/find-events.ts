@@ -1,5 +1,6 @@
 import { type Event } from './event.ts';
-import { type Made, RULES } from './grammar.ts';
+import { RULES } from './grammar.ts';
+import { type Made } from './made.ts';
 import { type Letters } from './letters.ts';
 
 /** Runs the grammar over the letters of an instruction. */
