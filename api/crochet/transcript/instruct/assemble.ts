@@ -153,6 +153,8 @@ function gatherPlaces(elements: readonly Element[]): readonly Element[] {
       out.push({ ...element, type: 'unit', options: [[PLAIN], []], fills: false, reaches: false, same: false });
       continue;
     }
+    // the place was named just before what stands in it
+    if ((element.type === 'corner' || element.type === 'here') && isPlaceGroup(elements[n + 1], element.sentence)) continue;
     const ahead = element.type === 'oneplace' ? allAfter(elements, n) : null;
     if (ahead !== null) {
       out.push({ ...ahead.unit, sentence: element.sentence, at: element.at });
@@ -171,6 +173,11 @@ function gatherPlaces(elements: readonly Element[]): readonly Element[] {
     n += 3;
   }
   return out;
+}
+
+function isPlaceGroup(element: Element | undefined, sentence: number): boolean {
+  const unit = element?.type === 'unit' && element.sentence === sentence ? element.options[0]![0] : undefined;
+  return unit?.type === 'oneplace' && unit.parts.includes('ch');
 }
 
 type UnitElement = Extract<Element, { type: 'unit' }>;

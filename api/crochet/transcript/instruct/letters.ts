@@ -1,5 +1,6 @@
 import { type Sentences } from '../sentences.ts';
 import { type Token } from '../tokens.ts';
+import { spokenProducts } from './products.ts';
 
 /** The tokens of an instruction without the little words, and one letter for each, so that patterns can run over it. */
 export interface Letters {
@@ -39,12 +40,21 @@ export function lettersOf(
   const sentence: number[] = [];
   let text = '';
   let isReason = false;
+  const { factors, results } = spokenProducts(tokens, from, to);
+  const add = (letter: string, i: number) => {
+    kept.push(tokens[i]!);
+    at.push(i);
+    sentence.push(sentences.startOf[i]!);
+    text += letter;
+  };
   for (let i = from; i < to; i++) {
     const token = tokens[i]!;
     if (',.|'.includes(token.kind)) isReason = false;
     if (sentences.isPunctuated && /^(?:because|cause|although|unless)$/.test(token.text)) isReason = true;
     const isManner = token.kind === 'F' && text.endsWith('N') && tokens[i + 1]?.kind === 'S';
-    if (skipped(i) || isReason || isManner || DROPPED.has(token.kind)) continue;
+    if (skipped(i) || isReason || isManner || factors.has(i) || DROPPED.has(token.kind)) continue;
+    // a pause between a number and its stitch parts nothing
+    if (token.kind === '|' && text.endsWith('N') && tokens[i + 1]?.kind === 'S') continue;
     // "along the side" tells a place; "along" alone means to the end
     const isPlace =
       token.kind === 'A' &&
@@ -56,13 +66,18 @@ export function lettersOf(
       token.kind === 'S' &&
       /^(?:in|of)$/.test(tokens[i - 1]?.text ?? '') &&
       ',.|&'.includes(tokens[i + 1]?.kind ?? '.');
+    // "you know what an increase is": spoken of, not worked
+    const isAsked =
+      'SPD'.includes(token.kind) &&
+      /^(?:is|are|was|means)$/.test(tokens[i + 1]?.text ?? '') &&
+      tokens.slice(Math.max(from, i - 3), i).some((one) => one.text === 'what' || one.text === 'how');
+    // "in a single stitch" names the place
+    const isLonePlace = token.text === 'single stitch' && (text.endsWith('I') || text.endsWith('IE'));
     const isLeft = /^leav(?:e|ing)$/.test(token.text) && tokens[i + 1]?.kind === 'N';
-    const letter = isLeft ? 'K' : isPlace || isMention ? 'w' : letterOf(token);
+    const letter = isLeft ? 'K' : isPlace || isMention || isAsked ? 'w' : isLonePlace ? 'M' : letterOf(token);
     if (letter === '') continue;
-    kept.push(token);
-    at.push(i);
-    sentence.push(sentences.startOf[i]!);
-    text += letter;
+    if (results.has(i) && !text.endsWith('=')) add('=', i - 1);
+    add(letter, i);
   }
   return { text, tokens: kept, at, sentence };
 }

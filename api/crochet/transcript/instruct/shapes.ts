@@ -62,24 +62,6 @@ export function unlikeInOne(matched: readonly Token[], letters: string): Made | 
   return unit({ type: 'oneplace', parts, times: 1 });
 }
 
-/** `three double crochets, chain two, three double crochets in the corner space`. */
-export function aroundChain(matched: readonly Token[], letters: string): Made | null {
-  const place = matched.at(-1)!;
-  if (place.kind !== 'Z' && !/M|IN|E/.test(letters)) return null;
-  const parts: string[] = [];
-  let many = 1;
-  matched.forEach((token, n) => {
-    if (token.kind === 'N') many = Math.min(12, Number(token.value));
-    const chained =
-      matched[n + 1]?.kind === 'N' && matched[n - 1]?.kind !== 'N' ? Math.min(12, Number(matched[n + 1]!.value)) : many;
-    if (token.kind === 'C') parts.push(...new Array<string>(chained).fill('ch'));
-    if (token.kind === 'S') parts.push(...new Array<string>(many).fill(String(token.value)));
-    if (token.kind === 'C' || token.kind === 'S') many = 1;
-    if (token.kind === 'N' && matched[n - 1]?.kind === 'C' && matched[n - 2]?.kind !== 'N') many = 1;
-  });
-  return unit({ type: 'oneplace', parts, times: 1 });
-}
-
 /** `six singles two together` is six decreases; `four singles, three together` are four stitches and a decrease. */
 export function manyTogether(matched: readonly Token[]): Made {
   const apart = [st(stitch(matched), number(matched)), tog(stitch(matched), number(matched, 1))];

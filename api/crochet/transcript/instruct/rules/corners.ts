@@ -1,6 +1,6 @@
 import { BARE } from '../event.ts';
 import { type Rule, either, fills, isPlural, nothing, number, SPECIAL, st, stitch, tog, unit } from '../made.ts';
-import { aroundChain, unlikeInOne } from '../shapes.ts';
+import { unlikeInOne } from '../shapes.ts';
 
 /** Shaping that is only spoken of, corners and what stands in one place, stretches up to a number or to the last few. */
 export const CORNER_RULES: readonly Rule[] = [
@@ -15,8 +15,7 @@ export const CORNER_RULES: readonly Rule[] = [
   { pattern: /NS?bD/y, make: (m) => unit(st(stitch(m), number(m)), tog(BARE, 2)) },
   { pattern: /N[GS]I?[wo]{0,2}&?E[GZ]?gN?S/y, make: (m) => unit(st(stitch(m), number(m))) },
   // corners
-  { pattern: /N?S[,&]*(?:CN|NC)[,&]*E?N?S[,&]*E?o?I[XLOME]*N?[ZG]/y, make: aroundChain },
-  { pattern: /IEZ(?=N?S[,&]*[CN])/y, make: (m) => (m.at(-1)!.value === 'corner' ? { type: 'corner' } : null) },
+  { pattern: /I[XLOM]*E?Z(?=,?N?S?[,&]*(?:C|NC))/y, make: (m) => (m.at(-1)!.value === 'corner' ? { type: 'corner' } : null) },
   { pattern: /ZI[XLOM]*Z/y, make: (m) => (m[0]!.value === 'corner' ? { type: 'corner' } : nothing) },
   { pattern: /[=p]X?Z/y, make: () => nothing },
   {
