@@ -63,6 +63,10 @@ function withoutExplained(events: readonly Event[], tokens: readonly Token[]): r
   const out: Event[] = [];
   for (const event of events) {
     const before = out.at(-1);
+    if (before !== undefined && (standsFor(before, event, tokens) || goesWithIt(out, event, events, tokens))) {
+      out[out.length - 1] = { ...before, end: event.end };
+      continue;
+    }
     if (before === undefined || !isInOtherWords(before, event)) {
       out.push(event);
       continue;
@@ -74,8 +78,40 @@ function withoutExplained(events: readonly Event[], tokens: readonly Token[]): r
   return out;
 }
 
+/** `four chain, standing for a treble and a chain`: what a starting chain stands for, told and not worked. */
+function standsFor(before: Event, event: Event, tokens: readonly Token[]): boolean {
+  const chain = only(before);
+  const unit = only(event);
+  if (event.type !== 'unit' || chain?.type !== 'chain' || before.sentence !== event.sentence) return false;
+  if (unit?.type !== 'stitch' || unit.times !== 1 || event.same) return false;
+  return STANDS.test(textOf(tokens, before.end, event.at));
+}
+
+const STANDS = /\b(?:stands? for|standing for|counts? as|counting as|which is|instead of|in place of|does for|serves as|acts as|as your first|as our first|as the first|as my first)\b/;
+
+/** The chain of `for a treble and a chain`. */
+function goesWithIt(
+  out: readonly Event[],
+  event: Event,
+  events: readonly Event[],
+  tokens: readonly Token[],
+): boolean {
+  const chain = only(out.at(-1));
+  const unit = only(event);
+  if (chain?.type !== 'chain' || unit?.type !== 'chain' || chain.many < 4 || unit.many !== chain.many - 3) return false;
+  const told = events[events.indexOf(event) - 1];
+  return told !== undefined && told !== out.at(-1) && event.at - told.end < 4 && !textOf(tokens, told.end, event.at).includes('.');
+}
+
+const textOf = (tokens: readonly Token[], from: number, to: number): string =>
+  tokens
+    .slice(from, to)
+    .map((token) => token.text)
+    .join(' ');
+
 function isInOtherWords(before: Event, event: Event): boolean {
   if (event.type !== 'unit' || before.type !== 'unit' || !event.explains) return false;
+  if (before.same) return true;
   const [now] = event.options[0]!;
   const [then] = before.options[0]!;
   return now?.type === 'stitch' && then?.type === 'stitch' && now.inOne > 1 && now.inOne === then.inOne;
@@ -121,11 +157,20 @@ function withoutTurning(spoken: readonly Event[], tokens: readonly Token[]): rea
     (event) => only(event)?.type === 'skip' || ['corner', 'oneplace', 'here'].includes(event.type),
   );
   if (hasSpaces) return events;
-  return events.filter((event, n) => {
+  const chains = events.filter((event) => only(event)?.type === 'chain').length;
+  return events.flatMap((event, n): readonly Event[] => {
     const unit = only(event);
-    return unit?.type !== 'chain' || !(unit.many === 1 || (unit.many < 5 && n > firstUnit));
+    if (event.type !== 'unit' || unit?.type !== 'chain' || unit.many > 4) return [event];
+    if (n <= firstUnit) return unit.many === 1 ? [] : [event];
+    // between stitches it may be work; behind them it only turns
+    const isBetween = events.slice(n + 1).some((one) => one.type === 'unit' && one.sentence === event.sentence);
+    const repeats = events.slice(n + 1).some((one) => one.sentence === event.sentence && REPEATS.has(one.type));
+    if (chains < 2 && !(isBetween && repeats)) return [];
+    return [{ ...event, options: [[unit], []] }];
   });
 }
+
+const REPEATS: ReadonlySet<string> = new Set(['times', 'around', 'again']);
 
 /** `Round five is single crochet. In the corner …`: the stitch as a heading, worked only in what follows. */
 function withoutHeading(events: readonly Event[], heading: number): readonly Event[] {

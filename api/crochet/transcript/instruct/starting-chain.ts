@@ -23,7 +23,11 @@ export function startingChains(
   const next = elements[at + 1];
   const beside = next?.type === 'unit' && next.same ? next.options[0]![0] : undefined;
   if (next?.type === 'unit' && beside?.type === 'stitch' && beside.times === 1) {
-    const pair: Unit = { ...beside, inOne: beside.inOne + 1 };
+    const arch = chain.many - 3;
+    const pair: Unit =
+      arch > 0 && beside.inOne === 1
+        ? { type: 'oneplace', parts: [beside.stitch, ...new Array<string>(arch).fill('ch'), beside.stitch], times: 1 }
+        : { ...beside, inOne: beside.inOne + 1 };
     const paired = elements.flatMap((element, n) =>
       n === at ? [] : n === at + 1 ? [{ ...next, options: [[pair]] }] : [element],
     );
