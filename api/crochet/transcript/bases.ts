@@ -1,5 +1,7 @@
+import { offerOf } from '../count/offer.ts';
+import { type Left } from '../count/places.ts';
 import { type Base } from './instruct/resolve.ts';
-import { spell, sumOf, type Unit } from './work/units.ts';
+import { sumOf, type Unit } from './work/units.ts';
 
 /** A counted line of the piece as far as it is read, for what comes after it. */
 export interface ReadSoFar {
@@ -11,6 +13,8 @@ export interface ReadSoFar {
   readonly said: number | null;
   /** Whether the reading is uncertain, or stands on one that is. */
   readonly isDoubtful: boolean;
+  /** What the count says that the line leaves; null where it was not understood. */
+  readonly left: Left | null;
   readonly verdict: 'agrees' | 'differs' | 'does-not-fit' | 'unread' | 'no-total';
 }
 
@@ -55,41 +59,33 @@ export function basesAfter(line: ReadSoFar, namesSpaces: boolean): readonly Base
     bases.push({ n: makes, cost: line.said === null ? 0 : 0.6 });
     return distinct(bases);
   }
-  bases.push({ n: makes, cost: 0 });
-  if (line.verdict === 'differs' && line.said !== null) bases.push({ n: line.said, cost: 0.5 });
-  const words = spell(line.units);
-  const groups = words.filter((word) => word.startsWith('['));
-  const chains = words.filter((word) => word === 'ch').length;
-  const inner = groups.reduce((sum, word) => sum + (word.match(/ch(?:,ch)*/g)?.length ?? 0), 0);
-  const runs = chainRuns(words);
-  const shells = words.filter((word) => word.startsWith('[') || /^[3-9]/.test(word)).length;
+  if (line.left === null) return distinct([{ n: makes, cost: 0 }]);
+  const offer = offerOf(line.left);
+  const { stitches, stitchesAndChains, corners, groups } = offer;
+  const outer = offer.spaces - corners;
   const extra = namesSpaces ? 0 : 0.5;
-  if (inner > 0)
+  bases.push({ n: stitchesAndChains, cost: 0 });
+  if (line.verdict === 'differs' && line.said !== null) bases.push({ n: line.said, cost: 0.5 });
+  if (corners > 0)
     bases.push(
-      { n: makes + inner, cost: 0.2 + extra },
-      { n: inner, cost: 0.4 + extra },
-      { n: inner + runs, cost: 0.4 + extra },
+      { n: stitchesAndChains + corners, cost: 0.2 + extra },
+      { n: corners, cost: 0.4 + extra },
+      { n: offer.spaces, cost: 0.4 + extra },
     );
-  if (chains > 0)
+  if (outer > 0)
+    bases.push({ n: stitches, cost: 0.9 }, { n: outer, cost: 0.5 + extra }, { n: offer.stitchesAndSpaces, cost: 0.6 });
+  if (groups > 1)
     bases.push(
-      { n: makes - chains, cost: 0.9 },
-      { n: runs, cost: 0.5 + extra },
-      { n: makes - chains + runs, cost: 0.6 },
-    );
-  if (shells > 1)
-    bases.push(
-      { n: shells, cost: 0.7 + extra },
-      { n: shells + 1, cost: 0.8 + extra },
-      { n: shells + inner, cost: 0.6 + extra },
-      { n: 2 * shells, cost: 0.9 + extra },
-      { n: shells - 1, cost: 1 + extra },
-      { n: shells + 2, cost: 1 + extra },
+      { n: groups, cost: 0.7 + extra },
+      { n: groups + 1, cost: 0.8 + extra },
+      { n: offer.gaps + corners, cost: 0.5 + extra },
+      { n: offer.gaps, cost: 0.6 + extra },
+      { n: groups + corners, cost: 0.6 + extra },
+      { n: 2 * groups, cost: 0.9 + extra },
+      { n: groups - 1, cost: 1 + extra },
+      { n: groups + 2, cost: 1 + extra },
     );
   return distinct(bases);
-}
-
-function chainRuns(words: readonly string[]): number {
-  return words.filter((word, n) => word === 'ch' && words[n - 1] !== 'ch').length;
 }
 
 function distinct(bases: readonly Base[]): readonly Base[] {

@@ -8,6 +8,7 @@ export function foundation(many: number): ReadLineResult {
     to: null,
     units: chainUnits(many),
     base: null,
+    left: null,
     said: null,
     verdict: 'no-total',
     loops: 'both',

@@ -3,7 +3,8 @@ import { readNumberList } from './announce/number-list.ts';
 import { type ReadSoFar } from './bases.ts';
 import { cornerBefore } from './corner-before.ts';
 import { basesFor } from './places-before.ts';
-import { type Choice, chooseWork, type Setting } from './instruct/choose-work.ts';
+import { chooseWork, type Setting } from './instruct/choose-work.ts';
+import { type Choice } from './instruct/judge-work.ts';
 import { type Event } from './instruct/event.ts';
 import { findEvents } from './instruct/find-events.ts';
 import { lettersOf } from './instruct/letters.ts';
@@ -14,7 +15,7 @@ import { copiesFor, linesNamed } from './references.ts';
 import { type Sentences } from './sentences.ts';
 import { type Token } from './tokens.ts';
 import { findVague, type TokenSpan } from './vague.ts';
-import { sumOf, type Unit } from './work/units.ts';
+import { type Unit } from './work/units.ts';
 
 /** The whole talk, with what is known of it before lines are read. */
 export interface Talk {
@@ -40,6 +41,8 @@ export interface Before {
   readonly stitch: string;
   readonly chainCounts: boolean | null;
   readonly chainJoined: boolean;
+  /** Whether the piece goes to and fro. */
+  readonly isRows: boolean;
 }
 
 export interface ReadLineResult extends ReadSoFar {
@@ -82,6 +85,7 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
     isDoubtful: before.piece.at(-1)?.isDoubtful ?? false,
     copies: copiesFor(tokens, from, to, named, before.piece),
     mayLeave: LEAVING.test(words.map((token) => token.text).join(' ')),
+    isRing: !before.isRows,
     isPlain: isPlainLine(words, events, announced),
   };
   const vague = findVague(tokens, candidate.end, to, talk.sentences, events);
@@ -150,10 +154,10 @@ const UNSURE_COST = 1;
  * The verdict by what the words come to. A fault is only claimed where the words were understood plainly and stand on a
  * line that is sure; else the line is shown as not understood, which asks a person instead of blaming one.
  */
-function verdictOf(choice: Choice, makes: number, wasDoubtful: boolean): ReadSoFar['verdict'] {
+function verdictOf(choice: Choice, wasDoubtful: boolean): ReadSoFar['verdict'] {
   const isMisfit = choice.fit === 'misfit';
   if (!isMisfit && choice.said === null) return 'no-total';
-  if (!isMisfit && choice.said === makes) return 'agrees';
+  if (!isMisfit && choice.agrees === true) return 'agrees';
   if (wasDoubtful || choice.cost > CLEAR_COST || choice.lead < CLEAR_LEAD) return 'unread';
   return isMisfit ? 'does-not-fit' : 'differs';
 }
@@ -217,6 +221,7 @@ function result(
       base: bases[0]?.n ?? null,
       said,
       verdict: 'unread',
+      left: null,
       count: null,
       lead: 0,
       score: 0,
@@ -225,8 +230,7 @@ function result(
       used: choice?.used ?? events,
     };
   }
-  const { makes } = sumOf(choice.units);
-  const verdict = verdictOf(choice, makes, wasDoubtful);
+  const verdict = verdictOf(choice, wasDoubtful);
   const isUnsure = wasDoubtful || choice.score < DOUBTFUL || choice.cost > UNSURE_COST || verdict !== 'no-total';
   const isDoubtful = verdict === 'unread' || (verdict !== 'agrees' && isUnsure);
   return {
@@ -238,7 +242,8 @@ function result(
     base: choice.base,
     said: choice.said,
     verdict,
-    count: verdict === 'unread' ? null : makes,
+    count: verdict === 'unread' ? null : verdict === 'agrees' ? choice.said : choice.makes,
+    left: choice.left,
     lead: choice.lead,
     score: choice.score,
     cost: choice.cost,

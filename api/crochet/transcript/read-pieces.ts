@@ -89,6 +89,8 @@ export function readPieces(
     } else {
       chainCounts = chainRule(talk.tokens.slice(candidate.at, to)) ?? chainCounts;
       const line = withOwnChain(talk, announced, to, piece);
+      piece.unit = candidate.unit ?? piece.unit;
+      const kind = piece.unit ?? (piece.chains === null ? 'round' : 'row');
       const before = {
         piece: piece.lines,
         all: pieces.slice(-9, -1).map((one) => one.lines),
@@ -97,9 +99,8 @@ export function readPieces(
         stitch,
         chainCounts,
         chainJoined: piece.chainJoined,
+        isRows: kind === 'row',
       };
-      piece.unit = candidate.unit ?? piece.unit;
-      const kind = candidate.unit ?? piece.unit ?? (piece.chains === null ? 'round' : 'row');
       for (const read of readExpanded(talk, line, to, before)) {
         piece.lines.push(read);
         piece.entries.push({ type: 'line', kind, at: candidate.at, to, announced: line, read });

@@ -154,7 +154,8 @@ function gatherPlaces(elements: readonly Element[]): readonly Element[] {
       continue;
     }
     // the place was named just before what stands in it
-    if ((element.type === 'corner' || element.type === 'here') && isPlaceGroup(elements[n + 1], element.sentence)) continue;
+    if ((element.type === 'corner' || element.type === 'here') && isPlaceGroup(elements[n + 1], element.sentence))
+      continue;
     const ahead = element.type === 'oneplace' ? allAfter(elements, n) : null;
     if (ahead !== null) {
       out.push({ ...ahead.unit, sentence: element.sentence, at: element.at });

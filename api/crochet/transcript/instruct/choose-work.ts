@@ -1,7 +1,8 @@
 import { merged, settleStitches } from '../work/settle.ts';
-import { spell, sumOf, type Unit } from '../work/units.ts';
+import { sumOf, type Unit } from '../work/units.ts';
 import { assemble } from './assemble.ts';
 import { type Event } from './event.ts';
+import { type Choice, fitGain, judgeWork, type Proposal, saidGain, saidTotal } from './judge-work.ts';
 import { type Base, resolve } from './resolve.ts';
 import { castNumbers, type Casting, type Element } from './roles.ts';
 import { startingChains } from './starting-chain.ts';
@@ -19,23 +20,10 @@ export interface Setting {
   readonly copies: readonly { readonly units: readonly Unit[]; readonly cost: number }[];
   /** Whether places are left on purpose. */
   readonly mayLeave: boolean;
+  /** Whether the line is worked in a ring. */
+  readonly isRing: boolean;
   /** Whether words say that nothing is shaped. */
   readonly isPlain: boolean;
-}
-
-/** One way to take a line, with its standing among the others. */
-export interface Choice {
-  readonly units: readonly Unit[];
-  readonly said: number | null;
-  readonly fit: 'fits' | 'misfit' | 'unknown';
-  readonly base: number | null;
-  readonly score: number;
-  /** What speaks against this way of taking the words, whatever the count says. */
-  readonly cost: number;
-  /** How far ahead of the next different reading. */
-  readonly lead: number;
-  /** The phrases that it was taken from; what was told again, or only spoken of, is not among them. */
-  readonly used: readonly Event[];
 }
 
 interface Heard {
@@ -44,15 +32,15 @@ interface Heard {
   readonly used: readonly Event[];
 }
 
-const FIT_GAIN = 4;
-const SAID_GAIN = 2.2;
-const MISFIT_SAID_GAIN = 1;
 const LOST_REPEAT = 6;
 const SURE_TOTAL = 1.5;
 
-/** Weighs every way of taking the phrases of a line against the places there are and the totals that were said. */
+/**
+ * Takes the phrases of a line in every likely way, shortlists them by sums of places and totals, and has the count judge
+ * the likeliest.
+ */
 export function chooseWork(events: readonly Event[], setting: Setting): Choice | null {
-  const found: Found = { choices: [], best: -Infinity };
+  const found: Found = { proposals: [], best: -Infinity };
   const hasTimes = events.some((event) => event.type === 'times');
   addWhole(events, setting, found);
   for (const { kept, rest, cost } of prefixes(events).sort((a, b) => a.cost - b.cost)) {
@@ -73,11 +61,11 @@ export function chooseWork(events: readonly Event[], setting: Setting): Choice |
       }
     }
   }
-  return best(found.choices);
+  return judgeWork(found.proposals, setting.isRing);
 }
 
 interface Found {
-  readonly choices: Choice[];
+  readonly proposals: Proposal[];
   best: number;
 }
 
@@ -142,49 +130,23 @@ function weigh(
   const settled = settleStitches(units, setting.stitch);
   const totals = idle.filter((event) => event.asTotal >= SURE_TOTAL).map((event) => event.n);
   for (const resolved of resolve(settled, setting.bases, totals, { mayImply, mayLeave: setting.mayLeave })) {
-    const { makes } = sumOf(resolved.units);
-    const said = saidTotal(idle, makes);
+    const { makes, chains } = sumOf(resolved.units);
+    const said = saidTotal(idle, makes, (n) => n === makes || n === makes - chains);
     const isSoft =
       resolved.fit === 'misfit' && setting.isDoubtful && said === makes && makes * 2 >= (setting.bases[0]?.n ?? 0);
-    const fits = isSoft ? 'unknown' : resolved.fit;
-    const fit = fits === 'fits' ? FIT_GAIN : fits === 'unknown' ? 1 : 0;
-    const agrees = said === makes ? saidGain(idle, makes, fits === 'misfit') : 0;
-    const score = fit + agrees - cost - resolved.cost;
-    found.choices.push({
+    const fit = isSoft ? 'unknown' : resolved.fit;
+    const agrees = said === makes || said === makes - chains;
+    const score = fitGain(fit) + (agrees ? saidGain(idle, said, fit === 'misfit') : 0) - cost - resolved.cost;
+    found.proposals.push({
       units: merged(resolved.units),
-      said,
-      fit: fits,
+      fit,
       base: resolved.base,
+      leaves: resolved.leaves,
+      idle,
+      used,
       score,
       cost: cost + resolved.cost,
-      lead: 0,
-      used,
     });
     found.best = Math.max(found.best, score);
   }
-}
-
-/** A total that agrees speaks for the work, more where it was plainly said as one, little where the work does not fit. */
-function saidGain(idle: Casting['idle'], makes: number, isMisfit: boolean): number {
-  if (isMisfit) return MISFIT_SAID_GAIN;
-  const clearest = Math.max(...idle.filter((event) => event.n === makes).map((event) => event.asTotal));
-  return SAID_GAIN + 0.4 * Math.max(0, Math.min(2.5, clearest) - 1);
-}
-
-/** The total among the numbers left over: one that equals the work, else the one said most like a total. */
-function saidTotal(idle: Casting['idle'], makes: number): number | null {
-  const equal = idle.find((event) => event.n === makes && event.asTotal > (makes < 3 ? 1 : -0.9));
-  if (equal !== undefined) return makes;
-  const likely = idle.filter((event) => event.asTotal >= SURE_TOTAL && event.n > 2 && event.n * 3 >= makes);
-  return likely.sort((a, b) => b.asTotal - a.asTotal)[0]?.n ?? null;
-}
-
-function best(choices: readonly Choice[]): Choice | null {
-  let first: Choice | null = null;
-  for (const choice of choices) if (first === null || choice.score > first.score + 1e-9) first = choice;
-  if (first === null) return null;
-  const spelled = spell(first.units).join(' ');
-  const near = choices.filter((choice) => choice.score > first.score - 2).sort((a, b) => b.score - a.score);
-  const second = near.find((choice) => spell(choice.units).join(' ') !== spelled);
-  return { ...first, lead: second === undefined ? 2 : first.score - second.score };
 }

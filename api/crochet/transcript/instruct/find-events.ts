@@ -10,7 +10,12 @@ export function findEvents(letters: Letters): readonly Event[] {
   const events: Event[] = [];
   const lastWork = lastWorkIn(letters);
   for (let i = 0; i < letters.text.length;) {
-    const total = statedTotal(letters, i, lastWork, events.some((event) => event.type === 'unit'));
+    const total = statedTotal(
+      letters,
+      i,
+      lastWork,
+      events.some((event) => event.type === 'unit'),
+    );
     if (total !== null) {
       events.push(total);
       i += 2;
@@ -80,4 +85,3 @@ function eventOf(
     same,
   };
 }
-

@@ -71,6 +71,12 @@ export function lettersOf(
       'SPD'.includes(token.kind) &&
       /^(?:is|are|was|means)$/.test(tokens[i + 1]?.text ?? '') &&
       tokens.slice(Math.max(from, i - 3), i).some((one) => one.text === 'what' || one.text === 'how');
+    // "into the top of the chain three" is where it goes
+    const chainEnd = token.kind === 'C' ? endOfNamedChain(tokens, from, i) : null;
+    if (chainEnd !== null) {
+      i = chainEnd - 1;
+      continue;
+    }
     // "in a single stitch" names the place
     const isLonePlace = token.text === 'single stitch' && (text.endsWith('I') || text.endsWith('IE'));
     const isLeft = /^leav(?:e|ing)$/.test(token.text) && tokens[i + 1]?.kind === 'N';
@@ -80,6 +86,22 @@ export function lettersOf(
     add(letter, i);
   }
   return { text, tokens: kept, at, sentence };
+}
+
+const PART_OF =
+  /\b(?:top|head|tip|start|end|side) (?:of )?(?:the|that|your|our|this|my)(?: (?:starting|turning|beginning|first))?$/;
+
+/** Where a chain ends that only names a place; null where it is worked. */
+function endOfNamedChain(tokens: readonly Token[], from: number, i: number): number | null {
+  const before = tokens
+    .slice(Math.max(from, i - 5), i)
+    .map((token) => token.text)
+    .join(' ');
+  if (!PART_OF.test(before)) {
+    // "the top of that three chain"
+    return tokens[i - 1]?.kind === 'N' && PART_OF.test(before.replace(/ \S+$/, '')) ? i + 1 : null;
+  }
+  return tokens[i + 1]?.kind === 'N' && tokens[i + 2]?.kind !== 'S' ? i + 2 : i + 1;
 }
 
 function letterOf(token: Token): string {

@@ -89,8 +89,7 @@ function stitchAt(text: string, i: number): Part | null {
 
 /** `chain two`, `two chain`, or a bare chain; `chain two two` is a chain of two and two more. */
 function chainAt(text: string, i: number): Part | null {
-  if (text[i] === 'C' && text[i + 1] === 'N' && text[i + 2] !== 'S')
-    return { number: i + 1, stitch: null, end: i + 2 };
+  if (text[i] === 'C' && text[i + 1] === 'N' && text[i + 2] !== 'S') return { number: i + 1, stitch: null, end: i + 2 };
   if (text[i] === 'N' && text[i + 1] === 'C') return { number: i, stitch: null, end: i + 2 };
   return text[i] === 'C' ? { number: null, stitch: null, end: i + 1 } : null;
 }

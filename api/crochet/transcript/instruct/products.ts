@@ -29,7 +29,7 @@ function productAt(tokens: readonly Token[], i: number, to: number): number | nu
   let second = i + 1;
   const isTimes = tokens[second]?.kind === 't' && Number(tokens[second]!.value) === 0;
   const isPer = tokens[second]?.kind === 'o';
-  const isPlural = tokens[second]?.kind === 'N' && /s$/.test(tokens[second]!.text);
+  const isPlural = tokens[second]?.kind === 'N' && tokens[second]!.text.endsWith('s');
   if (isTimes || isPer) second += 1;
   if (isPer) while (',~&a'.includes(tokens[second]?.kind ?? '.')) second += 1;
   if (!(isTimes || isPer || isPlural) || tokens[second]?.kind !== 'N') return null;

@@ -87,20 +87,21 @@ function standsFor(before: Event, event: Event, tokens: readonly Token[]): boole
   return STANDS.test(textOf(tokens, before.end, event.at));
 }
 
-const STANDS = /\b(?:stands? for|standing for|counts? as|counting as|which is|instead of|in place of|does for|serves as|acts as|as your first|as our first|as the first|as my first)\b/;
+const STANDS =
+  /\b(?:stands? for|standing for|counts? as|counting as|which is|instead of|in place of|does for|serves as|acts as|as your first|as our first|as the first|as my first)\b/;
 
 /** The chain of `for a treble and a chain`. */
-function goesWithIt(
-  out: readonly Event[],
-  event: Event,
-  events: readonly Event[],
-  tokens: readonly Token[],
-): boolean {
+function goesWithIt(out: readonly Event[], event: Event, events: readonly Event[], tokens: readonly Token[]): boolean {
   const chain = only(out.at(-1));
   const unit = only(event);
   if (chain?.type !== 'chain' || unit?.type !== 'chain' || chain.many < 4 || unit.many !== chain.many - 3) return false;
   const told = events[events.indexOf(event) - 1];
-  return told !== undefined && told !== out.at(-1) && event.at - told.end < 4 && !textOf(tokens, told.end, event.at).includes('.');
+  return (
+    told !== undefined &&
+    told !== out.at(-1) &&
+    event.at - told.end < 4 &&
+    !textOf(tokens, told.end, event.at).includes('.')
+  );
 }
 
 const textOf = (tokens: readonly Token[], from: number, to: number): string =>

@@ -10,6 +10,8 @@ export interface Resolved {
   readonly units: readonly Unit[];
   readonly fit: 'fits' | 'misfit' | 'unknown';
   readonly base: number | null;
+  /** Places left on purpose. */
+  readonly leaves: number;
   readonly cost: number;
 }
 
@@ -57,16 +59,17 @@ function distinctOpens(units: readonly Unit[]): number[] {
 
 function closed(units: readonly Unit[], bases: readonly Base[], may: Allowance): Resolved[] {
   const { uses } = sumOf(units);
-  if (bases.length === 0) return [{ units, fit: 'unknown', base: null, cost: 0 }];
+  if (bases.length === 0) return [{ units, fit: 'unknown', base: null, leaves: 0, cost: 0 }];
   const fit = bases.find((base) => base.n === uses);
-  if (fit !== undefined) return [{ units, fit: 'fits', base: fit.n, cost: fit.cost }];
-  if (may.mayLeave && uses < bases[0]!.n) return [{ units, fit: 'fits', base: bases[0]!.n, cost: 0.2 }];
-  const out: Resolved[] = [{ units, fit: 'misfit', base: bases[0]!.n, cost: 0 }];
+  if (fit !== undefined) return [{ units, fit: 'fits', base: fit.n, leaves: 0, cost: fit.cost }];
+  if (may.mayLeave && uses < bases[0]!.n)
+    return [{ units, fit: 'fits', base: bases[0]!.n, leaves: bases[0]!.n - uses, cost: 0.2 }];
+  const out: Resolved[] = [{ units, fit: 'misfit', base: bases[0]!.n, leaves: 0, cost: 0 }];
   if (!may.mayImply || uses === 0) return out;
   for (const base of bases.slice(0, 3)) {
     if (base.n % uses === 0 && base.n > uses) {
       const whole: Unit = { type: 'repeat', units, times: base.n / uses };
-      out.push({ units: [whole], fit: 'fits', base: base.n, cost: base.cost + IMPLIED_COST });
+      out.push({ units: [whole], fit: 'fits', base: base.n, leaves: 0, cost: base.cost + IMPLIED_COST });
     }
   }
   return out;
@@ -81,20 +84,20 @@ function fill(units: readonly Unit[], at: number, bases: readonly Base[], totals
   const filled = (times: number): Unit[] => units.flatMap((unit, n) => (n === at ? flat({ ...hole, times }) : [unit]));
   if (bases.length === 0) {
     const total = totals.find((t) => one.makes > 0 && t > others.makes && (t - others.makes) % one.makes === 0);
-    if (total === undefined) return [{ units: filled(1), fit: 'unknown', base: null, cost: 2 }];
-    return [{ units: filled((total - others.makes) / one.makes), fit: 'unknown', base: null, cost: 0.3 }];
+    if (total === undefined) return [{ units: filled(1), fit: 'unknown', base: null, leaves: 0, cost: 2 }];
+    return [{ units: filled((total - others.makes) / one.makes), fit: 'unknown', base: null, leaves: 0, cost: 0.3 }];
   }
   const out: Resolved[] = [];
   for (const base of bases) {
     const left = base.n - others.uses;
     if (one.uses > 0 && left > 0 && left % one.uses === 0) {
-      out.push({ units: filled(left / one.uses), fit: 'fits', base: base.n, cost: base.cost });
+      out.push({ units: filled(left / one.uses), fit: 'fits', base: base.n, leaves: 0, cost: base.cost });
     }
   }
   if (out.length > 0) return out;
   const base = bases[0]!.n;
   const times = one.uses > 0 ? Math.max(1, Math.floor((base - others.uses) / one.uses)) : 1;
-  return [{ units: filled(times), fit: 'misfit', base, cost: 1 }];
+  return [{ units: filled(times), fit: 'misfit', base, leaves: 0, cost: 1 }];
 }
 
 /** One kind of stitch in every place is so many stitches, not a repeat of one. */

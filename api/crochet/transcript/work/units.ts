@@ -12,35 +12,43 @@ export interface Sum {
   readonly uses: number;
   /** Stitches made, chains outside one place counted. */
   readonly makes: number;
+  /** Chains outside one place. */
+  readonly chains: number;
 }
 
 /** Adds up places used and stitches made. */
 export function sumOf(units: readonly Unit[]): Sum {
   let uses = 0;
   let makes = 0;
+  let chains = 0;
   for (const unit of units) {
     const one = sumOfUnit(unit);
     uses += one.uses;
     makes += one.makes;
+    chains += one.chains;
   }
-  return { uses, makes };
+  return { uses, makes, chains };
 }
 
 function sumOfUnit(unit: Unit): Sum {
   switch (unit.type) {
     case 'stitch':
-      return { uses: unit.times, makes: unit.times * unit.inOne };
+      return { uses: unit.times, makes: unit.times * unit.inOne, chains: 0 };
     case 'together':
-      return { uses: unit.times * unit.many, makes: unit.times };
+      return { uses: unit.times * unit.many, makes: unit.times, chains: 0 };
     case 'chain':
-      return { uses: 0, makes: unit.many };
+      return { uses: 0, makes: unit.many, chains: unit.many };
     case 'skip':
-      return { uses: unit.many, makes: 0 };
+      return { uses: unit.many, makes: 0, chains: 0 };
     case 'oneplace':
-      return { uses: unit.times, makes: unit.times * unit.parts.reduce((sum, part) => sum + stitchesIn(part), 0) };
+      return {
+        uses: unit.times,
+        makes: unit.times * unit.parts.reduce((sum, part) => sum + stitchesIn(part), 0),
+        chains: 0,
+      };
     case 'repeat': {
       const one = sumOf(unit.units);
-      return { uses: one.uses * unit.times, makes: one.makes * unit.times };
+      return { uses: one.uses * unit.times, makes: one.makes * unit.times, chains: one.chains * unit.times };
     }
   }
 }

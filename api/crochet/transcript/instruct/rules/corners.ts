@@ -15,7 +15,10 @@ export const CORNER_RULES: readonly Rule[] = [
   { pattern: /NS?bD/y, make: (m) => unit(st(stitch(m), number(m)), tog(BARE, 2)) },
   { pattern: /N[GS]I?[wo]{0,2}&?E[GZ]?gN?S/y, make: (m) => unit(st(stitch(m), number(m))) },
   // corners
-  { pattern: /I[XLOM]*E?Z(?=,?N?S?[,&]*(?:C|NC))/y, make: (m) => (m.at(-1)!.value === 'corner' ? { type: 'corner' } : null) },
+  {
+    pattern: /I[XLOM]*E?Z(?=,?N?S?[,&]*(?:C|NC))/y,
+    make: (m) => (m.at(-1)!.value === 'corner' ? { type: 'corner' } : null),
+  },
   { pattern: /ZI[XLOM]*Z/y, make: (m) => (m[0]!.value === 'corner' ? { type: 'corner' } : nothing) },
   { pattern: /[=p]X?Z/y, make: () => nothing },
   {
