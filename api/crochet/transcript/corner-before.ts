@@ -21,3 +21,10 @@ function cornerIn(units: readonly Unit[]): readonly string[] | null {
   }
   return null;
 }
+
+/** What the line before did at its ends, where that is no plain stitch, in the stitch of this one. */
+export function edgeBefore(before: Before, stitch: string): Unit | null {
+  const first = before.piece.at(-1)?.units[0];
+  if (first?.type === 'stitch' && first.inOne > 1) return { ...first, stitch, times: 1 };
+  return first?.type === 'together' ? { ...first, stitch, times: 1 } : null;
+}

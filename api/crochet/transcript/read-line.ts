@@ -1,7 +1,7 @@
 import { type Announced } from './announce/chain.ts';
 import { readNumberList } from './announce/number-list.ts';
 import { type ReadSoFar } from './bases.ts';
-import { cornerBefore } from './corner-before.ts';
+import { cornerBefore, edgeBefore } from './corner-before.ts';
 import { basesFor } from './places-before.ts';
 import { chooseWork, type Setting } from './instruct/choose-work.ts';
 import { type Choice } from './instruct/judge-work.ts';
@@ -82,6 +82,7 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
     stitch: stitchNamed(words, events) ?? (isSlipRow(words, before) ? 'slst' : before.stitch),
     chainCounts: chainRule(words) ?? before.chainCounts,
     corner: cornerBefore(before, stitchNamed(words, events) ?? before.stitch),
+    edge: edgeBefore(before, stitchNamed(words, events) ?? before.stitch),
     isDoubtful: before.piece.at(-1)?.isDoubtful ?? false,
     copies: copiesFor(tokens, from, to, named, before.piece),
     mayLeave: LEAVING.test(words.map((token) => token.text).join(' ')),

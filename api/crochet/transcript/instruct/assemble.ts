@@ -20,17 +20,24 @@ interface Partial {
   /** Nodes before this index are part of no later group, unless the whole line is repeated. */
   readonly closed: number;
   readonly corner: Unit | null;
+  readonly edge: Unit | null;
   readonly cost: number;
+}
+
+/** What the corners and the ends of the lines before were, in the stitch in hand. */
+export interface Known {
+  readonly corner: Unit | null;
+  readonly edge: Unit | null;
 }
 
 const MOST = 24;
 const PLAIN: Unit = { type: 'stitch', stitch: BARE, inOne: 1, times: 1 };
 
 /** Puts phrases together in every likely way: which of them a repeat takes in, what stands in one place. */
-export function assemble(spoken: readonly Element[], knownCorner: Unit | null): readonly Assembly[] {
-  const elements = gatherPlaces(spoken);
-  const corner = cornerTold(elements) ?? knownCorner;
-  let partials: Partial[] = [{ nodes: [], closed: 0, corner, cost: 0 }];
+export function assemble(spoken: readonly Element[], known: Known): readonly Assembly[] {
+  const elements = gatherPlaces(withEnds(spoken));
+  const corner = cornerTold(elements) ?? known.corner;
+  let partials: Partial[] = [{ nodes: [], closed: 0, corner, edge: known.edge, cost: 0 }];
   for (const element of elements) {
     const next = partials.flatMap((partial) => extend(partial, element));
     partials = next.sort((a, b) => a.cost - b.cost).slice(0, MOST);
@@ -61,7 +68,13 @@ function extend(partial: Partial, element: Element): Partial[] {
     case 'oneplace':
       return [gather(partial, sentence)];
     case 'corner':
-      return corner(partial, sentence);
+      return named(partial, partial.corner, sentence);
+    case 'edge':
+      return named(partial, partial.edge, sentence);
+    case 'cycle':
+      return cycle(partial, element.items, sentence);
+    case 'ends':
+      return [partial];
   }
 }
 
@@ -227,14 +240,48 @@ function cornerTold(elements: readonly Element[]): Unit | null {
   return null;
 }
 
-/** A corner named alone is the corner told before, once more. */
-function corner(partial: Partial, sentence: number): Partial[] {
-  const known = partial.corner;
+/** A corner or an end named alone is the one told before, once more. */
+function named(partial: Partial, known: Unit | null, sentence: number): Partial[] {
   if (known === null) return [partial];
   return [
     { ...partial, nodes: [...partial.nodes, { unit: known, sentence }] },
     { ...partial, cost: partial.cost + 0.6 },
   ];
+}
+
+/** `corner, fifteen, corner, fifteen` tells all of the line in short, whatever was told of its parts before. */
+function cycle(partial: Partial, items: readonly (Unit | null)[], sentence: number): Partial[] {
+  const { corner } = partial;
+  if (corner === null) return [partial];
+  const units = items.map((item) => item ?? corner);
+  return [{ ...partial, nodes: [{ unit: open(units), sentence }], closed: 1, cost: partial.cost + 0.2 }, partial];
+}
+
+/** `two at each end and one in all the others`: what is told of the ends goes first and last, one in each where nothing else is told. */
+function withEnds(elements: readonly Element[]): readonly Element[] {
+  const ends = elements.find((element) => element.type === 'ends');
+  if (ends?.type !== 'ends') return elements;
+  const { sentence, at, unit } = ends;
+  const one = (units: readonly Unit[], fills: boolean): Element => ({
+    type: 'unit',
+    sentence,
+    at,
+    options: [units],
+    fills,
+    reaches: false,
+    same: false,
+  });
+  const middle = elements.filter((element) => element.type !== 'ends' && element.type !== 'edge');
+  const told = middle.filter((element) => element.type === 'unit');
+  const lone = told.length === 1 && told[0]!.type === 'unit' ? told[0]!.options[0]![0] : undefined;
+  const isFill = lone?.type === 'stitch' && lone.times === 1 && lone.inOne === 1;
+  const between =
+    told.length === 0
+      ? [one([PLAIN], true)]
+      : isFill
+        ? [one([lone], true)]
+        : middle.filter((element) => element.type !== 'around');
+  return [one([unit], false), ...between, one([unit], false)];
 }
 
 function isSimple(unit: Unit): boolean {

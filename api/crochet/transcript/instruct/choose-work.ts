@@ -14,6 +14,8 @@ export interface Setting {
   readonly chainCounts: boolean | null;
   /** What a corner was before, in the stitch in hand. */
   readonly corner: Unit | null;
+  /** What an end of a row was before, in the stitch in hand. */
+  readonly edge: Unit | null;
   /** Whether what stands before is itself doubtful, so that a total that agrees outweighs it. */
   readonly isDoubtful: boolean;
   /** Works of other lines that this one may be a copy of, with what speaks against it. */
@@ -24,6 +26,15 @@ export interface Setting {
   readonly isRing: boolean;
   /** Whether words say that nothing is shaped. */
   readonly isPlain: boolean;
+}
+
+/** The corner that the line itself tells, wherever it does. */
+function cornerIn(events: readonly Event[]): Unit | null {
+  for (const event of events) {
+    const unit = event.type === 'unit' ? event.options.find((units) => units.length > 0)?.[0] : undefined;
+    if (unit?.type === 'oneplace' && unit.parts.includes('ch')) return unit;
+  }
+  return null;
 }
 
 interface Heard {
@@ -41,6 +52,7 @@ const SURE_TOTAL = 1.5;
  */
 export function chooseWork(events: readonly Event[], setting: Setting): Choice | null {
   const found: Found = { proposals: [], best: -Infinity };
+  const corner = cornerIn(events) ?? setting.corner;
   const hasTimes = events.some((event) => event.type === 'times');
   addWhole(events, setting, found);
   for (const { kept, rest, cost } of prefixes(events).sort((a, b) => a.cost - b.cost)) {
@@ -53,7 +65,7 @@ export function chooseWork(events: readonly Event[], setting: Setting): Choice |
         const mayImply = !hasTimes && isRepeatable(elements.elements);
         const before = casting.cost + cost + elements.cost;
         if (isHopeless(before, found)) continue;
-        for (const assembly of assemble(elements.elements, setting.corner)) {
+        for (const assembly of assemble(elements.elements, { corner, edge: setting.edge })) {
           if (isHopeless(before + assembly.cost, found)) break;
           if (assembly.units.length > 0)
             weigh(assembly.units, before + assembly.cost, { idle, used: kept }, setting, mayImply, found);

@@ -26,7 +26,11 @@ export type Event = {
       readonly asTimes: number;
     }
   | { readonly type: 'times'; readonly n: number }
-  | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'again' | 'plain' | 'correction' }
+  | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'again' | 'plain' | 'correction' | 'edge' }
+  /** The same at both ends of the line. */
+  | { readonly type: 'ends'; readonly unit: Unit }
+  /** All of the line in short: corner and side in turn; null is the corner. */
+  | { readonly type: 'cycle'; readonly items: readonly (Unit | null)[] }
 );
 
 /** What stitch a bare number, an increase or a decrease is worked in. */

@@ -1,6 +1,6 @@
 import { type Event } from './event.ts';
 import { RULES } from './grammar.ts';
-import { type Made, unit } from './made.ts';
+import { type Made } from './made.ts';
 import { lastWorkIn, numberEvent, statedTotal } from './number-events.ts';
 import { placeGroupAt } from './place-groups.ts';
 import { type Letters } from './letters.ts';
@@ -37,7 +37,8 @@ export function findEvents(letters: Letters): readonly Event[] {
 function groupAt(letters: Letters, i: number): { event: Event; length: number } | null {
   const group = placeGroupAt(letters, i);
   if (group === null) return null;
-  const event = eventOf(unit(group.unit), placeOf(letters, i, group.length), false, false);
+  const made: Made = { type: 'unit', options: group.isDefined ? [[], [group.unit]] : [[group.unit]] };
+  const event = eventOf(made, placeOf(letters, i, group.length), false, false);
   return event === null ? null : { event, length: group.length };
 }
 
@@ -59,7 +60,7 @@ function matchAt(letters: Letters, i: number): { event: Event | null; length: nu
       made,
       place,
       letters.text[i - 1] === '=' || letters.tokens[i - 1]?.text === 'meaning',
-      text.includes('M'),
+      text.includes('M') || /SI$/.test(text),
     );
     return { event, length: text.length };
   }
@@ -74,6 +75,8 @@ function eventOf(
 ): Event | null {
   if (made.type === 'nothing') return null;
   if (made.type === 'times') return { ...place, type: 'times', n: made.n };
+  if (made.type === 'ends') return { ...place, type: 'ends', unit: made.unit };
+  if (made.type === 'cycle') return { ...place, type: 'cycle', items: made.items };
   if (made.type !== 'unit') return { ...place, type: made.type };
   return {
     ...place,

@@ -1,9 +1,13 @@
 import { type Sentences } from '../sentences.ts';
 import { type Token } from '../tokens.ts';
+import { bothEndsAt, endLetter, isAtEnd } from './ends.ts';
 import { spokenProducts } from './products.ts';
+import { endOfNamedChain, isSpokenOf } from './spoken-of.ts';
 
 /** The tokens of an instruction without the little words, and one letter for each, so that patterns can run over it. */
 export interface Letters {
+  /** The whole row that they were taken from. */
+  readonly source: readonly Token[];
   readonly text: string;
   readonly tokens: readonly Token[];
   /** Index of each in the whole row of tokens. */
@@ -61,16 +65,12 @@ export function lettersOf(
       !token.text.includes(' ') &&
       tokens[i + 1]?.kind === 'a' &&
       'wCGZS'.includes(tokens[i + 2]?.kind ?? '.');
-    // "a row in single crochet," names the stitch and works none
-    const isMention =
-      token.kind === 'S' &&
-      /^(?:in|of)$/.test(tokens[i - 1]?.text ?? '') &&
-      ',.|&'.includes(tokens[i + 1]?.kind ?? '.');
-    // "you know what an increase is": spoken of, not worked
-    const isAsked =
-      'SPD'.includes(token.kind) &&
-      /^(?:is|are|was|means)$/.test(tokens[i + 1]?.text ?? '') &&
-      tokens.slice(Math.max(from, i - 3), i).some((one) => one.text === 'what' || one.text === 'how');
+    const bothEnds = bothEndsAt(tokens, i, to);
+    if (bothEnds !== null) {
+      add('e', i);
+      i = bothEnds - 1;
+      continue;
+    }
     // "into the top of the chain three" is where it goes
     const chainEnd = token.kind === 'C' ? endOfNamedChain(tokens, from, i) : null;
     if (chainEnd !== null) {
@@ -80,28 +80,15 @@ export function lettersOf(
     // "in a single stitch" names the place
     const isLonePlace = token.text === 'single stitch' && (text.endsWith('I') || text.endsWith('IE'));
     const isLeft = /^leav(?:e|ing)$/.test(token.text) && tokens[i + 1]?.kind === 'N';
-    const letter = isLeft ? 'K' : isPlace || isMention || isAsked ? 'w' : isLonePlace ? 'M' : letterOf(token);
+    const isTalk = isPlace || isSpokenOf(tokens, from, i);
+    const end = endLetter(tokens, i, text);
+    const isAt = isAtEnd(tokens, i, text);
+    const letter = isLeft ? 'K' : isTalk ? 'w' : isLonePlace ? 'M' : isAt ? 'I' : (end ?? letterOf(token));
     if (letter === '') continue;
     if (results.has(i) && !text.endsWith('=')) add('=', i - 1);
     add(letter, i);
   }
-  return { text, tokens: kept, at, sentence };
-}
-
-const PART_OF =
-  /\b(?:top|head|tip|start|end|side) (?:of )?(?:the|that|your|our|this|my)(?: (?:starting|turning|beginning|first))?$/;
-
-/** Where a chain ends that only names a place; null where it is worked. */
-function endOfNamedChain(tokens: readonly Token[], from: number, i: number): number | null {
-  const before = tokens
-    .slice(Math.max(from, i - 5), i)
-    .map((token) => token.text)
-    .join(' ');
-  if (!PART_OF.test(before)) {
-    // "the top of that three chain"
-    return tokens[i - 1]?.kind === 'N' && PART_OF.test(before.replace(/ \S+$/, '')) ? i + 1 : null;
-  }
-  return tokens[i + 1]?.kind === 'N' && tokens[i + 2]?.kind !== 'S' ? i + 2 : i + 1;
+  return { source: tokens, text, tokens: kept, at, sentence };
 }
 
 function letterOf(token: Token): string {

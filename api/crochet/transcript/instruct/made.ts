@@ -11,7 +11,11 @@ export type Made =
       readonly reaches?: boolean;
     }
   | { readonly type: 'times'; readonly n: number }
-  | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'again' | 'plain' | 'correction' | 'nothing' };
+  | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'again' | 'plain' | 'correction' | 'edge' | 'nothing' }
+  /** The same at both ends of the line. */
+  | { readonly type: 'ends'; readonly unit: Unit }
+  /** All of the line in short: corner and side in turn; null is the corner. */
+  | { readonly type: 'cycle'; readonly items: readonly (Unit | null)[] };
 
 /** A pattern over letters, tried where the last one ended, and what it comes to; null where it does not hold after all. */
 export interface Rule {

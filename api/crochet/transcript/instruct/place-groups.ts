@@ -14,6 +14,8 @@ const BACK = 14;
 export interface PlaceGroup {
   readonly unit: Unit;
   readonly length: number;
+  /** Only told what it is: `a corner is double, chain one, double`. */
+  readonly isDefined: boolean;
 }
 
 /**
@@ -32,7 +34,19 @@ export function placeGroupAt(letters: Letters, i: number): PlaceGroup | null {
   const named = run.isNamed && after === '' && run.chains === 1 ? (STITCH_AFTER.exec(text)?.[0] ?? '') : '';
   if (!before && after === '' && named === '') return null;
   if (run.chains > 1 && !before && !after.includes('M')) return null;
-  return { unit: { type: 'oneplace', parts: run.parts, times: 1 }, length: run.end + after.length + named.length - i };
+  return {
+    unit: { type: 'oneplace', parts: run.parts, times: 1 },
+    length: run.end + after.length + named.length - i,
+    isDefined: isDefined(letters, i),
+  };
+}
+
+/** `the corner is …`, `a corner's …`: right behind its name. */
+function isDefined({ text, at, source }: Letters, i: number): boolean {
+  const name = text.slice(Math.max(0, i - 3), i).lastIndexOf('Z');
+  if (name < 0) return false;
+  const after = source[at[Math.max(0, i - 3) + name]! + 1];
+  return /^(?:is|'s|means|meaning)$/.test(after?.text ?? '');
 }
 
 interface Run {

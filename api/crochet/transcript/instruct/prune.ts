@@ -9,7 +9,11 @@ export function prune(spoken: readonly Event[], tokens: readonly Token[], headin
   const events = withoutHeading(spoken, heading);
   return withCounted(
     withEchoes(
-      meshes(withoutTurning(withoutJoins(withoutExplained(withoutCorrected(events, tokens), tokens), tokens), tokens)),
+      meshes(
+        withPair(
+          withoutTurning(withoutJoins(withoutExplained(withoutCorrected(events, tokens), tokens), tokens), tokens),
+        ),
+      ),
     ),
   );
 }
@@ -277,4 +281,25 @@ function withCounted(events: readonly Event[]): readonly Event[] {
     out.push(event);
   }
   return out;
+}
+
+/** `chain three and a double in the same stitch`: two in one place; a higher chain is a stitch and a space. */
+function withPair(events: readonly Event[]): readonly Event[] {
+  const at = events.findIndex((event) => event.type === 'unit');
+  const chain = only(events[at]);
+  const next = events[at + 1];
+  const beside = only(next);
+  if (chain?.type !== 'chain' || chain.many < 2 || chain.many > 6) return events;
+  if (next?.type !== 'unit' || !next.same || beside?.type !== 'stitch' || (beside.times > 1 && beside.inOne > 1))
+    return events;
+  const arch = chain.many - 3;
+  const many = beside.times * beside.inOne;
+  const stitches = Array.from({ length: many }, () => beside.stitch);
+  const pair: Unit =
+    arch > 0
+      ? { type: 'oneplace', parts: [beside.stitch, ...new Array<string>(arch).fill('ch'), ...stitches], times: 1 }
+      : { ...beside, times: 1, inOne: many + 1 };
+  return events.flatMap((event, n) =>
+    n === at ? [] : event === next ? [{ ...next, options: [[pair]], same: false }] : [event],
+  );
 }

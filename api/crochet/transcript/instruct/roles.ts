@@ -11,7 +11,9 @@ export type Element = { readonly sentence: number; readonly at: number } & (
       readonly same: boolean;
     }
   | { readonly type: 'times'; readonly n: number }
-  | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'again' | 'plain' }
+  | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'again' | 'plain' | 'edge' }
+  | { readonly type: 'ends'; readonly unit: Unit }
+  | { readonly type: 'cycle'; readonly items: readonly (Unit | null)[] }
 );
 
 export interface Casting {
@@ -52,6 +54,8 @@ function settled(event: Exclude<Event, { type: 'number' }>): Element {
       same: event.same,
     };
   if (event.type === 'times') return { sentence, at, type: 'times', n: event.n };
+  if (event.type === 'ends') return { sentence, at, type: 'ends', unit: event.unit };
+  if (event.type === 'cycle') return { sentence, at, type: 'cycle', items: event.items };
   return { sentence, at, type: event.type === 'correction' ? 'plain' : event.type };
 }
 

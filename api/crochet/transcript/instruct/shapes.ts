@@ -68,3 +68,32 @@ export function manyTogether(matched: readonly Token[]): Made {
   const joined = [tog(stitch(matched), number(matched, 1), number(matched))];
   return isPlural(matched[1]) ? either(apart, joined) : either(joined, apart);
 }
+
+/**
+ * `corner, gap, corner, gap`: the same two names in turn say that what was told goes on; with a number, or "plain", for the
+ * side they tell the whole of it.
+ */
+export function inTurn(matched: readonly Token[]): Made | null {
+  const told = matched.filter((one) => 'ZFwGN'.includes(one.kind));
+  const names = told.map((one) => one.text.replace(/s$/, ''));
+  const isInTurn = names.length > 3 && names.every((name, n) => name === names[n % 2]) && names[0] !== names[1];
+  if (!isInTurn) return null;
+  const side = told[1]!;
+  if (told[0]!.value === 'corner' && (side.kind === 'N' || side.kind === 'F')) {
+    const many = side.kind === 'N' ? Number(side.value) : 1;
+    return { type: 'cycle', items: [null, st(stitch(matched), many)] };
+  }
+  return told.some((one) => one.kind === 'N') ? null : { type: 'around' };
+}
+
+/** `two doubles in the corner with two chain between them`: half on either side. */
+export function partedByChain(matched: readonly Token[]): Made | null {
+  const chain = matched.findIndex((one) => one.kind === 'C');
+  const isParted = matched.some((one) => /^(?:between|in between|part|separate|divide)$/.test(one.text));
+  const many = number(matched);
+  if (!isParted || many % 2 !== 0 || many > 12) return null;
+  const beside = [matched[chain - 1], matched[chain + 1]].find((one) => one?.kind === 'N' && one !== matched[0]);
+  const chains = Array.from({ length: Math.min(12, Number(beside?.value ?? 1)) }, () => 'ch');
+  const half = Array.from({ length: many / 2 }, () => stitch(matched));
+  return unit({ type: 'oneplace', parts: [...half, ...chains, ...half], times: 1 });
+}

@@ -20,19 +20,6 @@ export function startingChains(
   const asUnits = (...units: Unit[]): readonly Element[] =>
     elements.map((element, n) => (n === at ? { ...first, options: [units] } : element));
   const stitch: Unit = { type: 'stitch', stitch: BARE, inOne: 1, times: 1 };
-  const next = elements[at + 1];
-  const beside = next?.type === 'unit' && next.same ? next.options[0]![0] : undefined;
-  if (next?.type === 'unit' && beside?.type === 'stitch' && beside.times === 1) {
-    const arch = chain.many - 3;
-    const pair: Unit =
-      arch > 0 && beside.inOne === 1
-        ? { type: 'oneplace', parts: [beside.stitch, ...new Array<string>(arch).fill('ch'), beside.stitch], times: 1 }
-        : { ...beside, inOne: beside.inOne + 1 };
-    const paired = elements.flatMap((element, n) =>
-      n === at ? [] : n === at + 1 ? [{ ...next, options: [[pair]] }] : [element],
-    );
-    return [{ elements: paired, cost: 0 }];
-  }
   const out = [
     { elements: without, cost: counts === true ? 0.9 : 0 },
     { elements: asUnits(stitch), cost: counts === true ? 0 : counts === null && chain.many > 2 ? 0.2 : 1 },

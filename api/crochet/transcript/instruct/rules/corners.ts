@@ -1,26 +1,42 @@
 import { BARE } from '../event.ts';
 import { type Rule, either, fills, isPlural, nothing, number, SPECIAL, st, stitch, tog, unit } from '../made.ts';
-import { unlikeInOne } from '../shapes.ts';
+import { inTurn, partedByChain, unlikeInOne } from '../shapes.ts';
 
 /** Shaping that is only spoken of, corners and what stands in one place, stretches up to a number or to the last few. */
 export const CORNER_RULES: readonly Rule[] = [
   // shaping that is only spoken of
   { pattern: /[LbnE]P/y, make: (m) => (isPlural(m[1]) ? nothing : null) },
-  { pattern: /n[PD]/y, make: () => nothing },
+  { pattern: /n[PDS]/y, make: () => nothing },
   { pattern: /pNIN[p=]NIN/y, make: () => nothing },
   { pattern: /NC=S/y, make: (m) => unit({ type: 'chain', many: number(m) }) },
   { pattern: /CN=S/y, make: (m) => unit({ type: 'chain', many: number(m) }) },
   // so many between the shapings
   { pattern: /NS?bP/y, make: (m) => unit(st(stitch(m), number(m)), st(BARE, 1, 2)) },
   { pattern: /NS?bD/y, make: (m) => unit(st(stitch(m), number(m)), tog(BARE, 2)) },
-  { pattern: /N[GS]I?[wo]{0,2}&?E[GZ]?gN?S/y, make: (m) => unit(st(stitch(m), number(m))) },
+  { pattern: /N[GS](?:I[wG]?)?[wo]{0,2}&?E[GZ]?gN?S/y, make: (m) => unit(st(stitch(m), number(m))) },
   // corners
   {
     pattern: /I[XLOM]*E?Z(?=,?N?S?[,&]*(?:C|NC))/y,
     make: (m) => (m.at(-1)!.value === 'corner' ? { type: 'corner' } : null),
   },
   { pattern: /ZI[XLOM]*Z/y, make: (m) => (m[0]!.value === 'corner' ? { type: 'corner' } : nothing) },
-  { pattern: /[=p]X?Z/y, make: () => nothing },
+  // "that gap gets three trebles"
+  {
+    pattern: /=?X?Z[IwFG]{0,4},?=?gNS?(?![CtTb])/y,
+    make: (m) => (m.some((one) => one.value === 'corner') ? null : unit(st(stitch(m), 1, number(m)))),
+  },
+  // "after your corner" tells that it was worked
+  {
+    pattern: /[=p]X?Z/y,
+    make: (m) => (m[0]!.text === 'after' && m.at(-1)!.value === 'corner' ? { type: 'corner' } : nothing),
+  },
+  // "corner, side, corner, side": the whole of it over again
+  { pattern: /Z,?(?:[ZFwG]|N[SG]?),?Z,?(?:[ZFwG]|N[SG]?)(?:,?Z,?(?:[ZFwG]|N[SG]?))*,?[RA]*/y, make: inTurn },
+  { pattern: /ZC+/y, make: () => nothing },
+  // "two in the corner with two chain between them"
+  { pattern: /NS?w?(?:I[XLOME]*Z)?[,&]*(?:CN|NC|C)(?:b|pw)[aw]?o?(?:I[XLOME]*N?[ZG])?/y, make: partedByChain },
+  // "three trebles to a gap, for five gaps"
+  { pattern: /NS[pI=E]+Z,?=?NZ/y, make: (m) => unit(st(stitch(m), number(m, 1), number(m))) },
   {
     pattern: /NZ/y,
     make: (m) =>

@@ -31,11 +31,13 @@ export const PLACE_RULES: readonly Rule[] = [
   },
   { pattern: /N[GS]gN(?=[^tT])/y, make: (m) => unit(st(BARE, number(m), number(m, 1))) },
   { pattern: /I[XLOM]+[GZ]?,?&?NS/y, make: (m) => either([st(stitch(m), 1, number(m))], [st(stitch(m), number(m))]) },
-  { pattern: /I[XLOM]+[GZ]?,?&?N(?=[,.|&])/y, make: (m) => either([st(BARE, 1, number(m))]) },
+  { pattern: /I[XLOM]+[GZ]?,?&?N(?=[,.|&])(?!,(?:NC|CN))/y, make: (m) => either([st(BARE, 1, number(m))]) },
   { pattern: /I[XLOM]*Z/y, make: (m) => ({ type: m.at(-1)!.value === 'corner' ? 'corner' : 'here' }) },
   { pattern: /I[XLOM]*[GN][,&]/y, make: () => ({ type: 'here' }) },
   { pattern: /Z/y, make: (m) => (m[0]!.value === 'corner' ? { type: 'corner' } : nothing) },
   { pattern: /(?:E[,&]?)?o?I?(?:M|(?<=I)N)[GZC]/y, make: () => ({ type: 'oneplace' }) },
+  // "and two trebles go in there": into the place just named
+  { pattern: /N?SI(?=[.,|&])/y, make: (m) => unit(st(stitch(m), number(m))) },
   // plain lists
   {
     pattern: /NS/y,
