@@ -71,9 +71,10 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
   const isOut = (i: number) =>
     i < start || talk.skipped[i] === true || names.has(i) || (i >= candidate.mark && i < candidate.end);
   const letters = lettersOf(tokens, from, to, talk.sentences, isOut);
-  const events = prune(findEvents(letters), tokens, talk.sentences.startOf[candidate.mark]!);
   const words = tokens.slice(from, to).filter((_, n) => !isOut(from + n));
   const isRing = before.piece.length === 0 && before.chains === null && words.some((token) => token.kind === 'V');
+  const heading = talk.sentences.startOf[candidate.mark]!;
+  const events = prune(findEvents(letters), tokens, heading, isRing);
   const loops = loopsOf(tokens, from, to, (i) => talk.skipped[i] === true);
   const bases = isRing ? [] : basesFor(talk, stretch, before, loops, words);
   const named = linesNamed(tokens, from, to, announced.from ?? 0);
@@ -85,6 +86,7 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
     edge: edgeBefore(before, stitchNamed(words, events) ?? before.stitch),
     isDoubtful: before.piece.at(-1)?.isDoubtful ?? false,
     copies: copiesFor(tokens, from, to, named, before.piece),
+    heading,
     mayLeave: LEAVING.test(words.map((token) => token.text).join(' ')),
     isRing: !before.isRows,
     isPlain: isPlainLine(words, events, announced),

@@ -20,6 +20,8 @@ export interface Setting {
   readonly isDoubtful: boolean;
   /** Works of other lines that this one may be a copy of, with what speaks against it. */
   readonly copies: readonly { readonly units: readonly Unit[]; readonly cost: number }[];
+  /** The sentence that announces the line, which may tell in short what others tell in full. */
+  readonly heading: number;
   /** Whether places are left on purpose. */
   readonly mayLeave: boolean;
   /** Whether the line is worked in a ring. */
@@ -55,7 +57,7 @@ export function chooseWork(events: readonly Event[], setting: Setting): Choice |
   const corner = cornerIn(events) ?? setting.corner;
   const hasTimes = events.some((event) => event.type === 'times');
   addWhole(events, setting, found);
-  for (const { kept, rest, cost } of prefixes(events).sort((a, b) => a.cost - b.cost)) {
+  for (const { kept, rest, cost } of prefixes(events, setting.heading).sort((a, b) => a.cost - b.cost)) {
     const later = rest.filter((event) => event.type === 'number');
     if (isHopeless(cost, found)) break;
     for (const casting of castNumbers(kept)) {
@@ -96,7 +98,10 @@ function isRepeatable(elements: readonly Element[]): boolean {
 }
 
 /** The phrases of the first sentences, the rest being talk: needed where a line is told twice. */
-function prefixes(events: readonly Event[]): { kept: readonly Event[]; rest: readonly Event[]; cost: number }[] {
+function prefixes(
+  events: readonly Event[],
+  heading: number,
+): { kept: readonly Event[]; rest: readonly Event[]; cost: number }[] {
   const out = [{ kept: events, rest: [] as readonly Event[], cost: 0 }];
   const borders = events.flatMap((event, n) =>
     n > 0 && (event.sentence !== events[n - 1]!.sentence || isExplained(event)) ? [n] : [],
@@ -114,7 +119,12 @@ function prefixes(events: readonly Event[]): { kept: readonly Event[]; rest: rea
     const units = before.filter((event) => event.type === 'unit').length;
     if (units === 0) continue;
     const times = before.some((event) => event.type === 'times') ? LOST_REPEAT : 0;
-    out.push({ kept: events.slice(border), rest: before, cost: 0.7 + 0.35 * units + times });
+    const isHeading = before.every((event) => event.sentence === heading) && events.length - border > 2;
+    out.push({
+      kept: events.slice(border),
+      rest: before,
+      cost: (isHeading ? 0.3 + 0.1 * units : 0.7 + 0.35 * units) + times,
+    });
   }
   return out;
 }

@@ -3,7 +3,7 @@ import { type Token } from '../tokens.ts';
 /** How many tokens the longest way of naming both ends takes. */
 const REACH = 7;
 const BOTH =
-  /^(?:at|in|on|into|to|along)?(?: the)? ?(?:each|either|both|each of the 2|each of the two|each of the|both of the)(?: of)?(?: the| your| my)? ?(?:ends?|edges?|edge stitch|end stitch|end stitches|sides?|end of the row|ends of the row)$/;
+  /^(?:at|in|on|into)?(?: the)? ?(?:each|either|both|each of the 2|each of the two|each of the|both of the)(?: of)?(?: the| your| my)? ?(?:ends?|edges?|edge stitch|end stitch|end stitches|sides?|end of the row|ends of the row)$/;
 const THE_ENDS = /^(?:at|in|on|into)(?: the| your)? (?:ends|edges|sides)$/;
 
 /** `at each end`, `on both sides`, `at the edges`: the token after it; null where no such phrase begins here. */
@@ -19,7 +19,7 @@ export function bothEndsAt(tokens: readonly Token[], i: number, to: number): num
   return found;
 }
 
-const STARTS = /^(?:at|in|on|into|to|along|each|either|both)\b/;
+const STARTS = /^(?:at|in|on|into|each|either|both)\b/;
 
 /**
  * What an end of the row is where it stands: `G` as the place of stitches ("two in the end", "two at the end"), `d` as the

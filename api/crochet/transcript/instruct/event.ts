@@ -35,3 +35,7 @@ export type Event = {
 
 /** What stitch a bare number, an increase or a decrease is worked in. */
 export const BARE = '?';
+
+/** What a phrase works, where it is a single thing and can be taken in one way. */
+export const only = (event: Event | undefined): Unit | undefined =>
+  event?.type === 'unit' && event.options[0]!.length === 1 ? event.options[0]![0] : undefined;

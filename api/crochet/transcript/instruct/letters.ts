@@ -57,6 +57,9 @@ export function lettersOf(
     if (sentences.isPunctuated && /^(?:because|cause|although|unless)$/.test(token.text)) isReason = true;
     const isManner = token.kind === 'F' && text.endsWith('N') && tokens[i + 1]?.kind === 'S';
     if (skipped(i) || isReason || isManner || factors.has(i) || DROPPED.has(token.kind)) continue;
+    // "three more trebles", "eight more, and two at the end"
+    const isMore = token.kind === 'm' && text.endsWith('N') && 'SPDC,.|&'.includes(tokens[i + 1]?.kind ?? '.');
+    if (isMore) continue;
     // a pause between a number and its stitch parts nothing
     if (token.kind === '|' && text.endsWith('N') && tokens[i + 1]?.kind === 'S') continue;
     // "along the side" tells a place; "along" alone means to the end

@@ -2,7 +2,7 @@ import { type Event } from './event.ts';
 import { type Letters } from './letters.ts';
 
 /** So many of a stitch or a shaping, or several together: work, where a bare name may only be spoken of. */
-const WORK = /N[SPD](?!IO)|[NS]T|[&,]P(?=[.,&|])/g;
+const WORK = /N[SPD](?!IO)|[NS]T|[&,]P(?=[.,&|])|NI[XLOME]/g;
 
 /** Index of the last letter of work, slip stitches that may only join left out; -1 where there is none. */
 export function lastWorkIn({ text, tokens }: Letters): number {
@@ -14,11 +14,12 @@ export function lastWorkIn({ text, tokens }: Letters): number {
 /** `That comes to thirty six double crochets.`, `Thirty seven double crochet.`: the stitches that are there, not work. */
 export function statedTotal(letters: Letters, i: number, lastWork: number, hasWork: boolean): Event | null {
   const token = letters.tokens[i]!;
-  if (token.kind !== 'N' || !'So'.includes(letters.text[i + 1] ?? '.') || Number(token.value) < 8) return null;
+  if (token.kind !== 'N' || !'So'.includes(letters.text[i + 1] ?? '.')) return null;
   const before = letters.text[i - 1] ?? '.';
   const after = letters.text[i + 2] ?? '.';
   const isWeak = before === '=' && WEAK_RESULT.test(letters.tokens[i - 1]!.text);
   const results = before === '=' && (isWeak ? Number(token.value) > 19 && '.|,'.includes(after) : !/[IE]/.test(after));
+  if (Number(token.value) < 8 && !(results && !isWeak && '.|'.includes(after))) return null;
   const alone = '.|'.includes(before) && '.|,'.includes(after);
   // where work follows, so many stitches alone in a sentence are work themselves
   if (!(results || (alone && i + 1 >= lastWork)) || !hasWork) return null;

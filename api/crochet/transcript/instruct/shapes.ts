@@ -97,3 +97,12 @@ export function partedByChain(matched: readonly Token[]): Made | null {
   const half = Array.from({ length: many / 2 }, () => stitch(matched));
   return unit({ type: 'oneplace', parts: [...half, ...chains, ...half], times: 1 });
 }
+
+/** `one in each of the next three`; "two in each, sixteen" and "thirty on all four" are a total and rounds. */
+export function inEachOfMany(matched: readonly Token[], letters: string): Made | null {
+  const each = matched.find((one) => one.kind === 'E')!;
+  const places = matched.findLast((one) => one.kind === 'N')!;
+  const isOf = /[XLO]/.test(letters) || places.first > each.last + 1;
+  if (!isOf || !/^(?:each|every)/.test(each.text) || number(matched) > 5) return null;
+  return unit(st(stitch(matched), number(matched, 1), number(matched)));
+}

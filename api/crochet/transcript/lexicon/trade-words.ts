@@ -69,7 +69,7 @@ export const TRADE_WORDS: readonly (readonly [Class, string | number, string])[]
     'Z',
     'corner',
     `
-    corner, corners, corner space, corner spaces, corner hole, corner holes, corner stitch, corner stitches`,
+    centre, center, centre space, center space, middle space, corner, corners, corner space, corner spaces, corner hole, corner holes, corner stitch, corner stitches`,
   ],
   ['Z', 'gap', `gap, gaps`],
   [
@@ -104,6 +104,13 @@ export const TRADE_WORDS: readonly (readonly [Class, string | number, string])[]
   ],
   ['B', 'both', `both loops, both the loops, normal loops, regular loops, both loops again, both strands`],
   ['V', 0, `magic ring, ring, the ring, fresh ring, your ring`],
+  [
+    'E',
+    0,
+    `
+    everything, everywhere, everything else, everything between, everything in between, all the others, all the other ones,
+    all the rest, whatever is left, whatever 's left, what is left, the others`,
+  ],
   ['U', 'round', `round, rnd, lap, circuit, go round`],
   ['U', 'rounds', `rounds, rnds, laps`],
   ['U', 'row', `row`],

@@ -2,6 +2,8 @@ import { type Rule, isPlural, nothing, number, st, stitch, unit } from '../made.
 
 /** Chains and places passed over. */
 export const CHAIN_RULES: readonly Rule[] = [
+  // "if you count the chains"
+  { pattern: /c[SwZE]{0,3}C+/y, make: () => nothing },
   // chains and places passed over
   { pattern: /K[^.,|]{0,3}C+[^.,|]{0,2}H/y, make: () => nothing },
   { pattern: /KOC+/y, make: () => nothing },

@@ -1,6 +1,6 @@
 import { BARE } from '../event.ts';
 import { type Rule, either, fills, isPlural, nothing, number, SPECIAL, st, stitch, unit } from '../made.ts';
-import { counted, eachInCounted, inOne } from '../shapes.ts';
+import { counted, eachInCounted, inEachOfMany, inOne } from '../shapes.ts';
 
 /** Stitches in so many places, in every place, in one; plain lists; what is left over. */
 export const PLACE_RULES: readonly Rule[] = [
@@ -15,6 +15,8 @@ export const PLACE_RULES: readonly Rule[] = [
     make: (m) => (/^(?:ever|each)/.test(m.at(-1)!.text) ? fills(st(stitch(m), 1, number(m))) : null),
   },
   { pattern: /N?S[&,]?IB?E[GZSC]*A?/y, make: (m) => fills(st(stitch(m), 1, number(m))) },
+  // "one in each of the next three"
+  { pattern: /NI?E[XLO]*N[GZSC]?(?![tTD])/y, make: inEachOfMany },
   { pattern: /NI?E[GZC]*A?/y, make: (m) => (number(m) < 6 ? fills(st(BARE, 1, number(m))) : null) },
   { pattern: /IB?E[GZC]+[,]?N?S/y, make: (m) => fills(st(stitch(m), 1, number(m))) },
   { pattern: /IB?E[GZC]+[,]?N(?![GtT])/y, make: (m) => (number(m) < 6 ? fills(st(BARE, 1, number(m))) : null) },
@@ -31,6 +33,7 @@ export const PLACE_RULES: readonly Rule[] = [
   },
   { pattern: /N[GS]gN(?=[^tT])/y, make: (m) => unit(st(BARE, number(m), number(m, 1))) },
   { pattern: /I[XLOM]+[GZ]?,?&?NS/y, make: (m) => either([st(stitch(m), 1, number(m))], [st(stitch(m), number(m))]) },
+  { pattern: /IX[LO]?N[GS]?(?=[,.|&])/y, make: (m) => (number(m) > 1 ? unit(st(stitch(m), number(m))) : null) },
   { pattern: /I[XLOM]+[GZ]?,?&?N(?=[,.|&])(?!,(?:NC|CN))/y, make: (m) => either([st(BARE, 1, number(m))]) },
   { pattern: /I[XLOM]*Z/y, make: (m) => ({ type: m.at(-1)!.value === 'corner' ? 'corner' : 'here' }) },
   { pattern: /I[XLOM]*[GN][,&]/y, make: () => ({ type: 'here' }) },

@@ -8,7 +8,7 @@ export const REPEAT_RULES: readonly Rule[] = [
   { pattern: /t[&,]?N(?![tS])/y, make: (m) => ({ type: 'times', n: number(m) }) },
   { pattern: /NNt/y, make: (m) => ({ type: 'times', n: number(m, 1) }) },
   { pattern: /(?:R|E|A)*[&,p]?N[Fm]?t(?:R|A|o)*/y, make: repeated },
-  { pattern: /(?:R|E|A)*[&,p]?(?<![=c])N[Fm]?o(?=[.,|&=ARN]|$)(?:R|A|o)*/y, make: repeated },
+  { pattern: /(?:R|E|A)*[&,p]?(?<![=c])N[Fm]?o(?:IE)?(?=[.,|&=ARN]|$)(?:R|A|o)*/y, make: repeated },
   {
     pattern: /t(?:R|A)*/y,
     make: (m) => (Number(m[0]!.value) > 1 ? { type: 'times', n: Number(m[0]!.value) } : nothing),
@@ -18,7 +18,7 @@ export const REPEAT_RULES: readonly Rule[] = [
   { pattern: /SNT(?:[IA]?XN)?/y, make: (m) => unit(tog(stitch(m), number(m))) },
   { pattern: /NST/y, make: (m) => unit(tog(stitch(m), number(m))) },
   { pattern: /ST/y, make: (m) => unit(tog(stitch(m), 2)) },
-  { pattern: /[XOL]?N[GS]?T/y, make: (m) => (number(m) > 1 && number(m) < 8 ? unit(tog(BARE, number(m))) : null) },
+  { pattern: /[XOLE]?N[GSo]?T/y, make: (m) => (number(m) > 1 && number(m) < 8 ? unit(tog(BARE, number(m))) : null) },
   { pattern: /ND/y, make: (m) => unit(tog(decName(m), 2, number(m))) },
   { pattern: /SD(?![IE])/y, make: (m) => unit(tog(stitch(m), 2)) },
   { pattern: /DIE[XOL]?N/y, make: (m) => unit(tog(decName(m), 2, number(m))) },
