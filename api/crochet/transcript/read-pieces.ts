@@ -4,8 +4,8 @@ import { type ReadSoFar } from './bases.ts';
 import { foundation } from './foundation.ts';
 import { readPieceName, thingsNamed } from './piece-name.ts';
 import { readMake } from './pieces.ts';
-import { chainRule, type ReadLineResult, readSpokenLine, type Talk } from './read-line.ts';
-import { linesNamed } from './references.ts';
+import { readExpanded } from './read-expanded.ts';
+import { chainRule, type ReadLineResult, type Talk } from './read-line.ts';
 import { endOfStep, type SpokenStep, startOfTelling } from './steps.ts';
 import { type Token } from './tokens.ts';
 import { spell, type Unit } from './work/units.ts';
@@ -157,65 +157,6 @@ function stepsUntil(steps: readonly SpokenStep[], from: number, before: number):
   let end = from;
   while (end < steps.length && steps[end]!.at < before) end += 1;
   return steps.slice(from, end);
-}
-
-/** Several earlier lines named as a set give one line for each; otherwise the line is read as it stands. */
-function readExpanded(
-  talk: Talk,
-  announced: Announced,
-  to: number,
-  before: Parameters<typeof readSpokenLine>[2],
-): readonly ReadLineResult[] {
-  const { candidate, from, to: until } = announced;
-  const stretch = { announced, from: candidate.at, to };
-  const many = (until ?? 0) - (from ?? 0) + 1;
-  const copied = from === 1 && many > 1 ? copiesOfPiece(talk, announced, to, before) : null;
-  if (copied !== null) return copied;
-  const named =
-    many > 1
-      ? linesNamed(talk.tokens, Math.max(candidate.at - 40, talk.sentences.startOf[candidate.at]!), to, from ?? 0)
-      : [];
-  if (named.length < 2) return [readSpokenLine(talk, stretch, before)];
-  const lines = [...before.piece];
-  const out: ReadLineResult[] = [];
-  for (let n = 0; n < many; n++) {
-    const model = lines.findLast(
-      (line) =>
-        line.from !== null && line.from <= named[n % named.length]! && named[n % named.length]! <= (line.to ?? 0),
-    );
-    if (model === undefined) return [readSpokenLine(talk, stretch, before)];
-    const whole = readSpokenLine(talk, stretch, before);
-    const line: ReadLineResult = {
-      ...whole,
-      ...model,
-      from: from! + n,
-      to: from! + n,
-      said: null,
-      verdict: 'no-total',
-      loops: 'both',
-      count: null,
-    };
-    lines.push(line);
-    out.push(line);
-  }
-  return out;
-}
-
-/** `rounds one through five of the pot over again`: the first lines of an earlier piece, one by one. */
-function copiesOfPiece(
-  talk: Talk,
-  { candidate, to: until }: Announced,
-  to: number,
-  before: Parameters<typeof readSpokenLine>[2],
-): readonly ReadLineResult[] | null {
-  if (!/\b(?:over again|as for|same as|as on|again|just like|like the)\b/.test(textOf(talk.tokens, candidate.at, to)))
-    return null;
-  const model = before.all.findLast(
-    (lines) => lines.some((line) => line.from === 1) && (lines.at(-1)?.to ?? 0) >= until!,
-  );
-  if (model === undefined) return null;
-  const lines = model.filter((line) => line.from !== null && line.to! <= until!);
-  return lines.map((line) => ({ ...foundation(0), ...line, verdict: 'no-total', said: null, isRing: line.from === 1 }));
 }
 
 function beginPiece(

@@ -58,9 +58,15 @@ export function copiesFor(
   named: readonly number[],
   earlier: readonly ReadSoFar[],
 ): readonly { units: readonly Unit[]; cost: number }[] {
+  const lengths = lengthsTold(tokens, from, to);
   const out = named.flatMap((n) => {
     const line = earlier.findLast((one) => one.from !== null && one.from <= n && n <= (one.to ?? one.from));
-    return line === undefined ? [] : patternsOf(line).map((units, k) => ({ units, cost: 0.3 + 0.4 * k }));
+    return line === undefined
+      ? []
+      : [
+          ...patternsOf(line).map((units, k) => ({ units, cost: 0.3 + 0.4 * k })),
+          ...lengths.flatMap((n) => withStretches(line.units, n)).map((units) => ({ units, cost: 0.2 })),
+        ];
   });
   const text = tokens
     .slice(from, to)
@@ -68,8 +74,43 @@ export function copiesFor(
     .join(' ');
   const last = earlier.at(-1);
   if (SAME.test(text) && last !== undefined && last.from !== null)
-    out.push(...patternsOf(last).map((units, k) => ({ units, cost: 0.9 + 0.4 * k })));
+    out.push(
+      ...patternsOf(last).map((units, k) => ({ units, cost: 0.9 + 0.4 * k })),
+      ...lengths.flatMap((n) => withStretches(last.units, n)).map((units) => ({ units, cost: 0.7 })),
+    );
   return out;
+}
+
+const MOST_LENGTHS = 4;
+
+/** Numbers that may be the new length of its plain stretches: `with twenty along each side instead of seventeen`. */
+function lengthsTold(tokens: readonly Token[], from: number, to: number): readonly number[] {
+  const out = new Set<number>();
+  for (let i = from; i < to && out.size < MOST_LENGTHS; i++) {
+    const { kind, value } = tokens[i]!;
+    const before = tokens[i - 1];
+    const names = before?.kind === 'U' || before?.kind === '#' || before?.kind === 'p' || before?.text === 'of';
+    if (kind === 'N' && !names && Number(value) > 0 && Number(value) < 200) out.add(Number(value));
+  }
+  return [...out];
+}
+
+/** The same with its plain stretches so long; of several lengths the longest, or all where they are alike. */
+function withStretches(units: readonly Unit[], length: number): readonly (readonly Unit[])[] {
+  const longest = Math.max(...units.map(longestIn));
+  if (longest < 1 || longest === length) return [];
+  const visit = (unit: Unit): Unit =>
+    unit.type === 'repeat'
+      ? { ...unit, units: unit.units.map(visit) }
+      : unit.type === 'stitch' && unit.inOne === 1 && unit.times === longest
+        ? { ...unit, times: length }
+        : unit;
+  return [units.map(visit)];
+}
+
+function longestIn(unit: Unit): number {
+  if (unit.type === 'repeat') return Math.max(0, ...unit.units.map(longestIn));
+  return plainLength(unit);
 }
 
 /** The ways to do a line again: as it was, and with its longest plain stretch as long as now fits. */

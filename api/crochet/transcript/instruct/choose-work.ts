@@ -119,7 +119,9 @@ function prefixes(
     const units = before.filter((event) => event.type === 'unit').length;
     if (units === 0) continue;
     const times = before.some((event) => event.type === 'times') ? LOST_REPEAT : 0;
-    const isHeading = before.every((event) => event.sentence === heading) && events.length - border > 2;
+    const isHeading =
+      events.length - border > 2 &&
+      before.every((event) => event.sentence === heading && (event.type !== 'unit' || event.options.length > 1));
     out.push({
       kept: events.slice(border),
       rest: before,

@@ -60,7 +60,7 @@ function matchAt(letters: Letters, i: number): { event: Event | null; length: nu
       made,
       place,
       letters.text[i - 1] === '=' || letters.tokens[i - 1]?.text === 'meaning',
-      text.includes('M') || (/SI$/.test(text) && '.,|&'.includes(letters.text[i + text.length] ?? '.')),
+      text.includes('M') || (text.endsWith('SI') && '.,|&'.includes(letters.text[i + text.length] ?? '.')),
     );
     return { event, length: text.length };
   }

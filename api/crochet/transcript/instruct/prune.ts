@@ -3,6 +3,7 @@ import { withoutCorrected } from './corrections.ts';
 import { meshes, withCounted, withEchoes, withPair } from './echoes.ts';
 import { type Event, only } from './event.ts';
 import { withoutExplained } from './explained.ts';
+import { textOf } from './spoken-of.ts';
 
 /** Takes out of the phrases what adds nothing: what was taken back, explained twice, or only joins or turns. */
 export function prune(
@@ -81,14 +82,18 @@ function withoutTurning(spoken: readonly Event[], tokens: readonly Token[]): rea
     // between stitches it may be work; behind them it only turns
     const isBetween = (lastUnit.get(event.sentence) ?? -1) > n;
     const repeats = (lastRepeat.get(event.sentence) ?? -1) > n;
-    if (chains < 2 && !(isBetween && (repeats || (unit.many > 1 && !turns(tokens, event))))) return [];
+    if (chains < 2 && !(isBetween && (repeats || (unit.many > 1 && !isOnlyTold(tokens, event))))) return [];
     return [{ ...event, options: [[unit], []] }];
   });
 }
 
-/** `chain two and turn`, `chain one, turn`. */
-const turns = (tokens: readonly Token[], event: Event): boolean =>
-  tokens.slice(event.end, event.end + 4).some((token) => /^turn/.test(token.text));
+/** `chain two and turn`, `the three chains you skipped`, `the three chain being the first of the twelve`. */
+const isOnlyTold = (tokens: readonly Token[], event: Event): boolean =>
+  ONLY_TOLD.test(textOf(tokens, event.end, event.end + 5)) ||
+  /^(?:the|your|those|that)$/.test(tokens[event.at - 1]?.text ?? '');
+
+const ONLY_TOLD =
+  /\b(?:turn|turning|being|counts?|counted|stands?|standing|skip|skipped|miss|missed|left|not|doesn't|join|joined)\b/;
 
 const REPEATS: ReadonlySet<string> = new Set(['times', 'around', 'again']);
 

@@ -7,7 +7,7 @@ const ends = (one: Unit): Made => ({ type: 'ends', unit: one });
 
 /** Several in one place at an end; "twelve on each side" is the length of a side. */
 const isSeveral = (matched: readonly Token[]): boolean =>
-  number(matched) > 1 && number(matched) < 6 && !matched.some((one) => /side/.test(one.text));
+  number(matched) > 1 && number(matched) < 6 && !matched.some((one) => one.text.includes('side'));
 
 /** What is done at both ends of a row, and the ends named alone. */
 export const END_RULES: readonly Rule[] = [
@@ -16,7 +16,7 @@ export const END_RULES: readonly Rule[] = [
   { pattern: /N?S?D,?e/y, make: (m) => ends(tog(stitch(m), 2)) },
   { pattern: /N?S?P,?e/y, make: (m) => ends(st(stitch(m), 1, 2)) },
   { pattern: /NS?,?e/y, make: (m) => (isSeveral(m) ? ends(st(stitch(m), 1, number(m))) : null) },
-  { pattern: /we/y, make: (m) => (/^doubl/.test(m[0]!.text) ? ends(st(BARE, 1, 2)) : null) },
+  { pattern: /we/y, make: (m) => (m[0]!.text.startsWith('doubl') ? ends(st(BARE, 1, 2)) : null) },
   { pattern: /e[,&=gw]{0,3}NS?(?![TtSC])/y, make: (m) => (isSeveral(m) ? ends(st(stitch(m), 1, number(m))) : null) },
   { pattern: /e[,&=gw]{0,3}P/y, make: () => ends(st(BARE, 1, 2)) },
   {

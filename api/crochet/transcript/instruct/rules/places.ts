@@ -59,6 +59,8 @@ export const PLACE_RULES: readonly Rule[] = [
   },
   { pattern: /[RE]*A/y, make: () => ({ type: 'around' }) },
   { pattern: /F/y, make: () => ({ type: 'plain' }) },
+  // "chain five again": as it was the last time
+  { pattern: /(?<=[SCNGPDTZ])R/y, make: (m) => (m[0]!.value === 'again' ? nothing : null) },
   { pattern: /R/y, make: (m) => (m[0]!.value === 'again' ? { type: 'again' } : { type: 'around' }) },
   { pattern: /Y/y, make: () => ({ type: 'correction' }) },
   { pattern: /[IXLMEHGZ]+/y, make: () => nothing },
