@@ -134,13 +134,15 @@ ALTER SEQUENCE public.knex_migrations_lock_index_seq OWNED BY public.knex_migrat
 CREATE TABLE public.line_evidence (
     id uuid DEFAULT gen_random_uuid() NOT NULL,
     line_id uuid NOT NULL,
-    reading_id uuid NOT NULL,
+    reading_id uuid,
     transcript_id uuid NOT NULL,
     first_word integer NOT NULL,
     last_word integer NOT NULL,
     start_ms integer NOT NULL,
     end_ms integer NOT NULL,
     role text NOT NULL,
+    hearing_id uuid NOT NULL,
+    words text DEFAULT ''::text NOT NULL,
     CONSTRAINT line_evidence_role_check CHECK ((role = ANY (ARRAY['announcement'::text, 'work'::text, 'total'::text, 'unread'::text])))
 );
 
@@ -170,6 +172,7 @@ CREATE TABLE public.lines (
     spoken_slip text,
     deleted_at timestamp with time zone,
     version integer DEFAULT 1 NOT NULL,
+    hearings uuid[] DEFAULT '{}'::uuid[] NOT NULL,
     CONSTRAINT lines_kind_check CHECK ((kind = ANY (ARRAY['foundation'::text, 'round'::text, 'row'::text, 'step'::text, 'note'::text]))),
     CONSTRAINT lines_short_id_check CHECK ((short_id ~ '^[a-z0-9]+$'::text))
 );
@@ -200,6 +203,7 @@ CREATE TABLE public.marks (
     made_by text NOT NULL,
     deleted_at timestamp with time zone,
     version integer DEFAULT 1 NOT NULL,
+    transcript_id uuid,
     CONSTRAINT marks_check CHECK ((end_ms >= start_ms)),
     CONSTRAINT marks_made_by_check CHECK ((made_by = ANY (ARRAY['reading'::text, 'person'::text]))),
     CONSTRAINT marks_start_ms_check CHECK ((start_ms >= 0))
@@ -343,7 +347,9 @@ CREATE TABLE public.recordings (
     language text,
     created_at timestamp with time zone DEFAULT now() NOT NULL,
     version integer DEFAULT 1 NOT NULL,
-    CONSTRAINT recordings_duration_ms_check CHECK ((duration_ms >= 0))
+    spoken_terms text,
+    CONSTRAINT recordings_duration_ms_check CHECK ((duration_ms >= 0)),
+    CONSTRAINT recordings_spoken_terms_check CHECK ((spoken_terms = ANY (ARRAY['US'::text, 'UK'::text])))
 );
 
 CREATE TABLE public.request_keys (
@@ -613,6 +619,8 @@ CREATE INDEX editions_published_by ON public.editions USING btree (published_by)
 
 CREATE INDEX errata_line_id ON public.errata USING btree (line_id);
 
+CREATE INDEX line_evidence_hearing_id ON public.line_evidence USING btree (hearing_id);
+
 CREATE INDEX line_evidence_line_id ON public.line_evidence USING btree (line_id);
 
 CREATE INDEX line_evidence_reading_id ON public.line_evidence USING btree (reading_id);
@@ -628,6 +636,8 @@ CREATE INDEX marks_line_id ON public.marks USING btree (line_id);
 CREATE INDEX marks_pattern_id ON public.marks USING btree (pattern_id);
 
 CREATE INDEX marks_recording_id ON public.marks USING btree (recording_id);
+
+CREATE INDEX marks_transcript_id ON public.marks USING btree (transcript_id);
 
 CREATE INDEX materials_pattern_id ON public.materials USING btree (pattern_id);
 
@@ -734,6 +744,9 @@ ALTER TABLE ONLY public.marks
 
 ALTER TABLE ONLY public.marks
     ADD CONSTRAINT marks_recording_id_fkey FOREIGN KEY (recording_id) REFERENCES public.recordings(id) ON DELETE CASCADE;
+
+ALTER TABLE ONLY public.marks
+    ADD CONSTRAINT marks_transcript_id_fkey FOREIGN KEY (transcript_id) REFERENCES public.transcripts(id) ON DELETE SET NULL;
 
 ALTER TABLE ONLY public.materials
     ADD CONSTRAINT materials_pattern_id_fkey FOREIGN KEY (pattern_id) REFERENCES public.patterns(id) ON DELETE CASCADE;

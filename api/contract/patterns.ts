@@ -20,6 +20,8 @@ export const PatternRecording = z.object({
   publicUrl: z.string().nullable(),
   publicOffsetMs: z.int(),
   durationMs: z.int().nullable(),
+  /** Terms it is spoken in, where a person said so. */
+  spokenTerms: Terms.nullable(),
   /** The newest transcript, if there is one. */
   transcriptId: z.uuid().nullable(),
   version: z.int().positive(),

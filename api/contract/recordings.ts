@@ -41,6 +41,8 @@ export const ReadingPiece = z.object({
   rounds: z.int(),
   /** Stitches of each round or row in order, as far as they could be counted; for its print. */
   totals: z.array(z.int()),
+  /** Each line that is counted, for its ring map: a figure a round, null where it could not be counted. */
+  rings: z.array(z.object({ label: z.string(), counts: z.array(z.int().nullable()), verdict: Verdict })),
 });
 export type ReadingPiece = z.infer<typeof ReadingPiece>;
 
@@ -55,6 +57,16 @@ export const ReadingSummary = z.object({
   /** Lines that wait for a look: differing, not fitting, not understood or without a total. */
   toLook: z.int(),
   unread: z.array(z.object({ quote: z.string(), atMs: z.int() })),
+  /** What was said of materials and cautions, and where another recording was pointed to. */
+  suggestions: z.array(
+    z.object({
+      kind: z.enum(['hook', 'yarn', 'notion', 'caution', 'technique', 'gauge']),
+      text: z.string(),
+      atMs: z.int(),
+    }),
+  ),
+  /** Trade words that were mis-heard, whether put right in the captions by now or not. */
+  corrections: z.int(),
   /** Set where nothing could be drafted, with the reason. */
   notice: z.string().nullable(),
   /** Whether lines of the pattern come from it. */

@@ -13,6 +13,18 @@ export { countPattern } from './count/pattern.ts';
 export { type Cue } from './transcript/cue.ts';
 export type * from './transcript/draft.ts';
 export { readTranscript } from './transcript/read-transcript.ts';
+export { alignWords, plainWord } from './transcript/align-words.ts';
+export { placeCorrections, type CorrectedCue, type PlacedCorrection } from './transcript/correct-words.ts';
+export { matchLines, matchPieces } from './transcript/match-draft.ts';
+export {
+  readStretch,
+  type StretchReading,
+  type StretchSetting,
+  type TimedHeardCue,
+} from './transcript/read-stretch.ts';
+export { followWords } from './transcript/shift-moments.ts';
+export { inHeardNumbers, wordsAsHeard, type HeardCue, type HeardWord } from './transcript/words-as-heard.ts';
+export { wordsOf } from './transcript/words.ts';
 export { spell as spellWork } from './transcript/work/units.ts';
 export * from './edition/index.ts';
 export { broughtCautions, type BroughtCaution, type CautionSource } from './checks/cautions.ts';

@@ -37,6 +37,13 @@ function scopeOf(req: Request): string {
   return createHash('sha256').update(`${who}\n${req.method}\n${req.baseUrl}${req.path}`).digest('base64url');
 }
 
+/** What was asked for: the body, and a file that was sent as a form. */
+function hashOf({ body, file }: Request): string {
+  const hash = createHash('sha256').update(JSON.stringify(body ?? null));
+  if (file) hash.update(JSON.stringify([file.originalname, file.mimetype])).update(file.buffer);
+  return hash.digest('base64url');
+}
+
 /**
  * Lets a caller send the same request again without doing it twice: with the same `Idempotency-Key` and body the
  * first answer comes again, for 24 hours. Put it on routes that make something; without the header nothing changes.
@@ -51,9 +58,7 @@ export function idempotent({ db, clock, log }: Pick<Deps, 'db' | 'clock' | 'log'
     }
     if (!/^[\x21-\x7e]{1,200}$/.test(given)) throw new AppError('bad-request', 'Idempotency-Key cannot be used.');
     const key = { scope: scopeOf(req), key: given };
-    const hash = createHash('sha256')
-      .update(JSON.stringify(req.body ?? null))
-      .digest('base64url');
+    const hash = hashOf(req);
 
     if (!(await takeKey(db, key, hash, clock.now()))) {
       const row = await db<KeyRow>('request_keys').where(key).first();

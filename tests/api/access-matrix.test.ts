@@ -70,7 +70,7 @@ describe('a body with a field that nobody asked for', () => {
   });
 });
 
-test('reading changes nothing', { timeout: 60_000 }, async () => {
+test('reading changes nothing', { timeout: 180_000 }, async () => {
   // Where calls are counted and when a session was last seen is not what anybody reads.
   const ASIDE = ['rate_limits', 'sessions', 'knex_migrations_lock'];
   const calls: [Who, string][] = [];
@@ -94,7 +94,7 @@ test('reading changes nothing', { timeout: 60_000 }, async () => {
   expect(await writes()).toEqual(before);
 });
 
-test('what is somebody else’s is answered like what never was', { timeout: 60_000 }, async () => {
+test('what is somebody else’s is answered like what never was', { timeout: 180_000 }, async () => {
   const hidden = Object.entries(ROUTES).filter(
     ([entry, { expect: e }]) => e['owner of another studio'] === 404 && /:\w+[Ii]d|:code/u.test(entry),
   );

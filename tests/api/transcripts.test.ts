@@ -18,6 +18,12 @@ Round two, increase in every stitch around. Twelve stitches.
 Round three, single crochet, increase, repeat six times. Eighteen stitches.
 `;
 
+/** The same, and so long that nobody waits for it. */
+const LONG = `${SAID}
+00:24.000 --> 30:00.000
+${'and a little more yarn over, as before, '.repeat(900)}
+`;
+
 describe('a transcript', () => {
   let at: TestApp;
   let house: Household;
@@ -55,13 +61,31 @@ describe('a transcript', () => {
       marks: { startMs: number }[];
     };
 
-  test('is read by a job, and the empty pattern takes the draft with words and moments', async () => {
+  test('that is short is read while its sender waits', async () => {
     const { patternId, recordingId } = await setOut();
     const sent = await send(recordingId, SAID, 'harvest-mouse.vtt', 'text/vtt');
+    expect(sent.body.reading).toMatchObject({ state: 'done', summary: { taken: true } });
+    expect((await bench(patternId)).state).toBe('drafting');
+  });
+
+  test('sent twice with one key is kept once; with another file the key is refused', async () => {
+    const { recordingId } = await setOut();
+    const once = { ...creator, 'Idempotency-Key': 'one-choice' };
+    const first = await send(recordingId, SAID, 'harvest-mouse.vtt', 'text/vtt', once);
+    const second = await send(recordingId, SAID, 'harvest-mouse.vtt', 'text/vtt', once);
+    expect([second.status, second.body]).toEqual([201, first.body]);
+    expect(await at.db('transcripts').where({ recording_id: recordingId })).toHaveLength(1);
+    const other = await send(recordingId, `${SAID}\n`, 'harvest-mouse.vtt', 'text/vtt', once);
+    expect(other.status).toBe(422);
+  });
+
+  test('that is long is read by a job, and the empty pattern takes the draft with words and moments', async () => {
+    const { patternId, recordingId } = await setOut();
+    const sent = await send(recordingId, LONG, 'harvest-mouse.vtt', 'text/vtt');
     expect(sent.status).toBe(201);
     expect(sent.body).toMatchObject({
       format: 'vtt',
-      captions: 4,
+      captions: 5,
       number: 1,
       reading: { state: 'waiting', summary: null },
     });
@@ -70,7 +94,7 @@ describe('a transcript', () => {
 
     const [recording] = await list(patternId);
     expect(recording?.transcript).toMatchObject({
-      lastMs: 22_000,
+      lastMs: 1_800_000,
       reading: { state: 'done', summary: { terms: 'US', taken: true, toLook: 0, verdicts: { agrees: 3 } } },
     });
     const pattern = await bench(patternId);
@@ -195,7 +219,7 @@ describe('a transcript', () => {
 
   test('that cannot be read after the last try says so, and may be read again', async () => {
     const { patternId, recordingId } = await setOut();
-    const sent = await send(recordingId, SAID, 'fails.vtt');
+    const sent = await send(recordingId, LONG, 'fails.vtt');
     await at.db.raw('delete from graphile_worker._private_jobs');
     const { readTranscriptJob } = await import('../../api/features/recordings/readings.service.ts');
     await at.db.raw('alter table readings rename to readings_away');

@@ -14,12 +14,13 @@ interface RecordingRow {
   clip_type: string | null;
   clip_bytes: number | null;
   transcript_id: string | null;
+  spoken_terms: 'US' | 'UK' | null;
 }
 
 /** The recordings of a pattern in their order, each with its clip and its newest transcript. */
 export async function listRecordings(db: Knex, patternId: string): Promise<PatternRecording[]> {
   const { rows } = await db.raw<{ rows: RecordingRow[] }>(
-    `select r.id, pr.number, r.title, r.public_url, r.public_offset_ms, r.duration_ms, r.version,
+    `select r.id, pr.number, r.title, r.public_url, r.public_offset_ms, r.duration_ms, r.version, r.spoken_terms,
             o.state as clip_state, o.type as clip_type, o.bytes as clip_bytes,
             (select t.id from transcripts t where t.recording_id = r.id order by t.number desc limit 1) as transcript_id
        from pattern_recordings pr
@@ -45,30 +46,29 @@ export async function listRecordings(db: Knex, patternId: string): Promise<Patte
     publicUrl: row.public_url,
     publicOffsetMs: row.public_offset_ms,
     durationMs: row.duration_ms,
+    spokenTerms: row.spoken_terms,
     transcriptId: row.transcript_id,
     version: row.version,
   }));
 }
 
-/** Where each line was heard, in the order of the recording; the words stand in the reading's own draft. */
+/** Where each line was heard, in the order of the recording. What an earlier reading heard is left out. */
 export async function listEvidence(db: Knex, patternId: string): Promise<Evidence[]> {
-  const { rows } = await db.raw<{ rows: Evidence[] }>(
-    `with heard as (
-       select r.id as reading_id, (w ->> 'firstWord')::int as first_word, (w ->> 'lastWord')::int as last_word,
-              min(w ->> 'words') as words
-         from (select distinct e.reading_id as id from line_evidence e join lines l on l.id = e.line_id
-                where l.pattern_id = :patternId) used
-         join readings r on r.id = used.id,
-              jsonb_path_query(r.draft, '$.pieces[*].lines[*].evidence[*]') as w
-        group by 1, 2, 3)
-     select e.id, e.line_id as "lineId", e.transcript_id as "transcriptId", e.role, e.first_word as "firstWord",
-            e.last_word as "lastWord", e.start_ms as "startMs", e.end_ms as "endMs", coalesce(h.words, '') as words
-       from line_evidence e
-       join lines l on l.id = e.line_id and l.deleted_at is null
-       left join heard h using (reading_id, first_word, last_word)
-      where l.pattern_id = :patternId
-      order by e.transcript_id, e.first_word, e.id`,
-    { patternId },
-  );
-  return rows;
+  return db('line_evidence as e')
+    .join('lines as l', 'l.id', 'e.line_id')
+    .where('l.pattern_id', patternId)
+    .whereNull('l.deleted_at')
+    .whereRaw('e.hearing_id = any(l.hearings)')
+    .orderBy(['e.transcript_id', 'e.first_word', 'e.id'])
+    .select<Evidence[]>({
+      id: 'e.id',
+      lineId: 'e.line_id',
+      transcriptId: 'e.transcript_id',
+      role: 'e.role',
+      firstWord: 'e.first_word',
+      lastWord: 'e.last_word',
+      startMs: 'e.start_ms',
+      endMs: 'e.end_ms',
+      words: 'e.words',
+    });
 }

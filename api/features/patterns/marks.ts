@@ -27,3 +27,12 @@ export async function keepOneMain(trx: Knex.Transaction, deed: Deed, mark: Field
   }
   return mark.main === true;
 }
+
+/** The transcript by whose words a moment in a recording is set now; null where it has none. */
+export async function newestTranscriptOf(trx: Knex, recordingId: string): Promise<string | null> {
+  const row = await trx('transcripts')
+    .where({ recording_id: recordingId })
+    .orderBy('number', 'desc')
+    .first<{ id: string } | undefined>('id');
+  return row?.id ?? null;
+}

@@ -6,7 +6,7 @@ import { lastChangeTo } from './changes.store.ts';
 import { checkRemoval, fitCaution } from './cautions.service.ts';
 import { openPattern, record, writeFields, type Asking, type Deed } from './deed.service.ts';
 import { TABLES, type Fields, type Row, type RowEntity } from './entities.ts';
-import { keepOneMain } from './marks.ts';
+import { keepOneMain, newestTranscriptOf } from './marks.ts';
 import { placeAfter } from './order.ts';
 import { canEditPattern } from './patterns.policy.ts';
 import { checkReferences, refuseField } from './row-checks.ts';
@@ -70,6 +70,12 @@ async function insertLogged(trx: Knex.Transaction, deed: Deed, entity: RowEntity
   return row!;
 }
 
+/** A mark is the main one or not, and knows by whose words it was set. */
+async function forMark(trx: Knex.Transaction, deed: Deed, mark: Fields): Promise<Fields> {
+  const transcriptId = await newestTranscriptOf(trx, mark.recordingId as string);
+  return { main: await keepOneMain(trx, deed, mark), transcriptId };
+}
+
 /**
  * Makes a row in a pattern. With an `id` of the caller's, sending it twice makes one.
  * @returns the row, and whether it was there already
@@ -92,7 +98,7 @@ export async function createRow(
     const fields = await fit(trx, entity, patternId, { ...DEFAULTS[entity], ...asked });
     const [shortId] = entity === 'line' ? newShortIds(await takenShortIds(trx, patternId), 1) : [];
     const full = { ...fields, id, ...(shortId !== undefined && { shortId }) };
-    const made = entity === 'mark' ? { ...full, main: await keepOneMain(trx, deed, full) } : full;
+    const made = entity === 'mark' ? { ...full, ...(await forMark(trx, deed, full)) } : full;
     return { row: await insertLogged(trx, deed, entity, made), deedId: deed.id, isNew: true };
   });
 }
@@ -119,9 +125,12 @@ export async function staleVersion(trx: Knex, row: Row, present: unknown): Promi
   });
 }
 
-/** A moment that a person moves is theirs from then on: no reading moves it again. */
-const byHand = (entity: RowEntity, fields: Fields): Fields =>
-  entity === 'mark' && ('startMs' in fields || 'endMs' in fields) ? { madeBy: 'person' } : {};
+/** A moment that a person moves is theirs from then on: a reading moves it only with its words. */
+async function byHand(trx: Knex, entity: RowEntity, fields: Fields, row: Row): Promise<Fields> {
+  if (entity !== 'mark' || !('startMs' in fields || 'endMs' in fields)) return {};
+  const recordingId = (fields.recordingId ?? row.recordingId) as string;
+  return { madeBy: 'person', transcriptId: await newestTranscriptOf(trx, recordingId) };
+}
 
 /**
  * Saves a row if nobody saved it since `version`.
@@ -138,7 +147,8 @@ export async function editRow(
     const { row, deed } = await openRow(trx, asking, entity, at.id, at.version);
     const fields = await fit(trx, entity, deed.patternId, asked, row);
     if (entity === 'mark') await keepOneMain(trx, deed, { ...row, ...fields });
-    const saved = await writeFields(trx, deed, entity, row, { ...fields, ...byHand(entity, fields) });
+    const set = await byHand(trx, entity, fields, row);
+    const saved = await writeFields(trx, deed, entity, row, { ...fields, ...set });
     if (entity === 'line') await touchFields(trx, row.id, Object.keys(fields), deed.at);
     return { row: saved, deedId: deed.id };
   });

@@ -1,19 +1,23 @@
 import { randomUUID } from 'node:crypto';
 import type { Knex } from 'knex';
 import { z } from 'zod';
-import { readTranscript } from '#crochet';
+import { inHeardNumbers, readTranscript, type Draft } from '#crochet';
+import type { ReadingDifferences, ReadingTake } from '#contract/readings';
 import type { ReadingTaken } from '#contract/recordings';
 import { AppError } from '../../http/problem.ts';
 import type { Deps } from '../../platform/deps.ts';
 import { TRIES, type JobInfo } from '../../platform/jobs.ts';
+import type { Person } from '../../http/session.ts';
+import { compareDraft, refuseIfChanged } from '../patterns/compare-draft.service.ts';
 import { openPattern, type Asking, type Deed } from '../patterns/deed.service.ts';
+import { findSeenPattern } from '../patterns/document.service.ts';
 import { setPatternState } from '../patterns/patterns.service.ts';
 import { takeDraft } from '../patterns/take-draft.service.ts';
 import { findReading, insertReading, listEmptyPatternsOf } from './readings.store.ts';
 import { recordOnRecording } from './recording-changes.ts';
 import { canKeepRecordings } from './recordings.policy.ts';
-import { findPlaced } from './recordings.store.ts';
-import { findTranscript, listCues, setReadingFailed } from './transcripts.store.ts';
+import { findPlaced, findSpokenTerms } from './recordings.store.ts';
+import { countCharacters, findTranscript, listCues, setReadingFailed } from './transcripts.store.ts';
 
 /** Raised when the same words are read otherwise than before; kept with each reading. */
 const ENGINE_VERSION = '1';
@@ -48,21 +52,42 @@ interface ToRead {
   readonly recordingId: string;
 }
 
-async function readAndKeep({ db, clock }: ReadingDeps, { id: transcriptId, recordingId }: ToRead): Promise<void> {
-  const cues = await listCues(db, transcriptId);
+/** Reads the captions as they are corrected by now, in the terms a person chose, if one did. */
+async function readCaptions(db: Knex, { id, recordingId }: ToRead): Promise<Draft> {
+  const cues = await listCues(db, id);
+  const terms = await findSpokenTerms(db, recordingId);
   const draft = readTranscript(
     cues.map(({ startMs, endMs, heard, corrected }) => ({ startMs, endMs, text: corrected ?? heard })),
-    {},
+    terms === null ? {} : { terms },
   );
-  const now = clock.now();
-  await db.transaction(async (trx) => {
-    const id = randomUUID();
-    await insertReading(trx, { id, transcriptId, engineVersion: ENGINE_VERSION, draft }, now);
-    await recordOnRecording(trx, { who: null, now }, recordingId, { before: null, after: { reading: id } });
-    for (const pattern of await listEmptyPatternsOf(trx, recordingId)) {
-      await takeDraft(trx, ownDeed(pattern.id, now), id, draft);
-    }
-  });
+  return inHeardNumbers(draft, cues);
+}
+
+async function keepReading(trx: Knex.Transaction, { id: transcriptId, recordingId }: ToRead, draft: Draft, now: Date) {
+  const id = randomUUID();
+  await insertReading(trx, { id, transcriptId, engineVersion: ENGINE_VERSION, draft }, now);
+  await recordOnRecording(trx, { who: null, now }, recordingId, { before: null, after: { reading: id } });
+  for (const pattern of await listEmptyPatternsOf(trx, recordingId)) {
+    await takeDraft(trx, ownDeed(pattern.id, now), id, draft);
+  }
+}
+
+async function readAndKeep({ db, clock }: ReadingDeps, toRead: ToRead): Promise<void> {
+  const draft = await readCaptions(db, toRead);
+  await db.transaction((trx) => keepReading(trx, toRead, draft, clock.now()));
+}
+
+/** Transcripts of at most so many characters are read while their sender waits: about half an hour of talk. */
+export const QUICK_CHARACTERS = 30_000;
+
+/**
+ * Reads a short transcript at once, in the transaction of whoever sent it or asks for it again.
+ * @returns false for a long one, which is a job
+ */
+export async function readIfQuick(trx: Knex.Transaction, toRead: ToRead, now: Date): Promise<boolean> {
+  if ((await countCharacters(trx, toRead.id)) > QUICK_CHARACTERS) return false;
+  await keepReading(trx, toRead, await readCaptions(trx, toRead), now);
+  return true;
 }
 
 async function sayFailed({ db, clock }: ReadingDeps, { id, recordingId }: ToRead): Promise<void> {
@@ -83,21 +108,59 @@ export async function showAsReading(trx: Knex.Transaction, recordingId: string, 
   }
 }
 
+/** A reading of a recording that stands in the pattern. */
+async function findReadingOf(db: Knex, ids: ReadingIds) {
+  const reading = await findReading(db, ids.readingId);
+  const placed = reading && (await findPlaced(db, ids.patternId, reading.recordingId));
+  if (!placed || placed.removedAt) throw new AppError('not-found');
+  return { reading, placed };
+}
+
+export interface ReadingIds {
+  readonly patternId: string;
+  readonly readingId: string;
+}
+
 /**
- * Takes into a pattern what is new in a reading of one of its recordings. What a person has written or taken away
- * stays so.
- * @throws AppError not-found (no such reading of this pattern) | forbidden | gone
+ * Takes a reading of one of its recordings into a pattern: all that is new, or what was chosen of it. What a person has
+ * written or taken away stays so, unless it was chosen by name. One step for undo.
+ * @throws AppError not-found (no such reading of this pattern) | forbidden | gone | stale-version (the pattern has changed
+ *   since its differences were told)
  */
 export async function takeReading(
   db: Knex,
   asking: Asking,
-  ids: { readonly patternId: string; readonly readingId: string },
-): Promise<ReadingTaken> {
+  ids: ReadingIds,
+  { lastChange, ...choice }: ReadingTake,
+): Promise<{ taken: ReadingTaken; deedId: string }> {
   return db.transaction(async (trx) => {
     const { deed } = await openPattern(trx, asking, ids.patternId, canKeepRecordings);
-    const reading = await findReading(trx, ids.readingId);
-    const placed = reading && (await findPlaced(trx, ids.patternId, reading.recordingId));
-    if (!placed || placed.removedAt) throw new AppError('not-found');
-    return takeDraft(trx, deed, reading.id, reading.draft);
+    const { reading } = await findReadingOf(trx, ids);
+    if (lastChange !== undefined) await refuseIfChanged(trx, ids.patternId, lastChange);
+    return { taken: await takeDraft(trx, deed, reading.id, reading.draft, choice), deedId: deed.id };
   });
+}
+
+/**
+ * A reading held against its pattern, line by line.
+ * @throws AppError not-found, also where the pattern may not be seen
+ */
+export async function readDifferences(db: Knex, who: Person, ids: ReadingIds): Promise<ReadingDifferences> {
+  return db.transaction(
+    async (trx) => {
+      const pattern = await findSeenPattern(trx, who, ids.patternId);
+      const { reading, placed } = await findReadingOf(trx, ids);
+      const differences = await compareDraft(trx, pattern, reading.id, reading.draft);
+      if (!differences) throw new AppError('not-found');
+      return {
+        readingId: reading.id,
+        transcriptId: reading.transcriptId,
+        recordingId: placed.id,
+        recordingTitle: placed.title,
+        mayTake: canKeepRecordings(who, pattern) && pattern.deletedAt === null,
+        ...differences,
+      };
+    },
+    { isolationLevel: 'repeatable read', readOnly: true },
+  );
 }

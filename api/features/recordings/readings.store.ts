@@ -10,7 +10,10 @@ export interface ReadingRow {
 }
 
 const COLUMNS = { id: 'g.id', transcriptId: 'g.transcript_id', draft: 'g.draft' } as const;
-const TAKEN = 'exists (select 1 from line_evidence e where e.reading_id = g.id) as taken';
+const TAKEN = `exists (
+  select 1 from line_evidence e join lines l on l.id = e.line_id join pieces p on p.id = l.piece_id
+   where e.reading_id = g.id and e.hearing_id = any(l.hearings) and l.deleted_at is null and p.deleted_at is null
+) as taken`;
 
 /** The newest reading of each of these transcripts. */
 export async function listNewestReadings(db: Knex, transcriptIds: readonly string[]): Promise<ReadingRow[]> {

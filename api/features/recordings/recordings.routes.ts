@@ -1,5 +1,5 @@
 import { Router } from 'express';
-import { Recording, RecordingCreate, RecordingEdit, RecordingList, ReadingTaken } from '#contract/recordings';
+import { Recording, RecordingCreate, RecordingEdit, RecordingList } from '#contract/recordings';
 import { idempotent } from '../../http/idempotency.ts';
 import { CREATING, limit } from '../../http/limits.ts';
 import { ifMatchVersion, sendVersioned } from '../../http/preconditions.ts';
@@ -8,7 +8,7 @@ import { signedIn } from '../../http/session.ts';
 import type { Deps } from '../../platform/deps.ts';
 import { askingIn, idIn } from '../../http/asking.ts';
 import { clipRoutes } from './clips.routes.ts';
-import { takeReading } from './readings.service.ts';
+import { readingRoutes } from './readings.routes.ts';
 import {
   addRecording,
   editRecording,
@@ -52,11 +52,6 @@ export function recordingRoutes(deps: Deps): Router {
     sendVersioned(res, answer(Recording, recording), recording.version);
   });
 
-  router.post('/patterns/:patternId/readings/:readingId/take', async (req, res) => {
-    const ids = { patternId: idIn(req, 'patternId'), readingId: idIn(req, 'readingId') };
-    res.json(answer(ReadingTaken, await takeReading(db, askingIn(deps, req), ids)));
-  });
-
-  router.use(transcriptRoutes(deps), clipRoutes(deps));
+  router.use(transcriptRoutes(deps), readingRoutes(deps), clipRoutes(deps));
   return router;
 }

@@ -54,6 +54,19 @@ export async function findRecording(db: Knex, id: string, { lock = false } = {})
   return row.first<RecordingRow | undefined>(COLUMNS);
 }
 
+/** Terms that a person said a recording is spoken in; null where they are inferred. */
+export async function findSpokenTerms(db: Knex, id: string): Promise<'US' | 'UK' | null> {
+  const row = await db('recordings').where({ id }).first<{ terms: 'US' | 'UK' | null } | undefined>({
+    terms: 'spoken_terms',
+  });
+  return row?.terms ?? null;
+}
+
+/** Says in which terms a recording is spoken; null: they are inferred. */
+export async function setSpokenTerms(trx: Knex.Transaction, id: string, terms: 'US' | 'UK' | null): Promise<void> {
+  await trx('recordings').where({ id }).update({ spoken_terms: terms });
+}
+
 /** The recordings of a pattern in their order. */
 export async function listPlaced(db: Knex, patternId: string): Promise<PlacedRecordingRow[]> {
   return placed(db, patternId)

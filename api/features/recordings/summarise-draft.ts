@@ -6,6 +6,10 @@ const isCounted = ({ kind }: DraftLine) => kind === 'round' || kind === 'row';
 /** A range stands for as many rounds as it has. */
 const roundsOf = ({ from, to }: DraftLine) => (from === null || to === null ? 1 : Math.max(1, to - from + 1));
 
+/** "9", "5–8": as a ring is numbered. */
+const ringLabel = ({ from, to }: DraftLine) =>
+  from === null ? '' : to === null || to === from ? String(from) : `${from}–${to}`;
+
 function summarisePiece({ name, make, worked, lines }: DraftPiece): ReadingPiece {
   const counted = lines.filter(isCounted);
   return {
@@ -13,6 +17,11 @@ function summarisePiece({ name, make, worked, lines }: DraftPiece): ReadingPiece
     make,
     worked,
     lines: lines.length,
+    rings: counted.map((line) => ({
+      label: ringLabel(line),
+      counts: Array.from({ length: roundsOf(line) }, () => line.count),
+      verdict: line.verdict,
+    })),
     rounds: counted.reduce((sum, line) => sum + roundsOf(line), 0),
     totals: counted.flatMap((line) => {
       const { count } = line;
@@ -35,6 +44,8 @@ export function summariseDraft(draft: Draft): Omit<ReadingSummary, 'id' | 'taken
     toLook: counted.length - verdicts.agrees,
     // A word's moment is worked out within its caption and falls between milliseconds.
     unread: all.flatMap(({ unread }) => (unread ? [{ quote: unread.quote, atMs: Math.round(unread.atMs) }] : [])),
+    suggestions: draft.suggestions.map(({ kind, text, atMs }) => ({ kind, text, atMs: Math.round(atMs) })),
+    corrections: draft.corrections.length,
     notice: draft.notice,
   };
 }

@@ -1,12 +1,15 @@
 import { Router, type Request, type RequestHandler } from 'express';
 import multer, { MulterError } from 'multer';
+import { CaptionCorrections, CorrectionsTake, ReadingAsk } from '#contract/readings';
 import { Cue, CueEdit, CueList, Transcript, TranscriptHead, TRANSCRIPT_BYTES } from '#contract/recordings';
+import { idempotent } from '../../http/idempotency.ts';
 import { CREATING, limit } from '../../http/limits.ts';
 import { ifMatchVersion, sendVersioned } from '../../http/preconditions.ts';
 import { answer, AppError } from '../../http/problem.ts';
 import { signedIn } from '../../http/session.ts';
 import type { Deps } from '../../platform/deps.ts';
 import { askingIn, idIn } from '../../http/asking.ts';
+import { listCorrections, takeCorrections } from './corrections.service.ts';
 import {
   addTranscript,
   correctCue,
@@ -49,6 +52,7 @@ export function transcriptRoutes(deps: Deps): Router {
     signedInFirst,
     limit(deps, CREATING),
     oneFile,
+    idempotent(deps),
     async (req, res) => {
       const head = await addTranscript(db, askingIn(deps, req), idIn(req, 'recordingId'), fileIn(req));
       res.status(201).location(`/api/transcripts/${head.id}`).json(answer(TranscriptHead, head));
@@ -64,8 +68,20 @@ export function transcriptRoutes(deps: Deps): Router {
   });
 
   router.post('/transcripts/:transcriptId/readings', limit(deps, CREATING), async (req, res) => {
-    const head = await readAgain(db, signedIn(req), idIn(req, 'transcriptId'));
+    const asked = ReadingAsk.parse(req.body ?? {});
+    const head = await readAgain(db, askingIn(deps, req), idIn(req, 'transcriptId'), asked);
     res.status(202).json(answer(TranscriptHead, head));
+  });
+
+  router.get('/transcripts/:transcriptId/corrections', async (req, res) => {
+    const told = await listCorrections(db, signedIn(req), idIn(req, 'transcriptId'));
+    res.json(answer(CaptionCorrections, told));
+  });
+
+  router.post('/transcripts/:transcriptId/corrections', async (req, res) => {
+    const asked = CorrectionsTake.parse(req.body);
+    const told = await takeCorrections(db, askingIn(deps, req), idIn(req, 'transcriptId'), asked);
+    res.json(answer(CaptionCorrections, told));
   });
 
   router.patch('/cues/:cueId', async (req, res) => {

@@ -1,12 +1,14 @@
 import { randomUUID } from 'node:crypto';
 import type { Knex } from 'knex';
 import { Cue, TRANSCRIPT_ENDINGS, type CueList, type Transcript, type TranscriptHead } from '#contract/recordings';
+import type { ReadingAsk } from '#contract/readings';
 import { AppError } from '../../http/problem.ts';
 import { addJob } from '../../platform/jobs.ts';
 import type { Person } from '../../http/session.ts';
 import type { Asking } from '../patterns/deed.service.ts';
 import { describeTranscript } from './describe-recordings.ts';
-import { showAsReading } from './readings.service.ts';
+import { readIfQuick, showAsReading } from './readings.service.ts';
+import { findSpokenTerms, setSpokenTerms } from './recordings.store.ts';
 import { listNewestReadings } from './readings.store.ts';
 import { recordOnRecording } from './recording-changes.ts';
 import { findRecordingFor } from './recordings.access.ts';
@@ -44,9 +46,11 @@ function refuseOtherFiles({ name, type, bytes }: SentFile): void {
   );
 }
 
-/** Asks for a transcript to be read; asked again before it is begun, it is read once. */
-async function askForReading(trx: Knex.Transaction, transcriptId: string): Promise<void> {
+/** Has a transcript read: at once where that is quick, else by a job; asked again before it is begun, it is read once. */
+async function haveRead(trx: Knex.Transaction, transcriptId: string, recordingId: string, now: Date): Promise<void> {
   await setReadingFailed(trx, transcriptId, null);
+  if (await readIfQuick(trx, { id: transcriptId, recordingId }, now)) return;
+  await showAsReading(trx, recordingId, now);
   await addJob(trx, 'read-transcript', { transcriptId }, { key: `read-transcript ${transcriptId}` });
 }
 
@@ -86,14 +90,17 @@ export async function addTranscript(
       { id, recordingId, fileName: file.name, encoding, format, problems: [...problems], sourceText },
       read.cues,
     );
-    await askForReading(trx, id);
-    await showAsReading(trx, recordingId, asking.now);
     await recordOnRecording(trx, asking, recordingId, { before: null, after: { transcript: file.name } });
+    await haveRead(trx, id, recordingId, asking.now);
     return describeHead(trx, id);
   });
 }
 
-async function findTranscriptFor(
+/**
+ * A transcript that somebody may see and, with `may`, write to.
+ * @throws AppError not-found, also where it may not be seen | forbidden
+ */
+export async function findTranscriptFor(
   db: Knex,
   who: Person,
   id: string,
@@ -124,13 +131,24 @@ export async function readCues(db: Knex, who: Person, transcriptId: string): Pro
 }
 
 /**
- * Reads a transcript anew, after corrections or a failure. What was read before stays.
+ * Reads a transcript anew, after corrections or a failure, or in other terms than were inferred. What was read before
+ * stays.
  * @throws AppError not-found | forbidden
  */
-export async function readAgain(db: Knex, who: Person, transcriptId: string): Promise<TranscriptHead> {
+export async function readAgain(
+  db: Knex,
+  asking: Asking,
+  transcriptId: string,
+  { terms }: ReadingAsk = {},
+): Promise<TranscriptHead> {
   return db.transaction(async (trx) => {
-    await findTranscriptFor(trx, who, transcriptId, canKeepRecordings);
-    await askForReading(trx, transcriptId);
+    const { recordingId } = await findTranscriptFor(trx, asking.who, transcriptId, canKeepRecordings);
+    if (terms !== undefined) {
+      const before = { spokenTerms: await findSpokenTerms(trx, recordingId) };
+      await setSpokenTerms(trx, recordingId, terms);
+      await recordOnRecording(trx, asking, recordingId, { before, after: { spokenTerms: terms } });
+    }
+    await haveRead(trx, transcriptId, recordingId, asking.now);
     return describeHead(trx, transcriptId);
   });
 }

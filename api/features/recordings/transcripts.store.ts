@@ -95,6 +95,14 @@ export async function insertTranscript(
   );
 }
 
+/** How long a transcript is, in characters of its captions. */
+export async function countCharacters(db: Knex, transcriptId: string): Promise<number> {
+  const row = await db('cues')
+    .where({ transcript_id: transcriptId })
+    .first<{ n: number } | undefined>(db.raw('coalesce(sum(length(coalesce(corrected, heard))), 0)::int as n'));
+  return row?.n ?? 0;
+}
+
 const CUE = {
   id: 'id',
   ordinal: 'ordinal',
@@ -108,6 +116,11 @@ const CUE = {
 /** The captions of a transcript in the order of the file. */
 export async function listCues(db: Knex, transcriptId: string): Promise<Cue[]> {
   return db('cues').where({ transcript_id: transcriptId }).orderBy('ordinal').select<Cue[]>(CUE);
+}
+
+/** The captions of a transcript, kept from other writers until the transaction ends. */
+export async function lockCues(trx: Knex.Transaction, transcriptId: string): Promise<Cue[]> {
+  return trx('cues').where({ transcript_id: transcriptId }).orderBy('ordinal').forUpdate().select<Cue[]>(CUE);
 }
 
 export async function findCue(

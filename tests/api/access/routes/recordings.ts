@@ -52,6 +52,34 @@ export const recordings: Record<string, Entry> = {
       return { url: `/api/patterns/${patternId}/readings/${readingId}/take` };
     },
   },
+  'GET /api/patterns/:patternId/readings/:readingId/differences': {
+    expect: members(200),
+    ask: async (world) => {
+      const { patternId, readingId } = await world.transcript();
+      return { url: `/api/patterns/${patternId}/readings/${readingId}/differences` };
+    },
+  },
+  'POST /api/patterns/:patternId/heard-words': {
+    expect: members(201),
+    ask: async (world) => {
+      const { patternId, transcriptId } = await world.transcript();
+      return {
+        url: `/api/patterns/${patternId}/heard-words`,
+        body: { transcriptId, firstWord: 0, lastWord: 3, as: 'step' },
+      };
+    },
+  },
+  'GET /api/transcripts/:transcriptId/corrections': {
+    expect: members(200),
+    ask: async (world) => ({ url: `/api/transcripts/${(await world.transcript()).transcriptId}/corrections` }),
+  },
+  'POST /api/transcripts/:transcriptId/corrections': {
+    expect: members(200),
+    ask: async (world) => ({
+      url: `/api/transcripts/${(await world.transcript()).transcriptId}/corrections`,
+      body: { take: [] },
+    }),
+  },
   'POST /api/recordings/:recordingId/transcripts': {
     expect: makers(201),
     ask: async (world) => {
