@@ -20,7 +20,10 @@ type Own = readonly (readonly [string, string])[];
 export function entriesOf(text: string, terms: Terms, own: Own): Entry[] {
   const entries: Entry[] = [];
   let apart = true;
-  for (const line of physicalLines(text)) {
+  const lines = physicalLines(text);
+  const isBulleted = hasStarBullets(text, lines);
+  for (const whole of lines) {
+    const line = isBulleted ? { ...whole, start: whole.start + bulletOf(text.slice(whole.start, whole.end)) } : whole;
     const source = text.slice(line.start, line.end);
     if (source.trim() === '') {
       apart = true;
@@ -45,6 +48,18 @@ export function entriesOf(text: string, terms: Terms, own: Own): Entry[] {
     apart = false;
   }
   return entries;
+}
+
+/** `* ` before a printed line. */
+const BULLET = /^\s*\*\s+/;
+
+const bulletOf = (line: string): number => BULLET.exec(line)?.[0].length ?? 0;
+
+/** Whether stars begin the printed lines and no repeats: most lines have one, with no partner. */
+function hasStarBullets(text: string, lines: readonly Span[]): boolean {
+  const printed = lines.map(({ start, end }) => text.slice(start, end)).filter((line) => line.trim() !== '');
+  const bulleted = printed.filter((line) => BULLET.test(line) && line.indexOf('*') === line.lastIndexOf('*'));
+  return bulleted.length >= 3 && bulleted.length * 2 > printed.length;
 }
 
 /** Labels are looked for in so much of a printed line, in UTF-16 units. */

@@ -107,6 +107,15 @@ function take(
     extend(state, entry.span.end);
     return;
   }
+  const led = state.section ? null : headed(text, entry, terms, special, state.sizes);
+  if (led) {
+    state.parts.push(
+      { type: 'heading', heading: led.heading, start: entry.span.start, end: led.at },
+      { type: 'line', label: null, labelText: '', start: led.at, bodyStart: led.at, end: entry.span.end },
+    );
+    state.last = 0;
+    return;
+  }
   const heading = headingFor(source, whole, next);
   if (state.section && !(heading && isLead(next))) {
     const isWorkAgain =
@@ -115,7 +124,9 @@ function take(
       state.section !== 'abbreviations' &&
       state.section !== 'special' &&
       state.section !== 'materials';
-    if (!isWorkAgain) {
+    // A chain that stands alone ends any list.
+    const isChain = foundationOf(whole.tree.items, 0) !== null && !/[:=]/.test(source);
+    if (!isWorkAgain && !isChain) {
       (state.section === 'materials' ? state.materials : state.notes).push(stretch);
       return;
     }
@@ -151,6 +162,25 @@ function take(
   else if (isStep && state.parts.length > 0)
     state.parts.push({ type: 'step', start: entry.span.start, end: entry.span.end });
   else state.notes.push(stretch);
+}
+
+/** `Horns (make two): ch 5, …`: a heading and its first line on one printed line. */
+function headed(
+  text: string,
+  entry: Entry,
+  terms: Terms,
+  special: readonly SpecialStitch[],
+  sizes: number,
+): { heading: Heading; at: number } | null {
+  const source = text.slice(entry.span.start, entry.span.end);
+  const colon = source.indexOf(':');
+  if (colon < 0 || colon > 60 || colon + 1 >= source.trimEnd().length) return null;
+  const heading = headingOf(source.slice(0, colon));
+  if (!heading || heading.make < 2) return null;
+  const rest = source.slice(colon + 1);
+  const at = entry.span.start + colon + 1 + (rest.length - rest.trimStart().length);
+  const read = readLine(oneLine(text.slice(at, entry.span.end)), { terms, special, sizes });
+  return isCounted(read) ? { heading, at } : null;
 }
 
 /** Line ends made spaces, unit for unit. */

@@ -2,7 +2,7 @@ import { type Terms } from '../../span.ts';
 import { type LineKind, type SpecialStitch } from '../../count/input.ts';
 import { foundationOf } from '../../count/base.ts';
 import { readLine } from '../read-line.ts';
-import { type ReadLine } from '../tree.ts';
+import { type Item, type ReadLine } from '../tree.ts';
 import { oneLine, type Part } from './gather.ts';
 import { type LineText, type PieceText } from './pattern-text.ts';
 
@@ -23,6 +23,8 @@ export function piecesOf(
 ): PieceText[] {
   const drafts: Draft[] = [];
   let current: Draft | null = null;
+  /** A heading inside a piece: numbers may begin again without a new piece. */
+  let within = false;
   let last = 0;
   const begin = (name: string | null, make: number, start: number): Draft => {
     const draft: Draft = { name, make, start, lines: [] };
@@ -37,6 +39,12 @@ export function piecesOf(
   );
   parts.forEach((part, i) => {
     if (part.type === 'heading') {
+      if (current !== null && last >= 1 && goesOn(parts, reads, i)) {
+        current.lines.push({ part: { type: 'note', start: part.start, end: part.end }, read: readLine('', {}) });
+        within = true;
+        return;
+      }
+      within = false;
       current = begin(part.heading.name, part.heading.make, part.start);
       return;
     }
@@ -46,9 +54,10 @@ export function piecesOf(
       const isChain = foundationOf(read.tree.items, 0) !== null && part.label === null;
       // A foundation or set-up line without a number stands before round 1 of the same piece.
       const isSetUp = part.label?.titled === true && last === 0 && (nextNumber(parts, i) ?? 2) <= 1;
-      const restarts = from !== null && from <= 1 && last >= 1;
+      const restarts = from !== null && from <= 1 && last >= 1 && !within;
       const chainRestarts = isChain && last >= 1 && nextNumber(parts, i) !== null && nextNumber(parts, i)! <= 1;
       if (current === null || restarts || chainRestarts) current = begin(null, 1, part.start);
+      within = false;
       if (!isChain && !isSetUp) last = part.label?.to ?? from ?? last + Math.max(1, part.label?.next ?? 1);
       current.lines.push({ part, read });
     } else if (current) current.lines.push({ part: part, read: readLine('', {}) });
@@ -57,6 +66,49 @@ export function piecesOf(
     .filter((draft) => draft.lines.some((line) => line.part.type === 'line'))
     .map((draft, i) => pieceOf(text, draft, i));
 }
+
+/** A heading with work that goes on where the line before left off: it says so by its places, and begins in nothing of its own. */
+function goesOn(parts: readonly Part[], reads: readonly (ReadLine | null)[], at: number): boolean {
+  const heading = parts[at];
+  if (heading?.type !== 'heading' || heading.heading.make > 1) return false;
+  for (let i = at + 1; i < parts.length; i += 1) {
+    const part = parts[i]!;
+    const read = reads[i];
+    if (part.type === 'heading') return false;
+    if (part.type !== 'line' || !read) continue;
+    const { items } = read.tree;
+    const isJoined = JOINED.test(items.map(wordsOf).join(' '));
+    return !isJoined && !beginsItself(items) && worksOn(items);
+  }
+  return false;
+}
+
+const JOINED = /\b(attach|rejoin|join|pick)\b.*\byarn\b/;
+const wordsOf = (item: Item): string => (item.type === 'step' || item.type === 'note' ? item.text : '');
+
+/** In a ring, on a chain, or on what was left elsewhere. */
+const beginsItself = (items: readonly Item[]): boolean =>
+  foundationOf(items, 0) !== null ||
+  items.some(
+    (item) =>
+      (item.type === 'step' && item.what === 'ring') ||
+      ((item.type === 'work' || item.type === 'group') &&
+        (item.into?.what === 'ring' ||
+          item.into?.which === 'hook' ||
+          item.into?.what === 'loop' ||
+          item.into?.what === 'row-end' ||
+          item.into?.which === 'skipped')),
+  );
+
+/** Goes into stitches, all round or so many of them. */
+const worksOn = (items: readonly Item[]): boolean =>
+  items.some(
+    (item) =>
+      item.type === 'skip' ||
+      item.type === 'loops' ||
+      ((item.type === 'work' || item.type === 'group') &&
+        (item.times.type === 'fill' || (item.type === 'work' && item.into !== null))),
+  );
 
 function nextNumber(parts: readonly Part[], from: number): number | null {
   for (let i = from + 1; i < parts.length; i += 1) {
@@ -75,7 +127,7 @@ function pieceOf(text: string, draft: Draft, index: number): PieceText {
     const isChain = foundationOf(read.tree.items, 0) !== null;
     const kind = kindOf(part, isChain, worked);
     const label = part.label;
-    const count = Math.max(1, label?.next ?? 1);
+    const count = Math.max(1, label?.next ?? roundsIn(read));
     const from = kind === 'foundation' ? null : (label?.from ?? last + 1);
     const open = label !== null && label.from !== null && label.to === null;
     const isSetUp =
@@ -110,6 +162,12 @@ function pieceOf(text: string, draft: Draft, index: number): PieceText {
     lines,
     span: { start: draft.start, end },
   };
+}
+
+/** `sc in every st for the next 5 rounds`: how many rounds a line without a label stands for. */
+function roundsIn(read: ReadLine): number {
+  const said = read.tree.items.flatMap((item) => (item.type === 'note' ? [/^rounds (\d+)$/.exec(item.text)?.[1]] : []));
+  return Number(said.find(Boolean) ?? 1);
 }
 
 function quietLine(
