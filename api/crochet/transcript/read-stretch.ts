@@ -90,6 +90,7 @@ const lineOf = (places: number): Before['piece'][number] => ({
   loops: 'both',
   said: null,
   isDoubtful: false,
+  left: null,
   verdict: 'agrees',
 });
 
@@ -119,6 +120,7 @@ export function readStretch(cues: readonly TimedHeardCue[], setting: StretchSett
       chains: null,
       introFrom: 0,
       stitch: 'sc',
+      isRows: setting.unit === 'row',
       chainCounts: null,
       chainJoined: false,
     },
