@@ -22,6 +22,7 @@ const MAY_IMPORT: Readonly<Record<string, readonly string[]>> = {
   'web/parts': ['web/ui', 'web/lib', 'api/contract types', 'api/crochet/shape', 'api/crochet types'],
   'web/features': ['web/parts', 'web/ui', 'web/lib', 'api/contract', 'api/crochet', 'api/crochet/shape'],
   'web/watch': ['web/parts', 'web/ui', 'web/lib', 'api/contract types', 'api/crochet/shape', 'api/crochet types'],
+  'web/count': ['web/parts', 'web/ui', 'web/lib', 'api/crochet', 'api/crochet/shape'],
   'web/app': [
     'web/features',
     'web/parts',
@@ -162,6 +163,7 @@ describe('the layers', () => {
     ['web/ui/a.tsx', `import { Ring } from '../parts/ring.tsx'`],
     ['web/watch/a.tsx', `import { Edition } from '#contract/editions'`],
     ['web/watch/a.tsx', `import { readLine } from '#crochet'`],
+    ['web/count/a.tsx', `import { Pattern } from '#contract/patterns'`],
     ['web/parts/a.tsx', `const x = await import('../../api/platform/log.ts')`],
     ['migrations/a.ts', `import { seed } from '../seeds/index.ts'`],
   ])('in %s, %s is caught', (file, source) => {

@@ -4,8 +4,9 @@ import { nextToLook, pieceStitches, tallyVerdicts } from '../../web/features/ben
 import { knotLabel, lineName, nextNumber, spokenName } from '../../web/features/bench/desk/line-name.ts';
 import { heardSpan, loopSpan } from '../../web/features/bench/desk/moments.ts';
 import { InstructionField } from '../../web/features/bench/pattern/instruction-field.tsx';
-import { spokenLine, workedFigure } from '../../web/features/bench/pattern/line-figures.ts';
-import { markParts } from '../../web/features/bench/pattern/marked-text.tsx';
+import { spokenLine } from '../../web/features/bench/pattern/line-figures.ts';
+import { markParts } from '../../web/parts/marked-text.tsx';
+import { workedFigure } from '../../web/parts/worked-figure.ts';
 import { TotalField } from '../../web/features/bench/pattern/total-field.tsx';
 import { control, press, render } from './render.tsx';
 import { act } from 'react';

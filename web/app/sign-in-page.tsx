@@ -47,6 +47,11 @@ export function Component() {
           I only want to make something
         </Link>
       </p>
+      <p className="mt-3">
+        <a href={paths.count()} className="link">
+          Count a written pattern, without signing in
+        </a>
+      </p>
     </Door>
   );
 }

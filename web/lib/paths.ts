@@ -2,6 +2,9 @@
 export const paths = {
   shelf: () => '/',
   newPattern: () => '/new',
+  writtenPattern: () => '/new/written',
+  /** A page of its own, with its own scripts: links to it load it whole. */
+  count: () => '/count',
   recording: (patternId: string) => `/patterns/${patternId}/recording`,
   bench: (patternId: string, lineId?: string) => `/patterns/${patternId}/bench${lineId ? `?line=${lineId}` : ''}`,
   sheet: (patternId: string) => `/patterns/${patternId}/sheet`,

@@ -52,10 +52,13 @@ export function EmptyShelf({ mayCreate }: { mayCreate: boolean }) {
           </p>
           <p className="flex h-12 flex-wrap items-center gap-x-4.5 gap-y-2">
             {mayCreate && (
-              <Link className="link" to={paths.newPattern()}>
+              <Link className="link" to={paths.writtenPattern()}>
                 Begin with a written pattern
               </Link>
             )}
+            <a className="link" href={paths.count()}>
+              Count a pattern
+            </a>
             <Link className="link" to={paths.studio()}>
               Ask an editor in
             </Link>

@@ -1,4 +1,4 @@
-import { type RingState } from '#crochet/shape';
+import type { RingState } from '#crochet/shape';
 
 /** What a ring or a row is drawn in; its shape says the same. */
 export const RING_COLOURS: Record<RingState, string> = {

@@ -260,12 +260,17 @@ function extend(state: State, end: number): void {
   if (last?.type === 'line') state.parts[state.parts.length - 1] = { ...last, end };
 }
 
+/** Whether the first round or row of a piece follows. */
+const beginsAnew = (next: Entry | undefined): boolean => next?.label?.from === 1 && next.label.kind !== 'bare';
+
 function headingFor(source: string, read: ReadLine, next: Entry | undefined): Heading | null {
   const heading = headingOf(source);
   if (!heading) return null;
   const isShouted = /[A-Z]{3}/.test(source) && source === source.toUpperCase();
   const isTitled = /^\s*[A-Z#*]/.test(source);
   const closes = /:\s*$/.test(source.trim()) || heading.make > 1;
-  if (read.tree.items.some((item) => item.type === 'step') && !closes && !isShouted) return null;
+  // `Tail` alone above a first round is a piece, though a tail is also what is woven in.
+  const isBareName = beginsAnew(next) && /^\s*[A-Z][A-Za-z]*( [a-z]+)?\s*$/.test(source);
+  if (read.tree.items.some((item) => item.type === 'step') && !closes && !isShouted && !isBareName) return null;
   return isShouted || closes || (isTitled && next !== undefined) ? heading : null;
 }

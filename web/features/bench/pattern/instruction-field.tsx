@@ -1,7 +1,7 @@
 import { type KeyboardEvent, useLayoutEffect, useRef } from 'react';
 import { type LineCount } from '#crochet';
 import { cx } from '../../../lib/class-names.ts';
-import { MarkedText } from './marked-text.tsx';
+import { MarkedText } from '../../../parts/marked-text.tsx';
 
 /**
  * The instruction as it is typed, underlined to the letter where something is wrong. The same words lie twice over each

@@ -3,7 +3,7 @@ import { type Line } from '#contract/rows';
 import { Figures, TotalCell } from '../../../parts/totals.tsx';
 import { VerdictLabel } from '../../../parts/verdict-mark.tsx';
 import { isCounted } from '../desk/bench-count.ts';
-import { workedFigure } from './line-figures.ts';
+import { workedFigure } from '../../../parts/worked-figure.ts';
 
 /** at | round | instruction ‖ said | written | worked out | verdict. Narrow desks drop the first and the verdict's word. */
 export const LINE_GRID =

@@ -6,7 +6,7 @@ import { formatMoment } from '../../../lib/time.ts';
 import { lineName } from '../desk/line-name.ts';
 import { LINE_GRID, SaidCell, VerdictCell, WorkedCell, WrittenCell } from './line-cells.tsx';
 import { spokenLine } from './line-figures.ts';
-import { MarkedText } from './marked-text.tsx';
+import { MarkedText } from '../../../parts/marked-text.tsx';
 
 export interface LineRowProps {
   line: Line;

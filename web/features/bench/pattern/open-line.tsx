@@ -16,7 +16,7 @@ import { isRow, LINE_GRID, VerdictCell, WorkedCell } from './line-cells.tsx';
 import { LeaveAsIs } from './leave-as-is.tsx';
 import { LineTools } from './line-tools.tsx';
 import { Moment } from './moment.tsx';
-import { Suggestion } from './suggestion.tsx';
+import { Suggestion } from '../../../parts/suggestion.tsx';
 import { TotalField } from './total-field.tsx';
 import { copyTotals } from './copy-totals.ts';
 import { useRepair, useRepairing } from '../desk/repairing.ts';

@@ -5,9 +5,10 @@ import { cx } from '../../../lib/class-names.ts';
 import { VerdictLabel } from '../../../parts/verdict-mark.tsx';
 import { isCounted } from '../desk/bench-count.ts';
 import { lineName } from '../desk/line-name.ts';
-import { spokenLine, workedFigure } from '../pattern/line-figures.ts';
+import { workedFigure } from '../../../parts/worked-figure.ts';
+import { spokenLine } from '../pattern/line-figures.ts';
 import { type LineRowProps } from '../pattern/line-row.tsx';
-import { MarkedText } from '../pattern/marked-text.tsx';
+import { MarkedText } from '../../../parts/marked-text.tsx';
 
 const isFault = (count: LineCount | undefined) => count?.verdict === 'differs' || count?.verdict === 'does-not-fit';
 

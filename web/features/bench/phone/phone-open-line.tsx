@@ -16,11 +16,11 @@ import { copyTotals } from '../pattern/copy-totals.ts';
 import { Heard } from '../pattern/heard.tsx';
 import { InstructionField } from '../pattern/instruction-field.tsx';
 import { isRow } from '../pattern/line-cells.tsx';
-import { workedFigure } from '../pattern/line-figures.ts';
+import { workedFigure } from '../../../parts/worked-figure.ts';
 import { LeaveAsIs } from '../pattern/leave-as-is.tsx';
 import { LineTools } from '../pattern/line-tools.tsx';
 import { Moment } from '../pattern/moment.tsx';
-import { Suggestion } from '../pattern/suggestion.tsx';
+import { Suggestion } from '../../../parts/suggestion.tsx';
 import { TotalField } from '../pattern/total-field.tsx';
 
 /** The open line under the thumb: its words large, the three totals as three equal fields of one row, the offer full width. */

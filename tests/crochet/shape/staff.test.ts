@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { type RingLine, staffOf } from '../../api/crochet/shape/index.ts';
+import { type RingLine, staffOf } from '../../../api/crochet/shape/index.ts';
 
 const row = (id: string, n: number | null, more: Partial<RingLine> = {}): RingLine => ({
   id,

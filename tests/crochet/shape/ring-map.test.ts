@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { ringMap, type RingLine } from '../../api/crochet/shape/index.ts';
+import { ringMap, type RingLine } from '../../../api/crochet/shape/index.ts';
 
 const plain = (n: number) => Array.from({ length: n }, (_, k) => ({ on: [k], makes: 1 }));
 const line = (id: string, n: number, more: Partial<RingLine> = {}): RingLine => ({

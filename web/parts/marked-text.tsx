@@ -1,5 +1,5 @@
 import { type ReactNode } from 'react';
-import { type LineCount, type Span } from '#crochet';
+import type { LineCount, Span } from '#crochet';
 
 /** A stretch of the instruction and what is said of it. */
 export interface MarkedPart {
@@ -32,7 +32,13 @@ export function markParts(text: string, unread: readonly Span[], atFault: Span |
 }
 
 /** The instruction with its faults underlined to the letter. */
-export function MarkedText({ text, count }: { text: string; count: LineCount | undefined }): ReactNode {
+export function MarkedText({
+  text,
+  count,
+}: {
+  text: string;
+  count: Pick<LineCount, 'unread' | 'atFault'> | undefined;
+}): ReactNode {
   if (!count || (count.unread.length === 0 && !count.atFault)) return text;
   return markParts(text, count.unread, count.atFault).map((part, i) =>
     part.mark ? (
