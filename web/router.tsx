@@ -35,6 +35,11 @@ const AT_THE_DOOR: Record<string, Page> = {
   '/invitation': () => import('./app/invitation-page.tsx'),
 };
 
+/** It fills the window: read from across a room. */
+const FULL_PAGE: Record<string, Page> = {
+  '/patterns/:patternId/card': () => import('./app/card-page.tsx'),
+};
+
 const routes = (pages: Record<string, Page>, client: QueryClient): RouteObject[] =>
   Object.entries(pages).map(([path, page]) => ({
     path,
@@ -54,7 +59,11 @@ const Opening = () => (
 /** The table of pages. Each is fetched when somebody goes there. */
 export const createRouter = (client: QueryClient) =>
   createBrowserRouter([
-    { errorElement: <PageProblem />, hydrateFallbackElement: <Opening />, children: routes(AT_THE_DOOR, client) },
+    {
+      errorElement: <PageProblem />,
+      hydrateFallbackElement: <Opening />,
+      children: routes({ ...AT_THE_DOOR, ...FULL_PAGE }, client),
+    },
     {
       element: <AppShell />,
       hydrateFallbackElement: <Opening />,

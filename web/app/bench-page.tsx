@@ -4,6 +4,7 @@ import { BenchRoom } from '../features/bench/bench-room.tsx';
 import { cuesQuery } from '../features/bench/cues.queries.ts';
 import { patternQuery } from '../features/bench/data/bench.queries.ts';
 import { PatternState } from '../parts/pattern-state.tsx';
+import { CardLink } from './shell/card-link.tsx';
 import { PageProblem } from './shell/page-problem.tsx';
 import { PatternTabs, TopStrip } from './shell/top-strip.tsx';
 
@@ -36,6 +37,7 @@ export function Component() {
             tabs={<PatternTabs patternId={patternId} />}
             saving={saving}
           >
+            <CardLink patternId={patternId} />
             {controls}
           </TopStrip>
         </>

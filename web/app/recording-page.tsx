@@ -13,6 +13,7 @@ import { nameOfFile, useRecordingFiles } from '../features/recordings/use-record
 import { PatternState } from '../parts/pattern-state.tsx';
 import { signedInLoader } from '../lib/session.ts';
 import { ErrorNote } from '../ui/notes.tsx';
+import { CardLink } from './shell/card-link.tsx';
 import { PageProblem } from './shell/page-problem.tsx';
 import { PatternTabs, TopStrip } from './shell/top-strip.tsx';
 
@@ -56,7 +57,9 @@ export function Component() {
         beside={<PatternState state={head.state} />}
         tabs={<PatternTabs patternId={patternId} />}
         isCompact
-      />
+      >
+        <CardLink patternId={patternId} />
+      </TopStrip>
       <main className="grid grow grid-cols-[320px_minmax(0,1fr)_372px] max-lg:grid-cols-1">
         <div className="flex flex-col border-r border-rule max-lg:border-r-0">
           {failed && <ErrorNote what="Not added.">The connection was lost. Try again.</ErrorNote>}

@@ -7,6 +7,7 @@ export const paths = {
   count: () => '/count',
   recording: (patternId: string) => `/patterns/${patternId}/recording`,
   bench: (patternId: string, lineId?: string) => `/patterns/${patternId}/bench${lineId ? `?line=${lineId}` : ''}`,
+  card: (patternId: string) => `/patterns/${patternId}/card`,
   sheet: (patternId: string) => `/patterns/${patternId}/sheet`,
   editions: (patternId: string) => `/patterns/${patternId}/editions`,
   studio: () => '/studio',
