@@ -2,7 +2,8 @@ import { type Sentences } from './sentences.ts';
 import { type Token } from './tokens.ts';
 
 /** Verbs and little words before a number of pieces: `make two`, `you need seven of them`, `there are four`. */
-const MAKING = /\b(?:make|making|makes|need|needs|wants|want|do|quantity|doing)$/;
+const MAKING = /\b(?:make|making|makes|need|needs|needing|wants|want|wanting|do|quantity|doing)$/;
+const NOT_MAKING = /\b(?:not|no|never|without|don't|can't|won't|cannot|instead|than)\b/;
 const BEING = /\b(?:there is|there 's|there are|also|it 's|they 're|is|of which there are also)$/;
 const COUNTED_OTHERWISE = 'SGtHZCKPDTNF';
 const MEASURE =
@@ -11,7 +12,7 @@ const MEASURE =
 const NEAR = 45;
 const NEAR_FIRST = 30;
 /** One for each of two. */
-const BOTH = /\bone (?:on|for|at) each\b|\bone each (?:side|end)\b|\bleft (?:one )?and (?:a |one )?right\b/;
+const BOTH = /\bone (?:on|for|at|to|per|in) each\b|\bone each (?:side|end)\b|\bleft (?:one )?and (?:a |one )?right\b/;
 
 /**
  * How many to make of the piece that begins here: the number said with it before its first line.
@@ -39,7 +40,7 @@ export function readMake(
       .map((one) => one.text)
       .join(' ');
     if (
-      MAKING.test(before) ||
+      (MAKING.test(before) && !NOT_MAKING.test(before)) ||
       (isNear && BEING.test(before) && !countsPlaces(tokens, i, from)) ||
       (isNear && !isFirst && isAlone(tokens, i)) ||
       isNeeded(tokens, i)
@@ -94,7 +95,7 @@ function isAlone(tokens: readonly Token[], i: number): boolean {
   const before = tokens[i - 1]?.kind ?? '.';
   const after = tokens[i + 1]?.kind ?? '.';
   const isHead =
-    ('.|,'.includes(before) || /^(?:so|now|and|okay|the)$/.test(tokens[i - 1]?.text ?? '')) &&
+    ('.|'.includes(before) || /^(?:so|now|and|okay|the)$/.test(tokens[i - 1]?.text ?? '')) &&
     (after === 'w' || tokens[i + 1]?.text === 'leaves');
   return isHead || (',~.|w'.includes(before) && ('.,|'.includes(after) || after === 'o'));
 }

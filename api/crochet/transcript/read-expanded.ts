@@ -4,6 +4,9 @@ import { textOf } from './instruct/spoken-of.ts';
 import { type Before, type ReadLineResult, readSpokenLine, type Stretch, type Talk } from './read-line.ts';
 import { linesNamed } from './references.ts';
 
+/** Without full stops the words that say what lines are like stand so close before them. */
+const LEAD_REACH = 6;
+
 /** Several earlier lines named as a set give one line for each; otherwise the line is read as it stands. */
 export function readExpanded(talk: Talk, announced: Announced, to: number, before: Before): readonly ReadLineResult[] {
   const { candidate, from, to: until } = announced;
@@ -11,10 +14,8 @@ export function readExpanded(talk: Talk, announced: Announced, to: number, befor
   const many = (until ?? 0) - (from ?? 0) + 1;
   const copied = from === 1 && many > 1 ? copiesOfPiece(talk, announced, to, before) : null;
   if (copied !== null) return copied;
-  const named =
-    many > 1
-      ? linesNamed(talk.tokens, Math.max(candidate.at - 40, talk.sentences.startOf[candidate.at]!), to, from ?? 0)
-      : [];
+  const start = talk.sentences.isPunctuated ? talk.sentences.startOf[candidate.at]! : candidate.at - LEAD_REACH;
+  const named = many > 1 ? linesNamed(talk.tokens, Math.max(0, candidate.at - 40, start), to, from ?? 0) : [];
   if (named.length < 2) return shapedOneByOne(talk, stretch, before);
   const lines = [...before.piece];
   const out: ReadLineResult[] = [];

@@ -118,9 +118,17 @@ export function readPieces(
       );
       piece.entries.push({ type: 'step', at, to, trigger, textFrom, topic });
     });
-    introFrom = to;
+    introFrom = to === next ? afterWork(talk, candidate.end, to) : to;
   });
   return pieces.map(finish);
+}
+
+/** The end of the last sentence that still tells work: what comes after it may introduce the next piece. */
+function afterWork({ tokens, sentences }: Talk, from: number, to: number): number {
+  for (let i = to - 1; i >= from; i--) {
+    if ('SPDtAE'.includes(tokens[i]!.kind)) return Math.min(to, sentences.endOf[i]!);
+  }
+  return from;
 }
 
 /**

@@ -43,6 +43,7 @@ function strengthOf(tokens: readonly Token[], i: number, end: number, many: numb
   if (!worksSoon(tokens, end)) return many > 1 ? 0.4 : 0;
   if (isResult(tokens, i)) return 0;
   const isHead = startsClause(tokens, i);
+  if (!isHead && !sentences.isPunctuated) return strengthUnmarked(tokens, i, end, many);
   const atSentence = i - sentences.startOf[i]! <= 3;
   if (many > 2) return isHead ? 2 : 1.5;
   if (many === 2) return isHead ? 1.2 : 0.7;
@@ -60,6 +61,24 @@ function strengthOf(tokens: readonly Token[], i: number, end: number, many: numb
   if (next === '&') return 0.2;
   if ('aIw~c'.includes(next)) return atSentence ? 0.7 : 0.4;
   return 0.2;
+}
+
+/**
+ * Without full stops a number that counts nothing may be a line's where what follows tells of it as of a line: `four is
+ * one lap in gold`, `fifteen three and an increase`. It is taken only where the numbers before it lead up to it.
+ */
+function strengthUnmarked(tokens: readonly Token[], i: number, end: number, many: number): number {
+  const before = tokens[i - 1]?.kind ?? '.';
+  const next = tokens[end];
+  const isJoined = tokens[i - 1]?.text === 'and' && tokens[i - 2]?.kind === 'N';
+  if ('pIOXEMrmbCnP'.includes(before) || isJoined || next === undefined) return 0;
+  if (many > 1) return many > 2 ? 1.5 : 0.8;
+  if (before === '&' && next.kind !== 'v') return 0;
+  if (tokens[i]!.kind === 'O') return 0.3;
+  if (next.kind === 'v' && /^(?:is|are|'s|goes|gets|has|wants|takes|you|we|you do|we do)$/.test(next.text)) return 0.95;
+  const isWork = next.kind === 'N' && '&SPD,w'.includes(tokens[end + 1]?.kind ?? '.');
+  if (isWork || (next.kind === 'a' && /^(?:you|we|i)$/.test(next.text))) return 0.8;
+  return next.kind === '=' || next.kind === '~' ? 0.55 : 0;
 }
 
 /** Whether work is spoken of within the next words. */

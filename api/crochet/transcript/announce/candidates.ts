@@ -44,13 +44,13 @@ function fromNamed(
   const mention = isMention(tokens, i, named, sentences);
   const at = deedBefore(tokens, i, sentences) ?? announcementStart(tokens, i, sentences);
   const base = { kind: 'line' as const, at, end: named.end, mark: i, unit, needs: null };
+  const renamed = namedAnew(tokens, named);
+  if (renamed !== null)
+    return [{ ...base, end: renamed.end, lines: { type: 'named', from: renamed.from, to: renamed.to }, strength: 3 }];
   if (mention === 'until')
     return [{ ...base, at: untilStart(tokens, i, sentences), lines: { type: 'until', last: named.to }, strength: 1.2 }];
   if (mention !== null || (word.endsWith('s') && named.from === named.to)) return [];
   const isFirst = startsClause(tokens, i);
-  const renamed = namedAnew(tokens, named);
-  if (renamed !== null)
-    return [{ ...base, end: renamed.end, lines: { type: 'named', from: renamed.from, to: renamed.to }, strength: 3 }];
   const split = tokens[named.end - 1]!.split;
   const out: Candidate[] = [
     { ...base, lines: { type: 'named', from: named.from, to: named.to }, strength: isFirst ? 3 : 2.4 },
@@ -122,14 +122,14 @@ function counted(
   const isUntil = tokens.slice(Math.max(0, j - 5), j).some((one) => one.text === 'until' || one.text === 'till');
   if (isUntil)
     return [{ ...base, at: untilStart(tokens, j, sentences), lines: { type: 'until', last: many }, strength: 1.2 }];
+  const list = explicitAfter(tokens, i + 1, many);
+  if (list !== null) return [{ ...base, lines: { type: 'named', from: list.from, to: list.to }, strength: 3 }];
   const isFor = tokens[j - 1]?.text === 'for';
   const isResult =
     (tokens[j - 1]?.kind === '=' && !isFor) || tokens[j - 1]?.text === "'s" || tokens[j - 1]?.kind === 'p';
   if (isResult && !ahead)
     return [{ ...base, at: untilStart(tokens, j, sentences), lines: { type: 'until', last: many }, strength: 0.8 }];
   if (tokens[i + 1]?.text === 'of' && tokens[i + 2]?.kind === 'N') return [];
-  const list = explicitAfter(tokens, i + 1, many);
-  if (list !== null) return [{ ...base, lines: { type: 'named', from: list.from, to: list.to }, strength: 3 }];
   return [{ ...base, lines: { type: 'next', many }, strength: ahead ? 2 : isFor ? 1.4 : 1 }];
 }
 
