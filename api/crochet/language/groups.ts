@@ -8,17 +8,30 @@ import { readChainCounts } from './chain.ts';
 
 const ONCE: Times = { type: 'unsaid' };
 
-/** Whether anything among these makes or uses places. */
-export const hasWork = (items: readonly Item[]): boolean =>
-  items.some(
-    (item) =>
-      item.type === 'work' ||
-      item.type === 'skip' ||
-      item.type === 'shaped' ||
-      item.type === 'straight' ||
-      item.type === 'relative' ||
-      (item.type === 'group' && hasWork(item.items)),
-  );
+/** How far a growing list has been looked through, and whether work was found in it. */
+const LOOKED = new WeakMap<readonly Item[], { n: number; found: boolean }>();
+
+/** Whether anything among these makes or uses places. A list that grows is looked through only once. */
+export function hasWork(items: readonly Item[]): boolean {
+  let looked = LOOKED.get(items);
+  if (!looked) {
+    looked = { n: 0, found: false };
+    LOOKED.set(items, looked);
+  }
+  while (!looked.found && looked.n < items.length) {
+    looked.found = isWorking(items[looked.n]!);
+    looked.n += 1;
+  }
+  return looked.found;
+}
+
+const isWorking = (item: Item): boolean =>
+  item.type === 'work' ||
+  item.type === 'skip' ||
+  item.type === 'shaped' ||
+  item.type === 'straight' ||
+  item.type === 'relative' ||
+  (item.type === 'group' && hasWork(item.items));
 
 /** A bracket: a total, a remark, or a group with what its words behind it make of it. */
 export function readBracket(reading: Reading, limit: number, before: readonly Item[]): Item[] {

@@ -172,6 +172,9 @@ function readBars(reading: Reading, limit: number): Item[] | null {
   return [finishGroup(reading, from, items, '|', null)];
 }
 
+/** No series that is repeated without a mark is longer, in items. */
+const LONGEST_SERIES = 200;
+
 /** `rep around` without a star: everything before it that is not a start is repeated. */
 function readRepeat(reading: Reading, items: Item[]): Item[] | null {
   const from = reading.at;
@@ -197,7 +200,9 @@ function readRepeat(reading: Reading, items: Item[]): Item[] | null {
     (item, i) => !(item.type === 'step' || item.type === 'note' || item.type === 'loops' || isStart(item, items, i)),
   );
   // One such repeat takes in the whole line; a second would have nothing of its own.
-  const isWrapped = items.some((item) => item.type === 'group' && item.mark === '' && item.items.length > 1);
+  const isWrapped =
+    items.length > LONGEST_SERIES ||
+    items.some((item) => item.type === 'group' && item.mark === '' && item.items.length > 1);
   if (first < 0 || isWrapped || !hasWork(items)) {
     reading.at = from + 1;
     return [{ type: 'unread', span: spanFrom(reading, from) }];

@@ -87,7 +87,8 @@ function mendPartners(lexes: readonly Lex[]): Lex[] {
       else stray.push(i);
     } else if (isStar(lex)) stars.push(i);
   });
-  const close = stray.find((i) => isTimesAt(lexes, i + 1) && hasStitch(lexes, 0, i));
+  const firstStitch = lexes.findIndex((lex) => lex.kind === 'stitch');
+  const close = firstStitch < 0 ? undefined : stray.find((i) => i > firstStitch && isTimesAt(lexes, i + 1));
   const star = stars.length === 1 ? stars[0]! : null;
   if (close !== undefined) {
     // `*sc, inc) × 6`, else `sc, inc) × 6`.

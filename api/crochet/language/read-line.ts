@@ -23,7 +23,6 @@ export interface ReadOptions {
  * @example readLine('(sc, inc) x 6 (18)').total // { sts: [18] }
  */
 export function readLine(text: string, options: ReadOptions = {}): ReadLine {
-  if (text.length > LONGEST) return tooLong(text);
   const lexes = lexesOf(text, options.terms ?? 'US', ownForms(options.special ?? []));
   const reading: Reading = {
     lexes,
@@ -40,19 +39,6 @@ export function readLine(text: string, options: ReadOptions = {}): ReadLine {
   const tree: LineTree = { span: { start, end: text.length }, items, loops: loopsOf(items) };
   const total = totalOf(reading);
   return { tree, total: total?.kinds ?? null, totalSpan: total?.span ?? null, unread: unreadOf(items) };
-}
-
-/** No line of a pattern is longer, in UTF-16 units; what is longer is not read at all. */
-const LONGEST = 20_000;
-
-function tooLong(text: string): ReadLine {
-  const span = { start: 0, end: text.length };
-  return {
-    tree: { span, items: [{ type: 'unread', span }], loops: null },
-    total: null,
-    totalSpan: null,
-    unread: [span],
-  };
 }
 
 /** `Rnds 6-16: sc`, `R5: inc (12)`: a line that is only the name of a stitch is that stitch all round. */

@@ -64,8 +64,11 @@ export function take(reading: Reading, ...names: readonly string[]): boolean {
   return true;
 }
 
+/** Nobody writes more small words in a row; without an end to them, looking ahead would not be linear. */
+const MOST_WORDS = 12;
+
 export function takeAll(reading: Reading, ...names: readonly string[]): void {
-  while (take(reading, ...names));
+  for (let n = 0; n < MOST_WORDS && take(reading, ...names); n += 1);
 }
 
 /** The stretch from a meaning to the one before where we are now. */

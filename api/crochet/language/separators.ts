@@ -94,9 +94,12 @@ export function endsSoon(reading: Reading, ahead: number): boolean {
   return false;
 }
 
+/** More notes than this do not stand between a work and its total. */
+const FEW_NOTES = 20;
+
 /** Whether the work so far has said how far it goes, so that figures now can only be its total. */
 export function isClosed(items: readonly Item[]): boolean {
-  const last = items.findLast((item) => item.type !== 'note');
+  const last = items.slice(-FEW_NOTES).findLast((item) => item.type !== 'note');
   if (!last) return false;
   if (last.type === 'group') return last.times.type !== 'unsaid';
   if (last.type === 'work')
@@ -132,7 +135,8 @@ export function readSentenceTotal(reading: Reading, limit: number): Item[] | nul
   const from = reading.at;
   reading.at += 1;
   takeAll(reading, 'total', 'of', 'the');
-  while (peek(reading).kind === 'word' && !isTimesSign(peek(reading))) reading.at += 1;
+  const most = reading.at + FEW_NOTES;
+  while (reading.at < most && peek(reading).kind === 'word' && !isTimesSign(peek(reading))) reading.at += 1;
   if (isMark(peek(reading), ':') || isMark(peek(reading), '=')) reading.at += 1;
   if (peek(reading).kind === 'num' && readBareTotal(reading, limit, from)) return [];
   reading.at = from + 1;

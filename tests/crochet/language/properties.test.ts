@@ -2,7 +2,6 @@ import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import {
   countPattern,
-  type Item,
   type LineTree,
   printLine,
   readLine,
@@ -198,26 +197,5 @@ describe('the count', () => {
       }),
       { numRuns: 50 },
     );
-  });
-});
-
-describe('reading', () => {
-  /** Items in a tree, as a measure of the work done that no clock disturbs. */
-  const size = (items: readonly Item[]): number =>
-    items.reduce((sum, item) => sum + 1 + (item.type === 'group' ? size(item.items) : 0), 0);
-
-  test.each([
-    ['opening brackets', '('],
-    ['closed brackets', '(sc) '],
-    ['stars', '*'],
-    ['digits', '7'],
-    ['stitches', 'sc, '],
-    ['dashes', '-'],
-    ['letters', 'a'],
-    ['repeats', 'rep from * '],
-  ])('a megabyte of %s comes to an end', (_, unit) => {
-    const text = unit.repeat(Math.ceil(1_048_576 / unit.length));
-    const { tree } = readLine(text);
-    expect(size(tree.items)).toBeLessThan(text.length);
   });
 });

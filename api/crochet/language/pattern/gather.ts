@@ -238,7 +238,8 @@ const isFirmWork = (item: Item): boolean =>
 function continues(state: State, entry: Entry, source: string, read: ReadLine, text: string): boolean {
   const last = state.parts.at(-1);
   if (last?.type !== 'line' || entry.apart) return false;
-  const before = text.slice(last.bodyStart, last.end).trim();
+  // The end of what stands there tells; a line that grows and grows is not looked through anew each time.
+  const before = text.slice(Math.max(last.bodyStart, last.end - TAIL), last.end).trim();
   if (before === '') return true;
   const onlyTotal = read.total !== null && !hasWork(read.tree.items);
   const isEnded = /[.)\]}]\s*$/.test(before) || /\d\s*(sts?|stitches)?$/.test(before);
@@ -250,6 +251,9 @@ function continues(state: State, entry: Entry, source: string, read: ReadLine, t
   const opens = (before.match(/[([{]/g) ?? []).length > (before.match(/[)\]}]/g) ?? []).length;
   return opens;
 }
+
+/** So much of a line, in UTF-16 units, tells whether it goes on. */
+const TAIL = 600;
 
 const hasTotal = (text: string): boolean =>
   /[([{<]\s*=?\s*\d[^()[\]{}]*[)\]}>]\.?\s*$/.test(text) ||

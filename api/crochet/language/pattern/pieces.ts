@@ -71,7 +71,7 @@ export function piecesOf(
 function goesOn(parts: readonly Part[], reads: readonly (ReadLine | null)[], at: number): boolean {
   const heading = parts[at];
   if (heading?.type !== 'heading' || heading.heading.make > 1) return false;
-  for (let i = at + 1; i < parts.length; i += 1) {
+  for (let i = at + 1; i < Math.min(parts.length, at + NEAR); i += 1) {
     const part = parts[i]!;
     const read = reads[i];
     if (part.type === 'heading') return false;
@@ -110,8 +110,11 @@ const worksOn = (items: readonly Item[]): boolean =>
         (item.times.type === 'fill' || (item.type === 'work' && item.into !== null))),
   );
 
+/** The line that a heading or a chain leads to stands within so many parts. */
+const NEAR = 30;
+
 function nextNumber(parts: readonly Part[], from: number): number | null {
-  for (let i = from + 1; i < parts.length; i += 1) {
+  for (let i = from + 1; i < Math.min(parts.length, from + NEAR); i += 1) {
     const part = parts[i]!;
     if (part.type === 'heading') return null;
     if (part.type === 'line' && part.label) return part.label.from;

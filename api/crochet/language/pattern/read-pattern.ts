@@ -36,6 +36,9 @@ export function readPattern(text: string, terms?: Terms): PatternText {
   };
 }
 
+/** No pattern defines more stitches of its own. */
+const MOST_SPECIAL = 100;
+
 /** Definitions of stitches, in their own section or before the first line. */
 function specialIn(text: string, terms: Terms): (SpecialStitch & { readonly span: Span })[] {
   const special: (SpecialStitch & { readonly span: Span })[] = [];
@@ -50,7 +53,8 @@ function specialIn(text: string, terms: Terms): (SpecialStitch & { readonly span
     const definition = isLine || (opened && !line.includes(':')) ? null : definitionOf(opened ? inside : line, terms);
     const isNamed =
       definition && (section === 'special' || section === 'abbreviations' || isDefining(definition, terms));
-    if (isNamed) special.push({ ...definition, span: { start, end: start + line.trimEnd().length } });
+    if (isNamed && special.length < MOST_SPECIAL)
+      special.push({ ...definition, span: { start, end: start + line.trimEnd().length } });
     start += line.length + 1;
   }
   return special;
