@@ -10,8 +10,9 @@ export type FreeLoops = ReadonlyMap<number, FreeLoop>;
 
 /** Loops worked into, and how many of the others so stay free. */
 export interface FreeLoop {
-  readonly loops: 'back' | 'front';
-  readonly n: number;
+  readonly loops: 'back' | 'front' | 'third';
+  /** One figure a size. */
+  readonly n: readonly number[];
 }
 
 /** A chain at the start that the same line works into: `ch 14, sc in 2nd ch from hook and in each ch across`. */

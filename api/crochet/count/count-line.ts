@@ -1,6 +1,7 @@
 import { type Span } from '../span.ts';
 import { type Item, type LineTree, type ReadLine } from '../language/tree.ts';
 import { type FreeLoop } from './base.ts';
+import { openingOf, type Finished, type Opening } from './finished.ts';
 import { type LineInput } from './input.ts';
 import { hasChains, type CountedWith } from './compare.ts';
 import { judgeLine, type Given } from './judge.ts';
@@ -27,6 +28,8 @@ export interface Around {
   /** Trees of the numbered lines so far, and loops left free: added to as the piece is gone through. */
   readonly trees: Map<number, LineTree>;
   readonly free: Map<number, FreeLoop>;
+  /** Pieces worked earlier. */
+  readonly finished: readonly Finished[];
 }
 
 export interface Counted {
@@ -39,6 +42,7 @@ export interface Counted {
   /** What the line adds to the piece for later lines to name. */
   readonly trees: readonly (readonly [number, LineTree])[];
   readonly free: readonly [number, FreeLoop] | null;
+  readonly opening: Opening | null;
 }
 
 const WORST: readonly Verdict[] = ['unread', 'does-not-fit', 'differs', 'agrees', 'no-total'];
@@ -121,8 +125,9 @@ function joined(
       }
     : null;
   const trees = passes.map((pass) => [pass.n, pass.read.tree] as const);
-  const isLooped = (loops === 'back' || loops === 'front') && count.uses !== null;
-  const free = isLooped ? ([passes.at(-1)!.n, { loops, n: count.uses }] as const) : null;
+  const used = sizes.map((run) => run.judged.at(-1)!.work.uses);
+  const isLooped = loops === 'back' || loops === 'front' || loops === 'third';
+  const free = isLooped && used.every((n) => n !== null) ? ([passes.at(-1)!.n, { loops, n: used }] as const) : null;
   return {
     count,
     state: nextState(line, count, sizes, passes, state),
@@ -130,6 +135,7 @@ function joined(
     senses: final === 'agrees' ? sensesOf(sizes) : null,
     trees,
     free,
+    opening: openingOf(opening.work.walk),
   };
 }
 
@@ -213,5 +219,6 @@ function unreadLine(
     senses: null,
     trees: line.from === null ? [] : [[line.from, read.tree]],
     free: null,
+    opening: null,
   };
 }

@@ -1,8 +1,15 @@
 import { type Item, type Sized } from '../language/tree.ts';
 import { stitchOf } from '../stitches.ts';
 import { type Choices } from './readings.ts';
+import { type Finished } from './finished.ts';
 import { type Walker } from './walker.ts';
 import { type Named } from './places.ts';
+
+/** An edge of a piece worked earlier: its stitches, null where not known, and how many of them are used up. */
+export interface Edge {
+  readonly has: number | null;
+  used: number;
+}
 
 /** What is needed while a line is worked: the hands, what was chosen, and what the line says of itself. */
 export interface Job {
@@ -25,6 +32,9 @@ export interface Job {
   /** Fills that had no bound: what they make is not known. */
   endless: boolean;
   turned: boolean;
+  readonly finished: readonly Finished[];
+  /** Edges of pieces worked along so far, by name and number. */
+  readonly edges: Map<string, Edge>;
   /** How many repeats the hands are in. */
   depth: number;
   /** A chain at the very end, before the turn. */

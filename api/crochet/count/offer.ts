@@ -67,6 +67,7 @@ export function workInOrder(items: readonly Item[], places: number | null, isRin
     own: new Map(),
     stitch: 'sc',
     free: new Map(),
+    finished: [],
     rows: 0,
     comesBack: false,
     label: null,

@@ -1,7 +1,8 @@
 import { readLine } from '../language/read-line.ts';
-import { type Item, type ReadLine } from '../language/tree.ts';
+import { type ReadLine } from '../language/tree.ts';
 import { type CountedWith } from './compare.ts';
 import { type Counted } from './count-line.ts';
+import { type Finished } from './finished.ts';
 import { type LineInput, type PatternInput, type PieceInput } from './input.ts';
 import { memoFor, memoOf, type Memo } from './memo.ts';
 import { type PatternCount, type PieceCount } from './result.ts';
@@ -9,7 +10,7 @@ import { sensesToTry } from './senses.ts';
 import { sizesIn } from './sizes.ts';
 import { ownStitches } from './special.ts';
 import { type ChainPolicy } from './start.ts';
-import { workPiece, type Known } from './work-piece.ts';
+import { workPiece, type Known, type PieceWork } from './work-piece.ts';
 
 /**
  * Counts a whole pattern line by line. Pure: the same input gives the same result.
@@ -19,22 +20,36 @@ import { workPiece, type Known } from './work-piece.ts';
 export function countPattern(input: PatternInput, previous?: PatternCount): PatternCount {
   const own = ownStitches(input.specialStitches ?? [], input.terms);
   const era = JSON.stringify([input.terms, input.sizes.length, input.specialStitches ?? []]);
+  const finished: Finished[] = [];
+  const pieces = input.pieces.map((piece, i) => {
+    const old = previous?.pieces.find((one) => one.id === piece.id);
+    const base = i === 0 ? (input.base ?? null) : null;
+    const counted = countPiece(input, piece, { own, base, finished: [...finished] }, era, old);
+    finished.push(finishedFrom(piece, counted));
+    return { id: piece.id, lines: counted.map((one) => one.count) };
+  });
+  return { pieces };
+}
+
+/** What a piece that has been counted offers to those after it. */
+function finishedFrom(piece: PieceInput, counted: readonly Counted[]): Finished {
+  const state = counted.at(-1)?.state;
   return {
-    pieces: input.pieces.map((piece, i) => {
-      const old = previous?.pieces.find((one) => one.id === piece.id);
-      return countPiece(input, piece, own, era, i === 0 ? (input.base ?? null) : null, old);
-    }),
+    name: piece.name.toLowerCase(),
+    lefts: state?.lefts ?? [],
+    rows: state?.rows ?? 0,
+    free: new Map(counted.flatMap(({ free }) => (free ? [free] : []))),
+    opening: counted.findLast((one) => one.opening !== null)?.opening ?? null,
   };
 }
 
 function countPiece(
   input: PatternInput,
   piece: PieceInput,
-  own: ReadonlyMap<string, readonly Item[]>,
+  given: Pick<PieceWork, 'own' | 'base' | 'finished'>,
   era: string,
-  base: number | null,
   previous?: PieceCount,
-): PieceCount {
+): Counted[] {
   const memos = new Map(previous?.lines.map((line) => [line.id, memoOf(line)]));
   const known = piece.lines.map((line): Known => {
     const old = memos.get(line.id);
@@ -44,11 +59,10 @@ function countPiece(
   const sizes = reads.reduce((most, read) => Math.max(most, sizesIn(read)), Math.max(1, input.sizes.length));
   const said = saidPolicy(reads);
   const settle = (sense: CountedWith | null): Counted[] =>
-    settleChains(said, (policy) => workPiece(piece, known, { sizes, own, policy, base, sense }));
+    settleChains(said, (policy) => workPiece(piece, known, { ...given, sizes, policy, sense }));
   const open = settle(null);
   const tries = sensesToTry(open).map((sense) => settle(sense));
-  const best = tries.length > 0 ? mostAgreeing(tries) : open;
-  return { id: piece.id, lines: best.map((one) => one.count) };
+  return tries.length > 0 ? mostAgreeing(tries) : open;
 }
 
 /** The same chain cannot count in one line and not in another: takes the way in which more lines come out. */

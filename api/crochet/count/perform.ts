@@ -9,6 +9,7 @@ import { goal, fill, stopAt } from './fill.ts';
 import { performGroup, performInto } from './perform-group.ts';
 import { placesFor, takeOne, isClosing } from './take.ts';
 import { make } from './make.ts';
+import { workEdge } from './edge.ts';
 
 /** Works the items one after another. `rest`: places that what follows them all will need. */
 export function perform(job: Job, items: readonly Item[], rest: number): void {
@@ -94,9 +95,18 @@ function performWork(job: Job, item: Work, need: () => number): void {
   const row = stitchOf(item.stitch);
   const per = pick(item.per, job.size);
   if (item === job.lastSlip) return;
-  if (item.stitch === 'picot' || row?.family === 'foundation' || target?.what === 'ring' || target?.what === 'edge') {
+  if (
+    item.stitch === 'picot' ||
+    row?.family === 'foundation' ||
+    target?.what === 'ring' ||
+    (target?.what === 'edge' && target.piece === undefined)
+  ) {
     const n = (item.times.type === 'n' ? pick(item.times.n, job.size) : 1) * per;
     for (let i = 0; i < n && !walker.full; i += 1) make(job, item.stitch, []);
+    return;
+  }
+  if (target?.what === 'edge' && target.piece !== undefined) {
+    workEdge(job, item, target);
     return;
   }
   const hooked = target?.which === 'hook' && job.local === null;

@@ -159,7 +159,7 @@ function isBesideItself(items: readonly Item[], i: number): boolean {
     other?.type === 'work' &&
     other.stitch === item.stitch &&
     other.times.type === 'n' &&
-    (other.into === null || other.into.which === 'next') &&
+    (other.into === null || (other.into.which === 'next' && other.into.what !== 'edge')) &&
     other.per[0] === 1 &&
     other.loops === item.loops;
   return isLike(items[i + 1]) || isLike(items[i - 1]);

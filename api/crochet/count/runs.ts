@@ -122,6 +122,7 @@ export function settingFor(
     own: around.own,
     stitch: state.stitch,
     free: around.free,
+    finished: around.finished,
     rows,
     comesBack: around.comesBack,
     label,

@@ -1,7 +1,7 @@
 import { type Span } from '../span.ts';
 import { type Item, type LineTree, type Target } from '../language/tree.ts';
 import { chainBase, foundationOf, ownChain, ownRing, type FreeLoops } from './base.ts';
-import { allItems, isAlongRows, takesBack } from './tree-walk.ts';
+import { allItems, isAlongRows, takesBack, targetsIn } from './tree-walk.ts';
 import { aimsIn, namedIn, travelling } from './named.ts';
 import { type Job } from './job.ts';
 import { type CountedWith } from './compare.ts';
@@ -14,6 +14,8 @@ import { grouped, tallyOf, type Tally } from './tally.ts';
 import { Walker, type Step } from './walker.ts';
 import { closingSlip, sideEndOf, travelled, marksOf, firstPlain } from './line-signs.ts';
 import { begin, opened } from './begin.ts';
+import { joinedPlaces } from './edge.ts';
+import { isRoundOpening, openingLeft, type Finished } from './finished.ts';
 
 /** What a line needs to know of the piece it stands in. */
 export interface Setting {
@@ -25,6 +27,8 @@ export interface Setting {
   /** What a bare `inc` is made of where the line names no stitch. */
   readonly stitch: string;
   readonly free: FreeLoops;
+  /** Pieces worked earlier, in their order. */
+  readonly finished: readonly Finished[];
   /** Rows of the piece so far, for work along its side. */
   readonly rows: number;
   /** A later line goes over what a short row leaves. */
@@ -87,9 +91,12 @@ export function workLine(tree: LineTree, choices: Choices, setting: Setting): Li
       true,
     );
   }
-  if (isAlongRows(items) && setting.rows > 0) {
-    return onPlaces(items, choices, { ...setting, left: plainLeft(setting.rows) }, 0, null);
-  }
+  const rows = setting.rows > 0 ? setting.rows : left.open ? (setting.finished.at(-1)?.rows ?? 0) : 0;
+  if (rows > 0 && isAlongRows(items)) return onPlaces(items, choices, { ...setting, left: plainLeft(rows) }, 0, null);
+  if (rows > 0 && targetsIn(items).some((target) => target.rows)) return onPlaces(items, choices, setting, 0, rows);
+  const opening = left.open && isRoundOpening(items) ? setting.finished.findLast((piece) => piece.opening) : undefined;
+  if (opening?.opening)
+    return onPlaces(items, choices, { ...setting, left: openingLeft(opening.opening), ring: true }, 0, null);
   return onPlaces(items, choices, setting, 0, null);
 }
 
@@ -118,9 +125,14 @@ function foundationWork(left: Left): LineWork {
   };
 }
 
+/** Loops left free: of the line named, else of the last that left any; in this piece, else in one worked earlier. */
 function loopBase(line: number | null, setting: Setting): Left {
-  const free = line === null ? [...setting.free.values()].at(-1) : setting.free.get(line);
-  return free ? plainLeft(free.n) : NOTHING;
+  const maps = [setting.free, ...setting.finished.toReversed().map((piece) => piece.free)];
+  for (const free of maps) {
+    const found = line === null ? [...free.values()].at(-1) : free.get(line);
+    if (found) return plainLeft(found.n[setting.size] ?? found.n[0]!);
+  }
+  return NOTHING;
 }
 
 function onPlaces(
@@ -175,6 +187,8 @@ function onPlaces(
     marks: marksOf(items, ground.places, setting.size),
     endless: false,
     turned: false,
+    finished: setting.finished,
+    edges: new Map(),
     depth: 0,
     turningChain: 0,
     lastSlip: closingSlip(body),
@@ -204,11 +218,12 @@ function finish(
   const turns = job.turned || !setting.ring;
   const counted = walker.counted.at(-1) ?? 0;
   const isBaseKnown = !isOpen;
+  const joined = told ?? joinedPlaces(job);
   const passed = remaining === 0 ? walker.remaining() : Math.min(kept, walker.remaining());
-  const uses = isBaseKnown ? walker.uses + passed : told;
+  const uses = isBaseKnown ? walker.uses + passed : joined === null ? null : joined + walker.short;
   return {
     fits: walker.short === 0 && over === 0 && !walker.full,
-    base: isBaseKnown ? counted : told,
+    base: isBaseKnown ? counted : joined,
     uses,
     short: walker.short,
     over,

@@ -2,6 +2,7 @@ import { type Item, type ReadLine } from '../language/tree.ts';
 import { type CountedWith } from './compare.ts';
 import { countLine, type Around, type Counted } from './count-line.ts';
 import { type PieceInput } from './input.ts';
+import { type Finished } from './finished.ts';
 import { keep, stillOf, type Memo } from './memo.ts';
 import { quiet } from './quiet.ts';
 import { type ChainPolicy } from './start.ts';
@@ -15,6 +16,7 @@ export interface PieceWork {
   readonly policy: ChainPolicy;
   readonly base: number | null;
   readonly sense: CountedWith | null;
+  readonly finished: readonly Finished[];
 }
 
 /** A line as it was read now, and what is remembered of it from before. */
@@ -33,10 +35,12 @@ export function workPiece(piece: PieceInput, known: readonly Known[], work: Piec
   const way = `${String(work.sizes)} ${JSON.stringify(work.policy)} ${String(work.sense)}`;
   piece.lines.forEach((line, i) => {
     if (line.kind === 'note' || line.kind === 'step') {
-      counted.push({ count: quiet(line), state, chain: null, senses: null, trees: [], free: null });
+      counted.push({ count: quiet(line), state, chain: null, senses: null, trees: [], free: null, opening: null });
       return;
     }
     const { now, old } = known[i]!;
+    // A heading within a piece (`Head`, worked on from the legs) leaves the lines above it to be named as a piece.
+    const above = { name: piece.name.toLowerCase(), lefts: state.lefts, rows: state.rows, free, opening: null };
     const around: Around = {
       sizes: work.sizes,
       policy: work.policy,
@@ -46,6 +50,7 @@ export function workPiece(piece: PieceInput, known: readonly Known[], work: Piec
       sense: work.sense,
       trees,
       free,
+      finished: [above, ...work.finished],
     };
     const key = `${way} ${String(around.ring)} ${String(around.comesBack)}`;
     const one = stillOf(now, key, state) ?? keep(old, now, key, state, countLine(line, now.read, state, around));

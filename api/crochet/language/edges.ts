@@ -2,7 +2,7 @@ import { type Target } from './tree.ts';
 import { isWord, peek, take, takeAll, type Reading } from './reading.ts';
 
 /** How the edge of something made earlier is led in. */
-const LEADS = ['on', 'around', 'across', 'of', 'in'] as const;
+const LEADS = ['on', 'around', 'across', 'of'] as const;
 
 /**
  * `around first leg`, `of the second leg`, `on other ear`: the edge of a piece worked earlier. What names the piece is
@@ -27,13 +27,7 @@ export function readPieceEdge(reading: Reading): Target | null {
 /** Which of several pieces: its number, 0 where it is only told from the others; null where none is told apart. */
 function readWhich(reading: Reading): number | null {
   const lex = peek(reading);
-  const which = isWord(lex, 'first')
-    ? 1
-    : lex.kind === 'ord'
-      ? lex.value
-      : isWord(lex, 'other', 'next', 'remain', 'same')
-        ? 0
-        : null;
+  const which = isWord(lex, 'first') ? 1 : lex.kind === 'ord' ? lex.value : isWord(lex, 'other', 'remain') ? 0 : null;
   if (which !== null) reading.at += 1;
   return which;
 }

@@ -67,7 +67,8 @@ const WORDS: Readonly<Record<string, string>> = {
   layers: 'both layers, both sides, both thicknesses, both pieces, both edges, two layers, layers',
   top: 'top, top of, head, head of, tops',
   side: 'side, sides, edge, edges, opposite side, other side',
-  rowend: 'row ends, row end, ends of rows, end of rows, row edges, row sides',
+  rowend:
+    'row ends, row end, ends of rows, end of rows, end of each row, ends of each row, end of every row, side of each row, row edges, row sides',
   tog: 'tog, together, toge',
   other: 'other, alternate, alt, second other, oth',
   ch: 'chain space, chain spaces',

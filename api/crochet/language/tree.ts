@@ -98,6 +98,10 @@ export interface Target {
   readonly line?: number;
   /** The loops are those of the stitches of that line (`back loops of rnd 7`), not those that it left free. */
   readonly own?: true;
+  /** For edge: the piece worked earlier, as its line calls it (`leg` in `around second leg`, with `n` 2). */
+  readonly piece?: string;
+  /** For edge: along the ends of rows. */
+  readonly rows?: true;
   /** Both layers, or through another piece. */
   readonly through?: 'layers' | 'piece';
 }

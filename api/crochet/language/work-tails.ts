@@ -11,7 +11,7 @@ export function readTogether(reading: Reading, target: TargetRead | null, count:
 }
 
 /** `30 sc evenly around the edge`, `evenly along the side`: places that nothing tells the number of. */
-export function readEdge(reading: Reading): boolean {
+export function readEdge(reading: Reading): 'edge' | 'rows' | null {
   const start = reading.at;
   const isEven = take(reading, 'evenly');
   takeAll(reading, 'in', 'around', 'across', 'on', 'the', 'of');
@@ -32,11 +32,11 @@ export function readEdge(reading: Reading): boolean {
     isWord(peek(reading), 'side', 'rowend')
   ) {
     reading.at += 1;
-    return true;
+    return isWord(reading.lexes[reading.at - 1]!, 'rowend') ? 'rows' : 'edge';
   }
   reading.at = start;
   if (isEven) take(reading, 'evenly');
-  return false;
+  return null;
 }
 
 /** `dc two rows down`: where a long stitch reaches to, which is no count. */

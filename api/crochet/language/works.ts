@@ -1,4 +1,4 @@
-import { type Item, type Loops, type Sized, type Work } from './tree.ts';
+import { type Item, type Loops, type Sized, type Target, type Times, type Work } from './tree.ts';
 import { type Lex } from './lexer.ts';
 import { stitchOf } from '../stitches.ts';
 import { ONE, readMultiple, readSized } from './amounts.ts';
@@ -8,6 +8,7 @@ import { readTarget } from './target.ts';
 import { readFill, times } from './times.ts';
 import { chain, readChainCounts } from './chain.ts';
 import { amounts, drawnInto } from './work-amounts.ts';
+import { isEdgeAhead, readAlongChain, readPieceEdge } from './edges.ts';
 import { suffix, readEdge, readThrough, readTogether, belowWords } from './work-tails.ts';
 import { readLoops } from './loops.ts';
 
@@ -51,6 +52,8 @@ export function readWork(reading: Reading): Item[] | null {
   } else if (before && isOldName(lex)) {
     reading.at += 1;
     key = lex.kind === 'word' ? 'dc' : 'sc';
+  } else if (before && isEdgeAhead(reading)) {
+    key = reading.stitch ?? 'st';
   } else {
     reading.at = from;
     return null;
@@ -83,6 +86,12 @@ function stitchWithTail(reading: Reading, key: string): string {
   return key;
 }
 
+const ALL: Times = { type: 'fill', leave: [0], leaveOf: null, to: null };
+
+/** All of an edge is meant where no number is given. */
+const isEndless = (piece: Target | null, along: 'near' | 'far' | null, count: Sized | null): boolean =>
+  count === null && (piece !== null || along !== null);
+
 /** The stitch has been read; now its count behind it, its place, how far it goes. */
 function placed(
   reading: Reading,
@@ -110,11 +119,14 @@ function placed(
   if (loops && isWord(peek(reading), 'of')) reading.at += 1;
   belowWords(reading);
   const through = readThrough(reading);
-  const read = readInto(reading);
+  const along = readAlongChain(reading);
+  const ahead = readPieceEdge(reading);
+  const read = ahead || along ? null : readInto(reading);
   loops = read?.loops ?? loops ?? readLoops(reading);
   const target = read?.loopsOnly ? null : read;
   const counts = target?.target.which === 'hook' ? readChainCounts(reading) : null;
-  const fill = readFill(reading);
+  const piece = ahead ?? (target ? readPieceEdge(reading) : null);
+  const fill = readFill(reading) ?? (isEndless(ahead, along, before ?? after ?? more) ? ALL : null);
   const trailing = !after && !more ? readMultiple(reading) : null;
   if (take(reading, 'in') || take(reading, 'through')) {
     const late = readLoops(reading);
@@ -150,15 +162,19 @@ function placed(
   const isSeries = before !== null && multiple !== null && !target;
   const found = drawnInto(key, amounts(before ?? after, isSeries ? null : multiple, target, fill), target);
   const work = { ...base, ...found, per: isIncrease ? found.per.map((n) => n * 2) : found.per };
+  if (piece) return [{ ...work, into: piece }];
+  if (along === 'far') return [{ type: 'step', span, what: 'far', text: 'other side' }, work];
   const into = through ? { ...(work.into ?? { what: 'st' as const, which: 'next' as const }), through } : work.into;
-  const only: Work = edge
-    ? {
-        ...work,
-        per: work.times.type === 'n' ? work.times.n : work.per,
-        times: times(ONE),
-        into: { what: 'edge', which: 'next' },
-      }
-    : { ...work, into };
+  const isRowEnds = target?.target.what === 'row-end';
+  const only: Work =
+    edge && !isRowEnds
+      ? {
+          ...work,
+          per: work.times.type === 'n' ? work.times.n : work.per,
+          times: times(ONE),
+          into: { what: 'edge', which: 'next', ...(edge === 'rows' && { rows: true as const }) },
+        }
+      : { ...work, into };
   // `4 dc × 4` keeps both figures: it may be meant for more than the last.
   const items: Item[] = isSeries
     ? [
