@@ -48,6 +48,23 @@ test('two people at one pattern see each other, and each other’s work as it is
   await expect.poll(() => line(creator.page, 2).innerText(), { timeout: 5_000 }).toContain(words);
   expect(await axeFindings(creator.page)).toEqual([]);
 
+  // What the other wrote stands in the line's history and is brought back from there, which is a step as well.
+  await line(creator.page, 2).click();
+  const mine = creator.page.getByRole('textbox', { name: /^Instruction/ });
+  await mine.fill('(sc, inc) x 7 (18)');
+  await creator.page.getByRole('button', { name: /more/i }).last().click();
+  await creator.page.getByRole('button', { name: 'From the start' }).click();
+  const steps = creator.page.getByRole('region', { name: 'R3 from the start' }).getByRole('listitem');
+  await expect.poll(() => steps.first().innerText()).toContain('(sc, inc) x 7');
+  expect(await steps.nth(1).innerText()).toContain(`${mouse.house.editor.name} wrote the instruction`);
+  expect(await axeFindings(creator.page)).toEqual([]);
+  await steps
+    .nth(1)
+    .getByRole('button', { name: /^Restore R3/ })
+    .click();
+  await expect.poll(() => mine.inputValue()).toContain(words);
+  await expect.poll(() => steps.first().innerText()).toContain('as it is now');
+
   await editor.page.close();
   await expect.poll(() => others(creator.page).getByRole('listitem').count()).toBe(0);
   creator.quiet();

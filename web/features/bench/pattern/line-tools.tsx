@@ -1,9 +1,11 @@
-import { ArrowDown, ArrowUp, Copy, CornerDownRight, CornerUpRight, Trash2 } from 'lucide-react';
+import { ArrowDown, ArrowUp, Copy, CornerDownRight, CornerUpRight, History, Trash2 } from 'lucide-react';
+import { useState } from 'react';
 import { type Line, type LineEdit, LineKind } from '#contract/rows';
 import { Button } from '../../../ui/button.tsx';
 import { Field, SelectField } from '../../../ui/field.tsx';
 import { lineName } from '../desk/line-name.ts';
 import { useDesk } from '../desk/use-desk.ts';
+import { LineHistory } from '../history/line-history.tsx';
 import { addLineAbove, addLineAfter, deleteLine, duplicateLine, moveLine } from './line-deeds.ts';
 
 const KIND_WORDS: Record<Line['kind'], string> = {
@@ -19,6 +21,7 @@ const wholeOr = (text: string): number | null => (/^\d{1,4}$/.test(text.trim()) 
 /** What is rarely needed of the open line: what it is and its numbers, a note, and its place among the others. */
 export function LineTools({ line }: { line: Line }) {
   const desk = useDesk();
+  const [hasHistory, setHistory] = useState(false);
   const editLine = (id: string, edit: LineEdit) => desk.bench.edit('line', id, edit);
   const isNumbered = line.kind === 'round' || line.kind === 'row';
   const name = lineName(line) || KIND_WORDS[line.kind];
@@ -92,6 +95,9 @@ export function LineTools({ line }: { line: Line }) {
         >
           Down
         </Button>
+        <Button size="row" icon={History} aria-expanded={hasHistory} onClick={() => setHistory(!hasHistory)}>
+          From the start
+        </Button>
         <Button
           size="row"
           kind="harm"
@@ -105,6 +111,11 @@ export function LineTools({ line }: { line: Line }) {
           Delete
         </Button>
       </div>
+      {hasHistory && (
+        <div className="mt-3 border-t border-feint pt-2">
+          <LineHistory line={line} />
+        </div>
+      )}
     </div>
   );
 }
