@@ -145,6 +145,11 @@ function pushWord(tokens: readonly Token[], at: number, trie: Trie, out: Lex[]):
   if (known) {
     const { value, kind, length } = known;
     const last = tokens[at + length - 1]!;
+    // Letters that a key gives to a stitch, where they stand for what they always do: `(X, A) x 6`, `a`.
+    if (kind === 'stitch' && length === 1 && isOwnSense(tokens, at)) {
+      out.push(token.text === 'x' ? make('word', 'x', 0, token, token) : make('w', 'the', 0, token, token));
+      return 1;
+    }
     if (kind === 'stitch') return pushStitch(tokens, at, length, value, out);
     out.push(make('w', value, 0, token, last));
     return length;
@@ -153,6 +158,15 @@ function pushWord(tokens: readonly Token[], at: number, trie: Trie, out: Lex[]):
   if (ordinal !== undefined) out.push(make('ord', token.text, ordinal, token, token));
   else out.push(make('word', token.text, 0, token, token));
   return 1;
+}
+
+/** A small `a`; an `x` before a number and behind a bracket, a star or a word. */
+function isOwnSense(tokens: readonly Token[], at: number): boolean {
+  const { text, capital } = tokens[at]!;
+  if (text === 'a') return !capital;
+  if (text !== 'x' || tokens[at + 1]?.kind !== 'number') return false;
+  const before = tokens[at - 1];
+  return before !== undefined && (before.kind === 'word' || [')', ']', '}', '*'].includes(before.text));
 }
 
 /** `sc2tog`, `dc 3 tog`, `sc tog`, `sc dec`, `hdc inc`: what makes another stitch of the name before it. */

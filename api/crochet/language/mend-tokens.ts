@@ -35,7 +35,11 @@ export function mendTokens(tokens: readonly Token[], known: ReadonlySet<string>)
       continue;
     }
     const parts = splitWord(token, known);
-    if (parts) out.push(...parts);
+    const moved = parts ? null : moveSpace(token, next, known);
+    if (moved) {
+      out.push(...moved);
+      at += 1;
+    } else if (parts) out.push(...parts);
     else out.push(mendSpelling(token, tokens[at - 1], next, known));
   }
   return out;
@@ -125,6 +129,24 @@ function splitWord(token: Token, known: ReadonlySet<string>): MendedToken[] | nu
   return null;
 }
 
+/** `ine ach`: the space has slipped; `arou nd`: one that does not belong there. Two words of which the first says nothing. */
+function moveSpace(token: Token, next: Token | undefined, known: ReadonlySet<string>): MendedToken[] | null {
+  if (next?.kind !== 'word' || next.glued || next.broken) return null;
+  const joined = token.text + next.text;
+  if (joined.length >= 5 && TRADE.includes(joined)) return [{ ...token, text: joined, end: next.end, readAs: joined }];
+  for (const first of FIRSTS) {
+    const second = joined.slice(first.length);
+    if (first === token.text || !joined.startsWith(first) || !SECONDS.has(second) || !known.has(second)) continue;
+    const split =
+      first.length <= token.text.length ? token.start + first.length : next.start + first.length - token.text.length;
+    return [
+      { ...token, text: first, end: Math.min(split, token.end), readAs: `${first} ${second}` },
+      { ...next, text: second, start: split },
+    ];
+  }
+  return null;
+}
+
 function mendSpelling(
   token: Token,
   before: Token | undefined,
@@ -137,8 +159,9 @@ function mendSpelling(
     return right && known.has(right) ? { ...token, text: right, readAs: right } : token;
   }
   // A short form is guessed only where a count or a place beside it says that it is one.
+  const isLong = text.length === 4 && text !== 'slst';
   const isCounted =
-    before?.kind === 'number' || next?.kind === 'number' || next?.text === 'in' || next?.text === 'each';
+    isLong || before?.kind === 'number' || next?.kind === 'number' || next?.text === 'in' || next?.text === 'each';
   const right = isCounted ? SHORT_TRADE.get(text) : undefined;
   return right && known.has(right) ? { ...token, text: right, readAs: right } : token;
 }

@@ -23,7 +23,7 @@ export interface ReadOptions {
  * @example readLine('(sc, inc) x 6 (18)').total // { sts: [18] }
  */
 export function readLine(text: string, options: ReadOptions = {}): ReadLine {
-  const lexes = lexesOf(text, options.terms ?? 'US', ownForms(options.special ?? []));
+  const lexes = lexesOf(text, options.terms ?? 'US', ownForms(options.special ?? [], options.terms ?? 'US'));
   const reading: Reading = {
     lexes,
     at: 0,

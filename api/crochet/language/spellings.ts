@@ -34,16 +34,16 @@ function besides(letter: string): string[] {
   ].flatMap((key) => key ?? []);
 }
 
+/** Two letters beside each other swapped. */
+function swaps(word: string): string[] {
+  return Array.from(word.slice(1), (_, i) => word.slice(0, i) + word[i + 1]! + word[i]! + word.slice(i + 2));
+}
+
 /** Every way to slip on a short form: two letters swapped, or the key beside the right one. */
 function slipsOf(word: string): string[] {
   const letters = Array.from(word);
-  const swapped = letters.slice(1).map((_, i) => {
-    const copy = [...letters];
-    [copy[i], copy[i + 1]] = [copy[i + 1]!, copy[i]!];
-    return copy.join('');
-  });
   const keyed = letters.flatMap((letter, i) => besides(letter).map((key) => letters.with(i, key).join('')));
-  return [...swapped, ...keyed];
+  return [...swaps(word), ...keyed];
 }
 
 const SHORT = ['sc', 'dc', 'hdc', 'inc', 'dec', 'slst'];
@@ -56,6 +56,8 @@ function shortSlips(): ReadonlyMap<string, string> {
   for (const word of SHORT) {
     for (const slip of new Set(slipsOf(word))) slips.set(slip, slips.has(slip) ? null : word);
   }
+  for (const word of ['each', 'next', 'skip', 'turn', 'join', 'same', 'loop'])
+    for (const slip of swaps(word)) slips.set(slip, word);
   // Ordinary words that a telephone puts in the place of `sk`, and what a scanner makes of `ch` and `rnd`.
   const others = { sky: 'sk', ask: 'sk', eh: 'ch', cb: 'ch', md: 'rnd', mds: 'rnds', stt: 'st' };
   for (const [slip, word] of Object.entries(others)) slips.set(slip, word);

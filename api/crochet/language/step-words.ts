@@ -8,7 +8,7 @@ export const VERBS = new Set(
     'mark move put add secure start begin continue flatten hold remember note use gather tighten remove draw thread ' +
     'block press hide bind trim glue pin position slide leave break rejoin introduce carry keep see repeat-for stitch-up ' +
     'turn-inside lightly firmly filling fill shape attaching sewing stuffing changing counting photo picture pic ' +
-    'leaving colour color yarn tail end invisible steam wash wind wrap push cinch burst separate lay pass-tail ends using ' +
+    'leaving place placing colour color yarn tail end invisible steam wash wind wrap push cinch burst separate lay pass-tail ends using ' +
     'optional tip hint important if when you this these now-you safety eyes eye button buttons work-in measure measures ' +
     'piece yarn-over right wrong rs ws loosely tightly lengthen approx approximately about it he she we i with cont ' +
     'do-not-stuff skip-stuffing proceed assemble assembly'

@@ -16,6 +16,7 @@ const KIND: Readonly<Record<string, Step['what']>> = {
   cut: 'finish',
   break: 'finish',
   mark: 'marker',
+  place: 'marker',
   move: 'marker',
 };
 

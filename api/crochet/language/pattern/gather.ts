@@ -4,11 +4,12 @@ import { foundationOf } from '../../count/base.ts';
 import { hasWork } from '../groups.ts';
 import { type Label } from '../labels.ts';
 import { readLine } from '../read-line.ts';
-import { type Item, type ReadLine } from '../tree.ts';
+import { type ReadLine } from '../tree.ts';
 import { type Entry } from './cut.ts';
 import { headingOf, sectionOf, type Heading, type Section } from './headings.ts';
 import { type TextStretch } from './pattern-text.ts';
-import { definitionOf, isAbbreviation } from './special-lines.ts';
+import { isCounted } from './counted.ts';
+import { aliasesOf, definitionOf, isAbbreviation } from './special-lines.ts';
 
 /** One line of work, a step or a heading, in the order of the text. */
 export type Part =
@@ -96,6 +97,10 @@ function take(
       bodyStart: entry.bodyStart,
       end: entry.span.end,
     });
+    return;
+  }
+  if (aliasesOf(source, terms, state.section !== null).length > 0) {
+    state.notes.push(stretch);
     return;
   }
   if (definitionOf(source, terms) && special.some((one) => source.includes(one.text))) {
@@ -202,37 +207,6 @@ function isLabel(entry: Entry, read: ReadLine, state: State): boolean {
     (from > state.last && from <= state.last + 3)
   );
 }
-
-/** Work in a sentence that could stand for a round: something with a count or a place, not prose with a stray word. */
-function isCounted(read: ReadLine): boolean {
-  const { items } = read.tree;
-  if (!hasWork(items)) return false;
-  const works = items.filter(
-    (item) =>
-      item.type === 'work' ||
-      item.type === 'group' ||
-      item.type === 'relative' ||
-      item.type === 'straight' ||
-      item.type === 'shaped',
-  );
-  if (foundationOf(items, 0)) return true;
-  const prose = items.reduce(
-    (sum, item) =>
-      sum +
-      (item.type === 'note' || item.type === 'step' || item.type === 'unread' ? item.span.end - item.span.start : 0),
-    0,
-  );
-  const size = read.tree.span.end - read.tree.span.start;
-  if (read.total !== null) return works.length > 0;
-  const isFirm = works.some((item) => isFirmWork(item));
-  return isFirm && prose < size * 0.6;
-}
-
-const isFirmWork = (item: Item): boolean =>
-  item.type === 'group' ||
-  item.type === 'relative' ||
-  (item.type === 'work' &&
-    (item.into !== null || item.times.type === 'fill' || (item.times.type === 'n' && item.times.n[0]! > 1)));
 
 /** Whether an entry without a label goes on with the line before it. */
 function continues(state: State, entry: Entry, source: string, read: ReadLine, text: string): boolean {

@@ -6,7 +6,7 @@ import { entriesOf } from './cut.ts';
 import { gather } from './gather.ts';
 import { piecesOf } from './pieces.ts';
 import { type PatternText } from './pattern-text.ts';
-import { definitionOf } from './special-lines.ts';
+import { aliasesOf, definitionOf } from './special-lines.ts';
 import { sectionOf } from './headings.ts';
 import { termsOf } from './terms.ts';
 
@@ -19,7 +19,7 @@ import { termsOf } from './terms.ts';
 export function readPattern(text: string, terms?: Terms): PatternText {
   const found = terms ? { terms, reason: `${terms} terms were chosen.` } : termsOf(text);
   const special = specialIn(text, found.terms);
-  const own = ownForms(special);
+  const own = ownForms(special, found.terms);
   const entries = entriesOf(text, found.terms, own);
   const sizes = sizesIn(text);
   const gathered = gather(text, entries, found.terms, special, sizes.length);
@@ -47,6 +47,13 @@ function specialIn(text: string, terms: Terms): (SpecialStitch & { readonly span
   for (const line of text.split('\n')) {
     const opened = sectionOf(line);
     if (opened) section = opened;
+    const aliases = aliasesOf(line, terms, section !== null);
+    if (aliases.length > 0 && special.length + aliases.length < MOST_SPECIAL) {
+      const span = { start, end: start + line.trimEnd().length };
+      special.push(...aliases.map((alias) => ({ ...alias, span })));
+      start += line.length + 1;
+      continue;
+    }
     const isLine = /^\W*(r|rnd|rnds|round|rounds|row|rows)\W*\d/i.test(line);
     if (isLine) section = null;
     const inside = opened ? line.slice(line.indexOf(':') + 1) : line;

@@ -34,3 +34,16 @@ export function isAbbreviation(line: string, terms: Terms): boolean {
     /^(mr|mc|rnd|rnds|st|sts|sp|sk|blo|flo|fo|yo|rep|rs|ws|beg|pm|sm|tog|r|rd|bl|fl)$/.test(left);
   return isKnown && !/^\d/.test(match[2]!) && !/\b(each|around|across|next \d)\b/i.test(match[2]!);
 }
+
+/** `Key: X = sc, V = inc`, `v - increase` in a list: letters of the pattern's own that stand for a stitch of the table. */
+export function aliasesOf(line: string, terms: Terms, inList: boolean): SpecialStitch[] {
+  const headed = /^\W*(?:key|abbreviations?|legend|symbols?)\s*[:=–-]\s*(.*)$/i.exec(line);
+  if (!headed && !inList) return [];
+  const forms = new Map(formsOf(terms));
+  return (headed?.[1] ?? line).split(/[,;\t]| {2,}/).flatMap((entry) => {
+    const match = /^[\s•*\-–]*([A-Za-z]{1,3})\s*[:=–-]\s*([A-Za-z][A-Za-z -]*?)[\s.]*$/.exec(entry);
+    const [, letters = '', name = ''] = match ?? [];
+    const meant = forms.get(name.toLowerCase().replace(/-/g, ' '));
+    return meant !== undefined && !forms.has(letters.toLowerCase()) ? [{ name: letters, text: name }] : [];
+  });
+}
