@@ -6,6 +6,7 @@ import { basesFor } from './places-before.ts';
 import { chooseWork, type Setting } from './instruct/choose-work.ts';
 import { type Choice } from './instruct/judge-work.ts';
 import { type Event } from './instruct/event.ts';
+import { leadingTotal } from './instruct/leading-total.ts';
 import { findEvents } from './instruct/find-events.ts';
 import { lettersOf } from './instruct/letters.ts';
 import { prune } from './instruct/prune.ts';
@@ -72,9 +73,13 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
     i < start || talk.skipped[i] === true || names.has(i) || (i >= candidate.mark && i < candidate.end);
   const letters = lettersOf(tokens, from, to, talk.sentences, isOut);
   const words = tokens.slice(from, to).filter((_, n) => !isOut(from + n));
-  const isRing = before.piece.length === 0 && before.chains === null && words.some((token) => token.kind === 'V');
+  const isRing =
+    before.piece.length === 0 &&
+    (before.chains === null || before.chainJoined) &&
+    words.some((token) => token.kind === 'V');
   const heading = talk.sentences.startOf[candidate.mark]!;
-  const events = prune(findEvents(letters), tokens, heading, isRing);
+  const lead = leadingTotal(tokens, from, candidate.mark);
+  const events = [...lead, ...prune(findEvents(letters), tokens, heading, isRing)];
   const loops = loopsOf(tokens, from, to, (i) => talk.skipped[i] === true);
   const bases = isRing ? [] : basesFor(talk, stretch, before, loops, words);
   const named = linesNamed(tokens, from, to, announced.from ?? 0);

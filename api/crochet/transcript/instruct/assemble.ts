@@ -60,7 +60,9 @@ function extend(partial: Partial, element: Element): Partial[] {
     case 'here':
       return [partial];
     case 'times':
-      return repeat(partial, element.n, sentence);
+      return element.explains
+        ? [...repeat(partial, element.n, sentence), { ...partial, cost: partial.cost + 0.3 }]
+        : repeat(partial, element.n, sentence);
     case 'around':
       return repeat(partial, 0, sentence);
     case 'again':

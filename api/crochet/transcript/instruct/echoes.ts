@@ -20,9 +20,16 @@ export function withEchoes(spoken: readonly Event[]): readonly Event[] {
 
 /** In a mesh `a double crochet in each double crochet, chain one, skip the chain` is one step of many, not all of them. */
 export function meshes(events: readonly Event[]): readonly Event[] {
-  const skips = events.filter((event) => only(event)?.type === 'skip').map((event) => event.sentence);
+  const skips = events
+    .filter((event, n) => {
+      const unit = only(event);
+      const before = events[n - 1];
+      return unit?.type === 'skip' || (unit?.type === 'chain' && before?.sentence === event.sentence);
+    })
+    .map((event) => event.sentence);
+  const inMesh = new Set(skips);
   return events.map((event) =>
-    event.type === 'unit' && event.fills && skips.includes(event.sentence) ? { ...event, fills: false } : event,
+    event.type === 'unit' && event.fills && inMesh.has(event.sentence) ? { ...event, fills: false } : event,
   );
 }
 

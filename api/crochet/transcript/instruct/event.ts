@@ -25,7 +25,12 @@ export type Event = {
       readonly asItem: number;
       readonly asTimes: number;
     }
-  | { readonly type: 'times'; readonly n: number }
+  | {
+      readonly type: 'times';
+      readonly n: number;
+      /** Told as what it came to: `so that's your four lots`. */
+      readonly explains: boolean;
+    }
   | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'again' | 'plain' | 'correction' | 'edge' }
   /** The same at both ends of the line. */
   | { readonly type: 'ends'; readonly unit: Unit }

@@ -74,7 +74,7 @@ function eventOf(
   same: boolean,
 ): Event | null {
   if (made.type === 'nothing') return null;
-  if (made.type === 'times') return { ...place, type: 'times', n: made.n };
+  if (made.type === 'times') return { ...place, type: 'times', n: made.n, explains };
   if (made.type === 'ends') return { ...place, type: 'ends', unit: made.unit };
   if (made.type === 'cycle') return { ...place, type: 'cycle', items: made.items };
   if (made.type !== 'unit') return { ...place, type: made.type };

@@ -56,12 +56,15 @@ export function numberEvent(letters: Letters, i: number, lastWork: number): Even
   const isThing = after === 'w';
   const closes = isThing && /[,.&|F]/.test(letters.text[i + 2] ?? '.');
   if (token.text === 'counted by steps') asTotal += 1.4;
+  // so many arches, loops, scallops: things, and no stitches
+  const isOfThings = isThings(letters, i + 1);
+  if (isOfThings) asTotal -= 2.5;
   const namesLines = after === 'U' && letters.tokens[i + 1]!.text.endsWith('s');
   if (namesLines) asTotal -= 3;
   const asItem =
     (namesLines || token.text.startsWith('counted') ? -2 : 0) +
-    ('&,.|~pwFmYIgNTDP'.includes(before) ? 0.6 : 0) +
-    ('&,F.RNTDP'.includes(after) ? 0.6 : 0) +
+    ('&,.|~pwFmYIgNTDPOXLG'.includes(before) ? 0.6 : 0) +
+    ('&,F.RNTDP|'.includes(after) ? 0.6 : 0) +
     (isThing ? (closes ? 0.4 : -0.2) - (token.value === 1 ? 0.3 : 0) : 0) -
     (before === '=' ? 0.5 : 0) -
     (after === 'G' ? 0.2 : 0) +
@@ -77,4 +80,16 @@ export function numberEvent(letters: Letters, i: number, lastWork: number): Even
     asItem,
     asTimes,
   };
+}
+
+/** A plain noun in the plural behind a number, at the end of a clause: `twelve arches.` */
+function isThings({ text, tokens }: Letters, i: number): boolean {
+  const token = tokens[i];
+  if (token === undefined || !'.,|&'.includes(text[i + 1] ?? '.')) return false;
+  if (text[i] === 'Z' || token.value === 'loop') return true;
+  return (
+    text[i] === 'w' &&
+    /^[a-z]{3,}[^s]s$/.test(token.text) &&
+    !/^(?:stitches|totals?|yours|this|always)$/.test(token.text)
+  );
 }

@@ -10,7 +10,7 @@ export type Element = { readonly sentence: number; readonly at: number } & (
       readonly reaches: boolean;
       readonly same: boolean;
     }
-  | { readonly type: 'times'; readonly n: number }
+  | { readonly type: 'times'; readonly n: number; readonly explains: boolean }
   | { readonly type: 'around' | 'oneplace' | 'corner' | 'here' | 'again' | 'plain' | 'edge' }
   | { readonly type: 'ends'; readonly unit: Unit }
   | { readonly type: 'cycle'; readonly items: readonly (Unit | null)[] }
@@ -53,7 +53,7 @@ function settled(event: Exclude<Event, { type: 'number' }>): Element {
       reaches: event.reaches,
       same: event.same,
     };
-  if (event.type === 'times') return { sentence, at, type: 'times', n: event.n };
+  if (event.type === 'times') return { sentence, at, type: 'times', n: event.n, explains: event.explains };
   if (event.type === 'ends') return { sentence, at, type: 'ends', unit: event.unit };
   if (event.type === 'cycle') return { sentence, at, type: 'cycle', items: event.items };
   return { sentence, at, type: event.type === 'correction' ? 'plain' : event.type };
@@ -85,7 +85,7 @@ function partsOf(casting: Casting, event: Extract<Event, { type: 'number' }>): C
     });
   }
   if (n > 1 && n <= 60 && casting.elements.length > 0 && event.asTotal < 2.5) {
-    const element: Element = { sentence, at, type: 'times', n };
+    const element: Element = { sentence, at, type: 'times', n, explains: false };
     out.push({ ...casting, elements: [...casting.elements, element], cost: casting.cost + 1.6 - event.asTimes });
   }
   return out;

@@ -62,7 +62,7 @@ export const TRADE_WORDS: readonly (readonly [Class, string | number, string])[]
     'Z',
     'sp',
     `
-    space, spaces, sp, sps, chain space, chain spaces, chain 1 space, chain 2 space, chain 1 spaces, chain 2
+    arch, arches, space, spaces, sp, sps, chain space, chain spaces, chain 1 space, chain 2 space, chain 1 spaces, chain 2
     spaces, window, windows, chain sp, opening, mesh space`,
   ],
   [

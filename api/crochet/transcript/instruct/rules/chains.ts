@@ -15,7 +15,7 @@ export const CHAIN_RULES: readonly Rule[] = [
     pattern: /K[XO]?[GCZS]?/y,
     make: (m) => (m.some((one) => one.kind === 'C') ? nothing : unit({ type: 'skip', many: 1 })),
   },
-  { pattern: /I[XL]C+,?&?NS/y, make: (m) => unit(st(stitch(m), 1, number(m))) },
+  { pattern: /I[XLO]+C+H?,?&?g?NS(?![TtC])/y, make: (m) => unit(st(stitch(m), 1, number(m))) },
   { pattern: /IE[XOL]?N?C/y, make: () => nothing },
   { pattern: /(?:I|O|L|X|E|M)+C+H?/y, make: () => nothing },
   { pattern: /C{1,2}N(?![StTDPG])/y, make: (m) => (isPlural(m[0]) ? null : unit({ type: 'chain', many: number(m) })) },

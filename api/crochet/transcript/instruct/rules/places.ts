@@ -24,7 +24,19 @@ export const PLACE_RULES: readonly Rule[] = [
     pattern: /E[GZ]?g[NP]/y,
     make: (m) => (m.some((one) => one.kind === 'P') ? fills(st(BARE, 1, 2)) : fills(st(BARE, 1, number(m)))),
   },
+  // "in each one you put two"
+  { pattern: /IE[GZ]?,?N(?=[.,|&])/y, make: (m) => (number(m) < 8 ? fills(st(BARE, 1, number(m))) : null) },
   // several in one place
+  { pattern: /NSI[XLO]*C(?![NC])/y, make: (m) => unit(st(stitch(m), 1, number(m))) },
+  { pattern: /NI[XLO]*C(?=[.,|&w])/y, make: (m) => unit(st(BARE, 1, number(m))) },
+  // "slip stitch round to the beginning"
+  {
+    pattern: /N?SU?A/y,
+    make: (m) =>
+      m.some((one) => one.value === 'slst') && /\b(?:beginning|start|join|began|started)\b/.test(m.at(-1)!.text)
+        ? nothing
+        : null,
+  },
   { pattern: /NS[&,]?E?I[XLOM]*N?[GZ]?/y, make: inOne },
   { pattern: /NI[XLOM]*N?[GZ]?/y, make: inOne },
   {
@@ -47,7 +59,7 @@ export const PLACE_RULES: readonly Rule[] = [
     // "eight, slip stitch": a total and a join, where nobody would say "eight slip stitch"
     make: (m) => (m[1]!.text === 'slip stitch' && number(m) > 1 ? null : unit(st(stitch(m), number(m)))),
   },
-  { pattern: /S[&,]?(?:IB?[XLOM]*N?[GZ]?)/y, make: (m) => (m.length > 1 ? unit(st(stitch(m), 1)) : null) },
+  { pattern: /S[&,]?(?:IB?[XLOM]*(?:N(?!T))?[GZ]?)/y, make: (m) => (m.length > 1 ? unit(st(stitch(m), 1)) : null) },
   {
     pattern: /E?[SF]+[&,]?E?A/y,
     make: (m) => (m.some((one) => one.kind === 'S') ? fills(st(stitch(m), 1)) : { type: 'plain' }),

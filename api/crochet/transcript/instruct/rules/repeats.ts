@@ -31,6 +31,11 @@ export const REPEAT_RULES: readonly Rule[] = [
   // increases
   { pattern: /PI?E[XOL]?N[GS]?/y, make: (m) => unit(st(BARE, number(m), 2)) },
   { pattern: /PI[XOL]N[GS]?/y, make: (m) => unit(st(BARE, number(m), 2)) },
+  // "seventeen pairs" says how often the two of them are worked
+  {
+    pattern: /NP(?=[.|]|$)/y,
+    make: (m) => (m[1]!.text === 'pairs' && number(m) > 2 ? { type: 'times', n: number(m) } : null),
+  },
   { pattern: /NP/y, make: (m) => unit(st(BARE, number(m), 2)) },
   { pattern: /PI?EN?[GZ]?A?/y, make: () => fills(st(BARE, 1, 2)) },
   { pattern: /IE[GZ]?,?P/y, make: () => fills(st(BARE, 1, 2)) },
