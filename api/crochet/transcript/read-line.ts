@@ -95,6 +95,7 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
     mayLeave: LEAVING.test(words.map((token) => token.text).join(' ')),
     isRing: !before.isRows,
     isPlain: isPlainLine(words, events, announced),
+    isTold: words.some((token) => 'FEAB'.includes(token.kind)),
   };
   const vague = findVague(tokens, candidate.end, to, talk.sentences, events);
   const told = vague === null ? events : firstTelling(events, vague);

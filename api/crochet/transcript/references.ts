@@ -75,7 +75,7 @@ export function copiesFor(
   const last = earlier.at(-1);
   if (SAME.test(text) && last !== undefined && last.from !== null)
     out.push(
-      ...patternsOf(last).map((units, k) => ({ units, cost: 0.9 + 0.4 * k })),
+      ...patternsOf(last).map((units, k) => ({ units, cost: 0.6 + 0.3 * k })),
       ...lengths.flatMap((n) => withStretches(last.units, n)).map((units) => ({ units, cost: 0.7 })),
     );
   return out;

@@ -4,6 +4,7 @@ import { assemble } from './assemble.ts';
 import { type Event } from './event.ts';
 import { type Choice, fitGain, judgeWork, type Proposal, saidGain, saidTotal } from './judge-work.ts';
 import { type Base, resolve } from './resolve.ts';
+import { remindsOf } from './told-again.ts';
 import { castNumbers, type Casting, type Element } from './roles.ts';
 import { startingChains } from './starting-chain.ts';
 
@@ -28,6 +29,8 @@ export interface Setting {
   readonly isRing: boolean;
   /** Whether words say that nothing is shaped. */
   readonly isPlain: boolean;
+  /** Whether they say so in so many words. */
+  readonly isTold: boolean;
 }
 
 /** The corner that the line itself tells, wherever it does. */
@@ -139,8 +142,11 @@ function addWhole(events: readonly Event[], setting: Setting, found: Found): voi
   const units = events.filter((event) => event.type === 'unit').length;
   const times = events.some((event) => event.type === 'times') ? 3 : 0;
   const plain: Unit = { type: 'repeat', units: [{ type: 'stitch', stitch: '?', inOne: 1, times: 1 }], times: 0 };
-  if (setting.isPlain) weigh([plain], 0.4 + units * 0.8 + times, heard, setting, false, found);
-  for (const copy of setting.copies) weigh(copy.units, copy.cost + units * 1.1 + times, heard, setting, true, found);
+  if (setting.isPlain) weigh([plain], (setting.isTold ? 0.4 : 0.8) + units * 0.8 + times, heard, setting, false, found);
+  for (const copy of setting.copies) {
+    const against = remindsOf(copy.units, events) ? 0 : units * 1.1 + times;
+    weigh(copy.units, copy.cost + against, heard, setting, true, found);
+  }
 }
 
 function weigh(

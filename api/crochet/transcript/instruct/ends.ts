@@ -30,8 +30,8 @@ export function endLetter(tokens: readonly Token[], i: number, text: string): 'G
   const before = tokens[i - 1]?.kind ?? '.';
   const after = tokens[i + 1]?.kind ?? '.';
   const isBare = ',.|&~'.includes(before) && ',.|'.includes(after);
-  if (isBare) return 'd';
-  return /[NSPT]L?[I]$/.test(text) ? 'G' : null;
+  if (/[NSPT]I[XLO]*$/.test(text)) return 'G';
+  return isBare && !text.endsWith('I') ? 'd' : null;
 }
 
 /** "two at the end", "an increase at the edge": at is where they go. */

@@ -103,7 +103,9 @@ export function withEnds(elements: readonly Element[]): readonly Element[] {
     same: false,
   });
   const middle = elements.filter((element) => element.type !== 'ends' && element.type !== 'edge');
-  const told = middle.filter((element) => element.type === 'unit');
+  const units = middle.filter((element) => element.type === 'unit');
+  // "single crochet, two in the first and the last, one in each between": the stitch is named, not worked
+  const told = units.some((element) => element.fills) ? units.filter((element) => element.fills) : units;
   const lone = told.length === 1 ? told[0]!.options[0]![0] : undefined;
   const isFill = lone?.type === 'stitch' && lone.times === 1 && lone.inOne === 1;
   const between =

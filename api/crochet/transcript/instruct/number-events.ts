@@ -87,9 +87,9 @@ function isThings({ text, tokens }: Letters, i: number): boolean {
   const token = tokens[i];
   if (token === undefined || !'.,|&'.includes(text[i + 1] ?? '.')) return false;
   if (text[i] === 'Z' || token.value === 'loop') return true;
-  return (
-    text[i] === 'w' &&
-    /^[a-z]{3,}[^s]s$/.test(token.text) &&
-    !/^(?:stitches|totals?|yours|this|always)$/.test(token.text)
-  );
+  return text[i] === 'w' && THINGS.test(token.text);
 }
+
+/** What work is made of that is no stitch: its number is no total. */
+const THINGS =
+  /^(?:shells|fans|scallops|petals|picots|points|peaks|holes|bumps|ridges|waves|ripples|spikes|teeth|leaves|loops|groups|clusters|squares|blocks|bars|couples|bunches|ruffles|frills|vs|inches|rows|rounds|laps|sections|panels)$/;

@@ -111,6 +111,7 @@ export const TRADE_WORDS: readonly (readonly [Class, string | number, string])[]
     everything, everywhere, everything else, everything between, everything in between, all the others, all the other ones,
     all the rest, whatever is left, whatever 's left, what is left, the others`,
   ],
+  ['X', 0, `far, opposite, furthest, farthest, outermost`],
   ['U', 'round', `round, rnd, lap, circuit, go round`],
   ['U', 'rounds', `rounds, rnds, laps`],
   ['U', 'row', `row`],

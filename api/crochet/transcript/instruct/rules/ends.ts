@@ -23,5 +23,10 @@ export const END_RULES: readonly Rule[] = [
     pattern: /e[,&=gw]{0,3}(?:NT|D)/y,
     make: (m) => ends(tog(BARE, m.some((one) => one.kind === 'N') ? number(m) : 2)),
   },
+  // "two in the first and two in the last"
+  {
+    pattern: /NS?IO[GZ]?,?&?NS?IL[GZ]?(?=,?&?NIE|,?&?S?IE)/y,
+    make: (m) => (number(m) > 1 && number(m) === number(m, 1) ? ends(st(stitch(m), 1, number(m))) : null),
+  },
   { pattern: /d/y, make: () => ({ type: 'edge' }) },
 ];
