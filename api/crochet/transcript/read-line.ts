@@ -95,7 +95,7 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
     mayLeave: LEAVING.test(words.map((token) => token.text).join(' ')),
     isRing: !before.isRows,
     isPlain: isPlainLine(words, events, announced),
-    isTold: words.some((token) => 'FEAB'.includes(token.kind)),
+    isTold: announced.from !== announced.to || isToldPlain(talk, stretch, isOut),
   };
   const vague = findVague(tokens, candidate.end, to, talk.sentences, events);
   const told = vague === null ? events : firstTelling(events, vague);
@@ -194,6 +194,14 @@ function isPlainLine(words: readonly Token[], events: readonly Event[], { from, 
     (event) => event.type === 'unit' && event.options[0]!.some((unit) => unit.type !== 'stitch' || unit.inOne > 1),
   );
   return !shapes && (plain || from !== to || events.some((event) => event.type === 'unit'));
+}
+
+/** Whether the sentence that announces the line, or the next one, says that nothing happens, or goes into every stitch. */
+function isToldPlain({ tokens, sentences }: Talk, { announced, to }: Stretch, isOut: (i: number) => boolean): boolean {
+  const { mark } = announced.candidate;
+  const end = sentences.isPunctuated ? (sentences.endOf[sentences.endOf[mark]!] ?? to) : to;
+  for (let i = mark; i < Math.min(to, end); i++) if (!isOut(i) && 'FEAB'.includes(tokens[i]!.kind)) return true;
+  return false;
 }
 
 const COUNTED =

@@ -52,6 +52,7 @@ export function numberEvent(letters: Letters, i: number, lastWork: number): Even
   if ('.|'.includes(after)) asTotal += 0.4;
   if (before === 'p' || after === 'w') asTotal -= 0.4;
   if (before === ',' && after !== 'w') asTotal += 0.3;
+  if (isNamedTotal(letters, i)) asTotal += 1.2;
   if (token.isGuess) asTotal -= 1;
   const isThing = after === 'w';
   const closes = isThing && /[,.&|F]/.test(letters.text[i + 2] ?? '.');
@@ -93,3 +94,13 @@ function isThings({ text, tokens }: Letters, i: number): boolean {
 /** What work is made of that is no stitch: its number is no total. */
 const THINGS =
   /^(?:shells|fans|scallops|petals|picots|points|peaks|holes|bumps|ridges|waves|ripples|spikes|teeth|leaves|loops|groups|clusters|squares|blocks|bars|couples|bunches|ruffles|frills|vs|inches|rows|rounds|laps|sections|panels)$/;
+
+/** `the number to check is twenty five`. */
+function isNamedTotal({ source, at }: Letters, i: number): boolean {
+  const here = at[i]!;
+  const before = source.slice(Math.max(0, here - 7), here);
+  return (
+    /^(?:is|are|was)$/.test(before.at(-1)?.text ?? '') &&
+    before.some((one) => one.kind === '#' || one.kind === 'c' || /^(?:number|total|check|count)$/.test(one.text))
+  );
+}

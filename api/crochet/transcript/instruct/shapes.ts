@@ -39,6 +39,8 @@ export function inOne(matched: readonly Token[], letters: string): Made | null {
   const place = matched.at(-1)!;
   if (place.kind === 'I' || (place.kind === 'Z' && !/[XLOMN]/.test(letters.slice(2)) && isPlural(place))) return null;
   if (place.kind === 'G' && isPlural(place) && place.value !== 'loop') return unit(st(stitch(matched), many));
+  // "two in the last, forty one again" without its comma
+  if (number(matched, 1) > 7 && letters.split('N').length > 2) return null;
   if (many === 1) return unit(st(stitch(matched), 1));
   if (many > 12) return null;
   return either([st(stitch(matched), 1, many)]);

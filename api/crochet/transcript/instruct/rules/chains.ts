@@ -8,6 +8,8 @@ export const CHAIN_RULES: readonly Rule[] = [
   { pattern: /K[^.,|]{0,3}C+[^.,|]{0,2}H/y, make: () => nothing },
   { pattern: /KOC+/y, make: () => nothing },
   { pattern: /K[OXL]?N?C+/y, make: (m) => unit({ type: 'skip', many: number(m) }) },
+  // "one chain left over"
+  { pattern: /NCw/y, make: (m) => (/^(?:left|leftover|remaining|remains)$/.test(m[2]!.text) ? nothing : null) },
   { pattern: /NCK/y, make: () => nothing },
   { pattern: /K[OL](?![GZNS])/y, make: () => nothing },
   { pattern: /K[XO]?N[GCZS]?/y, make: (m) => unit({ type: 'skip', many: number(m) }) },

@@ -1,5 +1,5 @@
 import { BARE } from '../event.ts';
-import { number, type Made, type Rule, st, stitch, tog } from '../made.ts';
+import { number, type Made, type Rule, st, stitch, tog, unit } from '../made.ts';
 import { type Token } from '../../tokens.ts';
 import { type Unit } from '../../work/units.ts';
 
@@ -28,5 +28,7 @@ export const END_RULES: readonly Rule[] = [
     pattern: /NS?IO[GZ]?,?&?NS?IL[GZ]?(?=,?&?NIE|,?&?S?IE)/y,
     make: (m) => (number(m) > 1 && number(m) === number(m, 1) ? ends(st(stitch(m), 1, number(m))) : null),
   },
+  // "edge, two"
+  { pattern: /d,?N(?=[.,|])/y, make: (m) => (isSeveral(m) ? unit(st(BARE, 1, number(m))) : null) },
   { pattern: /d/y, make: () => ({ type: 'edge' }) },
 ];

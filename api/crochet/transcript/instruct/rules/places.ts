@@ -39,6 +39,7 @@ export const PLACE_RULES: readonly Rule[] = [
   },
   { pattern: /NS[&,]?E?I[XLOM]*N?[GZ]?/y, make: inOne },
   { pattern: /NI[XLOM]*N?[GZ]?/y, make: inOne },
+  { pattern: /NI[XLOM]+(?=N)/y, make: (m) => (number(m) < 8 ? unit(st(BARE, 1, number(m))) : null) },
   {
     pattern: /I?[XLO]+[GC]?gN?[SP]?/y,
     make: (m) => either([st(stitch(m), 1, m.some((one) => one.kind === 'P') ? 2 : number(m))]),
