@@ -1,8 +1,12 @@
 import { type Announced } from './announce/chain.ts';
+import { basesAfter, type ReadSoFar } from './bases.ts';
 import { foundation } from './foundation.ts';
+import { resolve } from './instruct/resolve.ts';
 import { textOf } from './instruct/spoken-of.ts';
 import { type Before, type ReadLineResult, readSpokenLine, type Stretch, type Talk } from './read-line.ts';
-import { linesNamed } from './references.ts';
+import { linesNamed, patternsOf } from './references.ts';
+import { countUnits } from './work/counted.ts';
+import { merged } from './work/settle.ts';
 
 /** Without full stops the words that say what lines are like stand so close before them. */
 const LEAD_REACH = 6;
@@ -28,12 +32,12 @@ export function readExpanded(talk: Talk, announced: Announced, to: number, befor
     const whole = readSpokenLine(talk, stretch, before);
     const line: ReadLineResult = {
       ...whole,
-      ...model,
+      ...asNowFits(model, lines.at(-1), !before.isRows),
       from: from! + n,
       to: from! + n,
       said: null,
       verdict: 'no-total',
-      loops: 'both',
+      loops: model.loops,
       count: null,
     };
     lines.push(line);
@@ -80,4 +84,17 @@ function copiesOfPiece(
   if (model === undefined) return null;
   const lines = model.filter((line) => line.from !== null && line.to! <= until!);
   return lines.map((line) => ({ ...foundation(0), ...line, verdict: 'no-total', said: null, isRing: line.from === 1 }));
+}
+
+/** A line worked again on other stitches: as it was, or with its plain stretch as long as now fits. */
+function asNowFits(model: ReadSoFar, last: ReadSoFar | undefined, isRing: boolean): ReadSoFar {
+  if (last === undefined) return model;
+  const bases = basesAfter(last, false);
+  const may = { mayImply: false, mayLeave: false };
+  const fitting = patternsOf(model)
+    .flatMap((units) => resolve(units, bases, [], may))
+    .find((one) => one.fit === 'fits');
+  if (fitting === undefined) return model;
+  const units = merged(fitting.units);
+  return { ...model, units, base: fitting.base, left: countUnits(units, fitting.base, isRing).left };
 }

@@ -114,7 +114,7 @@ function longestIn(unit: Unit): number {
 }
 
 /** The ways to do a line again: as it was, and with its longest plain stretch as long as now fits. */
-function patternsOf(line: ReadSoFar): readonly (readonly Unit[])[] {
+export function patternsOf(line: ReadSoFar): readonly (readonly Unit[])[] {
   const period = periodOf(line.units);
   if (period.length < line.units.length) return repeats(period);
   const [unit] = line.units;

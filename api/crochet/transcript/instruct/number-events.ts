@@ -52,6 +52,7 @@ export function numberEvent(letters: Letters, i: number, lastWork: number): Even
   if ('.|'.includes(after)) asTotal += 0.4;
   if (before === 'p' || after === 'w') asTotal -= 0.4;
   if (before === ',' && after !== 'w') asTotal += 0.3;
+  if (after === '=' && /^(?:remain|remains|are left|left)/.test(letters.tokens[i + 1]!.text)) asTotal += 0.6;
   if (isNamedTotal(letters, i)) asTotal += 1.2;
   if (token.isGuess) asTotal -= 1;
   const isThing = after === 'w';

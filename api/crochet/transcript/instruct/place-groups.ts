@@ -5,7 +5,7 @@ import { type Letters } from './letters.ts';
 const MOST_PARTS = 24;
 /** How far before a group the place that it stands in may be named. */
 const PLACE_BEFORE = /(?:Z|I[XLOM]*M[XLOM]*G)[^.|NSPDC]{0,9}$/;
-const PLACE_AFTER = /m?[,&]*E?o?(?:I[XLOME]*N?Z|I[XLOME]*[MNE][XLOME]*G|I?E?M|IN(?=[.,|&]|$)|IM)/y;
+const PLACE_AFTER = /m?[,&]*E?o?(?:I[XLOME]*N?Z|I[XLO]*M[XLO]*G|I?E?M|IN(?=[.,|&]|$)|IM)/y;
 /** A single place named after stitches that have names: "in the next stitch". */
 const STITCH_AFTER = /m?[,&]*I[XLOM]+G/y;
 const BACK = 14;

@@ -68,7 +68,7 @@ export function unlikeInOne(matched: readonly Token[], letters: string): Made | 
 export function manyTogether(matched: readonly Token[]): Made {
   const apart = [st(stitch(matched), number(matched)), tog(stitch(matched), number(matched, 1))];
   const joined = [tog(stitch(matched), number(matched, 1), number(matched))];
-  return isPlural(matched[1]) ? either(apart, joined) : either(joined, apart);
+  return isPlural(matched[1]) || number(matched, 1) > 2 ? either(apart, joined) : either(joined, apart);
 }
 
 /**

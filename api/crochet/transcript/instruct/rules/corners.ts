@@ -68,6 +68,11 @@ export const CORNER_RULES: readonly Rule[] = [
   { pattern: /N[GS]gNE?/y, make: (m) => unit(st(BARE, number(m), number(m, 1))) },
   { pattern: /[XLO]*[GC][wI]{0,4}gN[SP]?(?![tT])/y, make: (m) => unit(st(stitch(m), 1, number(m))) },
   { pattern: /XN[GS]?(?![tTU])/y, make: (m) => unit(st(stitch(m), number(m))) },
+  // "until there is one stitch left"
+  {
+    pattern: /[RA]*p+=?N[GS]?w/y,
+    make: (m) => (/^(?:left|remaining|over)$/.test(m.at(-1)!.text) && number(m) < 8 ? { type: 'around' } : null),
+  },
   // up to a number, or to the last few
   {
     pattern: /R?w?C?p=NS?(?![tTo])/y,
