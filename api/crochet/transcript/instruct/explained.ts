@@ -13,6 +13,9 @@ export function withoutExplained(events: readonly Event[], tokens: readonly Toke
       out[out.length - 1] = { ...before, end: event.end };
       continue;
     }
+    // "that's your three chain and one more"
+    const isOneMore = event.type === 'number' && event.n < 4 && told !== before && told !== undefined;
+    if (isOneMore && only(told)?.type === 'chain' && event.at - told.end < 4) continue;
     if (before === undefined || !isInOtherWords(before, event)) {
       out.push(event);
       continue;

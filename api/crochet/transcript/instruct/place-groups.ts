@@ -4,7 +4,7 @@ import { type Letters } from './letters.ts';
 
 const MOST_PARTS = 24;
 /** How far before a group the place that it stands in may be named. */
-const PLACE_BEFORE = /(?:Z|I[XLOM]*M[XLOM]*G)[^.|NSPDC]{0,9}$/;
+const PLACE_BEFORE = /(?:(?<!N)Z|I[XLOM]*M[XLOM]*G)[^.|NSPDC]{0,9}$/;
 const PLACE_AFTER = /m?[,&]*E?o?(?:I[XLOME]*N?Z|I[XLO]*M[XLO]*G|I?E?M|IN(?=[.,|&]|$)|IM)/y;
 /** A single place named after stitches that have names: "in the next stitch". */
 const STITCH_AFTER = /m?[,&]*I[XLOM]+G/y;
@@ -24,16 +24,18 @@ export interface PlaceGroup {
  */
 export function placeGroupAt(letters: Letters, i: number): PlaceGroup | null {
   if (!'NS'.includes(letters.text[i]!)) return null;
-  const run = partsFrom(letters, i);
-  if (run === null) return null;
   const { text } = letters;
   const before = PLACE_BEFORE.test(text.slice(Math.max(0, i - BACK), i));
-  PLACE_AFTER.lastIndex = run.end;
-  const after = PLACE_AFTER.exec(text)?.[0] ?? '';
+  const whole = partsFrom(letters, i, MOST_PARTS);
+  if (whole === null) return null;
+  // of a longer list only the first lot stands in the place, unless all of it is said to
+  const isOne = whole.chains === 1 || placeBehind(text, whole.end).includes('M');
+  const run = isOne ? whole : partsFrom(letters, i, 1);
+  if (run === null) return null;
+  const after = placeBehind(text, run.end);
   STITCH_AFTER.lastIndex = run.end;
   const named = run.isNamed && after === '' && run.chains === 1 ? (STITCH_AFTER.exec(text)?.[0] ?? '') : '';
   if (!before && after === '' && named === '') return null;
-  if (run.chains > 1 && !before && !after.includes('M')) return null;
   return {
     unit: { type: 'oneplace', parts: run.parts, times: 1 },
     length: run.end + after.length + named.length - i,
@@ -56,7 +58,12 @@ interface Run {
   readonly isNamed: boolean;
 }
 
-function partsFrom(letters: Letters, from: number): Run | null {
+function placeBehind(text: string, end: number): string {
+  PLACE_AFTER.lastIndex = end;
+  return PLACE_AFTER.exec(text)?.[0] ?? '';
+}
+
+function partsFrom(letters: Letters, from: number, mostChains: number): Run | null {
   const { text, tokens } = letters;
   const valueAt = (i: number) => Math.min(12, Number(tokens[i]!.value));
   const parts: string[] = [];
@@ -65,7 +72,7 @@ function partsFrom(letters: Letters, from: number): Run | null {
   let isNamed = true;
   let i = from;
   let end = from;
-  while (parts.length < MOST_PARTS) {
+  while (parts.length < MOST_PARTS && !(chains === mostChains && stitches > chains)) {
     while (i > from && ',&mE'.includes(text[i] ?? '.')) i += 1;
     const wantsChain = stitches > chains;
     const part = wantsChain ? chainAt(text, i) : stitchAt(text, i);

@@ -20,6 +20,8 @@ export const CHAIN_RULES: readonly Rule[] = [
   { pattern: /I[XLO]+C+H?,?&?g?NS(?![TtC])/y, make: (m) => unit(st(stitch(m), 1, number(m))) },
   { pattern: /IE[XOL]?N?C/y, make: () => nothing },
   { pattern: /(?:I|O|L|X|E|M)+C+H?/y, make: () => nothing },
+  // "three chain two trebles" without its comma
+  { pattern: /NC(?=NS)/y, make: (m) => unit({ type: 'chain', many: number(m) }) },
   { pattern: /C{1,2}N(?![StTDPG])/y, make: (m) => (isPlural(m[0]) ? null : unit({ type: 'chain', many: number(m) })) },
   { pattern: /C{1,2}N(?=S|G)/y, make: (m) => unit({ type: 'chain', many: number(m) }) },
   { pattern: /NC(?!N)/y, make: (m) => unit({ type: 'chain', many: number(m) }) },

@@ -25,13 +25,13 @@ export const CORNER_RULES: readonly Rule[] = [
     pattern: /=?X?Z[IwFG]{0,4},?=?gNS?(?![CtTb])/y,
     make: (m) => (m.some((one) => one.value === 'corner') ? null : unit(st(stitch(m), 1, number(m)))),
   },
+  // "corner, side, corner, side": the whole of it over again
+  { pattern: /=?Z,?(?:[ZFwG]|N[SG]?),?Z,?(?:[ZFwG]|N[SG]?)(?:,?Z,?(?:[ZFwG]|N[SG]?))*,?[RA]*/y, make: inTurn },
   // "after your corner" tells that it was worked
   {
     pattern: /[=p]X?Z/y,
     make: (m) => (m[0]!.text === 'after' && m.at(-1)!.value === 'corner' ? { type: 'corner' } : nothing),
   },
-  // "corner, side, corner, side": the whole of it over again
-  { pattern: /Z,?(?:[ZFwG]|N[SG]?),?Z,?(?:[ZFwG]|N[SG]?)(?:,?Z,?(?:[ZFwG]|N[SG]?))*,?[RA]*/y, make: inTurn },
   { pattern: /ZC+/y, make: () => nothing },
   // "two in the corner with two chain between them"
   { pattern: /NS?w?(?:I[XLOME]*Z)?[,&]*(?:CN|NC|C)(?:b|pw)[aw]?o?(?:I[XLOME]*N?[ZG])?/y, make: partedByChain },

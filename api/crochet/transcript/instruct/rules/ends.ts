@@ -31,6 +31,6 @@ export const END_RULES: readonly Rule[] = [
   // "edge, two"
   { pattern: /d,?N(?=[.,|])/y, make: (m) => (isSeveral(m) ? unit(st(BARE, 1, number(m))) : null) },
   // "two together, eight, two together, on both sides"
-  { pattern: /(?<=[,.])e/y, make: (m) => (/both/.test(m[0]!.text) ? { type: 'times', n: 2 } : null) },
+  { pattern: /(?<=[,.])e/y, make: (m) => (m[0]!.text.includes('both') ? { type: 'times', n: 2 } : null) },
   { pattern: /d/y, make: () => ({ type: 'edge' }) },
 ];
