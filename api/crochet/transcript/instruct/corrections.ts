@@ -9,6 +9,7 @@ import { BARE, only, type Event } from './event.ts';
 export function withoutCorrected(events: readonly Event[], tokens: readonly Token[]): readonly Event[] {
   const out: Event[] = [];
   let corrected = false;
+  let last: Event | null = null;
   for (const event of events) {
     if (event.type === 'correction') {
       corrected = true;
@@ -20,9 +21,12 @@ export function withoutCorrected(events: readonly Event[], tokens: readonly Toke
       const mended = isTaken ? withNumber(before, event) : null;
       if (mended !== null) {
         out[out.length - 1] = mended;
+        last = mended;
         corrected = false;
         continue;
       }
+      // "six singles, no, five, it's a starfish, five singles": the mended stretch in full
+      if (before === last && isLikeStretch(only(before), only(event), true)) continue;
       if (isTaken && (corrected || KIND[before.type] === KIND[event.type])) takeBack(out, event);
     }
     corrected = false;
@@ -60,12 +64,12 @@ function takeBack(out: Event[], event: Event): void {
   while (out.length > 0 && out.at(-1)!.sentence === sentence && isLike(out.at(-1)!)) out.pop();
 }
 
-function isLikeStretch(before: Unit | undefined, now: Unit | undefined): boolean {
+function isLikeStretch(before: Unit | undefined, now: Unit | undefined, isEqual = false): boolean {
   return (
     before?.type === 'stitch' &&
     now?.type === 'stitch' &&
     before.inOne === now.inOne &&
-    before.times !== now.times &&
+    (before.times === now.times) === isEqual &&
     before.times > 1 &&
     (now.stitch === BARE || before.stitch === now.stitch)
   );
