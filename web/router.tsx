@@ -16,6 +16,7 @@ type Page = () => Promise<PageModule>;
 const IN_THE_HOUSE: Record<string, Page> = {
   '/': () => import('./app/shelf-page.tsx'),
   '/new': () => import('./app/new-pattern-page.tsx'),
+  '/new/written': () => import('./app/written-pattern-page.tsx'),
   '/patterns/:patternId/recording': () => import('./app/recording-page.tsx'),
   '/patterns/:patternId/bench': () => import('./app/bench-page.tsx'),
   '/patterns/:patternId/sheet': () => import('./app/sheet-page.tsx'),

@@ -70,6 +70,11 @@ function NewPatternDesk({ studioId }: { studioId: string }) {
           moving?.state.phase === 'sending' ? 'You can leave this page. The recording keeps going up.' : undefined
         }
       >
+        {pattern.patternId === undefined && (
+          <Link className="link" to={paths.writtenPattern()}>
+            Begin with a written pattern
+          </Link>
+        )}
         <Link className="link" to={paths.shelf()}>
           {pattern.patternId === undefined ? 'Back to the shelf' : 'Save for later'}
         </Link>

@@ -39,7 +39,7 @@ export function CountPage() {
             <kbd className="key">F8</kbd> next line to look at, <kbd className="key">Ctrl</kbd>{' '}
             <kbd className="key">Enter</kbd> take what is offered
           </span>
-          <a href="/new/written" className="link ml-auto">
+          <a href="/new/written?from=count" className="link ml-auto">
             Make it a pattern of yours
           </a>
         </footer>

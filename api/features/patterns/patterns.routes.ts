@@ -1,6 +1,7 @@
 import { Router } from 'express';
 import { Pattern, PatternCreate, PatternEdit, PatternHead, PatternStateChange } from '#contract/patterns';
 import { Shelf, ShelfQuery } from '#contract/shelf';
+import { WrittenPattern } from '#contract/written';
 import { idempotent } from '../../http/idempotency.ts';
 import { CREATING, limit } from '../../http/limits.ts';
 import { ifMatchVersion, sendVersioned } from '../../http/preconditions.ts';
@@ -15,6 +16,7 @@ import { liveRoutes } from './live.routes.ts';
 import { createPattern, editPattern, stepPattern } from './patterns.service.ts';
 import { rowRoutes } from './rows.routes.ts';
 import { readShelf } from './shelf.service.ts';
+import { takeWrittenPattern } from './written-pattern.service.ts';
 
 /** Patterns: the shelf, the bench document, and what is done with a pattern as a whole. */
 export function patternRoutes(deps: Deps): Router {
@@ -29,6 +31,12 @@ export function patternRoutes(deps: Deps): Router {
 
   router.post('/patterns', ...makes, async (req, res) => {
     const head = await createPattern(db, askingIn(deps, req), PatternCreate.parse(req.body));
+    res.status(201).location(`/api/patterns/${head.id}`);
+    sendVersioned(res, answer(PatternHead, head), head.version);
+  });
+
+  router.post('/patterns/written', ...makes, async (req, res) => {
+    const head = await takeWrittenPattern(db, askingIn(deps, req), WrittenPattern.parse(req.body));
     res.status(201).location(`/api/patterns/${head.id}`);
     sendVersioned(res, answer(PatternHead, head), head.version);
   });

@@ -4,7 +4,7 @@ import type { Draft, DraftLine } from '#crochet';
 import type { Details } from '#contract/pattern-details';
 import { AppError } from '../../http/problem.ts';
 import { joinCautions } from './cautions.service.ts';
-import { record, writeFields, type Deed } from './deed.service.ts';
+import { writeFields, type Deed } from './deed.service.ts';
 import { hearAgain } from './draft-again.ts';
 import {
   fieldsTaken,
@@ -16,13 +16,14 @@ import {
   type PlannedPiece,
 } from './draft-plan.ts';
 import { findSource, insertEvidence, listKnownLines, newHearing, type SourceOfDraft } from './draft.store.ts';
-import type { Fields, RowEntity } from './entities.ts';
+import type { Fields } from './entities.ts';
 import { followMoments } from './follow-words.service.ts';
 import { newShortIds } from './ids.ts';
+import { insertLogged } from './insert-logged.ts';
 import { placeManyAfter } from './order.ts';
 import { setPatternState } from './patterns.service.ts';
 import { lockPattern } from './patterns.store.ts';
-import { findRow, insertRows, listRows, takenShortIds } from './rows.store.ts';
+import { findRow, listRows, takenShortIds } from './rows.store.ts';
 import { suggestedCautions, suggestedMaterials } from './suggestions.ts';
 import { placeWritten } from './written-total.ts';
 
@@ -38,20 +39,6 @@ interface Taking {
   readonly source: SourceOfDraft;
   /** Short ids that no line of the pattern ever had, to be used up. */
   readonly shortIds: string[];
-}
-
-async function insertLogged(
-  trx: Knex.Transaction,
-  deed: Deed,
-  entity: RowEntity,
-  rows: readonly Fields[],
-): Promise<void> {
-  await insertRows(trx, entity, deed.patternId, rows);
-  await record(
-    trx,
-    deed,
-    rows.map(({ id, ...after }) => ({ entity, entityId: id as string, before: null, after })),
-  );
 }
 
 /** Puts drafted lines behind one of the piece (null: first), each with its moment and the words it was heard in. */

@@ -11,6 +11,23 @@ export const patterns: Record<string, Entry> = {
     expect: makers(201),
     ask: ({ studioId }) => ({ url: '/api/patterns', body: { studioId, title: 'A new one' } }),
   },
+  'POST /api/patterns/written': {
+    expect: makers(201),
+    ask: ({ studioId }) => ({
+      url: '/api/patterns/written',
+      body: {
+        id: randomUUID(),
+        studioId,
+        title: 'A written one',
+        terms: 'US',
+        sizes: [],
+        pieces: [{ name: 'Cap', make: 1, worked: 'spiral', lines: [] }],
+        materials: [],
+        notes: [],
+        specialStitches: [],
+      },
+    }),
+  },
   'GET /api/patterns/:patternId': {
     expect: members(200),
     ask: async (world) => ({ url: `/api/patterns/${(await world.pattern()).id}` }),
