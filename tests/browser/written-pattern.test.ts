@@ -1,8 +1,9 @@
 import type { Browser } from 'playwright-core';
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import { buildApp, type TestApp } from '../support/app.ts';
-import { axeFindings, DESK, listen, openBrowser, openPage, PHONE, type Listening } from '../support/browser.ts';
+import { axeFindings, DESK, listen, openBrowser, PHONE, type Listening } from '../support/browser.ts';
 import { buildHouse, type Household } from '../support/builders.ts';
+import { openAs } from '../support/open-as.ts';
 
 let house: TestApp;
 let studio: Household;
@@ -37,23 +38,20 @@ Handle (make 2)
 Row 1: ch 11, sc in 2nd ch from hook and in each ch across (10)
 `;
 
-async function openAs(options = DESK) {
-  const opened = await openPage(browser, options);
-  const { Cookie } = (await house.as(studio.creator)) as { Cookie: string };
-  const [name = '', value = ''] = Cookie.split(/=(.*)/s);
-  await opened.page.context().addCookies([{ name, value, url: server.url, secure: true }]);
+async function openDesk(options = DESK) {
+  const opened = await openAs(browser, server.url, studio.creator, options);
   await opened.page.goto(`${server.url}/new/written`);
   await opened.page.getByRole('textbox', { name: 'The pattern as written' }).waitFor();
   return opened;
 }
 
 test('a written pattern comes in by keyboard alone: pasted, confirmed, and open at the bench with its verdicts', async () => {
-  const { page, quiet } = await openAs();
+  const { page, quiet } = await openDesk();
   await page.keyboard.insertText(TEXT);
   await expect.poll(() => page.locator('main').innerText()).toContain('to confirm');
   expect(await page.getByRole('textbox', { name: 'Name' }).inputValue()).toBe('Oval basket');
   await page.keyboard.press('Tab');
-  const next = page.getByRole('button', { name: 'Next' });
+  const next = page.getByRole('button', { name: 'Next', exact: true });
   while (!(await next.evaluate((button) => button === document.activeElement))) await page.keyboard.press('Tab');
   await page.keyboard.press('Enter');
   for (let i = 0; i < 12 && (await next.isVisible()); i += 1) await page.keyboard.press('y');
@@ -67,7 +65,7 @@ test('a written pattern comes in by keyboard alone: pasted, confirmed, and open 
 });
 
 test('an empty, a huge and a binary file are refused in words, and what stood there stays', async () => {
-  const { page, quiet } = await openAs();
+  const { page, quiet } = await openDesk();
   await page.getByRole('textbox', { name: 'The pattern as written' }).fill(TEXT);
   for (const [buffer, words] of [
     [Buffer.from(' \n'), 'nothing written'],
@@ -86,9 +84,9 @@ test.each([
   ['a desk', DESK],
   ['a phone', PHONE],
 ])('axe finds nothing on %s while a cut is confirmed, and nothing runs out at the side', async (_what, options) => {
-  const { page, quiet } = await openAs(options);
+  const { page, quiet } = await openDesk(options);
   await page.getByRole('textbox', { name: 'The pattern as written' }).fill(TEXT);
-  await page.getByRole('button', { name: 'Next' }).click();
+  await page.getByRole('button', { name: 'Next', exact: true }).click();
   await page.getByRole('button', { name: 'Right as it is' }).waitFor();
   expect(await axeFindings(page)).toEqual([]);
   expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBeLessThanOrEqual(

@@ -54,7 +54,8 @@ function linesOf(entry: Entry, last: number, worked: Piece['worked']): WrittenLi
     return inParts(entry.text, MOST_TEXT).map((text) => ({ kind, ...none, text }));
   }
   const { kind, label, from, to, body } = entry.line;
-  const isNumbered = kind !== 'foundation' && from === null;
+  // A line without a label bears the number that its place gives it, whatever has been put before it since.
+  const isNumbered = kind !== 'foundation' && (from === null || (label === '' && from === to));
   const counted = isNumbered
     ? { kind: worked === 'rows' ? ('row' as const) : kind, from: last + 1, to: last + 1 }
     : { kind, from, to };
