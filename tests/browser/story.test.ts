@@ -102,10 +102,10 @@ async function giveFiles(page: Page): Promise<void> {
   const clip = page.waitForEvent('filechooser');
   await page.getByRole('button', { name: /clip/i }).first().click();
   await (await clip).setFiles(files.clip);
-  const bench = page.getByRole('button', { name: 'Open at the bench' });
-  await expect.poll(() => bench.getAttribute('aria-disabled'), { timeout: 60_000 }).not.toBe('true');
+  // The bench waits for no clip; this maker does, to see it go on after the cut.
+  await page.getByText('here whole and ready to play').waitFor({ timeout: 60_000 });
   expect(cut).toBe(1);
-  await bench.click();
+  await page.getByRole('button', { name: 'Open at the bench' }).click();
 }
 
 const rowOf = (page: Page, name: string) => page.locator('[data-line]').filter({ hasText: name }).first();

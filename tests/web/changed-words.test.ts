@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { changedWords } from '../../web/features/editions/changed-words.ts';
+import { changedWords } from '../../web/parts/changed-words.ts';
 
 const shown = (text: string, other: string) =>
   changedWords(text, other)

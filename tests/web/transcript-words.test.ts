@@ -43,7 +43,7 @@ describe('words of a transcript', () => {
   test('a corrected caption shows its new words and leaves the numbers after it as they were', () => {
     const [first, second] = readCaptions([cue(0, 'to singles', 'Two single, then a'), cue(1000, 'decrease')]);
     expect(first?.text).toBe('Two single, then a');
-    expect(first?.words.map((word) => word.n)).toEqual([0, 1, -1, -1]);
+    expect(first?.words.map((word) => word.n)).toEqual([0, 0, 1, 1]);
     expect(second?.words[0]?.n).toBe(2);
   });
 

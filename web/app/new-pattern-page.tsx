@@ -24,10 +24,7 @@ export const loader = signedInLoader(async (client, { request }) => {
   ]);
 });
 
-const WHY_NOT = {
-  clip: 'The bench opens with the clip when it is up.',
-  reading: 'The rounds are being read.',
-} as const;
+const READING = 'The rounds are being read.';
 
 function NewPatternDesk({ studioId }: { studioId: string }) {
   const pattern = useNewPattern(studioId);
@@ -112,27 +109,22 @@ function NewPatternDesk({ studioId }: { studioId: string }) {
         ) : (
           <p className="text-walnut2">
             {isReading
-              ? WHY_NOT.reading
+              ? READING
               : hasTranscript
                 ? hasClip
                   ? 'Clip and transcript are here.'
-                  : WHY_NOT.clip
+                  : 'The bench opens without the clip; it joins when it is up.'
                 : 'Either file may come first; neither has to.'}
           </p>
         )}
         <span className="ml-auto flex flex-wrap gap-3.5">
-          {!(hasTranscript && hasClip) && (
-            <Button onClick={open} {...(isReading ? { notYet: WHY_NOT.reading } : {})}>
-              {hasTranscript ? 'Start with the transcript only' : 'Write the lines by hand'}
+          {hasTranscript || hasClip ? (
+            <Button kind="primary" onClick={open} {...(isReading ? { notYet: READING } : {})}>
+              Open at the bench
             </Button>
+          ) : (
+            <Button onClick={open}>Write the lines by hand</Button>
           )}
-          <Button
-            kind="primary"
-            onClick={open}
-            {...(!hasClip ? { notYet: WHY_NOT.clip } : isReading ? { notYet: WHY_NOT.reading } : {})}
-          >
-            Open at the bench
-          </Button>
         </span>
       </footer>
     </>

@@ -6,6 +6,7 @@ export const paths = {
   /** A page of its own, with its own scripts: links to it load it whole. */
   count: () => '/count',
   recording: (patternId: string) => `/patterns/${patternId}/recording`,
+  reading: (patternId: string, readingId: string) => `/patterns/${patternId}/reading/${readingId}`,
   bench: (patternId: string, lineId?: string) => `/patterns/${patternId}/bench${lineId ? `?line=${lineId}` : ''}`,
   card: (patternId: string) => `/patterns/${patternId}/card`,
   sheet: (patternId: string) => `/patterns/${patternId}/sheet`,

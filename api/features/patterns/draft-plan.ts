@@ -46,6 +46,10 @@ const inTerms = (line: DraftLine, from: Terms, to: Terms): DraftLine =>
 
 const heardIn = (line: KnownLine, recordingId: string) => line.heard.some((one) => one.recordingId === recordingId);
 
+/** A reading heard it here, and nothing else speaks for it. */
+const isReadOnlyIn = ({ heard }: KnownLine, recordingId: string) =>
+  heard.length === 1 && heard.every((one) => one.isRead && one.recordingId === recordingId);
+
 /**
  * What a reading may say anew of a line: from the recording it was drafted from, all of it; of a line that was typed,
  * only what was said; from another recording nothing, that is only another moment.
@@ -92,7 +96,7 @@ export function planDraft(of: PlanOf): DraftPlan {
   });
   const gone = standing
     .flatMap(({ lines }) => lines)
-    .filter((line) => !line.deletedAt && !met.has(line.id) && heardIn(line, recordingId) && line.heard.length === 1);
+    .filter((line) => !line.deletedAt && !met.has(line.id) && isReadOnlyIn(line, recordingId));
   return { pieces, gone };
 }
 

@@ -25,6 +25,8 @@ interface Hearing {
   readonly id: string;
   readonly recordingId: string;
   readonly transcriptId: string;
+  /** By a reading, not by a person who chose the words. */
+  readonly isRead: boolean;
 }
 
 /** A line of the pattern, taken away or not, with what a reading needs to know of it. */
@@ -52,7 +54,7 @@ export async function listKnownLines(trx: Knex, patternId: string): Promise<Know
     .select<Raw[]>(
       'l.*',
       trx.raw(`coalesce((
-        select jsonb_agg(distinct jsonb_build_object('id', e.hearing_id, 'recordingId', t.recording_id, 'transcriptId', t.id))
+        select jsonb_agg(distinct jsonb_build_object('id', e.hearing_id, 'recordingId', t.recording_id, 'transcriptId', t.id, 'isRead', e.reading_id is not null))
           from line_evidence e join transcripts t on t.id = e.transcript_id
          where e.line_id = l.id and e.hearing_id = any(l.hearings)), '[]') as heard`),
       trx.raw('array(select field from line_touched f where f.line_id = l.id) as touched'),

@@ -49,17 +49,18 @@ export function RecordingDesk({ patternId, recording, room, mayEdit, files, head
           chosen={chosen}
           onChoose={setChosen}
           onFile={files.sendTranscript}
-          onReadAgain={(transcriptId) => deeds.readAgain.mutate(transcriptId)}
+          onReadAgain={(transcriptId) => deeds.readAgain.mutate({ transcriptId })}
         />
       </DropZone>
       <aside aria-label="The file and what was heard" className="flex min-w-0 flex-col bg-sheet">
-        {transcript && <SourceSide key={transcript.id} transcript={transcript} chosen={chosen} mayEdit={mayEdit} />}
         <HeardSide
+          patternId={patternId}
           recording={recording}
           mayEdit={mayEdit}
-          isTaking={deeds.take.isPending}
-          onTake={(readingId) => deeds.take.mutate(readingId)}
+          isReading={deeds.readAgain.isPending || transcript?.reading.state === 'waiting'}
+          onTerms={(terms) => transcript && deeds.readAgain.mutate({ transcriptId: transcript.id, terms })}
         />
+        {transcript && <SourceSide key={transcript.id} transcript={transcript} chosen={chosen} mayEdit={mayEdit} />}
       </aside>
     </>
   );

@@ -6,13 +6,12 @@ import {
   CueList,
   Recording,
   RecordingList,
-  ReadingTaken,
   Transcript,
   TranscriptHead,
   type RecordingCreate,
   type RecordingEdit,
 } from '#contract/recordings';
-import { send } from '../../lib/http.ts';
+import { send, UnreachableError } from '../../lib/http.ts';
 
 const LOOK_AGAIN_MS = 1_000;
 const Nothing = z.undefined();
@@ -57,11 +56,20 @@ export const editPattern = (head: Pick<PatternHead, 'id' | 'version'>, body: Pat
 export const addRecording = (patternId: string, body: RecordingCreate) =>
   send(Recording, `/api/patterns/${patternId}/recordings`, { method: 'POST', body });
 
-/** Sends a transcript's file. */
-export function sendTranscript(recordingId: string, file: File): Promise<TranscriptHead> {
-  const body = new FormData();
-  body.append('file', file, file.name);
-  return send(TranscriptHead, `/api/recordings/${recordingId}/transcripts`, { method: 'POST', body });
+/** Sends a transcript's file; where no answer came it is sent once more under the same key, and kept once. */
+export async function sendTranscript(recordingId: string, file: File): Promise<TranscriptHead> {
+  const headers = globalThis.isSecureContext ? { 'Idempotency-Key': crypto.randomUUID() } : {};
+  const attempt = () => {
+    const body = new FormData();
+    body.append('file', file, file.name);
+    return send(TranscriptHead, `/api/recordings/${recordingId}/transcripts`, { method: 'POST', body, headers });
+  };
+  try {
+    return await attempt();
+  } catch (error) {
+    if (!(error instanceof UnreachableError) || !globalThis.isSecureContext) throw error;
+    return attempt();
+  }
 }
 
 /** Reads everything about a pattern's recordings again, and the bench document with it. */
@@ -101,13 +109,11 @@ export function useRecordingDeeds(patternId: string) {
       onSettled,
     }),
     readAgain: useMutation({
-      mutationFn: (transcriptId: string) =>
-        send(TranscriptHead, `/api/transcripts/${transcriptId}/readings`, { method: 'POST', body: {} }),
-      onSettled,
-    }),
-    take: useMutation({
-      mutationFn: (readingId: string) =>
-        send(ReadingTaken, `/api/patterns/${patternId}/readings/${readingId}/take`, { method: 'POST', body: {} }),
+      mutationFn: ({ transcriptId, terms }: { transcriptId: string; terms?: 'US' | 'UK' | null }) =>
+        send(TranscriptHead, `/api/transcripts/${transcriptId}/readings`, {
+          method: 'POST',
+          body: terms === undefined ? {} : { terms },
+        }),
       onSettled,
     }),
   };

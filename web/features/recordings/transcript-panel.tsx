@@ -5,6 +5,7 @@ import { Waiting } from '../../parts/thread/winding.tsx';
 import { VerdictMark } from '../../parts/verdict-mark.tsx';
 import { Button } from '../../ui/button.tsx';
 import { ErrorNote } from '../../ui/notes.tsx';
+import { CorrectionsPanel } from './corrections-panel.tsx';
 import { FileChoice, TRANSCRIPT_ACCEPT } from './file-choice.tsx';
 import { ProblemList } from './problem-list.tsx';
 import { mendedWords } from './problem-view.ts';
@@ -125,6 +126,9 @@ export function TranscriptPanel(props: TranscriptPanelProps) {
       )}
       {transcript && <ProblemList problems={transcript.problems} chosen={chosen} onChoose={onChoose} />}
       {recording && transcript && <Together recording={recording} transcript={transcript} />}
+      {recording && transcript?.reading.state === 'done' && (
+        <CorrectionsPanel key={transcript.reading.summary?.id} recording={recording} mayEdit={mayEdit} />
+      )}
       {transcript && mayEdit && (
         <div className="mt-auto flex flex-wrap items-center gap-3 border-t border-rule px-6 py-2.5 max-sm:px-4">
           <p className="grow text-walnut2">Another? WebVTT, SubRip, or text with clock times, up to 5 MB.</p>

@@ -21,6 +21,7 @@ const BENCH: readonly Row[] = [
   [['[', ']'], 'its moment a tenth earlier, later'],
   [['P'], 'hear what was said for it'],
   [['N'], 'next line to look at'],
+  [['W'], 'choose the words that are spoken'],
   [['↑', '↓'], 'line above, below'],
   [['Enter'], 'open the line, done with it'],
   [['Ctrl', 'Enter'], 'use the suggestion'],

@@ -5,7 +5,7 @@ import { moveLine } from '../pattern/line-deeds.ts';
 import { useUndoKeys } from '../data/use-undo-keys.ts';
 import { markAtPlayhead, nudgeMoment } from './marking.ts';
 import { type Desk, lineOf } from './use-desk.ts';
-import { hearLine, walkCaptions, walkFaults, walkLines } from './walking.ts';
+import { chooseSpoken, hearLine, walkCaptions, walkFaults, walkLines } from './walking.ts';
 
 /** What the bench's keys reach beyond the desk itself. */
 export interface KeyDoors {
@@ -43,6 +43,7 @@ export function useBenchKeys(desk: Desk, doors: KeyDoors): void {
     '[': () => nudgeMoment(desk, -1),
     ']': () => nudgeMoment(desk, 1),
     N: () => walkFaults(desk),
+    W: () => chooseSpoken(desk),
     P: () => hearLine(desk),
     ArrowUp: () => walkLines(desk, -1),
     ArrowDown: () => walkLines(desk, 1),

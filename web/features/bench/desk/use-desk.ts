@@ -7,6 +7,7 @@ import { useNewPlayer } from '../../../parts/player/use-player.ts';
 import { useToast } from '../../../ui/toast.tsx';
 import { type Bench } from '../data/bench-types.ts';
 import { type Caption, readCaptions, sensesOf, type WordSense } from '../transcript/captions.ts';
+import { type ChosenWords } from '../transcript/choose-words.ts';
 import { type Counts } from './bench-count.ts';
 import { mainMark, momentsOf } from './moments.ts';
 
@@ -23,6 +24,11 @@ export interface Desk {
   readonly recordingId: string | null;
   readonly showRecording: (recordingId: string) => void;
   readonly captions: readonly Caption[];
+  /** The same as they came, for the library. */
+  readonly cues: readonly Cue[];
+  /** Words of the shown transcript that somebody chose. */
+  readonly chosenWords: ChosenWords | null;
+  readonly chooseWords: (words: ChosenWords | null) => void;
   readonly senses: ReadonlyMap<number, WordSense>;
   /** Main moments in the shown recording, in order of time. */
   readonly moments: readonly Mark[];
@@ -44,6 +50,8 @@ export function useDesk(): Desk {
   return desk;
 }
 
+const NO_CUES: readonly Cue[] = [];
+
 /** Captions by recording id. */
 export type CuesByRecording = Readonly<Record<string, readonly Cue[]>>;
 
@@ -60,6 +68,7 @@ export function useNewDesk(bench: Bench, cuesByRecording: CuesByRecording, start
   const transcriptId = recording?.transcriptId;
 
   const cues = recordingId ? cuesByRecording[recordingId] : undefined;
+  const [chosenWords, setChosenWords] = useState<(ChosenWords & { of: string | null }) | null>(null);
   const captions = useMemo(() => readCaptions(cues ?? []), [cues]);
   const senses = useMemo(
     () => sensesOf(pattern.evidence.filter((one) => one.transcriptId === transcriptId)),
@@ -86,6 +95,10 @@ export function useNewDesk(bench: Bench, cuesByRecording: CuesByRecording, start
     recordingId,
     showRecording,
     captions,
+    cues: cues ?? NO_CUES,
+    // Another recording has other words under the same numbers.
+    chosenWords: chosenWords?.of === recordingId ? chosenWords : null,
+    chooseWords: (words) => setChosenWords(words && { ...words, of: recordingId }),
     senses,
     moments,
     lastMs,

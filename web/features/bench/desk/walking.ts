@@ -1,4 +1,5 @@
 import { lastBegun } from '../transcript/captions.ts';
+import { wordsOfCaption } from '../transcript/choose-words.ts';
 import { nextToLook } from './bench-count.ts';
 import { focusLine } from './focus-line.ts';
 import { heardSpan, mainMark } from './moments.ts';
@@ -45,3 +46,10 @@ export function hearLine(desk: Desk): void {
 /** What `hearLine` would play. */
 export const spanToHear = (desk: Desk, lineId: string) =>
   heardSpan(mainMark(desk.pattern.marks, lineId), desk.pattern.evidence, desk.moments, desk.lastMs);
+
+/** Chooses the words of the caption that is spoken; buttons beside them move the ends. */
+export function chooseSpoken(desk: Desk): void {
+  const { captions, player, pattern } = desk;
+  const caption = captions[Math.max(0, lastBegun(captions, player.getState().positionMs))];
+  if (caption && pattern.mayEdit) desk.chooseWords(wordsOfCaption(caption));
+}

@@ -1,3 +1,4 @@
+import { type ChosenWords } from './choose-words.ts';
 import { Fragment, memo } from 'react';
 import { cx } from '../../../lib/class-names.ts';
 import { formatMoment } from '../../../lib/time.ts';
@@ -17,19 +18,23 @@ export interface CaptionRowProps {
   lineId: string | null;
   /** The found words, while somebody looks for some. */
   found: 'here' | 'elsewhere' | null;
+  /** Words that somebody chose, where some of them are here. */
+  chosen: ChosenWords | null;
   onSeek: (toMs: number) => void;
   onSense: (lineId: string, atMs: number) => void;
 }
 
 /** A caption as it was spoken: its time goes there, its underlined words lead to the line they are evidence of. */
 export const CaptionRow = memo(function CaptionRow(props: CaptionRowProps) {
-  const { caption, senses, isSpoken, isPast, isStop, knot, found, onSeek } = props;
+  const { caption, senses, isSpoken, isPast, isStop, knot, found, chosen, onSeek } = props;
   return (
     <li
       data-caption={caption.id}
       aria-current={isSpoken ? 'true' : undefined}
       className={cx(
         'grid grid-cols-[50px_18px_1fr] py-[5px] pr-4 pl-3.5',
+        // A recording of hours has thousands of captions: those out of sight are not drawn.
+        '[contain-intrinsic-size:auto_54px] [content-visibility:auto]',
         isSpoken && 'bar bg-woadwash',
         found === 'here' && 'bg-weldwash',
       )}
@@ -50,7 +55,7 @@ export const CaptionRow = memo(function CaptionRow(props: CaptionRowProps) {
         )}
       </span>
       <p className={cx('said', isPast && 'text-walnut2')}>
-        {stretchesOf(caption.words, senses).map((stretch, i) => (
+        {stretchesOf(caption.words, senses, chosen).map((stretch, i) => (
           <Fragment key={i}>
             {i > 0 && ' '}
             <StretchOfWords stretch={stretch} {...props} />
@@ -60,6 +65,11 @@ export const CaptionRow = memo(function CaptionRow(props: CaptionRowProps) {
     </li>
   );
 });
+
+const CHOSEN = 'bg-weldfill text-walnut';
+
+/** A drawn selection ends with a click that means nothing else. */
+const isChoosing = () => document.getSelection()?.isCollapsed === false;
 
 const ROLES: Record<WordSense['role'], string> = {
   announcement: 'where its round is named',
@@ -75,7 +85,11 @@ function StretchOfWords({ stretch, caption, isStop, lineId, onSeek, onSense }: {
   const first = stretch.words[0];
   if (!sense || !first) {
     return (
-      <span className="cursor-pointer" onClick={() => onSeek(momentOfWord(caption, first?.text ?? ''))}>
+      <span
+        data-at={stretch.at}
+        className={cx('cursor-pointer', stretch.isChosen && CHOSEN)}
+        onClick={() => isChoosing() || onSeek(momentOfWord(caption, first?.text ?? ''))}
+      >
         {text}
       </span>
     );
@@ -85,14 +99,18 @@ function StretchOfWords({ stretch, caption, isStop, lineId, onSeek, onSense }: {
     <a
       href={`?line=${sense.lineId}`}
       title={ROLES[sense.role]}
+      data-at={stretch.at}
+      draggable={false}
       tabIndex={isStop ? 0 : -1}
       className={cx(
         'hover:text-woad',
         sense.role === 'unread' ? 'tack' : 'border-b border-woad',
         sense.lineId === lineId && sense.role !== 'unread' && 'border-b-2',
+        stretch.isChosen && CHOSEN,
       )}
       onClick={(event) => {
         event.preventDefault();
+        if (isChoosing()) return;
         onSense(sense.lineId, momentOfWord(caption, first.text));
       }}
     >

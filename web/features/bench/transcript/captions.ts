@@ -1,3 +1,4 @@
+import { wordsAsHeard } from '#crochet';
 import { type Cue } from '#contract/recordings';
 import { type Evidence } from '#contract/rows';
 
@@ -16,24 +17,19 @@ export interface Caption {
   readonly words: readonly Word[];
 }
 
-const split = (text: string) => text.split(/\s+/u).filter((word) => word !== '');
-/** A dash or a note sign standing alone is no word to the reading, so it has no number. */
-const isSpoken = (word: string) => /[\p{L}\p{N}]/u.test(word);
-
 /**
- * Captions with numbered words. A corrected caption shows its new words under the numbers of those that were heard, as far
- * as there are any, so that the numbers after it stay right. What has no number has the number -1.
+ * Captions with numbered words. A corrected caption shows its new words under the numbers of those that were heard. What
+ * has no number has the number -1.
  */
 export function readCaptions(cues: readonly Cue[]): Caption[] {
-  let next = 0;
-  return cues.map(({ id, startMs, endMs, heard, corrected }) => {
-    const end = next + split(heard).filter(isSpoken).length;
-    let n = next;
-    next = end;
-    const text = corrected ?? heard;
-    const words = split(text).map((word) => ({ n: isSpoken(word) && n < end ? n++ : -1, text: word }));
-    return { id, startMs, endMs, text, words };
-  });
+  const words = wordsAsHeard(cues);
+  return cues.map(({ id, startMs, endMs, heard, corrected }, i) => ({
+    id,
+    startMs,
+    endMs,
+    text: corrected ?? heard,
+    words: (words[i] ?? []).map(({ first, text }) => ({ n: first, text })),
+  }));
 }
 
 /** The last thing that has begun at `ms`; -1 before the first. The list is in order of time. */
@@ -67,19 +63,28 @@ export function sensesOf(evidence: readonly Evidence[]): ReadonlyMap<number, Wor
 
 /** A stretch of words of one sense, to be drawn under one line. */
 export interface Stretch {
+  /** Place of its first word in the caption. */
+  readonly at: number;
   readonly words: readonly Word[];
+  readonly isChosen: boolean;
   readonly sense: WordSense | null;
 }
 
-/** A caption's words cut where their sense changes. */
-export function stretchesOf(words: readonly Word[], senses: ReadonlyMap<number, WordSense>): Stretch[] {
-  const stretches: { words: Word[]; sense: WordSense | null }[] = [];
-  for (const word of words) {
+/** A caption's words cut where their sense changes, and where what was chosen begins and ends. */
+export function stretchesOf(
+  words: readonly Word[],
+  senses: ReadonlyMap<number, WordSense>,
+  chosen: { readonly firstWord: number; readonly lastWord: number } | null = null,
+): Stretch[] {
+  const stretches: { at: number; words: Word[]; sense: WordSense | null; isChosen: boolean }[] = [];
+  words.forEach((word, at) => {
     const sense = senses.get(word.n) ?? null;
+    const isChosen = chosen !== null && word.n >= chosen.firstWord && word.n <= chosen.lastWord;
     const last = stretches.at(-1);
-    if (last?.sense?.lineId === sense?.lineId && last?.sense?.role === sense?.role && last) last.words.push(word);
-    else stretches.push({ words: [word], sense });
-  }
+    const isSame = last?.sense?.lineId === sense?.lineId && last?.sense?.role === sense?.role;
+    if (last && isSame && last.isChosen === isChosen) last.words.push(word);
+    else stretches.push({ at, words: [word], sense, isChosen });
+  });
   return stretches;
 }
 

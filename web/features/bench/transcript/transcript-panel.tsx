@@ -1,3 +1,7 @@
+import { type Caption } from './captions.ts';
+import { type ChosenWords } from './choose-words.ts';
+import { useChosenWords } from './use-chosen-words.ts';
+import { WordsBar } from './words-bar.tsx';
 import { Search } from 'lucide-react';
 import { type RefObject, useMemo, useRef, useState } from 'react';
 import { usePlayerState } from '../../../parts/player/use-player.ts';
@@ -12,6 +16,10 @@ import { NoTranscript } from './no-transcript.tsx';
 import { RecordingPicker } from './recording-picker.tsx';
 import { useFollow } from './use-follow.ts';
 
+/** Whether some of the chosen words stand in a caption. */
+const touches = ({ words }: Caption, { firstWord, lastWord }: ChosenWords) =>
+  words.some(({ n }) => n >= firstWord && n <= lastWord);
+
 /** What was said, following the clip. Evidence is underlined and leads to its line; any word leads to its moment. */
 export function TranscriptPanel({
   isFinding,
@@ -24,8 +32,9 @@ export function TranscriptPanel({
   field: RefObject<HTMLInputElement | null>;
   cues: Cues;
 }) {
-  const { captions, senses, player, moments, lineId, pick } = useDesk();
+  const { captions, senses, player, moments, lineId, pick, chosenWords } = useDesk();
   const list = useRef<HTMLOListElement>(null);
+  useChosenWords(list);
   const [needle, setNeedle] = useState('');
   const [foundAt, setFoundAt] = useState(0);
   const found = useMemo(() => findCaptions(captions, isFinding ? needle : ''), [captions, needle, isFinding]);
@@ -115,12 +124,14 @@ export function TranscriptPanel({
               knot={knots.has(i) ? (knots.get(i) === lineId && lineId !== null ? 'chosen' : 'other') : null}
               lineId={lineId}
               found={hit === undefined ? null : i === hit ? 'here' : 'elsewhere'}
+              chosen={chosenWords && touches(caption, chosenWords) ? chosenWords : null}
               onSeek={onSeek}
               onSense={onSense}
             />
           ))}
         </ol>
       )}
+      {chosenWords && <WordsBar words={chosenWords} />}
     </section>
   );
 }
