@@ -98,6 +98,7 @@ test('a maker looks over a draft, puts right what was mis-heard, and takes anoth
   await expect.poll(() => page.getByRole('status').allInnerTexts()).toContainEqual(expect.stringMatching(/^Saved/));
   await page.goto(`${server.url}/patterns/${patternId}/recording`);
   await giveTranscript(page, BETTER);
+  await page.getByText('2 places would read otherwise').waitFor();
   await page.getByRole('link', { name: 'Look at what would change' }).click();
   await page.waitForURL(/\/reading\//);
   await page.getByText('written by hand').waitFor();
@@ -109,7 +110,7 @@ test('a maker looks over a draft, puts right what was mis-heard, and takes anoth
     server.db('lines').where({ pattern_id: patternId }).whereNull('deleted_at').pluck<string[]>('text');
   expect(await texts()).toEqual(expect.arrayContaining(['(2 sc, inc) × 4', 'sc evenly around']));
   await page.getByRole('button', { name: 'Undo' }).click();
-  await page.getByText('Undone').waitFor();
+  await page.getByText('Undone', { exact: true }).waitFor();
   expect(await texts()).toContain('(sc, inc) × 6');
   quiet();
 }, 120_000);
