@@ -62,14 +62,29 @@ function main(): void {
   }
   const input = patternOf(300);
   const previous = countPattern(input);
+  for (const [what, text] of [
+    ['a space', `${input.pieces[0]!.lines[150]!.text} `],
+    ['its total', '(2 sc, dec) × 6 (17)'],
+    ['its work, and so the line after it', '(2 sc, dec) × 5, 4 sc (19)'],
+  ] as const) {
+    const edited = withLine(input, 150, text);
+    console.log(`one line of 300 changed in ${what}: ${took(() => countPattern(edited, previous), 40).toFixed(2)} ms`);
+  }
+  const before = process.memoryUsage().heapUsed;
+  const kept = countPattern(patternOf(10_000));
+  const used = (process.memoryUsage().heapUsed - before) / 1024 / 1024;
+  console.log(`10,000 lines counted and kept: about ${used.toFixed(0)} MB (${String(kept.pieces.length)} piece)`);
+  const long: PatternInput = withLine({ ...patternOf(1), base: 50_000 }, 0, '(sc, inc) × 25000 (75000)');
+  const wide = took(() => countPattern(long), 3);
+  console.log(`one line of 75,000 stitches: ${wide.toFixed(0)} ms, ${((wide / 75_000) * 1000).toFixed(1)} µs a stitch`);
+}
+
+function withLine(input: PatternInput, at: number, text: string): PatternInput {
   const [piece] = input.pieces;
-  const edited: PatternInput = {
+  return {
     ...input,
-    pieces: [
-      { ...piece!, lines: piece!.lines.map((line, i) => (i === 150 ? { ...line, text: `${line.text} ` } : line)) },
-    ],
+    pieces: [{ ...piece!, lines: piece!.lines.map((line, i) => (i === at ? { ...line, text } : line)) }],
   };
-  console.log(`one line of 300 changed: ${took(() => countPattern(edited, previous), 20).toFixed(2)} ms`);
 }
 
 main();

@@ -40,12 +40,9 @@ const rows: readonly Row[] = [
   },
   {
     n: 8,
-    lines: [
-      'dc in first, (3 dc in next) 8 times, 2 dc in last',
-      'ch 3, dc in same st, 3 dc in each gap, 2 dc in last st (31)',
-    ],
-    given: { base: 10, worked: 'rows' },
-    answers: ['36 31 agrees'],
+    lines: ['3 dc in each st across', 'ch 3, dc in same st, 3 dc in each gap, 2 dc in last st (28)'],
+    given: { base: 9, worked: 'rows' },
+    answers: ['35 28 agrees'],
   },
   {
     n: 9,
