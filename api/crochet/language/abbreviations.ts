@@ -10,7 +10,14 @@ export interface Abbreviation {
   readonly uk: { readonly abbreviation: string; readonly name: string };
 }
 
-/** The stitches that the lines of a pattern use, with their names in both terms, in the order of the stitch table. */
+/** Words of a place that are abbreviated and no stitches, in the order in which they are listed. */
+const WORDS: readonly (readonly [key: string, abbreviation: string, name: string])[] = [
+  ['back', 'BLO', 'back loops only'],
+  ['front', 'FLO', 'front loops only'],
+  ['st', 'st', 'stitch'],
+];
+
+/** The stitches, loops and places that the lines of a pattern use, with their names in both terms, in the order of the stitch table. */
 export function abbreviationsUsed(input: PatternInput): Abbreviation[] {
   const keys = new Set<string>();
   for (const piece of input.pieces) {
@@ -20,7 +27,12 @@ export function abbreviationsUsed(input: PatternInput): Abbreviation[] {
     }
   }
   const own = new Map((input.specialStitches ?? []).map((stitch) => [keyOf(stitch), stitch]));
-  return [...keys].flatMap((key): Abbreviation[] => {
+  const words = WORDS.filter(([key]) => keys.delete(key)).map(([, abbreviation, name]) => ({
+    abbreviation,
+    name,
+    uk: { abbreviation, name },
+  }));
+  const stitches = [...keys].flatMap((key): Abbreviation[] => {
     const special = own.get(key);
     if (special)
       return [
@@ -33,11 +45,15 @@ export function abbreviationsUsed(input: PatternInput): Abbreviation[] {
     const row = stitchOf(key);
     return row ? [{ abbreviation: row.us[0], name: row.us[1], uk: { abbreviation: row.uk[0], name: row.uk[1] } }] : [];
   });
+  return [...stitches, ...words];
 }
 
 function collect(items: readonly Item[], keys: Set<string>): void {
   for (const item of items) {
-    if (item.type === 'work' && item.stitch !== 'st') keys.add(item.stitch);
+    if (item.type === 'work') keys.add(item.stitch);
+    if ((item.type === 'work' || item.type === 'loops') && item.loops) keys.add(item.loops);
+    if ((item.type === 'work' || item.type === 'group') && item.into?.what === 'st' && !item.into.stitch)
+      keys.add('st');
     if (item.type === 'group') collect(item.items, keys);
   }
 }

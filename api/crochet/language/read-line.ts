@@ -38,7 +38,14 @@ export function readLine(text: string, options: ReadOptions = {}): ReadLine {
   const items = allRound(readItems(reading, lexes.length - 1), lexes);
   const tree: LineTree = { span: { start, end: text.length }, items, loops: loopsOf(items) };
   const total = totalOf(reading);
-  return { tree, total: total?.kinds ?? null, totalSpan: total?.span ?? null, unread: unreadOf(items) };
+  const readAs = lexes.flatMap(({ start: from, end, readAs: as }) => (as ? [{ span: { start: from, end }, as }] : []));
+  return {
+    tree,
+    total: total?.kinds ?? null,
+    totalSpan: total?.span ?? null,
+    unread: unreadOf(items),
+    ...(readAs.length > 0 && { readAs }),
+  };
 }
 
 /** `Rnds 6-16: sc`, `R5: inc (12)`: a line that is only the name of a stitch is that stitch all round. */

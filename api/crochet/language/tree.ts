@@ -180,6 +180,8 @@ export interface ReadLine {
   readonly total: Totals | null;
   readonly totalSpan: Span | null;
   readonly unread: readonly Span[];
+  /** Slips of a scanner or of the fingers, and what they were read as. */
+  readonly readAs?: readonly { readonly span: Span; readonly as: string }[];
 }
 
 /** Totals by kind, one figure a size: `{"sts":[24],"ch-2 sp":[4]}`. "sts" is a plain number. */
