@@ -1,7 +1,8 @@
 import { type Class } from './lexicon/classes.ts';
 import { MISHEARINGS, ORDINARY } from './lexicon/mishearings.ts';
-import { readNumber, type SpokenNumber } from './lexicon/numbers.ts';
+import { readNumber } from './lexicon/numbers.ts';
 import { PHRASES } from './lexicon/phrases.ts';
+import { GUESSES, mendLetter, soundsLikeNumber, soundsLikeUnit } from './sound-likes.ts';
 import { tidyNumbers } from './tidy-numbers.ts';
 import { type Word } from './words.ts';
 
@@ -46,12 +47,16 @@ const SENTENCE_SILENCE = 1500;
 export function tokensOf(words: readonly Word[]): Tokens {
   const corrections: Correction[] = [];
   const atoms = mend(atomsOf(words), corrections);
-  const texts = atoms.map((atom) => atom.text);
+  const texts = atoms.map((atom) => mendLetter(atom.text));
   const joined = (index: number) => atoms[index]?.breakAfter === '';
   const misheard = corrections.length > 1;
   const tokens: Token[] = [];
   for (let at = 0; at < atoms.length;) {
-    const token = numberToken(atoms, texts, at, joined, tokens, misheard) ?? phraseToken(texts, at, joined);
+    const unit = soundsLikeUnit(texts, at, joined, tokens.at(-1));
+    const token =
+      unit === null
+        ? (numberToken(texts, at, joined, tokens, misheard) ?? phraseToken(texts, at, joined))
+        : { token: plain('U', unit, texts[at]!), length: 1 };
     const length = token.length;
     tokens.push({ ...token.token, first: atoms[at]!.word, last: atoms[at + length - 1]!.word });
     at += length;
@@ -136,7 +141,6 @@ const NO_NUMBER =
   /^(?:one of you|second one|one after|one beside|one another|one day|one moment|one more thing|one thing|no one)\b/;
 
 function numberToken(
-  atoms: readonly Atom[],
   texts: readonly string[],
   at: number,
   joined: (index: number) => boolean,
@@ -148,7 +152,7 @@ function numberToken(
   if (text === 'one' && isPronoun(before)) {
     return { token: before.at(-2)?.kind === 'I' ? plain('G', 'st', text) : plain('a', 0, text), length: 1 };
   }
-  const spoken = readNumber(texts, at, joined) ?? soundsLikeNumber(atoms, texts, at, before, misheard);
+  const spoken = readNumber(texts, at, joined) ?? soundsLikeNumber(texts, at, joined(at), before, misheard);
   if (spoken === null) return null;
   // "a hundred": the article belongs to the number, and nothing else begins with one.
   const isGuess = GUESSES.has(text);
@@ -174,44 +178,6 @@ function isPronoun(tokens: readonly Token[]): boolean {
     'OXL'.includes(before.kind) ||
     /^(?:this|that|which|another|any|no|pretty|easy|big|little|good|other)$/.test(before.text)
   );
-}
-
-const GUESSES: ReadonlyMap<string, number> = new Map([
-  ['to', 2],
-  ['too', 2],
-  ['for', 4],
-  ['won', 1],
-  ['ate', 8],
-]);
-const NUMBER_LIKES_AFTER = /^(?:single|double|half|treble|singles|doubles|trebles|plain|together|crochet|more)$/;
-
-/** "To" for two and "for" for four, where what stands beside it makes a number likely. */
-function soundsLikeNumber(
-  atoms: readonly Atom[],
-  texts: readonly string[],
-  at: number,
-  before: readonly Token[],
-  misheard: boolean,
-): SpokenNumber | null {
-  const value = GUESSES.get(texts[at]!);
-  if (value === undefined) return null;
-  const previous = before.at(-1);
-  const next = texts[at + 1] ?? '';
-  const parted = atoms[at]!.breakAfter !== '';
-  const afterName = previous?.kind === 'U' && (previous.value === 'round' || previous.value === 'row');
-  const afterChain = previous?.kind === 'C' && /^(?:chain|chains|ch)$/.test(previous.text);
-  const afterTens = previous?.kind === 'N' && Number(previous.value) % 10 === 0 && Number(previous.value) >= 20;
-  const likely =
-    (afterName && (parted || /^(?:is|and|it|in|i|we|you|single|double|half|magic|um|uh)$/.test(next) || misheard)) ||
-    (value === 2 && next === 'together') ||
-    ('LX'.includes(previous?.kind ?? '.') && /^(?:stitches|chains)$/.test(next)) ||
-    (misheard &&
-      (NUMBER_LIKES_AFTER.test(next) ||
-        (afterChain && !/^(?:the|a|your|make|form|get)$/.test(next)) ||
-        (afterTens && /^(?:stitches|stitch)$/.test(next)) ||
-        (value === 2 && /^(?:in|rounds|rows|inches)$/.test(next)) ||
-        (value === 4 && /^(?:and|inches|in)$/.test(next) && previous?.kind === 'v')));
-  return likely ? { value, isOrdinal: false, length: 1, split: null } : null;
 }
 
 function phraseToken(texts: readonly string[], at: number, joined: (index: number) => boolean): Found {

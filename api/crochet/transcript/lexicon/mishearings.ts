@@ -105,3 +105,15 @@ export const ORDINARY: ReadonlySet<string> = new Set([
   'adjustable loop',
   'yarnover',
 ]);
+
+/** What recognisers make of "round" and "row"; each is a word of its own, so that what stands around it decides. */
+export const UNIT_LIKES: ReadonlyMap<string, 'round' | 'row'> = new Map([
+  ['brown', 'round'],
+  ['around', 'round'],
+  ['ground', 'round'],
+  ['rounded', 'round'],
+  ['roe', 'row'],
+  ['rho', 'row'],
+  ['roll', 'row'],
+  ['road', 'row'],
+]);
