@@ -13,6 +13,7 @@ export const Entity = z.enum([
   'caution',
   'note',
   'special-stitch',
+  'left-check',
   'recording',
 ]);
 export type Entity = z.infer<typeof Entity>;

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { CheckAnswer } from './checks.ts';
 import { Visibility } from './patterns.ts';
 import { LineKind, Terms, Verdict, Worked } from './rows.ts';
 
@@ -128,6 +129,8 @@ export const PublishDesk = z.object({
   counted: z.int(),
   agreeing: z.int(),
   blocks: z.array(Block),
+  /** What the automatic checks find and nobody has settled; none of it holds the edition back. */
+  checks: z.array(CheckAnswer),
   /** Signs that none of the sheet's fonts has; they would be left out. */
   unprintable: z.array(z.string()),
   countsChanged: z.boolean(),

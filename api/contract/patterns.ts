@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { LeftCheck } from './checks.ts';
 import { Caution, Details, Material, Note, SpecialStitch } from './pattern-details.ts';
 import { Evidence, Line, Mark, Piece, Terms } from './rows.ts';
 
@@ -67,6 +68,7 @@ export const Pattern = PatternHead.extend({
   cautions: z.array(Caution),
   notes: z.array(Note),
   specialStitches: z.array(SpecialStitch),
+  leftChecks: z.array(LeftCheck),
 });
 export type Pattern = z.infer<typeof Pattern>;
 

@@ -71,6 +71,7 @@ const aPattern = (): Pattern => ({
   cautions: [],
   notes: [],
   specialStitches: [],
+  leftChecks: [],
 });
 
 /** A server that keeps rows with versions, and can be made to fail or to answer when told. */

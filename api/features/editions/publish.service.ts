@@ -6,6 +6,7 @@ import { AppError } from '../../http/problem.ts';
 import type { Person } from '../../http/session.ts';
 import { addJob } from '../../platform/jobs.ts';
 import { openPattern, writeFields, type Asking } from '../patterns/deed.service.ts';
+import { listChecks } from '../patterns/checks.service.ts';
 import { findSeenPattern } from '../patterns/document.service.ts';
 import { setPatternState } from '../patterns/patterns.service.ts';
 import { missingSigns } from '../sheet/sheet.service.ts';
@@ -54,6 +55,7 @@ export async function readPublishDesk(db: Knex, who: Person, patternId: string):
     counted: lines.filter(({ kind }) => kind === 'round' || kind === 'row').length,
     agreeing: lines.filter((line) => line.studio.verdict === 'agrees').length,
     blocks: blocksOf(document).map(answerBlock),
+    checks: listChecks(content).open,
     unprintable: [...missingSigns(document)],
     countsChanged: difference.countsChanged,
     errata: [...difference.errata],

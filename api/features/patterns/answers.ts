@@ -1,5 +1,6 @@
 import type { ZodType } from 'zod';
 import { Material, Note, SpecialStitch } from '#contract/pattern-details';
+import { LeftCheck } from '#contract/checks';
 import { Line, Mark, Piece } from '#contract/rows';
 import { z } from 'zod';
 import { CautionKind } from '#contract/pattern-details';
@@ -23,4 +24,5 @@ export const ANSWERS: Readonly<Record<RowEntity, ZodType>> = {
   caution: CautionRow,
   note: Note,
   'special-stitch': SpecialStitch,
+  'left-check': LeftCheck,
 };

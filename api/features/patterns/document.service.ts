@@ -41,6 +41,7 @@ async function readContent(trx: Knex, pattern: PatternRow): Promise<PatternConte
     cautions: joinCautions({ pattern, materials, lines }, await read('caution')),
     notes: await read('note'),
     specialStitches: await read('special-stitch'),
+    leftChecks: await read('left-check'),
   };
   return content as unknown as PatternContent;
 }

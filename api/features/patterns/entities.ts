@@ -7,6 +7,8 @@ export interface EntityTable {
   readonly columns: Readonly<Record<string, string>>;
   /** The field whose rows stand in one order together; null where there is no order. */
   readonly orderedWithin: 'patternId' | 'pieceId' | null;
+  /** Columns by which rows are listed; the id settles what is alike. */
+  readonly listedBy?: string;
 }
 
 const PLACED = { orderKey: 'order_key' } as const;
@@ -16,6 +18,7 @@ const ofPattern = (table: string, ...fields: string[]): EntityTable => ({
   table,
   columns: { ...Object.fromEntries(fields.map((field) => [field, field])), ...PLACED, ...DELETED },
   orderedWithin: 'patternId',
+  listedBy: 'order_key',
 });
 
 /** Rows that belong to a pattern and are made, edited and taken away one by one. */
@@ -43,6 +46,7 @@ export const TABLES: Readonly<Record<Exclude<Entity, 'recording'>, EntityTable>>
       ...DELETED,
     },
     orderedWithin: 'patternId',
+    listedBy: 'order_key',
   },
   line: {
     table: 'lines',
@@ -66,6 +70,7 @@ export const TABLES: Readonly<Record<Exclude<Entity, 'recording'>, EntityTable>>
       ...DELETED,
     },
     orderedWithin: 'pieceId',
+    listedBy: 'order_key',
   },
   mark: {
     table: 'marks',
@@ -81,10 +86,16 @@ export const TABLES: Readonly<Record<Exclude<Entity, 'recording'>, EntityTable>>
       ...DELETED,
     },
     orderedWithin: null,
+    listedBy: 'start_ms',
   },
   material: ofPattern('materials', 'kind', 'name', 'details'),
   caution: ofPattern('cautions', 'kind', 'text'),
   note: ofPattern('notes', 'text'),
+  'left-check': {
+    table: 'left_checks',
+    columns: { kind: 'kind', subject: 'subject', says: 'says', reason: 'reason', ...DELETED },
+    orderedWithin: null,
+  },
   'special-stitch': ofPattern('special_stitches', 'name', 'abbreviation', 'text'),
 };
 

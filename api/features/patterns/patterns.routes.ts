@@ -1,5 +1,6 @@
 import { Router } from 'express';
 import { Pattern, PatternCreate, PatternEdit, PatternHead, PatternStateChange } from '#contract/patterns';
+import { CheckList } from '#contract/checks';
 import { Shelf, ShelfQuery } from '#contract/shelf';
 import { WrittenPattern } from '#contract/written';
 import { idempotent } from '../../http/idempotency.ts';
@@ -9,6 +10,7 @@ import { answer } from '../../http/problem.ts';
 import { signedIn } from '../../http/session.ts';
 import type { Deps } from '../../platform/deps.ts';
 import { askingIn, idIn, tellDeed } from '../../http/asking.ts';
+import { readChecks } from './checks.service.ts';
 import { readPattern } from './document.service.ts';
 import { duplicatePattern } from './duplicate.service.ts';
 import { historyRoutes } from './history.routes.ts';
@@ -44,6 +46,10 @@ export function patternRoutes(deps: Deps): Router {
   router.get('/patterns/:patternId', async (req, res) => {
     const pattern = await readPattern(db, signedIn(req), idIn(req, 'patternId'));
     sendVersioned(res, answer(Pattern, pattern), pattern.version);
+  });
+
+  router.get('/patterns/:patternId/checks', async (req, res) => {
+    res.json(answer(CheckList, await readChecks(db, signedIn(req), idIn(req, 'patternId'))));
   });
 
   router.patch('/patterns/:patternId', async (req, res) => {

@@ -10,6 +10,7 @@ import {
   SpecialStitchCreate,
   SpecialStitchEdit,
 } from '#contract/pattern-details';
+import { LeftCheckCreate, LeftCheckEdit } from '#contract/checks';
 import { LineCreate, LineEdit, MarkCreate, MarkEdit, PieceCreate, PieceEdit } from '#contract/rows';
 import { ifMatchVersion, sendVersioned } from '../../http/preconditions.ts';
 import { answer } from '../../http/problem.ts';
@@ -34,6 +35,7 @@ const KINDS: readonly Kind[] = [
   { path: 'cautions', entity: 'caution', create: CautionCreate, edit: CautionEdit },
   { path: 'notes', entity: 'note', create: NoteCreate, edit: NoteEdit },
   { path: 'special-stitches', entity: 'special-stitch', create: SpecialStitchCreate, edit: SpecialStitchEdit },
+  { path: 'left-checks', entity: 'left-check', create: LeftCheckCreate, edit: LeftCheckEdit },
 ];
 
 function kindRoutes(deps: Deps, { path, entity, create, edit }: Kind): Router {

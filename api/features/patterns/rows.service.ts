@@ -35,6 +35,7 @@ const DEFAULTS: Readonly<Record<RowEntity, Fields>> = {
   caution: {},
   note: {},
   'special-stitch': { abbreviation: '' },
+  'left-check': {},
 };
 
 const withinOf = (entity: RowEntity, patternId: string, pieceId: unknown) =>

@@ -36,7 +36,7 @@ export async function findRow(db: Knex, entity: Written, id: string): Promise<Ro
 export async function listRows(db: Knex, entity: RowEntity, patternId: string): Promise<Row[]> {
   const spec = TABLES[entity];
   const rows = db<Raw>(spec.table).where({ pattern_id: patternId }).whereNull('deleted_at');
-  const ordered = spec.orderedWithin === null ? rows.orderBy(['start_ms', 'id']) : rows.orderBy(['order_key', 'id']);
+  const ordered = rows.orderBy([spec.listedBy ?? 'id', 'id']);
   return (await ordered.select<Raw[]>('*')).map((raw) => toRow(spec, raw));
 }
 

@@ -74,6 +74,10 @@ export const patterns: Record<string, Entry> = {
       body: { lineId: null },
     }),
   },
+  'GET /api/patterns/:patternId/checks': {
+    expect: members(200),
+    ask: async (world) => ({ url: `/api/patterns/${(await world.pattern()).id}/checks` }),
+  },
   'GET /api/patterns/:patternId/changes': {
     expect: members(200),
     ask: async (world) => ({ url: `/api/patterns/${(await world.pattern()).id}/changes` }),

@@ -8,6 +8,10 @@ const KINDS: Record<string, { make: object; edit: object }> = {
   materials: { make: { kind: 'hook', name: 'Hook' }, edit: { name: 'Other hook' } },
   cautions: { make: { text: 'Short cords.' }, edit: { text: 'Shorter cords.' } },
   notes: { make: { text: 'Right side out.' }, edit: { text: 'Right side in.' } },
+  'left-checks': {
+    make: { kind: 'hook-missing', says: '0123456789abcdef', reason: 'Any hook will do.' },
+    edit: { reason: 'Any hook at all will do.' },
+  },
   'special-stitches': { make: { name: 'Knot', text: 'ch 3' }, edit: { text: 'ch 4' } },
 };
 export const rows: Record<string, Entry> = {};

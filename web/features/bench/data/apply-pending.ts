@@ -25,6 +25,7 @@ const DEFAULTS: Readonly<Record<RowKind, Fields>> = {
   caution: { kind: 'own' },
   note: {},
   'special-stitch': { abbreviation: '' },
+  'left-check': { subject: '' },
 };
 
 /** One mark of a line is its main one: where one becomes it, the other is it no longer. */
@@ -39,7 +40,7 @@ function keepOneMain(pattern: Pattern, mark: AnyRow): Pattern {
 function place(pattern: Pattern, kind: RowKind, row: AnyRow, fields: Fields): AnyRow {
   const { after, ...rest } = { ...row, ...fields } as AnyRow & { after?: string | null };
   const moves = 'after' in fields || row.orderKey === undefined || (kind === 'line' && row.pieceId !== rest.pieceId);
-  if (kind === 'mark' || !moves) return rest;
+  if (kind === 'mark' || kind === 'left-check' || !moves) return rest;
   return { ...rest, orderKey: localKey(pattern, kind, rest, after) };
 }
 

@@ -22,6 +22,7 @@ const PATHS: Readonly<Record<RowKind, string>> = {
   caution: 'cautions',
   note: 'notes',
   'special-stitch': 'special-stitches',
+  'left-check': 'left-checks',
 };
 
 // The server has parsed its answer by the contract; here only what every row has is looked at.

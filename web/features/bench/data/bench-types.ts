@@ -1,4 +1,5 @@
 import type { LineCount, PatternCount } from '#crochet';
+import type { LeftCheck, LeftCheckCreate, LeftCheckEdit } from '#contract/checks';
 import type {
   Caution,
   CautionCreate,
@@ -34,6 +35,7 @@ export interface RowTypes {
   caution: { row: Caution; create: CautionCreate; edit: Edit<Pick<CautionCreate, 'text'>> };
   note: { row: Note; create: NoteCreate; edit: Edit<NoteCreate> };
   'special-stitch': { row: SpecialStitch; create: SpecialStitchCreate; edit: Edit<SpecialStitchCreate> };
+  'left-check': { row: LeftCheck; create: LeftCheckCreate; edit: LeftCheckEdit };
 }
 export type RowKind = keyof RowTypes;
 /** Rows, and the pattern's own (title, terms, sizes, details). */

@@ -11,6 +11,7 @@ export const LISTS = {
   caution: 'cautions',
   note: 'notes',
   'special-stitch': 'specialStitches',
+  'left-check': 'leftChecks',
 } as const satisfies Readonly<Record<RowKind, keyof Pattern>>;
 
 export type AnyRow = Fields & { readonly id: string; readonly version: number };

@@ -12,6 +12,7 @@ const KINDS: Record<Conflict['kind'], string> = {
   caution: 'a caution',
   note: 'a note',
   'special-stitch': 'a special stitch',
+  'left-check': 'a check that was left',
 };
 
 /** What the clash is about, by the name it has on the bench: `R9`, `Body`, `the moment at 12:46.2`. */
