@@ -131,6 +131,17 @@ CREATE SEQUENCE public.knex_migrations_lock_index_seq
 
 ALTER SEQUENCE public.knex_migrations_lock_index_seq OWNED BY public.knex_migrations_lock.index;
 
+CREATE TABLE public.left_checks (
+    id uuid DEFAULT gen_random_uuid() NOT NULL,
+    pattern_id uuid NOT NULL,
+    kind text NOT NULL,
+    subject text DEFAULT ''::text NOT NULL,
+    says text NOT NULL,
+    reason text NOT NULL,
+    deleted_at timestamp with time zone,
+    version integer DEFAULT 1 NOT NULL
+);
+
 CREATE TABLE public.line_evidence (
     id uuid DEFAULT gen_random_uuid() NOT NULL,
     line_id uuid NOT NULL,
@@ -504,6 +515,9 @@ ALTER TABLE ONLY public.knex_migrations_lock
 ALTER TABLE ONLY public.knex_migrations
     ADD CONSTRAINT knex_migrations_pkey PRIMARY KEY (id);
 
+ALTER TABLE ONLY public.left_checks
+    ADD CONSTRAINT left_checks_pkey PRIMARY KEY (id);
+
 ALTER TABLE ONLY public.line_evidence
     ADD CONSTRAINT line_evidence_pkey PRIMARY KEY (id);
 
@@ -619,6 +633,8 @@ CREATE INDEX editions_published_by ON public.editions USING btree (published_by)
 
 CREATE INDEX errata_line_id ON public.errata USING btree (line_id);
 
+CREATE INDEX left_checks_pattern_id ON public.left_checks USING btree (pattern_id);
+
 CREATE INDEX line_evidence_hearing_id ON public.line_evidence USING btree (hearing_id);
 
 CREATE INDEX line_evidence_line_id ON public.line_evidence USING btree (line_id);
@@ -717,6 +733,9 @@ ALTER TABLE ONLY public.errata
 
 ALTER TABLE ONLY public.errata
     ADD CONSTRAINT errata_line_id_fkey FOREIGN KEY (line_id) REFERENCES public.lines(id) ON DELETE SET NULL;
+
+ALTER TABLE ONLY public.left_checks
+    ADD CONSTRAINT left_checks_pattern_id_fkey FOREIGN KEY (pattern_id) REFERENCES public.patterns(id) ON DELETE CASCADE;
 
 ALTER TABLE ONLY public.line_evidence
     ADD CONSTRAINT line_evidence_line_id_fkey FOREIGN KEY (line_id) REFERENCES public.lines(id) ON DELETE CASCADE;
