@@ -22,6 +22,7 @@ const BENCH: readonly Row[] = [
   [['P'], 'hear what was said for it'],
   [['N'], 'next line to look at'],
   [['W'], 'choose the words that are spoken'],
+  [['C'], 'the automatic checks'],
   [['↑', '↓'], 'line above, below'],
   [['Enter'], 'open the line, done with it'],
   [['Ctrl', 'Enter'], 'use the suggestion'],

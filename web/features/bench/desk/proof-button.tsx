@@ -1,8 +1,10 @@
+import { useId } from 'react';
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { PatternHead } from '#contract/patterns';
 import { ProblemError, send } from '../../../lib/http.ts';
 import { Button } from '../../../ui/button.tsx';
 import { useToast } from '../../../ui/toast.tsx';
+import { openWords } from '../checks/use-checks.ts';
 import { patternQuery } from '../data/bench.queries.ts';
 import { tallyVerdicts } from './bench-count.ts';
 import { useDesk } from './use-desk.ts';
@@ -11,7 +13,7 @@ type Next = 'drafting' | 'in-proof';
 
 /** On to the editor, saying what that leaves open; or back to the bench. */
 export function ProofButton() {
-  const { pattern, counts, bench } = useDesk();
+  const { pattern, counts, bench, checks } = useDesk();
   const client = useQueryClient();
   const toast = useToast();
   const left = tallyVerdicts(pattern.lines, counts).reduce(
@@ -19,6 +21,8 @@ export function ProofButton() {
     0,
   );
   const isInProof = pattern.state === 'in-proof';
+  const open = openWords(left, checks);
+  const leavesId = useId();
 
   const move = useMutation({
     mutationFn: async (state: Next) => {
@@ -27,8 +31,8 @@ export function ProofButton() {
       return send(PatternHead, `/api/patterns/${pattern.id}/state`, { method: 'POST', version: pattern.version, body });
     },
     onSuccess: (_head, state) => {
-      const open = left === 0 ? '' : `, with ${left} ${left === 1 ? 'line' : 'lines'} still to look at`;
-      toast(state === 'in-proof' ? `Sent to proof${open}` : 'Back at the bench');
+      const still = open === '' ? '' : `, with ${open} still open`;
+      toast(state === 'in-proof' ? `Sent to proof${still}` : 'Back at the bench');
     },
     onSettled: () => client.invalidateQueries({ queryKey: patternQuery(pattern.id).queryKey }),
   });
@@ -43,7 +47,15 @@ export function ProofButton() {
           {move.error instanceof ProblemError ? move.error.message : 'The server did not answer. Nothing has changed.'}
         </span>
       )}
+      {open !== '' && !isInProof && !empty && (
+        <span id={leavesId} className="small text-right leading-[15px] whitespace-nowrap text-walnut2 max-xl:sr-only">
+          leaves open
+          <br />
+          {open}
+        </span>
+      )}
       <Button
+        aria-describedby={open === '' || isInProof ? undefined : leavesId}
         kind={isInProof ? 'plain' : 'primary'}
         notYet={notYet}
         onClick={() => move.mutate(isInProof ? 'drafting' : 'in-proof')}

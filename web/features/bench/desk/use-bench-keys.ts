@@ -45,6 +45,7 @@ export function useBenchKeys(desk: Desk, doors: KeyDoors): void {
     N: () => walkFaults(desk),
     W: () => chooseSpoken(desk),
     P: () => hearLine(desk),
+    C: () => desk.showChecks(!desk.isChecking),
     ArrowUp: () => walkLines(desk, -1),
     ArrowDown: () => walkLines(desk, 1),
     'Alt+ArrowUp': move(-1),

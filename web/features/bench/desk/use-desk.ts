@@ -5,6 +5,7 @@ import { type Line, type Mark } from '#contract/rows';
 import { type Player } from '../../../parts/player/create-player.ts';
 import { useNewPlayer } from '../../../parts/player/use-player.ts';
 import { useToast } from '../../../ui/toast.tsx';
+import { type PatternChecks, useChecks } from '../checks/use-checks.ts';
 import { type Bench } from '../data/bench-types.ts';
 import { type Caption, readCaptions, sensesOf, type WordSense } from '../transcript/captions.ts';
 import { type ChosenWords } from '../transcript/choose-words.ts';
@@ -36,6 +37,10 @@ export interface Desk {
   readonly lastMs: number;
   /** Puts the playhead on the line's moment, in whichever recording it is. */
   readonly goTo: (lineId: string) => void;
+  readonly checks: PatternChecks;
+  /** Whether the list of checks is shown. */
+  readonly isChecking: boolean;
+  readonly showChecks: (isShown: boolean) => void;
   /** Says what was done, with its Undo. */
   readonly tellDone: (words: string) => void;
 }
@@ -76,6 +81,9 @@ export function useNewDesk(bench: Bench, cuesByRecording: CuesByRecording, start
   );
   const moments = useMemo(() => momentsOf(pattern.marks, recordingId), [pattern.marks, recordingId]);
 
+  const checks = useChecks(bench);
+  const [isChecking, showChecks] = useState(false);
+
   const player = useNewPlayer();
   const lastMs = Math.max(recording?.durationMs ?? 0, captions.at(-1)?.endMs ?? 0, moments.at(-1)?.startMs ?? 0);
   useEffect(() => player.setDuration(lastMs), [player, lastMs]);
@@ -102,6 +110,9 @@ export function useNewDesk(bench: Bench, cuesByRecording: CuesByRecording, start
     senses,
     moments,
     lastMs,
+    checks,
+    isChecking,
+    showChecks,
     goTo: (id) => {
       const mark = mainMark(pattern.marks, id);
       if (!mark) return;

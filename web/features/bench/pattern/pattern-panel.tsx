@@ -11,6 +11,7 @@ import { sortableKeyboardCoordinates } from '@dnd-kit/sortable';
 import { Plus } from 'lucide-react';
 import { useEffect, useRef } from 'react';
 import { Button } from '../../../ui/button.tsx';
+import { ChecksPanel } from '../checks/checks-panel.tsx';
 import { lineName } from '../desk/line-name.ts';
 import { lineOf, useDesk } from '../desk/use-desk.ts';
 import { ClashBox } from './clash-box.tsx';
@@ -55,7 +56,8 @@ export function PatternPanel() {
       <h2 id="pattern-heading" className="sr-only">
         Pattern
       </h2>
-      <Tally />
+      <Tally checksId="checks" />
+      {desk.isChecking && <ChecksPanel id="checks" />}
       {bench.conflicts.length > 0 && (
         <div className="max-h-[45%] flex-none overflow-y-auto border-b border-rule">
           {bench.conflicts.map((conflict) => (

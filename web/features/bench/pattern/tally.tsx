@@ -6,7 +6,7 @@ import { useDesk } from '../desk/use-desk.ts';
 import { walkFaults } from '../desk/walking.ts';
 
 /** How many lines came out how, worst first, and the way to the next that wants a look. */
-export function Tally() {
+export function Tally({ checksId }: { checksId: string }) {
   const desk = useDesk();
   const tally = tallyVerdicts(desk.pattern.lines, desk.counts);
   const n = desk.pattern.lines.length;
@@ -28,13 +28,25 @@ export function Tally() {
           </li>
         ))}
       </ul>
+      <span className="grow" />
+      <Button
+        kind="quiet"
+        size="row"
+        keys={['C']}
+        aria-expanded={desk.isChecking}
+        aria-controls={desk.isChecking ? checksId : undefined}
+        className="-mx-2 text-walnut2! max-sm:[&_kbd]:hidden"
+        onClick={() => desk.showChecks(!desk.isChecking)}
+      >
+        Checks <b className="text-walnut">{desk.checks.open.length}</b>
+      </Button>
       {left > 0 && (
         <>
           <Button
             kind="quiet"
             size="row"
             keys={['N']}
-            className="ml-auto text-walnut2! max-sm:hidden"
+            className="-mr-2 text-walnut2! max-sm:hidden"
             onClick={() => walkFaults(desk)}
           >
             Next
@@ -42,7 +54,7 @@ export function Tally() {
           <IconButton
             icon={ArrowDown}
             label="Next line to look at"
-            className="-mr-2 ml-auto min-w-9! text-woad sm:hidden"
+            className="-mr-2 min-w-9! text-woad sm:hidden"
             onClick={() => walkFaults(desk)}
           />
         </>
