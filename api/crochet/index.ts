@@ -36,6 +36,8 @@ export { abbreviationsUsed, type Abbreviation } from './language/abbreviations.t
 export { repairsFor } from './count/repairs.ts';
 export { readPattern } from './language/pattern/read-pattern.ts';
 export { countReport, inputOf } from './count/report.ts';
+export { HOOKS, hookLabel, type HookSize } from './trade/hooks.ts';
+export { YARN_WEIGHTS, type YarnWeight } from './trade/yarn-weights.ts';
 export type * from './checks/source.ts';
 export { CHECK_KINDS, type Check, type CheckChange, type CheckKind, type CheckRef, type Mend } from './checks/check.ts';
 export { checkPattern, settleChecks, type Checked, type LeftCheck } from './checks/check-pattern.ts';

@@ -32,7 +32,7 @@ const left = () =>
 async function tabTo(page: Page, name: string): Promise<void> {
   for (let presses = 0; presses < 60; presses += 1) {
     await page.keyboard.press('Tab');
-    const here = await page.evaluate(() => document.activeElement?.textContent?.trim());
+    const here = await page.evaluate(() => document.activeElement?.textContent.trim());
     if (here === name) return;
   }
   throw new Error(`Tab never came to ${name}`);
@@ -45,16 +45,16 @@ test('by keyboard alone: a check is mended and undone, another left with its rea
 
   await page.keyboard.press('c');
   const panel = page.getByRole('region', { name: 'Automatic checks' });
-  await expect.poll(() => panel.getByRole('status').innerText()).toBe('4 open, 0 left as they are');
+  await expect.poll(() => panel.getByRole('status').innerText()).toBe('4 open, 0 left');
   expect(await axeFindings(page)).toEqual([]);
 
   await tabTo(page, 'Add filling');
   await page.keyboard.press('Enter');
   await expect.poll(materials).toEqual(['Filling']);
-  await expect.poll(() => panel.getByRole('status').innerText()).toBe('3 open, 0 left as they are');
+  await expect.poll(() => panel.getByRole('status').innerText()).toBe('3 open, 0 left');
   await page.keyboard.press('Control+z');
   await expect.poll(materials).toEqual([]);
-  await expect.poll(() => panel.getByRole('status').innerText()).toBe('4 open, 0 left as they are');
+  await expect.poll(() => panel.getByRole('status').innerText()).toBe('4 open, 0 left');
 
   await panel.focus();
   await tabTo(page, 'Leave as it is');
@@ -62,7 +62,7 @@ test('by keyboard alone: a check is mended and undone, another left with its rea
   await page.keyboard.type('Scraps of yarn will do.');
   await page.keyboard.press('Enter');
   await expect.poll(left).toEqual(['Scraps of yarn will do.']);
-  await expect.poll(() => panel.getByRole('status').innerText()).toBe('3 open, 1 left as they are');
+  await expect.poll(() => panel.getByRole('status').innerText()).toBe('3 open, 1 left');
   expect(await axeFindings(page)).toEqual([]);
 
   await tabTo(page, 'A step of Body');
@@ -92,7 +92,7 @@ test('on a phone the list fits and can be used', async () => {
   const { page, quiet } = await openAs(browser, server.url, mouse.house.editor, PHONE);
   await page.goto(bench());
   await page.getByRole('button', { name: /^Checks/ }).tap();
-  await page.getByText('Automatic checks').waitFor();
+  await page.getByRole('heading', { name: 'Automatic checks' }).waitFor();
   expect(await page.evaluate(() => document.documentElement.scrollWidth <= innerWidth)).toBe(true);
   expect(await axeFindings(page)).toEqual([]);
   quiet();

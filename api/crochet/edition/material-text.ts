@@ -1,3 +1,5 @@
+import { hookLabel } from '../trade/hooks.ts';
+import { weightName } from '../trade/yarn-weights.ts';
 import type { EditionMaterial } from './document.ts';
 
 /** A material as it is stored: what is not known is left out. */
@@ -13,13 +15,13 @@ export interface SourceMaterial {
   };
 }
 
-const WEIGHTS = ['lace', 'super fine', 'fine', 'light', 'medium', 'bulky', 'super bulky', 'jumbo'] as const;
-
-/** "DK cotton, wheat: weight 3, light; 12 m" · "Hook 2.5 mm" · "Safety eyes 6 mm, 2". */
-export function materialText({ name, details }: SourceMaterial): string {
+/** "DK cotton, wheat: weight 3, light; 12 m" · "Hook 3.5 mm (US E-4)" · "Safety eyes 6 mm, 2". */
+export function materialText({ kind, name, details }: SourceMaterial): string {
   const { amount, colour, weight, sizeMm } = details;
-  const size = sizeMm === undefined || name.includes(`${sizeMm} mm`) ? name : `${name} ${sizeMm} mm`;
+  const inMm = sizeMm === undefined || name.includes(`${sizeMm} mm`) ? name : `${name} ${sizeMm} mm`;
+  const label = kind === 'hook' && sizeMm !== undefined && !name.includes('(') ? hookLabel(sizeMm) : '';
+  const size = label === '' ? inMm : `${inMm} (${label})`;
   const what = [size, colour].filter(Boolean).join(', ');
-  const grade = weight === undefined ? '' : `: weight ${weight}, ${WEIGHTS[weight] ?? ''}`;
+  const grade = weight === undefined ? '' : `: weight ${weight}, ${weightName(weight)}`;
   return `${what}${grade}${amount ? `${grade ? '; ' : ', '}${amount}` : ''}`;
 }

@@ -46,7 +46,7 @@ describe('a pattern as it goes out', () => {
     const edition = buildEdition(mouseSource());
     expect(edition.materials.map(({ text }) => text)).toEqual([
       'DK cotton, wheat: weight 3, light; 12 m',
-      'Hook 2.5 mm',
+      'Hook 2.5 mm (old UK 12)',
       'Safety eyes 6 mm, 2',
     ]);
     const sc = edition.abbreviations.find(({ abbreviation }) => abbreviation.US === 'sc');

@@ -1,4 +1,5 @@
 import { Trash2 } from 'lucide-react';
+import { hookLabel, YARN_WEIGHTS } from '#crochet';
 import type { Material } from '#contract/pattern-details';
 import { Button, IconButton } from '../../ui/button.tsx';
 import { SelectField } from '../../ui/field.tsx';
@@ -6,7 +7,6 @@ import { KeptField } from '../../ui/kept-field.tsx';
 import type { SheetDesk } from './sheet-desk.ts';
 
 const KINDS = { yarn: 'Yarn', hook: 'Hook', notion: 'Notion', filling: 'Filling' } as const;
-const WEIGHTS = ['lace', 'super fine', 'fine', 'light', 'medium', 'bulky', 'super bulky', 'jumbo'];
 
 /** Yarn, hook, notions and filling: a row each. What brings a caution brings it by itself. */
 export function MaterialsLedger({ desk }: { desk: SheetDesk }) {
@@ -55,6 +55,7 @@ function MaterialRow({ material, desk }: { material: Material; desk: SheetDesk }
     );
     desk.edit('material', id, { details: next });
   };
+  const hook = kind === 'hook' && details.sizeMm !== undefined ? hookLabel(details.sizeMm) : '';
   const sized = kind === 'hook' || kind === 'notion';
   return (
     <li className="flex flex-wrap items-end gap-2 border-b border-feint px-3.5 py-2">
@@ -87,9 +88,9 @@ function MaterialRow({ material, desk }: { material: Material; desk: SheetDesk }
               onChange={({ target }) => set({ weight: target.value === '' ? undefined : Number(target.value) })}
             >
               <option value="">not said</option>
-              {WEIGHTS.map((weight, n) => (
-                <option key={weight} value={n}>
-                  {n}, {weight}
+              {YARN_WEIGHTS.map((weight) => (
+                <option key={weight.number} value={weight.number}>
+                  {weight.number}, {weight.name}
                 </option>
               ))}
             </SelectField>
@@ -108,6 +109,7 @@ function MaterialRow({ material, desk }: { material: Material; desk: SheetDesk }
           />
         </div>
       )}
+      {hook !== '' && <span className="min-w-28 pb-2 text-walnut2">{hook}</span>}
       {kind !== 'hook' && (
         <div className="w-28">
           <KeptField

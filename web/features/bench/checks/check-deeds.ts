@@ -6,8 +6,7 @@ import { type Desk } from '../desk/use-desk.ts';
 function make(bench: Bench, change: CheckChange): void {
   if (change.op === 'edit-pattern') bench.editPattern(change.fields);
   else if (change.op === 'remove') bench.remove(change.row, change.id);
-  else if (change.op === 'edit')
-    bench.edit(change.row, change.id, change.fields);
+  else if (change.op === 'edit') bench.edit(change.row, change.id, change.fields);
   else bench.add(change.row, change.fields as unknown as RowTypes[typeof change.row]['create']);
 }
 

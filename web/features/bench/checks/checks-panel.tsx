@@ -1,5 +1,6 @@
 import { X } from 'lucide-react';
 import { useEffect, useRef, useState } from 'react';
+import { cx } from '../../../lib/class-names.ts';
 import { IconButton } from '../../../ui/button.tsx';
 import { TickBox } from '../../../ui/field.tsx';
 import { useDesk } from '../desk/use-desk.ts';
@@ -29,17 +30,23 @@ export function ChecksPanel({ id }: { id: string }) {
           Automatic checks
         </h3>
         <span role="status" className="text-walnut2">
-          {open.length} open, {left.length} left as they are
+          {open.length} open, {left.length} left
         </span>
-        <span className="grow" />
+        <IconButton
+          icon={X}
+          label="Close the checks"
+          className={cx('ml-auto sm:order-last', advice.length > 0 && 'sm:ml-0')}
+          onClick={() => showChecks(false)}
+        />
         {advice.length > 0 && (
-          <TickBox
-            checked={wantsAdvice}
-            onChange={(event) => setWantsAdvice(event.target.checked)}
-            label={`Advice too (${advice.length})`}
-          />
+          <span className="max-sm:order-last max-sm:w-full sm:ml-auto">
+            <TickBox
+              checked={wantsAdvice}
+              onChange={(event) => setWantsAdvice(event.target.checked)}
+              label={`Advice too (${advice.length})`}
+            />
+          </span>
         )}
-        <IconButton icon={X} label="Close the checks" onClick={() => showChecks(false)} />
       </div>
       <ul className="min-h-0 overflow-y-auto" aria-label="Findings">
         {open.map((check) => (

@@ -49,8 +49,7 @@ export function ProofButton() {
       )}
       {open !== '' && !isInProof && !empty && (
         <span id={leavesId} className="small text-right leading-[15px] whitespace-nowrap text-walnut2 max-xl:sr-only">
-          leaves open
-          <br />
+          leaves open <br />
           {open}
         </span>
       )}
