@@ -60,7 +60,7 @@ export const CheckList = z.object({
 export type CheckList = z.infer<typeof CheckList>;
 
 /** The part of a pattern that the checks look at. */
-export interface Checkable extends Omit<Counted, 'lines'> {
+interface Checkable extends Omit<Counted, 'lines'> {
   readonly title: string;
   readonly lines: readonly Line[];
   readonly details: Details;

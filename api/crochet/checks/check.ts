@@ -55,7 +55,7 @@ export interface CheckRef {
 
 type Fields = Readonly<Record<string, unknown>>;
 /** Rows of a pattern that a mend writes to, by the names they have in the change log. */
-export type MendedRow = 'line' | 'mark' | 'material' | 'caution' | 'note';
+type MendedRow = 'line' | 'mark' | 'material' | 'caution' | 'note';
 
 /** One typed edit of a mend, in the fields that the pattern's rows have. */
 export type CheckChange =

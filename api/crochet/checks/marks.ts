@@ -3,13 +3,13 @@ import { isCounted, refsOf, type Scan, type ScanLine } from './scan.ts';
 import { type CheckMark } from './source.ts';
 
 /** A line with its printed moment. */
-export interface Marked {
+interface Marked {
   readonly at: ScanLine;
   readonly mark: CheckMark;
 }
 
 /** Every line's main mark, in the order of the lines. A line that was not filmed has none to speak of. */
-export function markedLines(scan: Scan): Marked[] {
+function markedLines(scan: Scan): Marked[] {
   const marks = new Map<string, CheckMark>();
   for (const mark of scan.source.marks) {
     const known = mark.lineId === null ? undefined : marks.get(mark.lineId);
