@@ -1,13 +1,11 @@
 import { stitchOf } from '../stitches.ts';
-import { keyOf } from '../language/special.ts';
+import { ownForms } from '../language/special.ts';
 import { type Check, finding, listed, many } from './check.ts';
 import { worksIn } from './naming.ts';
 import { refsOf, type Scan, type ScanLine } from './scan.ts';
 
-/** Shorthand of the trade that is no stitch, so that the list of stitches used does not explain it. */
+/** Shorthand of the trade that the list of stitches, loops and places used does not explain. */
 const SHORTHAND: readonly (readonly [short: string, words: RegExp, meaning: string])[] = [
-  ['BLO', /\bBLO?\b/, 'back loop only'],
-  ['FLO', /\bFLO?\b/, 'front loop only'],
   ['MR', /\bMR\b/i, 'magic ring'],
   ['RS', /\bRS\b/, 'right side'],
   ['WS', /\bWS\b/, 'wrong side'],
@@ -59,7 +57,7 @@ export function checkAbbreviations(scan: Scan): Check[] {
 
 /** Clusters, shells and their like are worked in as many ways as there are makers: each needs its own words. */
 export function checkUnexplainedStitches(scan: Scan): Check[] {
-  const own = new Set((scan.source.specialStitches ?? []).map(keyOf));
+  const own = new Set(ownForms(scan.source.specialStitches ?? [], scan.source.terms).map(([, key]) => key));
   const lines = new Map<string, ScanLine[]>();
   for (const one of scan.lines) {
     for (const { stitch } of worksIn(one)) {

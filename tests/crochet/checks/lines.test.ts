@@ -145,14 +145,14 @@ describe('names', () => {
   });
 
   test('shorthand that no list explains goes into one note; a note that explains it is enough', () => {
-    const lines = ['R1: 6 sc in MR (6)', 'R2: BLO: sc around (6)'];
+    const lines = ['R1: 6 sc in MR (6)', 'R2: WS: sc around (6)'];
     expect(saying(lines, 'abbreviation-unexplained')).toEqual([
-      'R1, R2 use BLO and MR; they are not in the abbreviations.',
+      'R1, R2 use MR and WS; they are not in the abbreviations.',
     ]);
     expect(mended(lines, 'abbreviation-unexplained')?.changes).toEqual([
-      { op: 'add', row: 'note', fields: { text: 'BLO: back loop only; MR: magic ring.' } },
+      { op: 'add', row: 'note', fields: { text: 'MR: magic ring; WS: wrong side.' } },
     ]);
-    const explained = source([piece('Body', lines)], { notes: [{ text: 'BLO: back loop only; MR: magic ring.' }] });
+    const explained = source([piece('Body', lines)], { notes: [{ text: 'MR: magic ring; WS: wrong side.' }] });
     expect(saying(explained, 'abbreviation-unexplained')).toEqual([]);
   });
 
