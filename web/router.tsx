@@ -19,6 +19,7 @@ const IN_THE_HOUSE: Record<string, Page> = {
   '/new/written': () => import('./app/written-pattern-page.tsx'),
   '/patterns/:patternId/recording': () => import('./app/recording-page.tsx'),
   '/patterns/:patternId/reading/:readingId': () => import('./app/reading-page.tsx'),
+  '/patterns/:patternId/recording/held': () => import('./app/held-page.tsx'),
   '/patterns/:patternId/bench': () => import('./app/bench-page.tsx'),
   '/patterns/:patternId/sheet': () => import('./app/sheet-page.tsx'),
   '/patterns/:patternId/editions': () => import('./app/editions-page.tsx'),

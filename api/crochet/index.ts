@@ -12,6 +12,9 @@ export { readLine, type ReadOptions } from './language/read-line.ts';
 export { countPattern } from './count/pattern.ts';
 export { type Cue } from './transcript/cue.ts';
 export type * from './transcript/draft.ts';
+export { wordsOf, type Word } from './transcript/words.ts';
+export * from './transcript/held-against.ts';
+export { findShifts, shiftMoment, type Shift, type Shifts } from './transcript/moment-shifts.ts';
 export { readTranscript } from './transcript/read-transcript.ts';
 export { alignWords, plainWord } from './transcript/align-words.ts';
 export { placeCorrections, type CorrectedCue, type PlacedCorrection } from './transcript/correct-words.ts';
@@ -24,7 +27,6 @@ export {
 } from './transcript/read-stretch.ts';
 export { followWords } from './transcript/shift-moments.ts';
 export { inHeardNumbers, wordsAsHeard, type HeardCue, type HeardWord } from './transcript/words-as-heard.ts';
-export { wordsOf } from './transcript/words.ts';
 export { spell as spellWork } from './transcript/work/units.ts';
 export * from './edition/index.ts';
 export { broughtCautions, type BroughtCaution, type CautionSource } from './checks/cautions.ts';

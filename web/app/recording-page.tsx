@@ -11,7 +11,9 @@ import {
 } from '../features/recordings/recordings.queries.ts';
 import { nameOfFile, useRecordingFiles } from '../features/recordings/use-recording-files.ts';
 import { PatternState } from '../parts/pattern-state.tsx';
+import { paths } from '../lib/paths.ts';
 import { signedInLoader } from '../lib/session.ts';
+import { LinkButton } from '../ui/link-button.tsx';
 import { ErrorNote } from '../ui/notes.tsx';
 import { CardLink } from './shell/card-link.tsx';
 import { PageProblem } from './shell/page-problem.tsx';
@@ -58,6 +60,7 @@ export function Component() {
         tabs={<PatternTabs patternId={patternId} />}
         isCompact
       >
+        {chosen && <LinkButton to={paths.held(patternId, chosen.id)}>Held against the pattern</LinkButton>}
         <CardLink patternId={patternId} />
       </TopStrip>
       <main className="grid grow grid-cols-[320px_minmax(0,1fr)_372px] max-lg:grid-cols-1">

@@ -7,6 +7,8 @@ export const paths = {
   count: () => '/count',
   recording: (patternId: string) => `/patterns/${patternId}/recording`,
   reading: (patternId: string, readingId: string) => `/patterns/${patternId}/reading/${readingId}`,
+  held: (patternId: string, recordingId?: string) =>
+    `/patterns/${patternId}/recording/held${recordingId ? `?recording=${recordingId}` : ''}`,
   bench: (patternId: string, lineId?: string) => `/patterns/${patternId}/bench${lineId ? `?line=${lineId}` : ''}`,
   card: (patternId: string) => `/patterns/${patternId}/card`,
   sheet: (patternId: string) => `/patterns/${patternId}/sheet`,

@@ -13,6 +13,7 @@ import { askingIn, idIn, tellDeed } from '../../http/asking.ts';
 import { readChecks } from './checks.service.ts';
 import { readPattern } from './document.service.ts';
 import { duplicatePattern } from './duplicate.service.ts';
+import { heldRoutes } from './held.routes.ts';
 import { historyRoutes } from './history.routes.ts';
 import { liveRoutes } from './live.routes.ts';
 import { createPattern, editPattern, stepPattern } from './patterns.service.ts';
@@ -80,6 +81,6 @@ export function patternRoutes(deps: Deps): Router {
     sendVersioned(res, answer(PatternHead, head), head.version);
   });
 
-  router.use(historyRoutes(deps), rowRoutes(deps), liveRoutes(deps));
+  router.use(historyRoutes(deps), heldRoutes(deps), rowRoutes(deps), liveRoutes(deps));
   return router;
 }

@@ -1,6 +1,20 @@
 import { type Entry } from '../entry.ts';
 import { makers, members } from '../people.ts';
-import { CLIP_START } from '../world.ts';
+import { CLIP_START, type World } from '../world.ts';
+
+/** A recording whose transcript has been read. */
+async function heldUrl(world: World): Promise<string> {
+  const { patternId, transcriptId } = await world.transcript();
+  const row = await world.at
+    .db<{ recording_id: string }>('transcripts')
+    .where({ id: transcriptId } as never)
+    .first();
+  return `/api/patterns/${patternId}/recordings/${row!.recording_id}`;
+}
+/** The newest change of all, which is that of the pattern made last. */
+async function newestChange(world: World): Promise<number> {
+  return Number((await world.at.db('changes').max<{ max: string }[]>('id as max'))[0]!.max);
+}
 
 export const recordings: Record<string, Entry> = {
   'GET /api/patterns/:patternId/recordings': {
@@ -143,5 +157,24 @@ export const recordings: Record<string, Entry> = {
   'DELETE /api/recordings/:recordingId/clip': {
     expect: makers(204),
     ask: async (world) => ({ url: `/api/recordings/${(await world.clip()).recordingId}/clip` }),
+  },
+  'GET /api/patterns/:patternId/recordings/:recordingId/held': {
+    expect: members(200),
+    ask: async (world) => ({ url: `${await heldUrl(world)}/held` }),
+  },
+  'POST /api/patterns/:patternId/recordings/:recordingId/held': {
+    expect: members(200),
+    ask: async (world) => ({ url: `${await heldUrl(world)}/held`, body: { lastChange: await newestChange(world) } }),
+  },
+  'GET /api/patterns/:patternId/recordings/:recordingId/cut': {
+    expect: members(200),
+    ask: async (world) => ({ url: `${await heldUrl(world)}/cut` }),
+  },
+  'POST /api/patterns/:patternId/recordings/:recordingId/cut': {
+    expect: members(200),
+    ask: async (world) => ({
+      url: `${await heldUrl(world)}/cut`,
+      body: { how: 'stand', lastChange: await newestChange(world) },
+    }),
   },
 };
