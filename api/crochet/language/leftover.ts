@@ -22,6 +22,7 @@ export const HOT = new Set([
   'next',
   'evenly',
   'group',
+  'uncountable',
 ]);
 
 /** A stretch that begins no item: prose is a note, anything hot is unread. */

@@ -35,7 +35,7 @@ const UNITS = new Set([
   'percent',
 ]);
 
-/** Most figures that a count can have; longer ones are read as words. */
+/** Most figures that a count can have. A longer number means nothing that can be counted, and is never prose. */
 const LONGEST_NUMBER = 6;
 
 /** The text as a list of meanings, ended by one of kind `end`. Linear in the length of the text. */
@@ -124,7 +124,8 @@ function pushNumber(tokens: readonly Token[], at: number, out: Lex[]): number {
       return 2;
     }
   }
-  if (isFraction || token.text.length > LONGEST_NUMBER) out.push(make('measure', token.text, 0, token, token));
+  if (isFraction) out.push(make('measure', token.text, 0, token, token));
+  else if (token.text.length > LONGEST_NUMBER) out.push(make('w', 'uncountable', 0, token, token));
   else out.push(make('num', token.text, Number(token.text), token, token));
   return 1;
 }

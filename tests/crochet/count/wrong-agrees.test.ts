@@ -119,3 +119,18 @@ test('only a figure behind a decrease may say how many stitches it takes', () =>
   expect(countLines(['(2 sc, 2 dec) × 3 (9)'], { base: 12 })[0]!.verdict).toBe('does-not-fit');
   expect(printLine(readLine('(2 sc, dec 2) × 3').tree, { terms: 'US' })).toContain('dec 2');
 });
+
+test('a number too long to be a count is never passed over', () => {
+  const lines = [
+    '(sc, inc) x 9999999 (9)',
+    '(sc, inc) 9999999 times (9)',
+    '(sc, inc) × 3, ch 9999999 (9)',
+    '(sc, inc) × 3, sk 9999999 (9)',
+    '(sc, inc) around 9999999 (9)',
+    'sc, inc, 9999999 sc (9)',
+  ];
+  expect(lines.map((line) => [line, countLines([line], { base: 6 })[0]!.verdict])).toEqual(
+    lines.map((line) => [line, 'unread']),
+  );
+  expect(countLines(['(sc, inc) x 999999 (9)'], { base: 6 })[0]!.verdict).toBe('does-not-fit');
+});
