@@ -162,4 +162,4 @@ export function useNewDesk(): CountDesk {
   };
 }
 
-export const countsToLook = (placed: readonly Placed[]): number => placed.filter(({ row }) => wantsLook(row)).length;
+const countsToLook = (placed: readonly Placed[]): number => placed.filter(({ row }) => wantsLook(row)).length;
