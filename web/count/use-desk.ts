@@ -1,6 +1,6 @@
 import { createContext, useCallback, useContext, useEffect, useMemo, useRef, useState } from 'react';
 import { useToast } from '../ui/toast.tsx';
-import { findRow, nextToLook, type Placed, placedRows, rowAt, wantsLook } from './find-row.ts';
+import { findRow, nextToLook, type Placed, placedRows, rowAt } from './find-row.ts';
 import { type Offer, totalChanges, totalOffer } from './offers.ts';
 import { applyChanges, moveSpan, patchBetween, type Patch } from './text/patch.ts';
 import { type Counting, useCounting } from './use-counting.ts';
@@ -161,5 +161,3 @@ export function useNewDesk(): CountDesk {
     wish,
   };
 }
-
-const countsToLook = (placed: readonly Placed[]): number => placed.filter(({ row }) => wantsLook(row)).length;
