@@ -1,57 +1,168 @@
-/** What is done between rounds, by how it is said. The first that matches at a word names the step. */
-export const STEPS: readonly { readonly topic: string; readonly words: RegExp }[] = [
-  {
-    topic: 'marker',
-    words:
-      /^(?:(?:pop|put|place|hang|stick|clip|slip|use|add)\b.{0,18}\b(?:marker|bobby pin|paper clip|safety pin|piece of yarn|loop of thread|scrap)|marker (?:in\b|please)|put something in there|hang my loop|put a paper)/,
-  },
-  {
-    topic: 'eyes',
-    words:
-      /^(?:(?:pop|put|push|place|snap|fit|insert|add)\b.{0,22}\beyes?\b|eyes? (?:go|in\b|are going|now)|the eyes go|eyes now|so the eyes\b|now the eyes\b|safety eyes? (?:go|in))/,
-  },
-  {
-    topic: 'stuff',
-    words:
-      /^(?:stuff(?:ing)? (?:it|him|her|the|what|in|this|them|his|firmly|lightly|now|as)\b|stuff\b(?=.{0,12}(?:now|firm))|fill (?:it|him|her|the|his|them|this|in|up)\b|(?:now )?you fill it|pack it\b|jam .{0,22}(?:inside|in)|(?:push|put|poke|shove|add|work|tuck) .{0,28}\b(?:stuffing|filling|fluff|fill|polyfill|batting|toy filling)\b|(?:a )?(?:little|tiny|bit of|wisp of|pinch of|some) (?:bit of )?(?:fluff|filling|stuffing)\b|they get a little stuffing|stuffing in\b|fluff fluff|just shove|pebbles in)/,
-  },
-  {
-    topic: 'embroider',
-    words:
-      /^(?:embroider\b|(?:put|sew|stitch|draw|add|make|do) .{0,20}\b(?:nose|smile|mouth|face|whiskers|thumbprint|spines|cheeks)\b|spines\b|with a (?:bit of|contrasting) .{0,20}(?:thumbprint|embroider)|i do 2 tiny|sew on 2 eyes)/,
-  },
-  {
-    topic: 'colour',
-    words:
-      /^(?:(?:change|switch(?:ing)?|swap|go|going|back) (?:over )?(?:to|go) (?:the|a|your|my|contrast|natural)\b.{0,26}|(?:change|quick change) (?:color|colour)|(?:change|quick change)\b.{0,8}\b(?:to|color|colour)|(?:join|bring in|tie in|pick up|hook in|take|introduce|drop|lose|break off|cut|snip) (?:the|my|your) (?:new |second |next |contrast )?(?:orange|red|blue|green|pink|white|black|brown|cream|gray|grey|yellow|teal|rust|oatmeal|gold|maroon|tan|purple|color|colour|contrast|natural|navy|mustard|second|other)\b|next color|next colour|line change|cream (?:has to be introduced|joins|is cut)|white for the|here we say goodbye to|(?:red|green|blue) away|i am (?:switching|putting in|going to switch)|tie the red on)/,
-  },
-  {
-    topic: 'block',
-    words:
-      /^(?:block\b|wet (?:it|block)|steam it|soak it|pin (?:it|them|the)\b.{0,20}(?:out|flat|edges|size)|press it (?:flat|under|lightly)|want to block|wanna block)/,
-  },
-  {
-    topic: 'sew',
-    words:
-      /^(?:sew\b(?! on 2)|we sew\b|you sew\b|whip\b|attach\b|assembl|stitch (?:it|them|the|one tab|him)\b|sewing\b|put him together|tie the leaves|make him up|pin them up|roll it up|fold (?:that|it|the)\b|wrap it around|cap on first|leaves go on|button on|the ties are sewn|set the peas|wings just)/,
-  },
-  {
-    topic: 'join',
-    words:
-      /^(?:join (?:the|in|your|a|them|two|these|with)\b|to join them|join in\b|bring the short ends|put your wool in|stick your hook in|lay the hat|fold it and knot|hook the yarn on)/,
-  },
-  {
-    topic: 'finish',
-    words:
-      /^(?:fasten (?:it |that |this )?off|fasten the|finish (?:it |that )?off|cut (?:it|the|your|that|a|this|off)\b|cut (?=and|tuck)|break (?:off )?(?:the|your|it|off)\b|snip\b|tie (?:it|that) off|close (?:it|that|up)\b|you know how to close|cinch\b|draw (?:it|the|up)\b.{0,12}(?:up|tight|in|through)|pull (?:it|up|the) .{0,16}(?:closed|hole)|weave (?:in|it|the)\b|hide (?:that|the|your|both|it)\b|bury\b|leave (?:yourself |me )?(?:a|enough)\b.{0,14}(?:tail|sew)|long tail|(?:a )?tail cut|tuck\b|leave the end|leave a (?:good )?tail|run it through|darn\b|knot the end|okay now cut|then cut that|off with the)/,
-  },
-  {
-    topic: 'surface',
-    words: /^(?:surface slip stitch|take the white and run|take a contrast yarn|run a slip stitch up)/,
-  },
-  {
-    topic: 'finish',
-    words:
-      /^(?:run a narrow ribbon|did a fringe|put a loop on|ribbon is threaded|the ribbon is|last thing is the|lastly the)/,
-  },
+import { SHADES } from './no-names.ts';
+
+/** Words with commas between, as one alternative of a pattern. */
+const any = (list: string): string =>
+  `(?:${list
+    .trim()
+    .split(/\s*,\s*/)
+    .join('|')})`;
+
+const THE = any('the, a, an, your, my, our, his, her, its, some, that, this, these, those, another, one, both');
+const IT = any('it, him, her, them, this, that, these, those, everything, the whole thing');
+const COLOUR = any(
+  `${[...SHADES].slice(0, [...SHADES].indexOf('first')).join(', ')}, second color, other color, next color, new color,
+  main color, color, colour, shade, new yarn, second one, other one`,
+);
+const FILLING = any(
+  'stuffing, filling, fluff, fill, polyfill, fibrefill, fiberfill, batting, wadding, toy filling, fleece, beans, pellets, pebbles, rice',
+);
+const MARKER = any(
+  'marker, markers, stitch marker, bobby pin, paper clip, safety pin, hair grip, peg, tag, piece of yarn, loop of thread, scrap',
+);
+const FEATURE = any(
+  `nose, smile, mouth, face, whiskers, eyebrows, brows, eyelashes, lashes, freckles, cheeks, nostrils, claws, spots,
+  stripes, spines, thumbprint, details`,
+);
+const TRIM = any('ribbon, cord, string, drawstring, elastic, lace, wire');
+const HANGING = any('fringe, tassel, tassels, pompom, pom-pom, bobble on, loop on, bow');
+const PUT = any('put, push, pop, place, poke, shove, fit, snap, press, insert, add, work, tuck, jam, cram, ease');
+const SEW = any('sew, stitch, whip, whipstitch, attach, fix, fasten, tack, glue');
+
+/** The topics of steps, each by the doings that it is told with; the first that matches at a word names the step. */
+const DOINGS: readonly (readonly [topic: string, doings: readonly string[]])[] = [
+  [
+    'marker',
+    [
+      String.raw`(?:put|pop|place|hang|stick|clip|slip|use|add|move|set)\b.{0,18}\b${MARKER}`,
+      String.raw`${MARKER} (?:in\b|here|please)`,
+      String.raw`hang (?:my|your|the|a) loop`,
+      String.raw`put something in there`,
+    ],
+  ],
+  [
+    'eyes',
+    [
+      String.raw`${PUT}\b.{0,22}\beyes?\b`,
+      String.raw`(?:safety )?eyes? (?:go|goes|in\b|are going|now)`,
+      String.raw`(?:so|now) the eyes\b`,
+      String.raw`the eyes (?:go|are going|now|next)\b`,
+    ],
+  ],
+  [
+    'stuff',
+    [
+      String.raw`stuff(?:ing)? (?:${IT}|the|what|in|his|their|firmly|lightly|now|as)\b`,
+      String.raw`stuff\b(?=.{0,12}(?:now|firm))`,
+      String.raw`(?:now )?(?:you )?(?:fill|pack|plump) (?:${IT}|the|his|in|up)\b`,
+      String.raw`(?:${PUT}) .{0,28}\b${FILLING}\b`,
+      String.raw`(?:jam|cram|shove|push) .{0,22}\b(?:inside|in)\b`,
+      String.raw`(?:a )?(?:little|tiny|bit|wisp|pinch|some|handful) (?:bit )?(?:of )?(?:${FILLING})\b`,
+      String.raw`(?:they|it|he|she|the \w+) (?:gets?|takes?|wants?) (?:a )?(?:little|some|tiny)?.{0,8}${FILLING}`,
+      String.raw`${FILLING} (?:in\b|into|goes|${FILLING})`,
+    ],
+  ],
+  [
+    'embroider',
+    [
+      String.raw`embroider\b`,
+      String.raw`(?:put|sew|stitch|draw|add|make|do|give)\b.{0,20}\b${FEATURE}\b`,
+      String.raw`sew on (?:the |2 )?(?:little |tiny )?eyes`,
+      String.raw`(?:last|next|now|then) (?:the )?${FEATURE}\b`,
+      String.raw`with (?:a )?(?:bit of|strand of|contrasting|black|dark) .{0,20}\b(?:${FEATURE}|embroider)`,
+    ],
+  ],
+  [
+    'colour',
+    [
+      String.raw`(?:change|switch(?:ing)?|swap|go|going|move) (?:back )?(?:over )?(?:to|into|from) (?:${THE} )?(?:\w+ )?${COLOUR}\b`,
+      String.raw`back to (?:${THE} )?(?:\w+ )?${COLOUR}\b(?! and you will have)`,
+      String.raw`(?:quick |now )?change\b.{0,10}\b(?:color|colour|yarn)`,
+      String.raw`(?:color|colour|line) change\b`,
+      String.raw`(?:join|bring in|tie in|tie on|pick up|hook in|take|introduce|drop|lose|break off|cut|snip|put in|putting in|add in|attach) ${THE} (?:\w+ )?${COLOUR}\b`,
+      String.raw`(?:say goodbye to|bring in|introduce|join|switch to|change to) (?:${THE} )?${COLOUR}\b`,
+      String.raw`tie (?:${THE} )?${COLOUR} (?:on|in)\b`,
+      String.raw`next (?:color|colour)\b`,
+      String.raw`(?:${THE} )?${COLOUR} (?:joins|comes in|comes out|is cut|is joined|goes in|away|has to be|for the)\b`,
+      String.raw`(?:i|we|you) (?:am|are) (?:going to )?(?:switch|switching|chang\w+|swapping)\b`,
+    ],
+  ],
+  [
+    'block',
+    [
+      String.raw`(?:(?:want to|wanna|going to|you can) )?(?:wet )?block\b`,
+      String.raw`(?:wet|steam|soak|mist|spray) ${IT}\b`,
+      String.raw`pin (?:${IT}|the)\b.{0,20}(?:out|flat|edges|size)`,
+      String.raw`press ${IT} (?:flat|under|lightly)`,
+    ],
+  ],
+  [
+    'sew',
+    [
+      String.raw`(?:we |you )?sew(?:ing)?\b`,
+      String.raw`(?:whip|attach|assembl\w*)\b`,
+      String.raw`stitch (?:${IT}|the|one|both) .{0,24}\b(?:on|together|down|to|closed|shut)\b`,
+      String.raw`stitch (?:it|him|her|them) (?!after|later)`,
+      String.raw`(?:put|make) (?:${IT}) (?:together|up)\b`,
+      String.raw`(?:roll|pin|wrap) (?:${IT}|the|one) (?:up|around|round|over|in half|edges?)\b`,
+      String.raw`fold (?:it|that|the)\b`,
+      String.raw`(?:the )?\w+ (?:goes|go|is sewn|are sewn) on\b`,
+      String.raw`(?:the )?\w+ on (?:first|next|last)\b`,
+      String.raw`(?:set|tie|hang) the \w+ (?:in|inside|on|onto|side by side|between)\b`,
+      String.raw`${SEW} (?:${THE} )?\w+ (?:on|onto|to|together|down)\b`,
+    ],
+  ],
+  [
+    'join',
+    [
+      String.raw`(?:to )?join (?:the|in|your|a|them|two|2|these|with|on)\b`,
+      String.raw`bring the (?:\w+ )?ends? (?:together|round|around|up)`,
+      String.raw`(?:put|stick|insert) your (?:wool|yarn|hook|thread) (?:in|back in|through)`,
+      String.raw`(?:lay|hold) (?:${IT}|the \w+) (?:together|against|flat (?:with|on))\b`,
+      String.raw`fold ${IT} and (?:knot|join|tie)`,
+      String.raw`hook (?:${THE} )?(?:yarn|wool|thread|${COLOUR}) on`,
+    ],
+  ],
+  [
+    'finish',
+    [
+      String.raw`fasten (?:(?:${IT}) )?off|fasten the`,
+      String.raw`finish (?:${IT} )?off`,
+      String.raw`cut (?:${IT}|${THE}|off)\b|cut (?=and|tuck)|(?:okay now|then) cut\b`,
+      String.raw`break (?:off )?(?:the|your|${IT}|off)\b`,
+      String.raw`snip\b`,
+      String.raw`(?:tie|bind) (?:${IT} )?off`,
+      String.raw`close (?:${IT}|up)\b|you know how to close`,
+      String.raw`cinch\b`,
+      String.raw`draw (?:${IT}|the|up)\b.{0,12}(?:up|tight|in|through)`,
+      String.raw`pull (?:${IT}|up|the) .{0,16}(?:closed|shut|hole)`,
+      String.raw`(?:weave|darn|run|sew|work) in (?:your|the|all|both|those|any)? ?(?:loose )?(?:ends?|tails?)`,
+      String.raw`weave (?:in|it|the)\b|darn\b`,
+      String.raw`hide (?:${IT}|the|your|both)\b|bury\b|tuck\b`,
+      String.raw`leave (?:yourself |me |a |enough |the |plenty )(?:a |of )?.{0,14}(?:tail|sew|end)`,
+      String.raw`(?:a )?(?:long )?tail (?:cut|left)|long tail|knot the end|run ${IT} through|off with the`,
+    ],
+  ],
+  [
+    'surface',
+    [
+      String.raw`surface (?:slip stitch|crochet|chain|work)`,
+      String.raw`(?:run|work|make) (?:a )?(?:line of |row of )?slip stitch(?:es)? (?:up|over|across|along|on top)`,
+      String.raw`take (?:${THE} )?(?:contrast(?:ing)? )?(?:yarn|${COLOUR}) and run`,
+    ],
+  ],
+  [
+    'finish',
+    [
+      String.raw`(?:run|thread|lace|weave) (?:${THE} )?(?:narrow |long )?${TRIM}`,
+      String.raw`(?:the )?${TRIM} (?:is|gets) (?:threaded|laced|run|drawn)\b`,
+      String.raw`(?:put|add|did|do|make|tie|hang) (?:${THE} )?${HANGING}\b`,
+      String.raw`(?:last thing is|lastly) (?:the|a)\b`,
+    ],
+  ],
 ];
+
+/** What is done between rounds, by how it is said. The first that matches at a word names the step. */
+export const STEPS: readonly { readonly topic: string; readonly words: RegExp }[] = DOINGS.map(([topic, doings]) => ({
+  topic,
+  words: new RegExp(`^(?:${doings.join('|')})`),
+}));
