@@ -13,6 +13,8 @@ export interface ReadSoFar {
   readonly said: number | null;
   /** Whether the reading is uncertain, or stands on one that is. */
   readonly isDoubtful: boolean;
+  /** Whether its total left out the chains inside a group; null where it tells nothing of that. */
+  readonly leavesOutInside: boolean | null;
   /** What the count says that the line leaves; null where it was not understood. */
   readonly left: Left | null;
   readonly verdict: 'agrees' | 'differs' | 'does-not-fit' | 'unread' | 'no-total';

@@ -9,6 +9,7 @@ export function foundation(many: number): ReadLineResult {
     units: chainUnits(many),
     base: null,
     left: null,
+    leavesOutInside: null,
     said: null,
     verdict: 'no-total',
     loops: 'both',

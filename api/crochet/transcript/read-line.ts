@@ -94,6 +94,7 @@ export function readSpokenLine(talk: Talk, stretch: Stretch, before: Before): Re
     heading,
     mayLeave: LEAVING.test(words.map((token) => token.text).join(' ')),
     isRing: !before.isRows,
+    leavesOut: before.piece.findLast((line) => line.leavesOutInside !== null)?.leavesOutInside ?? false,
     isPlain: isPlainLine(words, events, announced),
     isTold: announced.from !== announced.to || isToldPlain(talk, stretch, isOut),
   };
@@ -239,6 +240,7 @@ function result(
       said,
       verdict: 'unread',
       left: null,
+      leavesOutInside: null,
       count: null,
       lead: 0,
       score: 0,
@@ -261,6 +263,7 @@ function result(
     verdict,
     count: verdict === 'unread' ? null : verdict === 'agrees' ? choice.said : choice.makes,
     left: choice.left,
+    leavesOutInside: choice.leavesOutInside,
     lead: choice.lead,
     score: choice.score,
     cost: choice.cost,

@@ -91,6 +91,7 @@ const lineOf = (places: number): Before['piece'][number] => ({
   said: null,
   isDoubtful: false,
   left: null,
+  leavesOutInside: null,
   verdict: 'agrees',
 });
 

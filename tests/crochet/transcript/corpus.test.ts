@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { examplesOf, score } from './corpus.ts';
+import { examplesOf, faultsLetThrough, score } from './corpus.ts';
 import { misheard } from './mishear.ts';
 
 /** Reading whole sets takes its time on a machine that is busy otherwise. */
@@ -15,13 +15,13 @@ describe('of the spoken tutorials with known answers', () => {
   });
 
   test('it reads their work, their totals and how they come out', () => {
-    expect(figures.workShare).toBeGreaterThanOrEqual(86);
+    expect(figures.workShare).toBeGreaterThanOrEqual(89);
     expect(figures.saidShare).toBeGreaterThanOrEqual(93);
     expect(figures.verdictShare).toBeGreaterThanOrEqual(89);
   });
 
   test('it finds what makers got wrong and blames hardly anybody else', () => {
-    expect(figures.faultsFound).toBeGreaterThanOrEqual(15);
+    expect(figures.faultsFound).toBeGreaterThanOrEqual(17);
     expect(figures.falseAlarms).toBeLessThanOrEqual(3);
   });
 
@@ -53,10 +53,16 @@ describe('of twelve more voices, written by somebody who does not know the reade
   });
 
   test('most of the work and of the totals is read', () => {
-    expect(figures.workShare).toBeGreaterThanOrEqual(70);
-    expect(figures.saidShare).toBeGreaterThanOrEqual(84);
+    expect(figures.workShare).toBeGreaterThanOrEqual(84);
+    expect(figures.saidShare).toBeGreaterThanOrEqual(93);
     expect(figures.stepsShare).toBeGreaterThanOrEqual(83);
     expect(figures.stepsSpuriousShare).toBeLessThanOrEqual(6);
+  });
+});
+
+describe('of mistakes that a maker made', () => {
+  test.each(['dev', 'fresh', 'wide'] as const)('none is said to come out right (%s)', (set) => {
+    expect(faultsLetThrough(examplesOf(set))).toEqual([]);
   });
 });
 

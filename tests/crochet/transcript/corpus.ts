@@ -27,6 +27,37 @@ export function examplesOf(set: 'dev' | 'fresh' | 'wide'): readonly Example[] {
     });
 }
 
+interface Line {
+  readonly kind: string;
+  readonly from?: number | null;
+  readonly at: number;
+  readonly verdict: string;
+}
+
+const linesOf = (pieces: unknown): readonly Line[] =>
+  (pieces as readonly { readonly lines: readonly Line[] }[]).flatMap((piece) => piece.lines);
+
+/** The lines whose maker meant them to be wrong, and that the reader says come out right. */
+export function faultsLetThrough(examples: readonly Example[]): readonly string[] {
+  return examples.flatMap(({ name, cues, answers }) => {
+    const secondsOff = answers.form === 'txt' ? 7 : 3;
+    const printed = printReading(readTranscript(cues), []) as { readonly pieces: unknown };
+    const read = linesOf(printed.pieces);
+    const meant = linesOf(answers.pieces).filter(({ verdict }) => verdict === 'differs' || verdict === 'does-not-fit');
+    return meant
+      .filter(({ kind, from, at }) =>
+        read.some(
+          (line) =>
+            line.kind === kind &&
+            line.from === from &&
+            Math.abs(line.at - at) <= secondsOff &&
+            line.verdict === 'agrees',
+        ),
+      )
+      .map((line) => `${name}: ${line.kind} ${String(line.from)}`);
+  });
+}
+
 export type Figures = Readonly<Record<string, number>>;
 
 /** Reads every example and adds up how much was read right, in counts and in per cent of the lines. */

@@ -141,7 +141,11 @@ function startsOf(nodes: readonly Node[], closed: number, sentence: number): { s
   add(0, 0.9);
   // without full stops a group may begin anywhere; with them hardly inside a sentence
   const isOneSentence = nodes.every((node) => node.sentence === sentence);
-  for (let n = closed; n < nodes.length && starts.size < 9; n++) add(n, isOneSentence ? 1.1 : 2.4);
+  for (let n = closed; n < nodes.length && starts.size < 9; n++) {
+    // "you do that bit three times", a sentence of its own, takes in whole sentences: what it would leave out was told too
+    const cutsAnother = n > 0 && nodes[n]!.sentence !== sentence && nodes[n - 1]!.sentence === nodes[n]!.sentence;
+    if (!cutsAnother) add(n, isOneSentence ? 1.1 : 2.4);
+  }
   return [...starts].map(([start, cost]) => ({ start, cost }));
 }
 

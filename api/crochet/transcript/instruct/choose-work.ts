@@ -25,6 +25,8 @@ export interface Setting {
   readonly heading: number;
   /** Whether places are left on purpose. */
   readonly mayLeave: boolean;
+  /** Whether totals of the piece leave out the chains inside a group. */
+  readonly leavesOut: boolean;
   /** Whether the line is worked in a ring. */
   readonly isRing: boolean;
   /** Whether words say that nothing is shaped. */
@@ -78,7 +80,7 @@ export function chooseWork(events: readonly Event[], setting: Setting): Choice |
       }
     }
   }
-  return judgeWork(found.proposals, setting.isRing);
+  return judgeWork(found.proposals, setting);
 }
 
 interface Found {

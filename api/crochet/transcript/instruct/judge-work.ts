@@ -1,5 +1,5 @@
 import { type Left } from '../../count/places.ts';
-import { countUnits, sensesOf } from '../work/counted.ts';
+import { countUnits, isTotalOf, leavesOutInside } from '../work/counted.ts';
 import { spell, type Unit } from '../work/units.ts';
 import { type Event } from './event.ts';
 import { type Casting } from './roles.ts';
@@ -28,6 +28,8 @@ export interface Choice {
   /** What it leaves for the next line. */
   readonly left: Left;
   readonly makes: number;
+  /** Whether its total left out the chains inside a group; null where it tells nothing of that. */
+  readonly leavesOutInside: boolean | null;
   readonly score: number;
   /** What speaks against this way of taking the words, whatever the count says. */
   readonly cost: number;
@@ -63,11 +65,17 @@ export function saidTotal(idle: Casting['idle'], makes: number, comesOut: (n: nu
   return likely.sort((a, b) => b.asTotal - a.asTotal)[0]?.n ?? null;
 }
 
+/** How a line is counted: in a ring or not, and whether the totals of its piece leave out the chains inside a group. */
+export interface Counting {
+  readonly isRing: boolean;
+  readonly leavesOut: boolean;
+}
+
 /**
  * Asks the count about the likeliest readings and takes the one that stands best: that fits the places, agrees with
  * what was said, and has least against it. No more than a dozen are counted, each in time linear in its stitches.
  */
-export function judgeWork(proposals: readonly Proposal[], isRing: boolean): Choice | null {
+export function judgeWork(proposals: readonly Proposal[], how: Counting): Choice | null {
   const likeliest = [...proposals].sort((a, b) => b.score - a.score).slice(0, 4 * ASKED);
   const seen = new Set<string>();
   const choices: Choice[] = [];
@@ -76,26 +84,44 @@ export function judgeWork(proposals: readonly Proposal[], isRing: boolean): Choi
     const key = `${spell(proposal.units).join(' ')} ${String(proposal.base)}`;
     if (seen.has(key)) continue;
     seen.add(key);
-    choices.push(judge(proposal, isRing));
+    choices.push(judge(proposal, how));
   }
   const ranked = choices.sort((a, b) => b.score - a.score);
   const [first] = ranked;
   if (first === undefined) return null;
   const spelled = spell(first.units).join(' ');
-  const second = ranked.find((choice) => spell(choice.units).join(' ') !== spelled);
+  // where the work does not fit, other work that does not fit either says no less that something is wrong
+  const isMisfit = first.fit === 'misfit';
+  const second = ranked.find(
+    (choice) => spell(choice.units).join(' ') !== spelled && !(isMisfit && choice.fit === 'misfit'),
+  );
   return { ...first, lead: second === undefined ? 2 : Math.min(2, first.score - second.score) };
 }
 
-function judge(proposal: Proposal, isRing: boolean): Choice {
+function judge(proposal: Proposal, { isRing, leavesOut }: Counting): Choice {
   const { units, base, idle, cost, used } = proposal;
   const places = proposal.fit === 'unknown' || base === null ? null : base - proposal.leaves;
   const counted = countUnits(units, places, isRing);
   const fit = places === null ? 'unknown' : counted.fits ? 'fits' : 'misfit';
   const makes = counted.tally.sts + counted.tally.chainsOutside;
-  const comesOut = (n: number) => sensesOf(n, counted.tally).length > 0;
+  const comesOut = (n: number) => isTotalOf(n, counted.tally, leavesOut);
   const said = saidTotal(idle, makes, comesOut);
   const agrees = said === null ? null : comesOut(said);
   const gain = agrees === true ? saidGain(idle, said!, fit === 'misfit') : 0;
   const score = fitGain(fit) + gain - cost;
-  return { units, said, agrees, fit, base, left: counted.left, makes, score, cost, lead: 0, used };
+  const inside = agrees === true ? leavesOutInside(said!, counted.tally) : null;
+  return {
+    units,
+    said,
+    agrees,
+    fit,
+    base,
+    left: counted.left,
+    makes,
+    leavesOutInside: inside,
+    score,
+    cost,
+    lead: 0,
+    used,
+  };
 }

@@ -33,7 +33,7 @@ const WEAK_RESULT = /^(?:for|so|at|be|have|got|you want|leaving)$/;
 /** A number on its own may be a total, stitches of the kind in hand, a repeat, or talk; what stands beside it says how likely. */
 export function numberEvent(letters: Letters, i: number, lastWork: number): Event | null {
   const token = letters.tokens[i]!;
-  if (token.kind !== 'N') return null;
+  if (token.kind !== 'N' || refersBack(letters, i)) return null;
   const before = letters.text[i - 1] ?? '.';
   const beforeThat = letters.text[i - 2] ?? '.';
   const after = letters.text[i + 1] ?? '.';
@@ -82,6 +82,15 @@ export function numberEvent(letters: Letters, i: number, lastWork: number): Even
     asItem,
     asTimes,
   };
+}
+
+/** `twelve trebles, with the chain being the first of the twelve`: the same stitches spoken of again. */
+function refersBack({ source, at, tokens, sentence }: Letters, i: number): boolean {
+  const here = at[i]!;
+  if (source[here - 2]?.text !== 'of' || !/^(?:the|those|these|your|our)$/.test(source[here - 1]!.text)) return false;
+  for (let n = i - 1; n >= 0 && sentence[n] === sentence[i]; n--)
+    if (tokens[n]!.kind === 'N' && tokens[n]!.value === tokens[i]!.value) return true;
+  return false;
 }
 
 /** A plain noun in the plural behind a number, at the end of a clause: `twelve arches.` */

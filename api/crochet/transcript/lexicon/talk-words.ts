@@ -29,7 +29,7 @@ export const TALK_WORDS: readonly (readonly [Class, string | number, string])[] 
     times, time around, time round, time about, lots, sets, helpings, verses, repeats, rounds of that, times over, times around, times round,
     times in all, times altogether, times total, times in total, lots of that, lots of it`,
   ],
-  ['t', 2, `twice, twice over, 2 times`],
+  ['t', 2, `twice, twice over, 2 times, on both sides, on both the sides`],
   ['t', 3, `thrice`],
   ['t', 1, `once, one time`],
   [

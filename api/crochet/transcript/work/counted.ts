@@ -1,4 +1,4 @@
-import { compareTotals, type CountedWith } from '../../count/compare.ts';
+import { compareTotals } from '../../count/compare.ts';
 import { workInOrder } from '../../count/offer.ts';
 import { type Left } from '../../count/places.ts';
 import { type Tally } from '../../count/tally.ts';
@@ -18,10 +18,22 @@ export function countUnits(units: readonly Unit[], places: number | null, isRing
   return { fits: places === null || fits, tally, left };
 }
 
-/** In which senses a spoken number is the total of the work: its stitches, with its chains, with its spaces. */
-export function sensesOf(said: number, tally: Tally): readonly CountedWith[] {
-  return compareTotals({ sts: [said] }, tally, 0, null).ways;
+/**
+ * Whether a spoken number is the total of the work: its stitches, with its chains, with its spaces. Where earlier totals
+ * of the piece left out what stands inside a group, this one does too.
+ */
+export function isTotalOf(said: number, tally: Tally, leavesOutInside: boolean): boolean {
+  if (leavesOutInside && hasInside(tally)) return said === tally.sts || said === tally.sts + tally.chainsOutside;
+  return compareTotals({ sts: [said] }, tally, 0, null).ways.length > 0;
 }
+
+/** What a total tells of how the maker counts: whether it left out the chains inside a group; null where that is open. */
+export function leavesOutInside(said: number, tally: Tally): boolean | null {
+  if (!hasInside(tally)) return null;
+  return said === tally.sts || said === tally.sts + tally.chainsOutside;
+}
+
+const hasInside = (tally: Tally): boolean => tally.chains > tally.chainsOutside;
 
 const SPAN = { start: 0, end: 0 };
 
