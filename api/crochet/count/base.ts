@@ -102,7 +102,12 @@ function hookOf(all: readonly Item[], chains: number): number {
     const target = item.type === 'work' || item.type === 'group' ? item.into : item.type === 'skip' ? item.of : null;
     if (target?.which === 'hook') return target.n ?? 2;
     if (item.type === 'skip' && target?.which === 'first') return pick(item.n, 0) + 1;
-    if (item.type === 'skip' && all.indexOf(item) <= 1 && target?.what === 'ch') return pick(item.n, 0) + 1;
+    if (
+      item.type === 'skip' &&
+      all.indexOf(item) <= 1 &&
+      (target === null || target.what === 'ch' || target.what === 'st')
+    )
+      return pick(item.n, 0) + 1;
   }
   const stitch = firstStitch(all);
   const height = stitch ? (stitchOf(stitch)?.height ?? 1) : 1;

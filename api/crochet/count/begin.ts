@@ -61,7 +61,7 @@ export function begin(
 export function withoutSkips(items: readonly Item[]): readonly Item[] {
   const index = items.findIndex((item) => item.type === 'work' || item.type === 'group' || item.type === 'skip');
   const first = items[index];
-  const isLead = first?.type === 'skip' && (first.of?.what === 'ch' || first.of?.which === 'first');
+  const isLead = first?.type === 'skip' && (first.of === null || ['ch', 'st'].includes(first.of.what));
   return isLead ? [...items.slice(0, index), ...items.slice(index + 1)] : items;
 }
 

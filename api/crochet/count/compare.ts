@@ -69,7 +69,11 @@ function figureOf(kind: string, tally: Tally, alone: boolean): { figures: readon
   if (kind === 'corner') return tally.spaces === 4 ? strict(4) : null;
   if (kind === 'group' || kind === 'shell' || kind === 'vst')
     return { figures: [tally.groups, tally.spaces], loose: true };
-  if (/^[A-Z]$/.test(kind)) return strict(tally.byColour[kind] ?? 0);
+  if (/^[A-Z]$/.test(kind)) {
+    // A line that names no colours is all of one.
+    const isPlain = alone && Object.keys(tally.byColour).length === 0;
+    return strict(isPlain ? tally.sts : (tally.byColour[kind] ?? 0));
+  }
   const own = tally.byStitch[kind];
   if (own !== undefined) {
     // `(24 sc)` under a line of several kinds may say all of its stitches.

@@ -3,6 +3,7 @@ import { stitchOf } from '../stitches.ts';
 import { allItems } from './tree-walk.ts';
 import { type Ground } from './ground.ts';
 import { pick, type Job } from './job.ts';
+import { goalOf } from './named.ts';
 import { type Place } from './places.ts';
 import { Walker } from './walker.ts';
 import { takeOne } from './take.ts';
@@ -20,7 +21,7 @@ export function travelled(ground: Ground, slips: readonly Item[], size: number):
     if (item.type !== 'work') continue;
     const n = item.times.type === 'n' ? pick(item.times.n, size) : 1;
     for (let i = 0; i < n; i += 1) {
-      const target = item.into;
+      const target = goalOf(item) ?? item.into;
       takeOne(
         { walker } as Job,
         target?.which === 'first' || target?.which === 'same'

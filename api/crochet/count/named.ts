@@ -1,4 +1,4 @@
-import { type Item, type Target } from '../language/tree.ts';
+import { type Item, type Target, type Work } from '../language/tree.ts';
 import { type Named } from './places.ts';
 
 /** All places aimed at; null is the next stitch. */
@@ -48,14 +48,21 @@ export function travelling(items: readonly Item[]): number {
   let n = 0;
   let slips = 0;
   for (const item of items) {
-    const isSlip = item.type === 'work' && item.stitch === 'slst' && item.times.type === 'n';
+    const isSlip = item.type === 'work' && item.stitch === 'slst' && (item.times.type === 'n' || goalOf(item) !== null);
     if (isSlip) slips += 1;
     else if (item.type !== 'note' && item.type !== 'step' && item.type !== 'loops') break;
     n += 1;
   }
   const next = items[n];
-  return slips > 0 && next?.type === 'work' && next.stitch === 'ch' ? n : 0;
+  if (slips === 0) return 0;
+  const last = items[n - 1];
+  const isInSpace = last?.type === 'work' && last.into?.what === 'sp' && last.into.which === 'first';
+  const isEachSpace = next?.type === 'group' && next.into?.what === 'sp' && next.into.which === 'each';
+  return (next?.type === 'work' && next.stitch === 'ch') || (isInSpace && isEachSpace) ? n : 0;
 }
+
+/** `sl st along to ch-3 sp`: the place that the slip stitches go up to. */
+export const goalOf = ({ times }: Work): Target | null => (times.type === 'fill' ? times.to : null);
 
 function walk(items: readonly Item[], found: Found): void {
   let local = false;

@@ -67,7 +67,7 @@ export function workLine(tree: LineTree, choices: Choices, setting: Setting): Li
   const items = opened(shaped(tree, choices));
   const loop = items.find((item) => item.type === 'group' && item.into?.what === 'loop');
   if (loop?.type === 'group')
-    return onPlaces(loop.items, choices, { ...setting, left: loopBase(loop.into!.line ?? null, setting) }, 0, null);
+    return onPlaces(loop.items, choices, { ...setting, left: loopBase(loop.into!, setting) }, 0, null);
   const own = ownChain(items, setting.size);
   const ring = ownRing(items, setting.size);
   if (ring) {
@@ -125,11 +125,19 @@ function foundationWork(left: Left): LineWork {
   };
 }
 
-/** Loops left free: of the line named, else of the last that left any; in this piece, else in one worked earlier. */
-function loopBase(line: number | null, setting: Setting): Left {
+/**
+ * Loops left free: of the line named, else of the last that left any; in this piece, else in one worked earlier. The
+ * loops of a line's own stitches (`back loops of rnd 7`) are left free by the line after it.
+ */
+function loopBase({ line, own }: Target, setting: Setting): Left {
   const maps = [setting.free, ...setting.finished.toReversed().map((piece) => piece.free)];
   for (const free of maps) {
-    const found = line === null ? [...free.values()].at(-1) : free.get(line);
+    const found =
+      line === undefined
+        ? [...free.values()].at(-1)
+        : own
+          ? (free.get(line + 1) ?? free.get(line))
+          : (free.get(line) ?? free.get(line + 1));
     if (found) return plainLeft(found.n[setting.size] ?? found.n[0]!);
   }
   return NOTHING;

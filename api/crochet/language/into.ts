@@ -64,7 +64,7 @@ function isSlipTo(reading: Reading): boolean {
 function isPost(reading: Reading): boolean {
   const next = peek(reading, 1);
   return (
-    isWord(next, 'next', 'each', 'same', 'first', 'last') ||
+    isWord(next, 'next', 'each', 'same', 'first', 'last', 'skipped') ||
     isPlain(next, 'post') ||
     (isWord(next, 'the') && (isPlain(peek(reading, 2), 'post') || peek(reading, 2).kind === 'num')) ||
     (next.kind === 'stitch' && !['increase', 'decrease'].includes(stitchOf(next.text)?.family ?? '')) ||

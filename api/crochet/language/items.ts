@@ -9,6 +9,7 @@ import { readFill, readTimes } from './times.ts';
 import { readWork } from './works.ts';
 import { skipSeparator, readSentenceTotal, bar } from './separators.ts';
 import { readLeadingTimes, readColour, readLay, readSkip, isColour, readFar } from './small-items.ts';
+import { readBetween } from './first-and-last.ts';
 import { leftover } from './leftover.ts';
 import { readHookStart, readPicot, readRingCount } from './chain-items.ts';
 import { combine } from './combine.ts';
@@ -43,6 +44,7 @@ function readItem(reading: Reading, limit: number, items: Item[]): Item[] | null
     if (lex.text === '|') return readBars(reading, limit);
     return null;
   }
+  if (readBetween(reading, items)) return [];
   if (items.length === 0 && readLeadingTotal(reading)) return [];
   if (hasWork(items) && readToldTotal(reading, limit)) return [];
   if (isWord(lex, 'total')) return readSentenceTotal(reading, limit);

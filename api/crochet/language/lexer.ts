@@ -70,7 +70,8 @@ function pushMark(tokens: readonly Token[], at: number, out: Lex[]): number {
     out.push(make('mark', '**', 0, token, tokens[at + 1]!));
     return 2;
   }
-  if (!isAbbreviating(tokens, at, out)) out.push(make('mark', token.text, 0, token, token));
+  if (token.text === '&') out.push(make('w', 'and', 0, token, token));
+  else if (!isAbbreviating(tokens, at, out)) out.push(make('mark', token.text, 0, token, token));
   return 1;
 }
 

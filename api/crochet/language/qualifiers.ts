@@ -16,10 +16,29 @@ export const OF_ROUND = new Set([
   'just',
 ]);
 
+/** `along one edge`, `along the long side`. */
+function alongSide(reading: Reading): boolean {
+  if (!isWord(peek(reading), 'across')) return false;
+  let i = 1;
+  while (
+    i < 4 &&
+    (isWord(peek(reading, i), 'the') ||
+      isPlain(peek(reading, i), 'one', 'this', 'that', 'long', 'short', 'right', 'left'))
+  )
+    i += 1;
+  if (i === 1 && peek(reading, i).kind === 'num' && peek(reading, i).value === 1) i += 1;
+  if (i === 1 || !isWord(peek(reading, i), 'side')) return false;
+  const next = peek(reading, i + 1);
+  if (next.kind !== 'mark' && next.kind !== 'end') return false;
+  reading.at += i + 1;
+  return true;
+}
+
 /** Words after a place that say again what is known: `of previous round`, `two rows below`, `around the post of`. */
 export function qualifiers(reading: Reading): void {
   for (;;) {
     const start = reading.at;
+    if (alongSide(reading)) continue;
     takeAll(reading, 'of', 'from', 'in', 'on', 'the', 'same');
     if (peek(reading).kind === 'num' && isWord(peek(reading, 1), 'round', 'row') && peek(reading, 2).kind === 'word')
       reading.at += 2;

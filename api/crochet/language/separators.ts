@@ -1,5 +1,6 @@
 import { type Item } from './tree.ts';
 import { hasWork } from './groups.ts';
+import { type Lex } from './lexer.ts';
 import { isMark, isPlain, isSeparator, isTimesSign, isWord, peek, spanFrom, takeAll, type Reading } from './reading.ts';
 import { isStepWord } from './step-words.ts';
 import { readBareTotal } from './totals.ts';
@@ -41,6 +42,8 @@ export function skipSeparator(reading: Reading, limit: number, items: readonly I
   return true;
 }
 
+const isAll = (lex: Lex): boolean => isPlain(lex, 'all') || (isWord(lex, 'each') && lex.end - lex.start === 3);
+
 /** `on rnd`, `in the round`. */
 const isRoundWordAt = (reading: Reading, ahead: number): boolean =>
   isWord(peek(reading, ahead), 'round', 'row') ||
@@ -63,6 +66,10 @@ export function isTotalHere(
 ): boolean {
   const next = peek(reading, 1);
   if (isWord(peek(reading, 2), 'in', 'on') && isRoundWordAt(reading, 3)) return true;
+  // `twenty stitches in all`.
+  const after = peek(reading, 4);
+  if (isWord(peek(reading, 2), 'in') && isAll(peek(reading, 3)) && (after.kind === 'end' || isSeparator(after)))
+    return true;
   if (isWord(peek(reading, 2), 'in', 'on', 'around', 'across', 'to', 'each')) return false;
   if (ends) return true;
   if (isWord(peek(reading, 2), 'total')) return true;
@@ -72,7 +79,8 @@ export function isTotalHere(
       ? reading.at + 2 >= limit || endsSoon(reading, 2)
       : false;
   if (separator === ':' && onlyMarks(reading, limit, 2)) return true;
-  return isClosed(items) && endsSoon(reading, 2) && separator !== ',';
+  const isSaid = separator === '.' && (isAtLast(reading) || isAgain(reading, items));
+  return (isClosed(items) || isSaid) && endsSoon(reading, 2) && separator !== ',';
 }
 
 export function endsSoon(reading: Reading, ahead: number): boolean {
@@ -84,6 +92,7 @@ export function endsSoon(reading: Reading, ahead: number): boolean {
     if (
       !isMark(lex, ',') &&
       !isMark(lex, '+') &&
+      !isTimesSign(lex) &&
       !isWord(lex, 'and', 'sp', 'sp2', 'st', 'group', 'loop') &&
       lex.kind !== 'num' &&
       lex.kind !== 'stitch' &&
@@ -92,6 +101,28 @@ export function endsSoon(reading: Reading, ahead: number): boolean {
       return false;
   }
   return false;
+}
+
+/** `…, 1 dc in last 2.`: the sentence before went to the last place there is. */
+function isAtLast(reading: Reading): boolean {
+  let at = reading.at - 2;
+  const isNoun = (lex: Lex | undefined): boolean => lex !== undefined && (isWord(lex, 'st') || lex.kind === 'stitch');
+  if (isNoun(reading.lexes[at])) at -= 1;
+  if (reading.lexes[at]?.kind === 'num') at -= 1;
+  const lex = reading.lexes[at];
+  return lex !== undefined && isWord(lex, 'last');
+}
+
+/** `1 dc in each of the 40 row ends. 40 dc.`: the figure and the stitch of the work before, once more. */
+function isAgain(reading: Reading, items: readonly Item[]): boolean {
+  const last = items.at(-1);
+  return (
+    last?.type === 'work' &&
+    last.into !== null &&
+    last.times.type === 'n' &&
+    last.times.n[0] === peek(reading).value &&
+    last.stitch === peek(reading, 1).text
+  );
 }
 
 /** More notes than this do not stand between a work and its total. */

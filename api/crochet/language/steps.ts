@@ -1,6 +1,7 @@
 import { type Item, type Step } from './tree.ts';
 import { VERBS } from './step-words.ts';
 import { totalBetween } from './totals.ts';
+import { type Lex } from './lexer.ts';
 import { isMark, isPlain, isSeparator, isWord, peek, spanFrom, take, takeAll, type Reading } from './reading.ts';
 
 const KIND: Readonly<Record<string, Step['what']>> = {
@@ -29,10 +30,14 @@ export function takeClause(reading: Reading, limit: number, stops: readonly stri
     if (close !== undefined && close < limit && isTotalBracket(reading, reading.at, close)) return;
     if (close !== undefined && close < limit && totalBetween(reading, reading.at + 1, close)) return;
     if (isMark(lex, '*') || isMark(lex, '**') || isMark(lex, '=')) return;
+    if (isTotalSign(lex) && reading.lexes[reading.at + 1]!.kind === 'num') return;
     if (isMark(lex, '-') && !lex.glued && reading.lexes[reading.at + 1]!.kind === 'num') return;
     reading.at = close !== undefined && close < limit ? close + 1 : reading.at + 1;
   }
 }
+
+/** `→ 12`, `~ 12`: what stands behind is a total. */
+const isTotalSign = (lex: Lex): boolean => isMark(lex, '>') || isMark(lex, '~');
 
 function isTotalBracket(reading: Reading, open: number, close: number): boolean {
   return close - open >= 2 && reading.lexes[open + 1]!.kind === 'num' && close - open <= 6;
@@ -53,6 +58,10 @@ const textOf = (reading: Reading, from: number): string =>
 export function readStep(reading: Reading, limit: number): Item | null {
   const from = reading.at;
   const lex = peek(reading);
+  if (isOnlyThese(reading)) {
+    takeClause(reading, limit);
+    return step(reading, from, 'leave', { n: -1 });
+  }
   if (isWord(lex, 'not')) {
     reading.at += 1;
     const what = isWord(peek(reading), 'turn') ? 'no-turn' : isWord(peek(reading), 'join') ? 'do' : 'do';
@@ -112,6 +121,10 @@ function readLeave(reading: Reading, limit: number): Item {
   const from = reading.at;
   reading.at += 1;
   takeAll(reading, 'the', 'last', 'next', 'remain');
+  if (isOthers(reading)) {
+    takeClause(reading, limit);
+    return step(reading, from, 'leave', { n: -1 });
+  }
   const number = peek(reading);
   const n = number.kind === 'num' ? number.value : 1;
   const isPlaces =
@@ -121,6 +134,26 @@ function readLeave(reading: Reading, limit: number): Item {
   const isRest = isWord(reading.lexes[reading.at - 1]!, 'remain') && number.kind !== 'num';
   takeClause(reading, limit);
   return isPlaces ? step(reading, from, 'leave', { n: isRest ? -1 : n }) : step(reading, from, 'do');
+}
+
+/** `cont on these 16 sts only`: what is left is not worked for now. */
+const isOnlyThese = (reading: Reading): boolean => {
+  const at = isPlain(peek(reading), 'cont', 'continue') ? 1 : 0;
+  const isNumber = peek(reading, at + 2).kind === 'num';
+  return (
+    isWord(peek(reading, at), 'on') &&
+    isPlain(peek(reading, at + 1), 'these') &&
+    isWord(peek(reading, at + (isNumber ? 3 : 2)), 'st') &&
+    isPlain(peek(reading, at + (isNumber ? 4 : 3)), 'only')
+  );
+};
+
+/** `leave the rest`, `leaving the others for the present`: all that is left. */
+function isOthers(reading: Reading): boolean {
+  const isRest = isWord(reading.lexes[reading.at - 1]!, 'remain');
+  const next = peek(reading, isRest ? 0 : 1);
+  const isEnd = isSeparator(next) || next.kind === 'end' || isPlain(next, 'for');
+  return isEnd && (isRest || isPlain(peek(reading), 'others'));
 }
 
 /** `sl st in first sc`, `sl st to join`, `ss to top of 3 ch`: a slip stitch that joins a round. */

@@ -42,8 +42,8 @@ export function readTarget(reading: Reading): TargetRead | null {
 function place(reading: Reading): TargetRead | null {
   takeAll(reading, 'the', 'of');
   while (
-    isPlain(peek(reading), 'free', 'unused', 'remaining', 'exposed', 'unworked') &&
-    isWord(peek(reading, 1), 'blo', 'flo')
+    isPlain(peek(reading), 'any', 'free', 'unused', 'remaining', 'exposed', 'unworked') &&
+    (isWord(peek(reading, 1), 'blo', 'flo') || isPlain(peek(reading, 1), 'free', 'unused', 'exposed'))
   )
     reading.at += 1;
   const loops = readLoops(reading);
@@ -184,6 +184,8 @@ function same(reading: Reading): TargetRead {
 
 function each(reading: Reading): TargetRead {
   reading.at += 1;
+  const isOf =
+    isWord(peek(reading), 'of') || reading.lexes[reading.at - 1]!.end - reading.lexes[reading.at - 1]!.start > 5;
   takeAll(reading, 'of', 'the', 'each');
   if (isWord(peek(reading), 'other')) return every(reading, 2, 1);
   if (peek(reading).kind === 'ord') return every(reading, peek(reading).value, 1);
@@ -199,7 +201,7 @@ function each(reading: Reading): TargetRead {
     const n = peek(reading).value;
     const read = counted(reading, 'next');
     // `3 sc over every 4 row ends`: so many in so many, all along.
-    return read.target.what === 'row-end'
+    return read.target.what === 'row-end' && !isOf
       ? { ...read, target: { ...read.target, which: 'every', n }, count: null, fill: true }
       : { ...read, each: true };
   }

@@ -2,6 +2,7 @@ import { type Sized, type Target, type Times } from './tree.ts';
 import { readMultiple, readSized } from './amounts.ts';
 import { isMark, isPlain, isWord, peek, take, takeAll, type Reading } from './reading.ts';
 import { readNoun } from './noun.ts';
+import { isSpaceNumber } from './ordinals.ts';
 
 const NONE: Sized = [0];
 export const FILL: Times = { type: 'fill', leave: NONE, leaveOf: null, to: null };
@@ -56,7 +57,9 @@ export function readFill(reading: Reading): Times | null {
 /** `sc the rest`, `rest of the way around`, `in all but the last 2 sts`. */
 function readRest(reading: Reading): Times | null {
   const start = reading.at;
-  if (take(reading, 'allbut')) {
+  const isBut = isPlain(peek(reading), 'but', 'except');
+  if (isBut) reading.at += 1;
+  if (isBut || take(reading, 'allbut')) {
     takeAll(reading, 'the');
     if (take(reading, 'last')) {
       const n = readSized(reading) ?? [1];
@@ -109,7 +112,7 @@ function readUntil(reading: Reading): Times | null {
     ofRound(reading);
     return { type: 'fill', leave: n, leaveOf: noun ? { ...noun, which: 'last' } : null, to: null };
   }
-  const n = readSized(reading);
+  const n = isSpaceNumber(reading) ? null : readSized(reading);
   if (n) {
     const noun = readNoun(reading);
     if (take(reading, 'remain') || isPlain(peek(reading), 'before', 'unworked', 'from')) {

@@ -10,7 +10,7 @@ const TALK = new Set(
 const TALK_WORDS = ['to', 'total', 'st', 'round', 'row', 'of', 'the', 'with', 'in', 'counts', 'work', 'each'];
 /** One of these at least must be among them. */
 const TELLING = new Set(
-  'have has be gives giving making resulting result results count number brings takes'.split(' '),
+  'have has be is gives giving making resulting result results count number brings takes'.split(' '),
 );
 
 /** `You should now have 18 sc`, `for a total of 18`, `there will be 18 sts`, `stitch count: 18`: a total in a sentence. */

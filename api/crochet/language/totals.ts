@@ -79,6 +79,10 @@ export function totalBetween(reading: Reading, from: number, to: number): Kinds 
       at += 1;
       continue;
     }
+    if (figures > 0 && isWord(lex, 'each') && isWord(reading.lexes[at - 1]!, 'in')) {
+      at += 1;
+      continue;
+    }
     // `at this point` is no group that is counted.
     if (isWord(lex, 'group') && isPlain(reading.lexes[at - 1]!, 'this')) {
       at += 1;

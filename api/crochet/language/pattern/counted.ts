@@ -30,5 +30,6 @@ export function isCounted(read: ReadLine): boolean {
 const isFirmWork = (item: Item): boolean =>
   item.type === 'group' ||
   item.type === 'relative' ||
+  (item.type === 'shaped' && item.until !== null) ||
   (item.type === 'work' &&
     (item.into !== null || item.times.type === 'fill' || (item.times.type === 'n' && item.times.n[0]! > 1)));

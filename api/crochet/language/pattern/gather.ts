@@ -204,9 +204,19 @@ function isLabel(entry: Entry, read: ReadLine, state: State): boolean {
     from === state.last + 1 ||
     from === 1 ||
     (from === 2 && state.last === 0) ||
+    (state.last === 0 && from === reached(state) + 1) ||
     (from > state.last && from <= state.last + 3)
   );
 }
+
+/** The last number of the piece before, which a numbering through all of the pattern goes on from. */
+function reached(state: State): number {
+  const line = state.parts.slice(-NEAR).findLast((part) => part.type === 'line' && part.label !== null);
+  return line?.type === 'line' ? (line.label?.to ?? line.label?.from ?? 0) : 0;
+}
+
+/** So many parts back a numbering is looked for. */
+const NEAR = 8;
 
 /** Whether an entry without a label goes on with the line before it. */
 function continues(state: State, entry: Entry, source: string, read: ReadLine, text: string): boolean {

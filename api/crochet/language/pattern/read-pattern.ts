@@ -80,9 +80,12 @@ function isDefining(definition: SpecialStitch, terms: Terms): boolean {
   );
 }
 
-/** `Sizes: S (M, L)` gives three. */
+/** `Sizes: S (M, L)`, `To fit age 4 (6, 8)` give three. */
 function sizesIn(text: string): string[] {
-  const match = /\bsizes?\b[^\n:]{0,20}:\s*([A-Za-z0-9/.\- ]+?)\s*[([]([^)\]\n]+)[)\]]/i.exec(text.slice(0, 20_000));
+  const head = text.slice(0, 20_000);
+  const match =
+    /\bsizes?\b[^\n:]{0,20}:\s*([A-Za-z0-9/.\- ]+?)\s*[([]([^)\]\n]+)[)\]]/i.exec(head) ??
+    /\bto fit\b[^\n\d([]{0,20}(\d[\d/.-]{0,6})\s*[([]([^)\]\n]+)[)\]]/i.exec(head);
   if (!match) return [];
   const others = match[2]!
     .split(/[,:;]/)
