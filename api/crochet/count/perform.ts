@@ -63,12 +63,17 @@ function performStep(job: Job, item: Extract<Item, { type: 'step' }>): void {
     walker.kept += n;
   }
   if (item.what === 'join' && job.depth > 0 && FIRST_CHAIN.test(item.text)) walker.closePicot();
+  else if (item.what === 'join' && item.into === 'unsaid' && hasPlaceForSlip(job))
+    make(job, 'slst', takeOne(job, null, item));
   else if (item.what === 'join') {
     // `ch 2, join with dc`: the stitch closes the last space.
     const stitch = /with (?:a )?(hdc|dc|tr|dtr|sc)\b/.exec(item.text)?.[1];
     if (stitch && walker.made.at(-1)?.kind === 'chs') walker.lengthen(stitchOf(stitch)?.height ?? 1);
   }
 }
+
+/** Along a row a last slip stitch is worked into the place that is left (`…, hdc, sc, sl st` of a leaf); it joins a round. */
+const hasPlaceForSlip = ({ ring, walker }: Job): boolean => !ring && !walker.open && walker.remaining() === 1;
 
 function performChain(job: Job, item: Work, after: readonly Item[], before: Item | undefined): void {
   const n = item.times.type === 'n' ? pick(item.times.n, job.size) : 1;
@@ -94,7 +99,7 @@ function performWork(job: Job, item: Work, need: () => number): void {
   const target = item.into;
   const row = stitchOf(item.stitch);
   const per = pick(item.per, job.size);
-  if (item === job.lastSlip) return;
+  if (item === job.lastSlip && !hasPlaceForSlip(job)) return;
   if (
     item.stitch === 'picot' ||
     row?.family === 'foundation' ||
