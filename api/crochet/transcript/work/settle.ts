@@ -1,5 +1,5 @@
 import { BARE } from '../instruct/event.ts';
-import { type Unit } from './units.ts';
+import { areSame, type Unit } from './units.ts';
 
 /** Names the stitch of bare numbers, increases and decreases: the one last named, else the first named after, else the one in hand. */
 export function settleStitches(units: readonly Unit[], inHand: string): readonly Unit[] {
@@ -10,10 +10,12 @@ export function settleStitches(units: readonly Unit[], inHand: string): readonly
       case 'together': {
         const stitch = unit.stitch === BARE ? current : unit.stitch;
         if (isFabric(stitch)) current = stitch;
-        return { ...unit, stitch };
+        return stitch === unit.stitch ? unit : { ...unit, stitch };
       }
       case 'oneplace':
-        return { ...unit, parts: unit.parts.map((part) => (part === BARE ? current : part)) };
+        return unit.parts.includes(BARE)
+          ? { ...unit, parts: unit.parts.map((part) => (part === BARE ? current : part)) }
+          : unit;
       case 'repeat':
         return { ...unit, units: unit.units.map(visit) };
       default:
@@ -58,15 +60,14 @@ export function merged(units: readonly Unit[]): readonly Unit[] {
 
 /** Takes from the end of the row the tellings of a group that the repeat goes on with. */
 function withEarlier(row: Unit[], repeat: Extract<Unit, { type: 'repeat' }>): Unit {
-  const group = JSON.stringify(repeat.units);
   let { times } = repeat;
   const { length } = repeat.units;
   for (;;) {
     const last = row.at(-1);
-    if (last?.type === 'repeat' && last.times > 0 && JSON.stringify(last.units) === group) {
+    if (last?.type === 'repeat' && last.times > 0 && areSame(last.units, repeat.units)) {
       times += last.times;
       row.pop();
-    } else if (row.length >= length && JSON.stringify(row.slice(-length)) === group) {
+    } else if (row.length >= length && areSame(row.slice(-length), repeat.units)) {
       times += 1;
       row.length -= length;
     } else return { ...repeat, times };

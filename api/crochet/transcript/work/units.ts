@@ -85,11 +85,41 @@ function wordOf(unit: Exclude<Unit, { type: 'repeat' }>): string {
   }
 }
 
+/** Whether two rows of units are the same work, told the same way. */
+export function areSame(some: readonly Unit[], others: readonly Unit[]): boolean {
+  return some.length === others.length && some.every((unit, n) => isSame(unit, others[n]!));
+}
+
+function isSame(one: Unit, other: Unit): boolean {
+  switch (one.type) {
+    case 'stitch':
+      return (
+        other.type === 'stitch' && one.stitch === other.stitch && one.inOne === other.inOne && one.times === other.times
+      );
+    case 'together':
+      return (
+        other.type === 'together' && one.stitch === other.stitch && one.many === other.many && one.times === other.times
+      );
+    case 'chain':
+    case 'skip':
+      return one.type === other.type && one.many === other.many;
+    case 'oneplace':
+      return (
+        other.type === 'oneplace' &&
+        one.times === other.times &&
+        one.parts.length === other.parts.length &&
+        one.parts.every((part, n) => part === other.parts[n])
+      );
+    case 'repeat':
+      return other.type === 'repeat' && one.times === other.times && areSame(one.units, other.units);
+  }
+}
+
 /** How often a row of units repeats itself: `[a, b, a, b]` is two of `[a, b]`. */
 export function periodOf(units: readonly Unit[]): readonly Unit[] {
-  const keys = units.map((unit) => JSON.stringify(unit));
   for (let length = 1; length <= units.length / 2; length++) {
-    if (units.length % length === 0 && keys.every((key, n) => key === keys[n % length])) return units.slice(0, length);
+    if (units.length % length === 0 && units.every((unit, n) => n < length || isSame(unit, units[n - length]!)))
+      return units.slice(0, length);
   }
   return units;
 }
