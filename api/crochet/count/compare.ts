@@ -35,6 +35,7 @@ export function compareTotals(totals: Totals, tally: Tally, index: number, sense
   let comparable = false;
   let ways: CountedWith[] = [];
   const kinds = Object.keys(totals);
+  if (isStartApart(totals, tally, index)) return { equal: true, comparable: true, ways: [] };
   const namesChains = kinds.some((kind) => kind === 'ch' || kind.endsWith('sp'));
   for (const [kind, figures] of Object.entries(totals)) {
     const n = figures[index] ?? figures[0];
@@ -56,6 +57,14 @@ export function compareTotals(totals: Totals, tally: Tally, index: number, sense
     if (!worked.figures.includes(n)) equal = false;
   }
   return { equal: equal && comparable, comparable, ways };
+}
+
+/** `35 dc + ch 3`: the starting chain that counts as a stitch is told apart from the others. */
+function isStartApart(totals: Totals, { start, chains, sts, byStitch }: Tally, index: number): boolean {
+  if (start === null || chains > 0 || Object.keys(totals).length !== 2) return false;
+  const figure = (kind: string) => totals[kind]?.[index] ?? totals[kind]?.[0];
+  const isAllOne = byStitch[start.stitch] === sts;
+  return isAllOne && figure('ch') === start.chains && figure(start.stitch) === sts - 1;
 }
 
 /** What was made of a kind; several figures where it may be counted in several ways. Null: not to be compared. */

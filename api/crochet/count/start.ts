@@ -117,6 +117,7 @@ export function performStart(job: Job, start: Start, after: readonly Item[], rin
     walker.chain(start.extra);
     return;
   }
+  walker.start = { stitch: start.stitch, chains: start.chains };
   const next = after.find(
     (item): item is Work | Extract<Item, { type: 'group' }> =>
       (item.type === 'work' && item.stitch !== 'ch') || item.type === 'group',

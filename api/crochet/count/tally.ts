@@ -1,6 +1,11 @@
 import { type Made } from './places.ts';
 import { type Step } from './walker.ts';
 
+export interface StartChain {
+  readonly stitch: string;
+  readonly chains: number;
+}
+
 /** What a line has made, counted in every way that a total may be printed. */
 export interface Tally {
   readonly sts: number;
@@ -12,6 +17,8 @@ export interface Tally {
   readonly byStitch: Readonly<Record<string, number>>;
   readonly byLength: Readonly<Record<number, number>>;
   readonly byColour: Readonly<Record<string, number>>;
+  /** The starting chain that counts as a stitch, and how many chains it is. */
+  readonly start: StartChain | null;
   readonly increases: number;
   readonly decreases: number;
 }
@@ -65,7 +72,7 @@ export function grouped(made: readonly Made[], ring: boolean): Made[] {
 const TOGETHER = /^([a-z]+?)\d+tog$/;
 
 /** Counts what was made. Stitches drawn together count under their own name. */
-export function tallyOf(made: readonly Made[], picots = 0): Tally {
+export function tallyOf(made: readonly Made[], picots = 0, start: StartChain | null = null): Tally {
   const byStitch: Record<string, number> = {};
   const byLength: Record<number, number> = {};
   const byColour: Record<string, number> = {};
@@ -102,6 +109,7 @@ export function tallyOf(made: readonly Made[], picots = 0): Tally {
     byStitch,
     byLength,
     byColour,
+    start,
     increases,
     decreases,
   };

@@ -3,6 +3,7 @@ import { type Target } from '../language/tree.ts';
 import { type Ground } from './ground.ts';
 import { isAt, MOST, type Made, type Place, type Spaces } from './places.ts';
 import { type Stitch } from './result.ts';
+import { type StartChain } from './tally.ts';
 
 /** One entry of the walk with what the tally needs beside. */
 export interface Step extends Stitch {
@@ -42,6 +43,8 @@ export class Walker {
   kept = 0;
   /** Words of the line followed so far, over and over in a repeat. */
   toil = 0;
+  /** The starting chain that counts as a stitch. */
+  start: StartChain | null = null;
   readonly counted: readonly number[];
   readonly spaces: Spaces;
 

@@ -222,7 +222,7 @@ function finish(
   const carried =
     aims.some((aim) => aim?.which === 'skipped') && walker.skipped.length === 0 ? 0 : setting.left.unworked;
   const made = grouped(walker.made, setting.ring);
-  const tally = tallyOf(made, walker.walk.filter((step) => step.stitch === 'picot').length);
+  const tally = tallyOf(made, walker.walk.filter((step) => step.stitch === 'picot').length, walker.start);
   const turns = job.turned || !setting.ring;
   const counted = walker.counted.at(-1) ?? 0;
   const isBaseKnown = !isOpen;

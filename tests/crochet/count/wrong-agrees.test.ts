@@ -134,3 +134,11 @@ test('a number too long to be a count is never passed over', () => {
   );
   expect(countLines(['(sc, inc) x 999999 (9)'], { base: 6 })[0]!.verdict).toBe('does-not-fit');
 });
+
+test('a starting chain told apart in a total is one that was made and counts', () => {
+  const verdictOf = (line: string) => countLines([line], { base: 36 })[0]!.verdict;
+  expect(verdictOf('ch 3, dc in next 35 sts, join (35 dc + ch 3)')).toBe('agrees');
+  expect(verdictOf('ch 3, dc in next 35 sts, join (36 dc + ch 3)')).toBe('differs');
+  expect(verdictOf('ch 3, dc in next 35 sts, join (35 dc + ch 2)')).toBe('differs');
+  expect(verdictOf('dc in each st around (35 dc + ch 3)')).toBe('differs');
+});
