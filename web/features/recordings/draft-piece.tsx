@@ -2,6 +2,7 @@ import { useNavigate } from 'react-router-dom';
 import type { PieceDifference } from '#contract/readings';
 import type { ReadingPiece } from '#contract/recordings';
 import { paths } from '../../lib/paths.ts';
+import { PatternPrint } from '../../parts/pattern-print.tsx';
 import { RingMap } from '../../parts/ring-map/ring-map.tsx';
 import { Staff } from '../../parts/ring-map/staff.tsx';
 import { VERDICT_WORDS, VerdictMark } from '../../parts/verdict-mark.tsx';
@@ -9,6 +10,8 @@ import { Button } from '../../ui/button.tsx';
 import { pieceWords } from './draft-words.ts';
 
 const MAP_PX = 112;
+/** More rows than this grow taller than the words beside them: they are shown as the shelf shows them. */
+const MOST_ROWS = 24;
 
 /** The piece as its totals make it; a ring leads to the bench. */
 function PieceMap({ patternId, piece }: { patternId: string; piece: ReadingPiece }) {
@@ -22,6 +25,9 @@ function PieceMap({ patternId, piece }: { patternId: string; piece: ReadingPiece
     walk: [],
     isDone: true,
   }));
+  const totals = piece.rings.flatMap(({ counts }) => counts.map((count) => count ?? 0));
+  if (piece.worked === 'rows' && totals.length > MOST_ROWS)
+    return <PatternPrint of={{ form: 'rows', totals }} size={MAP_PX} />;
   if (lines.length === 0) return <span className="small text-walnut2">No rounds to draw.</span>;
   const nameOf = (id: string) => {
     const ring = piece.rings[Number(id)];
