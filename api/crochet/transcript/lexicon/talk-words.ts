@@ -69,8 +69,7 @@ export const TALK_WORDS: readonly (readonly [Class, string | number, string])[] 
     entire round, the entire way, the rest of the way, to the seam, until you return to the seam, to the join,
     until you reach the join, back to the beginning, till you are back, until you are back, until you are home,
     till you are home, full round, the entire row, all along, to the finish, whole round, whole row, over and
-    over to the start, all the road along, round the whole thing, the length of it, down the line, about the
-    head, until you are back where you started, till you get back, until you get back around, to the end of the
+    over to the start, round the whole thing, the length of it, down the line, until you are back where you started, till you get back, until you get back around, to the end of the
     round, to the end of the row, to the other end, the whole lap`,
   ],
   [
@@ -88,9 +87,9 @@ export const TALK_WORDS: readonly (readonly [Class, string | number, string])[] 
     ending with, end with, end up at, ends at, stays at, stay at, still, remain, remains, so, for, makes it,
     land on, you land on, it is, its, we are at, finish with, finish on, says, say, aiming for, you are after,
     after, you want, want to see, check for, be looking at, looking at, i make it, i make that, got, be, that
-    should be, should give you, puts you at, put you at, lands you on, reduces us to, reach, reaches, closing
-    balance is, numbers, come to, you will come to, arrive at, stitches is, count is, counts, hits, hit,
-    holding, now have, making it, and get, which is, have, holds at, cast of, company numbers, brings that to,
+    should be, should give you, puts you at, put you at, lands you on, reduces us to, reach, reaches,
+    numbers, come to, you will come to, arrive at, stitches is, count is, counts, hits, hit,
+    holding, now have, making it, and get, which is, have, holds at, brings that to,
     bringing you to, bringing it to, giving you, giving us, giving, you find, find, up at, goes down to, goes
     to, went to, drops to, down at, back at, back up to, is what is left, grand total, grows to, comes out at,
     works out at, works out to`,
