@@ -60,6 +60,17 @@ describe('of twelve more voices, written by somebody who does not know the reade
   });
 });
 
+describe('of twelve voices kept apart until the reader had been written', () => {
+  const figures = score(examplesOf('apart'));
+
+  test('it is read no worse than when it was first met', () => {
+    expect(figures.foundShare).toBeGreaterThanOrEqual(87);
+    expect(figures.spuriousShare).toBeLessThanOrEqual(8);
+    expect(figures.workShare).toBeGreaterThanOrEqual(58);
+    expect(figures.verdictShare).toBeGreaterThanOrEqual(72);
+  });
+});
+
 describe('of mistakes that a maker made', () => {
   test.each(['dev', 'fresh', 'wide'] as const)('none is said to come out right (%s)', (set) => {
     expect(faultsLetThrough(examplesOf(set))).toEqual([]);

@@ -13,7 +13,7 @@ export interface Example {
 }
 
 /** Builds a set of the corpus and reads its files into cues. */
-export function examplesOf(set: 'dev' | 'fresh' | 'wide'): readonly Example[] {
+export function examplesOf(set: 'dev' | 'fresh' | 'wide' | 'apart'): readonly Example[] {
   const into = mkdtempSync(path.join(tmpdir(), 'spoken-'));
   build(path.join(import.meta.dirname, '../corpus', set), into);
   return readdirSync(into)
