@@ -15,7 +15,8 @@ let world: World;
 const webDir = mkdtempSync(path.join(tmpdir(), 'pages-'));
 
 beforeAll(async () => {
-  writeFileSync(path.join(webDir, 'index.html'), '<!doctype html><title>Roundelay</title>');
+  for (const page of ['index.html', 'count.html'])
+    writeFileSync(path.join(webDir, page), '<!doctype html><title>Roundelay</title>');
   at = await buildApp({ webDir });
   world = new World(at, await buildCast(at.db));
 });

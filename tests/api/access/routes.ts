@@ -10,6 +10,7 @@ import { editions } from './routes/editions.ts';
 const house: Record<string, Entry> = {
   'GET /health/live': { expect: anybody(200), ask: () => ({ url: '/health/live' }) },
   'GET /health/ready': { expect: anybody(200), ask: () => ({ url: '/health/ready' }) },
+  'GET /count': { expect: anybody(200), ask: () => ({ url: '/count' }) },
   'GET /{*path}': { expect: anybody(200), ask: () => ({ url: '/sign-in' }) },
 };
 
