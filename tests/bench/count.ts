@@ -1,3 +1,5 @@
+import { setFlagsFromString } from 'node:v8';
+import { runInNewContext } from 'node:vm';
 import { countPattern, type PatternInput } from '#crochet';
 
 const ROUNDS = [
@@ -70,13 +72,20 @@ function main(): void {
     const edited = withLine(input, 150, text);
     console.log(`one line of 300 changed in ${what}: ${took(() => countPattern(edited, previous), 40).toFixed(2)} ms`);
   }
-  const before = process.memoryUsage().heapUsed;
+  const before = heapLeft();
   const kept = countPattern(patternOf(10_000));
-  const used = (process.memoryUsage().heapUsed - before) / 1024 / 1024;
+  const used = (heapLeft() - before) / 1024 / 1024;
   console.log(`10,000 lines counted and kept: about ${used.toFixed(0)} MB (${String(kept.pieces.length)} piece)`);
   const long: PatternInput = withLine({ ...patternOf(1), base: 50_000 }, 0, '(sc, inc) × 25000 (75000)');
   const wide = took(() => countPattern(long), 3);
   console.log(`one line of 75,000 stitches: ${wide.toFixed(0)} ms, ${((wide / 75_000) * 1000).toFixed(1)} µs a stitch`);
+}
+
+/** What is held after everything else was let go of. */
+function heapLeft(): number {
+  setFlagsFromString('--expose-gc');
+  (runInNewContext('gc') as () => void)();
+  return process.memoryUsage().heapUsed;
 }
 
 function withLine(input: PatternInput, at: number, text: string): PatternInput {
