@@ -1,32 +1,20 @@
-import type { Browser, Page } from 'playwright-core';
-import { afterAll, beforeAll, expect, test } from 'vitest';
-import { buildApp, type TestApp } from '../support/app.ts';
-import { axeFindings, DESK, listen, openBrowser, PHONE, type Listening } from '../support/browser.ts';
+import type { Page } from 'playwright-core';
+import { expect, test } from 'vitest';
+import { axeFindings, DESK, PHONE } from '../support/browser.ts';
 import { buildMouse, type MousePattern } from '../support/mouse-pattern.ts';
 import { openAs } from '../support/open-as.ts';
+import { setStage } from '../support/stage.ts';
 
-let house: TestApp;
-let server: Listening;
-let browser: Browser;
 let mouse: MousePattern;
-
-beforeAll(async () => {
-  house = await buildApp();
+const stage = setStage(async (house) => {
   mouse = await buildMouse(house.db);
-  server = await listen(house.app);
-  browser = await openBrowser();
-});
-afterAll(async () => {
-  await browser.close();
-  await server.close();
-  await house.close();
 });
 
-const bench = () => `${server.url}/patterns/${mouse.patternId}/bench`;
+const bench = () => `${stage.url}/patterns/${mouse.patternId}/bench`;
 const materials = () =>
-  house.db('materials').where({ pattern_id: mouse.patternId }).whereNull('deleted_at').pluck('name');
+  stage.house.db('materials').where({ pattern_id: mouse.patternId }).whereNull('deleted_at').pluck('name');
 const left = () =>
-  house.db('left_checks').where({ pattern_id: mouse.patternId }).whereNull('deleted_at').pluck('reason');
+  stage.house.db('left_checks').where({ pattern_id: mouse.patternId }).whereNull('deleted_at').pluck('reason');
 
 /** Walks on with the Tab key until something that is called so has the focus. */
 async function tabTo(page: Page, name: string): Promise<void> {
@@ -39,7 +27,7 @@ async function tabTo(page: Page, name: string): Promise<void> {
 }
 
 test('by keyboard alone: a check is mended and undone, another left with its reason, a line reached', async () => {
-  const { page, quiet } = await openAs(browser, server.url, mouse.house.creator, DESK);
+  const { page, quiet } = await openAs(stage.browser, stage.url, mouse.house.creator, DESK);
   await page.goto(bench());
   await page.getByRole('button', { name: /^Checks 4/ }).waitFor();
 
@@ -74,7 +62,7 @@ test('by keyboard alone: a check is mended and undone, another left with its rea
 });
 
 test('the reason still stands on another day, and sending to proof says what it leaves open', async () => {
-  const { page, quiet } = await openAs(browser, server.url, mouse.house.editor, DESK);
+  const { page, quiet } = await openAs(stage.browser, stage.url, mouse.house.editor, DESK);
   await page.goto(bench());
   const send = page.getByRole('button', { name: 'Send to proof' });
   await expect.poll(() => page.getByText(/leaves open\s+3 checks/).isVisible()).toBe(true);
@@ -89,7 +77,7 @@ test('the reason still stands on another day, and sending to proof says what it 
 });
 
 test('on a phone the list fits and can be used', async () => {
-  const { page, quiet } = await openAs(browser, server.url, mouse.house.editor, PHONE);
+  const { page, quiet } = await openAs(stage.browser, stage.url, mouse.house.editor, PHONE);
   await page.goto(bench());
   await page.getByRole('button', { name: /^Checks/ }).tap();
   await page.getByRole('heading', { name: 'Automatic checks' }).waitFor();

@@ -1,22 +1,9 @@
-import type { Browser, Page } from 'playwright-core';
-import { afterAll, beforeAll, describe, expect, test } from 'vitest';
-import { buildApp, type TestApp } from '../support/app.ts';
-import { axeFindings, DESK, listen, openBrowser, openPage, PHONE, type Listening } from '../support/browser.ts';
+import type { Page } from 'playwright-core';
+import { describe, expect, test } from 'vitest';
+import { axeFindings, DESK, openPage, PHONE } from '../support/browser.ts';
+import { setStage } from '../support/stage.ts';
 
-let house: TestApp;
-let server: Listening;
-let browser: Browser;
-
-beforeAll(async () => {
-  house = await buildApp();
-  server = await listen(house.app);
-  browser = await openBrowser();
-});
-afterAll(async () => {
-  await browser.close();
-  await server.close();
-  await house.close();
-});
+const stage = setStage();
 
 const CAP = `Cap
 R1: 6 sc in magic ring (6)
@@ -24,12 +11,12 @@ R2: inc x 6 (12)
 R3: (sc, inc) x 5 (18)
 R4: sc in each st around
 `;
-const address = () => `${server.url}/count`;
+const address = () => `${stage.url}/count`;
 const field = (page: Page) => page.getByRole('textbox', { name: 'The pattern as written' });
 const lines = (page: Page) => page.locator('[data-line]');
 
 async function openCount(options = DESK) {
-  const opened = await openPage(browser, options);
+  const opened = await openPage(stage.browser, options);
   await opened.page.goto(address());
   await field(opened.page).waitFor();
   return opened;
@@ -140,7 +127,7 @@ describe('what is pasted', () => {
     await expect.poll(() => link.inputValue()).toContain('#z=');
     const address2 = await link.inputValue();
     await page.context().close();
-    const other = await openPage(browser, PHONE);
+    const other = await openPage(stage.browser, PHONE);
     await other.page.goto(address2);
     await expect.poll(() => field(other.page).inputValue()).toBe(CAP);
     await expect.poll(() => other.page.locator('main').innerText()).toContain('As you chose.');

@@ -1,37 +1,20 @@
-import type { Browser, Page } from 'playwright-core';
-import { afterAll, beforeAll, expect, test } from 'vitest';
-import { buildApp, type TestApp } from '../support/app.ts';
-import { axeFindings, DESK, listen, openBrowser, openPage, PHONE, type Listening } from '../support/browser.ts';
-import { TEST_PASSWORD } from '../support/builders.ts';
+import type { Page } from 'playwright-core';
+import { expect, test } from 'vitest';
+import { axeFindings, DESK, PHONE } from '../support/browser.ts';
 import { buildMouse, type MousePattern } from '../support/mouse-pattern.ts';
+import { openAs } from '../support/open-as.ts';
+import { setStage } from '../support/stage.ts';
 
-let house: TestApp;
-let server: Listening;
-let browser: Browser;
 let mouse: MousePattern;
-
-beforeAll(async () => {
-  house = await buildApp();
+const stage = setStage(async (house) => {
   mouse = await buildMouse(house.db);
   await house.db('lines').where({ id: mouse.lines[2] }).update({ from_no: 3, to_no: 6 });
-  server = await listen(house.app);
-  browser = await openBrowser();
-});
-afterAll(async () => {
-  await browser.close();
-  await server.close();
-  await house.close();
 });
 
 async function openCard(options: typeof DESK): Promise<{ page: Page; quiet: (meant?: RegExp) => void }> {
-  const opened = await openPage(browser, options);
+  const opened = await openAs(stage.browser, stage.url, mouse.house.creator, options);
   const { page } = opened;
-  await page.goto(`${server.url}/sign-in`);
-  await page.getByLabel(/e-?mail/i).fill(mouse.house.creator.email);
-  await page.getByLabel('Password', { exact: true }).fill(TEST_PASSWORD);
-  await page.getByRole('button', { name: 'Sign in' }).click();
-  await page.waitForURL((url) => !url.pathname.startsWith('/sign-in'));
-  await page.goto(`${server.url}/patterns/${mouse.patternId}/bench`);
+  await page.goto(`${stage.url}/patterns/${mouse.patternId}/bench`);
   return opened;
 }
 const heading = (page: Page) => page.locator('#card-now').innerText();
@@ -77,12 +60,12 @@ test('the creator reads the pattern by keys and pedal, also when the connection 
 });
 
 test('a line that is too long for its size is set smaller until it fits', async () => {
-  await house
+  await stage.house
     .db('lines')
     .where({ id: mouse.lines[1] })
     .update({ text: `${Array.from({ length: 30 }, (_, i) => `${i + 1} sc in next st`).join(', ')} (12)` });
   const { page, quiet } = await openCard(DESK);
-  await page.goto(`${server.url}/patterns/${mouse.patternId}/card`);
+  await page.goto(`${stage.url}/patterns/${mouse.patternId}/card`);
   await expect.poll(() => heading(page)).toBe('R1');
   const short = await fontSize(page);
   await page.keyboard.press('ArrowRight');
@@ -95,7 +78,7 @@ test('a line that is too long for its size is set smaller until it fits', async 
 
 test('on a phone it is turned with the thumb, lines are chosen from the list, and nothing runs out of the screen', async () => {
   const { page, quiet } = await openCard(PHONE);
-  await page.goto(`${server.url}/patterns/${mouse.patternId}/card`);
+  await page.goto(`${stage.url}/patterns/${mouse.patternId}/card`);
   await page.getByRole('button', { name: /^Next/ }).click();
   await expect.poll(() => heading(page)).toBe('R2');
   await page.getByRole('button', { name: 'All lines' }).click();
@@ -109,7 +92,7 @@ test('on a phone it is turned with the thumb, lines are chosen from the list, an
 
 test('on paper every line stands whole, black on white', async () => {
   const { page } = await openCard(DESK);
-  await page.goto(`${server.url}/patterns/${mouse.patternId}/card`);
+  await page.goto(`${stage.url}/patterns/${mouse.patternId}/card`);
   await page.locator('#card-now').waitFor();
   await page.emulateMedia({ media: 'print' });
   expect(await page.locator('main').isVisible()).toBe(false);

@@ -1,10 +1,9 @@
-import type { Browser } from 'playwright-core';
 import request from 'supertest';
-import { afterAll, beforeAll, expect, test } from 'vitest';
-import { buildApp, type TestApp } from '../support/app.ts';
-import { axeFindings, DESK, listen, openBrowser, openPage, PHONE, type Listening } from '../support/browser.ts';
-import { TEST_PASSWORD } from '../support/builders.ts';
+import { expect, test } from 'vitest';
+import { axeFindings, DESK, PHONE } from '../support/browser.ts';
 import { buildMouse, type MousePattern } from '../support/mouse-pattern.ts';
+import { openAs } from '../support/open-as.ts';
+import { setStage } from '../support/stage.ts';
 
 /** The mouse as it was filmed after it was written: round three is another, round four is not written. */
 const TALK = `WEBVTT
@@ -22,13 +21,8 @@ Round three. Two single, then an increase, four times. That makes sixteen.
 Round four. One single crochet in every stitch around. Still sixteen.
 `;
 
-let house: TestApp;
-let server: Listening;
-let browser: Browser;
 let mouse: MousePattern;
-
-beforeAll(async () => {
-  house = await buildApp();
+const stage = setStage(async (house) => {
   mouse = await buildMouse(house.db);
   await house.db('marks').where({ pattern_id: mouse.patternId }).delete();
   await request(house.app)
@@ -36,29 +30,17 @@ beforeAll(async () => {
     .set(await house.as(mouse.house.creator))
     .attach('file', Buffer.from(TALK), { filename: 'mouse.vtt', contentType: 'text/vtt' });
   await house.workAll();
-  server = await listen(house.app);
-  browser = await openBrowser();
-});
-afterAll(async () => {
-  await browser.close();
-  await server.close();
-  await house.close();
 });
 
 const marks = async () =>
-  (await house.db('marks').where({ pattern_id: mouse.patternId }).whereNull('deleted_at')).length;
+  (await stage.house.db('marks').where({ pattern_id: mouse.patternId }).whereNull('deleted_at')).length;
 
 test.each([
   ['at a desk', DESK],
   ['on a phone', PHONE],
 ])('%s a written pattern is held against its recording, taken at once and given back', async (_, options) => {
-  const { page, quiet } = await openPage(browser, options);
-  await page.goto(`${server.url}/sign-in`);
-  await page.getByLabel(/e-?mail/i).fill(mouse.house.creator.email);
-  await page.getByLabel('Password', { exact: true }).fill(TEST_PASSWORD);
-  await page.getByRole('button', { name: 'Sign in' }).click();
-  await page.waitForURL((url) => !url.pathname.startsWith('/sign-in'));
-  await page.goto(`${server.url}/patterns/${mouse.patternId}/recording/held`);
+  const { page, quiet } = await openAs(stage.browser, stage.url, mouse.house.creator, options);
+  await page.goto(`${stage.url}/patterns/${mouse.patternId}/recording/held`);
   const row = (name: string) => page.getByRole('main').getByRole('listitem').filter({ hasText: name }).first();
   await expect.poll(() => row('R3').innerText()).toContain('said differently');
   expect(await row('R4').innerText()).toContain('filmed, not written');

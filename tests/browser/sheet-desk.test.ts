@@ -1,28 +1,16 @@
-import type { Browser, Page } from 'playwright-core';
-import { afterAll, beforeAll, expect, test } from 'vitest';
-import { buildApp, type TestApp } from '../support/app.ts';
-import { axeFindings, DESK, listen, openBrowser, PHONE, type Listening } from '../support/browser.ts';
+import type { Page } from 'playwright-core';
+import { expect, test } from 'vitest';
+import { axeFindings, DESK, PHONE } from '../support/browser.ts';
 import { buildMouse, type MousePattern } from '../support/mouse-pattern.ts';
 import { openAs } from '../support/open-as.ts';
+import { setStage } from '../support/stage.ts';
 
-let house: TestApp;
-let server: Listening;
-let browser: Browser;
 let mouse: MousePattern;
-
-beforeAll(async () => {
-  house = await buildApp();
+const stage = setStage(async (house) => {
   mouse = await buildMouse(house.db);
-  server = await listen(house.app);
-  browser = await openBrowser();
-});
-afterAll(async () => {
-  await browser.close();
-  await server.close();
-  await house.close();
 });
 
-const at = (rest: string) => `${server.url}/patterns/${mouse.patternId}/${rest}`;
+const at = (rest: string) => `${stage.url}/patterns/${mouse.patternId}/${rest}`;
 /** Whatever makes the page wider than the screen. */
 const runningOut = (page: Page) =>
   page.evaluate(() =>
@@ -35,7 +23,7 @@ const runningOut = (page: Page) =>
 const pages = (page: Page) => page.getByRole('img', { name: /^Page \d+ of/ });
 
 test('the creator writes what a sheet says, sees the real page follow, and publishes it', async () => {
-  const { page, quiet } = await openAs(browser, server.url, mouse.house.creator, DESK);
+  const { page, quiet } = await openAs(stage.browser, stage.url, mouse.house.creator, DESK);
   await page.goto(at('sheet'));
   await pages(page).first().waitFor();
 
@@ -49,7 +37,7 @@ test('the creator writes what a sheet says, sees the real page follow, and publi
   await expect.poll(() => page.getByRole('status').first().innerText()).toMatch(/^Saved/);
   await expect
     .poll(async () => {
-      const row = await house
+      const row = await stage.house
         .db('patterns')
         .where({ id: mouse.patternId })
         .first<{ details: { gauge?: string } }>('details');
@@ -62,9 +50,11 @@ test('the creator writes what a sheet says, sees the real page follow, and publi
   await expect.poll(() => publish.getAttribute('aria-disabled')).toBeNull();
   await publish.click();
   await expect.poll(() => page.getByRole('heading', { name: 'Publish edition 2' }).isVisible()).toBe(true);
-  expect(await house.db('editions').where({ pattern_id: mouse.patternId }).select('number')).toEqual([{ number: 1 }]);
+  expect(await stage.house.db('editions').where({ pattern_id: mouse.patternId }).select('number')).toEqual([
+    { number: 1 },
+  ]);
 
-  await house.workAll();
+  await stage.house.workAll();
   await page.getByRole('link', { name: 'Editions' }).click();
   await page.getByRole('link', { name: /\/w\/.*\/1$/ }).waitFor();
   expect(await page.getByRole('link', { name: 'PDF in US terms' }).count()).toBe(2);
@@ -74,8 +64,8 @@ test('the creator writes what a sheet says, sees the real page follow, and publi
 });
 
 test('a line that holds it back is named, with the way to it, and the button says why it waits', async () => {
-  await house.db('lines').where({ id: mouse.lines[1] }).update({ text: 'inc × 6 (13)' });
-  const { page, quiet } = await openAs(browser, server.url, mouse.house.owner, DESK);
+  await stage.house.db('lines').where({ id: mouse.lines[1] }).update({ text: 'inc × 6 (13)' });
+  const { page, quiet } = await openAs(stage.browser, stage.url, mouse.house.owner, DESK);
   await page.goto(at('sheet'));
   await expect.poll(() => page.getByText('Body, R2 differs: its totals are not equal.').isVisible()).toBe(true);
   const publish = page.getByRole('button', { name: /^Publish edition/ });
@@ -86,7 +76,7 @@ test('a line that holds it back is named, with the way to it, and the button say
 });
 
 test('on a phone the sheet, its forms and the editions fit and can be used', async () => {
-  const { page, quiet } = await openAs(browser, server.url, mouse.house.editor, PHONE);
+  const { page, quiet } = await openAs(stage.browser, stage.url, mouse.house.editor, PHONE);
   for (const tab of ['sheet', 'editions']) {
     await page.goto(at(tab));
     await page.locator('main').waitFor();

@@ -1,31 +1,19 @@
-import type { Browser, Page } from 'playwright-core';
-import { afterAll, beforeAll, expect, test } from 'vitest';
-import { buildApp, type TestApp } from '../support/app.ts';
-import { axeFindings, DESK, listen, openBrowser, PHONE, type Listening } from '../support/browser.ts';
+import type { Page } from 'playwright-core';
+import { expect, test } from 'vitest';
+import { axeFindings, DESK, PHONE } from '../support/browser.ts';
 import type { PersonRow } from '../support/builders.ts';
 import { openAs } from '../support/open-as.ts';
 import { buildMouse, type MousePattern } from '../support/mouse-pattern.ts';
+import { setStage } from '../support/stage.ts';
 
-let house: TestApp;
-let server: Listening;
-let browser: Browser;
 let mouse: MousePattern;
-
-beforeAll(async () => {
-  house = await buildApp();
+const stage = setStage(async (house) => {
   mouse = await buildMouse(house.db);
-  server = await listen(house.app);
-  browser = await openBrowser();
-});
-afterAll(async () => {
-  await browser.close();
-  await server.close();
-  await house.close();
 });
 
 async function openBench(person: PersonRow, options: typeof DESK) {
-  const opened = await openAs(browser, server.url, person, options);
-  await opened.page.goto(`${server.url}/patterns/${mouse.patternId}/bench`);
+  const opened = await openAs(stage.browser, stage.url, person, options);
+  await opened.page.goto(`${stage.url}/patterns/${mouse.patternId}/bench`);
   await opened.page.locator('[data-line]').first().waitFor();
   return opened;
 }

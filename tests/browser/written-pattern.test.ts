@@ -1,25 +1,12 @@
-import type { Browser } from 'playwright-core';
-import { afterAll, beforeAll, expect, test } from 'vitest';
-import { buildApp, type TestApp } from '../support/app.ts';
-import { axeFindings, DESK, listen, openBrowser, PHONE, type Listening } from '../support/browser.ts';
+import { expect, test } from 'vitest';
+import { axeFindings, DESK, PHONE } from '../support/browser.ts';
 import { buildHouse, type Household } from '../support/builders.ts';
 import { openAs } from '../support/open-as.ts';
+import { setStage } from '../support/stage.ts';
 
-let house: TestApp;
 let studio: Household;
-let server: Listening;
-let browser: Browser;
-
-beforeAll(async () => {
-  house = await buildApp();
+const stage = setStage(async (house) => {
   studio = await buildHouse(house.db);
-  server = await listen(house.app);
-  browser = await openBrowser();
-});
-afterAll(async () => {
-  await browser.close();
-  await server.close();
-  await house.close();
 });
 
 const TEXT = `Oval basket
@@ -39,8 +26,8 @@ Row 1: ch 11, sc in 2nd ch from hook and in each ch across (10)
 `;
 
 async function openDesk(options = DESK) {
-  const opened = await openAs(browser, server.url, studio.creator, options);
-  await opened.page.goto(`${server.url}/new/written`);
+  const opened = await openAs(stage.browser, stage.url, studio.creator, options);
+  await opened.page.goto(`${stage.url}/new/written`);
   await opened.page.getByRole('textbox', { name: 'The pattern as written' }).waitFor();
   return opened;
 }
