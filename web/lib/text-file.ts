@@ -22,9 +22,13 @@ function utf16Of(bytes: Uint8Array): 'utf-16le' | 'utf-16be' | null {
   return zeros[0]! > half * 0.6 && zeros[1]! < half * 0.1 ? 'utf-16be' : null;
 }
 
-/** Controls that no text has, other than tab, line ends and form feed. */
-// eslint-disable-next-line no-control-regex -- they are what is looked for
-const CONTROLS = /[\u0000-\u0008\u000b\u000e-\u001f]/;
+/** Whether a code unit is a control that no text has: not tab, line end or form feed. */
+const isControl = (code: number): boolean => code < 9 || code === 11 || (code > 13 && code < 32);
+
+function hasControls(text: string): boolean {
+  for (let i = 0; i < text.length; i += 1) if (isControl(text.charCodeAt(i))) return true;
+  return false;
+}
 
 function decode(bytes: Uint8Array): Exclude<TextFile, { problem: unknown }> {
   const wide = utf16Of(bytes);
@@ -43,7 +47,7 @@ function decode(bytes: Uint8Array): Exclude<TextFile, { problem: unknown }> {
 export function readTextBytes(bytes: Uint8Array): TextFile {
   if (bytes.length > MOST_FILE_BYTES) return { problem: 'too-large' };
   const { text, encoding } = decode(bytes);
-  if (CONTROLS.test(text)) return { problem: 'not-text' };
+  if (hasControls(text)) return { problem: 'not-text' };
   const plain = text.replace(/^\uFEFF/, '');
   return plain.trim() === '' ? { problem: 'empty' } : { text: plain, encoding };
 }

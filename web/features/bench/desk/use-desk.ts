@@ -125,5 +125,5 @@ export function useNewDesk(bench: Bench, cuesByRecording: CuesByRecording, start
 }
 
 /** A line by its id. */
-export const lineOf = (desk: Desk, lineId: string | null): Line | undefined =>
+export const lineOf = (desk: Pick<Desk, 'pattern'>, lineId: string | null): Line | undefined =>
   desk.pattern.lines.find((line) => line.id === lineId);

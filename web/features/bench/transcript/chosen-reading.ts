@@ -5,17 +5,23 @@ import { type Desk, lineOf } from '../desk/use-desk.ts';
 import { lastBegun } from './captions.ts';
 import { type ChosenWords } from './choose-words.ts';
 
+/** What of the desk the reading of chosen words depends on; the desk itself is new with every moment of the clip. */
+export type Scene = Pick<
+  Desk,
+  'pattern' | 'counts' | 'cues' | 'captions' | 'moments' | 'recordingId' | 'lineId' | 'isOpen'
+>;
+
 /** Places that the last round or row up to a line leaves; null where there is none, or it cannot be counted. */
-function placesAfter(desk: Desk, line: Line | undefined): number | null {
-  const own = desk.pattern.lines.filter(({ pieceId }) => pieceId === line?.pieceId);
+function placesAfter(scene: Scene, line: Line | undefined): number | null {
+  const own = scene.pattern.lines.filter(({ pieceId }) => pieceId === line?.pieceId);
   const upTo = own.slice(0, own.findIndex(({ id }) => id === line?.id) + 1);
   const last = upTo.findLast(({ kind }) => isCounted(kind));
-  return (last && desk.counts.get(last.id)?.count) ?? null;
+  return (last && scene.counts.get(last.id)?.count) ?? null;
 }
 
 /** The line before in its piece. */
-function lineBefore(desk: Desk, line: Line): Line | undefined {
-  const own = desk.pattern.lines.filter(({ pieceId }) => pieceId === line.pieceId);
+function lineBefore(scene: Scene, line: Line): Line | undefined {
+  const own = scene.pattern.lines.filter(({ pieceId }) => pieceId === line.pieceId);
   return own[own.findIndex(({ id }) => id === line.id) - 1];
 }
 
@@ -23,18 +29,18 @@ function lineBefore(desk: Desk, line: Line): Line | undefined {
  * What the chosen words would read: as the open line, else as a new one at its place in time. The server reads them the
  * same way when they are taken.
  */
-export function readChosen(desk: Desk, words: ChosenWords): StretchReading | null {
-  const { pattern, cues, captions, moments } = desk;
-  const open = desk.isOpen ? lineOf(desk, desk.lineId) : undefined;
+export function readChosen(scene: Scene, words: ChosenWords): StretchReading | null {
+  const { pattern, cues, captions, moments } = scene;
+  const open = scene.isOpen ? lineOf(scene, scene.lineId) : undefined;
   const caption = captions.find(({ words: own }) => own.some(({ n }) => n >= words.firstWord));
   const mark = moments[lastBegun(moments, caption?.startMs ?? 0)];
-  const before = open ? lineBefore(desk, open) : lineOf(desk, mark?.lineId ?? null);
+  const before = open ? lineBefore(scene, open) : lineOf(scene, mark?.lineId ?? null);
   const piece = pattern.pieces.find(({ id }) => id === (open ?? before)?.pieceId) ?? pattern.pieces[0];
-  const spoken = pattern.recordings.find(({ id }) => id === desk.recordingId)?.spokenTerms;
+  const spoken = pattern.recordings.find(({ id }) => id === scene.recordingId)?.spokenTerms;
   return readStretch(cues, {
     ...words,
     unit: piece?.worked === 'rows' ? 'row' : 'round',
-    base: placesAfter(desk, before),
+    base: placesAfter(scene, before),
     written: pattern.terms,
     ...(spoken && { spoken }),
   });

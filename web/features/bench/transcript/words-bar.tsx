@@ -67,8 +67,11 @@ export function WordsBar({ words }: { words: ChosenWords }) {
   const { use, isBusy, refusal } = useWordsUse(desk, words);
   const open = desk.isOpen ? lineOf(desk, desk.lineId) : undefined;
   const name = open ? lineName(open) || open.kind : '';
-  // eslint-disable-next-line react-hooks/exhaustive-deps -- the desk is new with every moment of the clip
-  const read = useMemo(() => readChosen(desk, words), [words, desk.cues, desk.pattern, desk.lineId, desk.isOpen]);
+  const { pattern, counts, cues, captions, moments, recordingId, lineId, isOpen } = desk;
+  const read = useMemo(
+    () => readChosen({ pattern, counts, cues, captions, moments, recordingId, lineId, isOpen }, words),
+    [words, pattern, counts, cues, captions, moments, recordingId, lineId, isOpen],
+  );
   useKeys({ Escape: () => desk.chooseWords(null) });
   if (!read) return null;
   const busy = isBusy ? { notYet: 'One moment.' } : {};
