@@ -1,7 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import request from 'supertest';
-import { afterAll, beforeAll, describe, expect, test } from 'vitest';
-import { buildApp, type TestApp } from '../../support/app.ts';
+import { describe, expect, test } from 'vitest';
 import {
   buildHouse,
   buildLine,
@@ -10,59 +9,52 @@ import {
   buildPerson,
   buildPiece,
   buildRecording,
-  type Household,
 } from '../../support/builders.ts';
-import { talkTo } from './talk.ts';
+import { settleIn } from './at-home.ts';
 
-let server: TestApp;
-let house: Household;
-beforeAll(async () => {
-  server = await buildApp();
-  house = await buildHouse(server.db);
-});
-afterAll(() => server.close());
+const home = settleIn();
+const { call } = home;
 
 const aPiece = async () => {
-  const pattern = await buildPattern(server.db, { studio_id: house.studio.id });
-  return { pattern, piece: await buildPiece(server.db, { pattern_id: pattern.id }) };
+  const pattern = await buildPattern(home.server.db, { studio_id: home.house.studio.id });
+  return { pattern, piece: await buildPiece(home.server.db, { pattern_id: pattern.id }) };
 };
 const aLine = async (over: Record<string, unknown> = {}) => {
   const { pattern, piece } = await aPiece();
-  return { pattern, piece, line: await buildLine(server.db, { piece_id: piece.id, ...over }) };
+  return { pattern, piece, line: await buildLine(home.server.db, { piece_id: piece.id, ...over }) };
 };
-const call = (...args: Parameters<ReturnType<typeof talkTo>>) => talkTo(server)(...args);
 const patch = (who: { id: string }, path: string, version: number | null, body: object, deed?: string) =>
   call(who, 'patch', path, { version, body, ...(deed !== undefined && { deed }) });
 const post = (who: { id: string }, path: string, body: object) => call(who, 'post', path, { body });
-const changesOf = (patternId: string) => server.db('changes').where({ pattern_id: patternId }).orderBy('id');
+const changesOf = (patternId: string) => home.server.db('changes').where({ pattern_id: patternId }).orderBy('id');
 
 describe('two people at one line', () => {
   test('of two who read version 1, one is saved and the other told to look again, fifty times', async () => {
     const { pattern, piece } = await aPiece();
     const lines = [];
-    for (let i = 0; i < 50; i += 1) lines.push(await buildLine(server.db, { piece_id: piece.id }));
-    const [creator, editor] = [await server.as(house.creator), await server.as(house.editor)];
+    for (let i = 0; i < 50; i += 1) lines.push(await buildLine(home.server.db, { piece_id: piece.id }));
+    const [creator, editor] = [await home.server.as(home.house.creator), await home.server.as(home.house.editor)];
     const save = (id: string, who: Record<string, string>, text: string) =>
-      request(server.app).patch(`/api/lines/${id}`).set(who).set('If-Match', '"1"').send({ text });
+      request(home.server.app).patch(`/api/lines/${id}`).set(who).set('If-Match', '"1"').send({ text });
     for (const { id } of lines) {
-      server.clock.advance(2_000);
+      home.server.clock.advance(2_000);
       const answers = await Promise.all([save(id, creator, '8 sc in ring'), save(id, editor, '7 sc in ring')]);
       expect(answers.map((a) => a.status).sort()).toEqual([200, 412]);
     }
-    expect(await server.db('lines').where({ piece_id: piece.id, version: 2 })).toHaveLength(50);
+    expect(await home.server.db('lines').where({ piece_id: piece.id, version: 2 })).toHaveLength(50);
     expect(await changesOf(pattern.id)).toHaveLength(50);
   }, 60_000);
 
   test('the one who came second is shown the row as it is now, and who saved it when', async () => {
     const { line } = await aLine();
-    await patch(house.editor, `lines/${line.id}`, 1, { text: '7 sc in ring' });
-    const refused = await patch(house.creator, `lines/${line.id}`, 1, { text: '8 sc in ring' });
+    await patch(home.house.editor, `lines/${line.id}`, 1, { text: '7 sc in ring' });
+    const refused = await patch(home.house.creator, `lines/${line.id}`, 1, { text: '8 sc in ring' });
     expect(refused.status).toBe(412);
     expect(refused.type).toBe('application/problem+json');
     expect(refused.body).toMatchObject({
       type: '/problems/stale-version',
       present: { id: line.id, text: '7 sc in ring', version: 2 },
-      savedBy: house.editor.name,
+      savedBy: home.house.editor.name,
     });
     expect(Date.parse(refused.body.savedAt as string)).not.toBeNaN();
     expect(refused.body.present).not.toHaveProperty('patternId');
@@ -70,10 +62,10 @@ describe('two people at one line', () => {
 
   test('different lines are saved beside each other, and nobody waits in vain', async () => {
     const { piece, line } = await aLine();
-    const other = await buildLine(server.db, { piece_id: piece.id });
+    const other = await buildLine(home.server.db, { piece_id: piece.id });
     const answers = await Promise.all([
-      patch(house.creator, `lines/${line.id}`, 1, { text: 'sc around' }),
-      patch(house.editor, `lines/${other.id}`, 1, { text: '(sc, inc) ×6' }),
+      patch(home.house.creator, `lines/${line.id}`, 1, { text: 'sc around' }),
+      patch(home.house.editor, `lines/${other.id}`, 1, { text: '(sc, inc) ×6' }),
     ]);
     expect(answers.map((a) => a.status)).toEqual([200, 200]);
   });
@@ -91,24 +83,24 @@ describe('what is refused, and then nothing is written', () => {
     ['a place after a line that is not there', 1, { after: randomUUID() }, 422],
   ])('%s', async (_what, version, body, status) => {
     const { pattern, line } = await aLine();
-    const before = await server.db('lines').where({ id: line.id }).first();
-    const answer = await patch(house.creator, `lines/${line.id}`, version, body);
+    const before = await home.server.db('lines').where({ id: line.id }).first();
+    const answer = await patch(home.house.creator, `lines/${line.id}`, version, body);
     expect(answer.status).toBe(status);
-    expect(await server.db('lines').where({ id: line.id }).first()).toEqual(before);
+    expect(await home.server.db('lines').where({ id: line.id }).first()).toEqual(before);
     expect(await changesOf(pattern.id)).toEqual([]);
   });
 
   test('a stranger and a viewer get the same answer for a real line as for a made-up one', async () => {
     const { line } = await aLine();
-    const others = await buildHouse(server.db);
-    for (const who of [others.owner, await buildPerson(server.db)]) {
+    const others = await buildHouse(home.server.db);
+    for (const who of [others.owner, await buildPerson(home.server.db)]) {
       const real = await patch(who, `lines/${line.id}`, 1, { text: 'x' });
       const madeUp = await patch(who, `lines/${randomUUID()}`, 1, { text: 'x' });
       const noId = await patch(who, 'lines/17', 1, { text: 'x' });
       expect([real.status, madeUp.status, noId.status]).toEqual([404, 404, 404]);
       expect({ ...real.body, instance: '' }).toEqual({ ...madeUp.body, instance: '' });
     }
-    const nobody = await request(server.app)
+    const nobody = await request(home.server.app)
       .patch(`/api/lines/${line.id}`)
       .set({ 'Sec-Fetch-Site': 'same-origin', 'If-Match': '"1"' })
       .send({ text: 'x' });
@@ -117,10 +109,10 @@ describe('what is refused, and then nothing is written', () => {
 
   test('a member who has left is refused with the next request', async () => {
     const { line } = await aLine();
-    const guest = await buildPerson(server.db);
-    await server.db('members').insert({ studio_id: house.studio.id, person_id: guest.id, role: 'editor' });
+    const guest = await buildPerson(home.server.db);
+    await home.server.db('members').insert({ studio_id: home.house.studio.id, person_id: guest.id, role: 'editor' });
     expect((await patch(guest, `lines/${line.id}`, 1, { text: 'x' })).status).toBe(200);
-    await server.db('members').where({ person_id: guest.id }).update({ left_at: new Date() });
+    await home.server.db('members').where({ person_id: guest.id }).update({ left_at: new Date() });
     expect((await patch(guest, `lines/${line.id}`, 2, { text: 'y' })).status).toBe(404);
   });
 });
@@ -128,8 +120,8 @@ describe('what is refused, and then nothing is written', () => {
 describe('lines', () => {
   test('a new line stands behind the one it follows, and only it is written', async () => {
     const { pattern, piece, line } = await aLine();
-    const last = await buildLine(server.db, { piece_id: piece.id });
-    const made = await post(house.creator, `patterns/${pattern.id}/lines`, {
+    const last = await buildLine(home.server.db, { piece_id: piece.id });
+    const made = await post(home.house.creator, `patterns/${pattern.id}/lines`, {
       pieceId: piece.id,
       kind: 'step',
       text: 'Stuff firmly.',
@@ -137,17 +129,21 @@ describe('lines', () => {
     });
     expect(made.status).toBe(201);
     expect(made.headers.etag).toBe('"1"');
-    const ids = await server.db('lines').where({ piece_id: piece.id }).orderBy('order_key').pluck('id');
+    const ids = await home.server.db('lines').where({ piece_id: piece.id }).orderBy('order_key').pluck('id');
     expect(ids).toEqual([line.id, made.body.id, last.id]);
-    expect(await server.db('lines').where({ piece_id: piece.id }).whereNot({ version: 1 })).toEqual([]);
+    expect(await home.server.db('lines').where({ piece_id: piece.id }).whereNot({ version: 1 })).toEqual([]);
   });
 
   test('a line moved to the front leaves all others untouched', async () => {
     const { piece, line } = await aLine();
-    const second = await buildLine(server.db, { piece_id: piece.id });
-    const third = await buildLine(server.db, { piece_id: piece.id });
-    expect((await patch(house.creator, `lines/${third.id}`, 1, { after: null })).status).toBe(200);
-    const rows = await server.db('lines').where({ piece_id: piece.id }).orderBy('order_key').select('id', 'version');
+    const second = await buildLine(home.server.db, { piece_id: piece.id });
+    const third = await buildLine(home.server.db, { piece_id: piece.id });
+    expect((await patch(home.house.creator, `lines/${third.id}`, 1, { after: null })).status).toBe(200);
+    const rows = await home.server
+      .db('lines')
+      .where({ piece_id: piece.id })
+      .orderBy('order_key')
+      .select('id', 'version');
     expect(rows).toEqual([
       { id: third.id, version: 2 },
       { id: line.id, version: 1 },
@@ -158,18 +154,21 @@ describe('lines', () => {
   test('sent twice with an id of the caller’s, one line is made', async () => {
     const { pattern, piece } = await aPiece();
     const body = { id: randomUUID(), pieceId: piece.id, kind: 'round', text: 'sc around' };
-    const first = await post(house.creator, `patterns/${pattern.id}/lines`, body);
-    const again = await post(house.creator, `patterns/${pattern.id}/lines`, body);
+    const first = await post(home.house.creator, `patterns/${pattern.id}/lines`, body);
+    const again = await post(home.house.creator, `patterns/${pattern.id}/lines`, body);
     expect([first.status, again.status]).toEqual([201, 200]);
     expect(again.body).toEqual(first.body);
-    expect(await server.db('lines').where({ piece_id: piece.id })).toHaveLength(1);
+    expect(await home.server.db('lines').where({ piece_id: piece.id })).toHaveLength(1);
   });
 
   test('short ids have no hyphen, nothing that is taken for another, and are not given twice', async () => {
     const { pattern, piece } = await aPiece();
     const ids: string[] = [];
     for (let i = 0; i < 20; i += 1) {
-      const { body } = await post(house.creator, `patterns/${pattern.id}/lines`, { pieceId: piece.id, kind: 'round' });
+      const { body } = await post(home.house.creator, `patterns/${pattern.id}/lines`, {
+        pieceId: piece.id,
+        kind: 'round',
+      });
       ids.push(body.shortId as string);
     }
     expect(new Set(ids).size).toBe(20);
@@ -178,18 +177,18 @@ describe('lines', () => {
 
   test('a line taken away is gone from the bench and its short id stays taken', async () => {
     const { pattern, line } = await aLine();
-    const gone = await call(house.creator, 'delete', `lines/${line.id}`, { version: 1 });
+    const gone = await call(home.house.creator, 'delete', `lines/${line.id}`, { version: 1 });
     expect(gone.status).toBe(204);
-    const { body } = await call(house.creator, 'get', `patterns/${pattern.id}`);
+    const { body } = await call(home.house.creator, 'get', `patterns/${pattern.id}`);
     expect(body.lines).toEqual([]);
-    expect(await server.db('lines').where({ id: line.id }).pluck('short_id')).toEqual([line.short_id]);
-    expect((await patch(house.creator, `lines/${line.id}`, 2, { text: 'x' })).status).toBe(404);
+    expect(await home.server.db('lines').where({ id: line.id }).pluck('short_id')).toEqual([line.short_id]);
+    expect((await patch(home.house.creator, `lines/${line.id}`, 2, { text: 'x' })).status).toBe(404);
   });
 
   test('what a person writes is kept from a later reading', async () => {
     const { line } = await aLine();
-    await patch(house.creator, `lines/${line.id}`, 1, { text: 'sc around', note: 'Use a marker.' });
-    expect((await server.db('line_touched').where({ line_id: line.id }).pluck('field')).sort()).toEqual([
+    await patch(home.house.creator, `lines/${line.id}`, 1, { text: 'sc around', note: 'Use a marker.' });
+    expect((await home.server.db('line_touched').where({ line_id: line.id }).pluck('field')).sort()).toEqual([
       'note',
       'text',
     ]);
@@ -199,25 +198,25 @@ describe('lines', () => {
 describe('where a written total lives', () => {
   test('it goes into the text where one stands there', async () => {
     const { line } = await aLine({ text: '(sc, inc) ×6 (12)' });
-    const { body } = await patch(house.creator, `lines/${line.id}`, 1, { written: { sts: [18] } });
+    const { body } = await patch(home.house.creator, `lines/${line.id}`, 1, { written: { sts: [18] } });
     expect(body).toMatchObject({ text: '(sc, inc) ×6 (18)', written: null });
   });
 
   test('it is stored beside the text where none stands there', async () => {
     const { line } = await aLine({ text: '(sc, inc) ×6' });
-    const { body } = await patch(house.creator, `lines/${line.id}`, 1, { written: { sts: [18] } });
+    const { body } = await patch(home.house.creator, `lines/${line.id}`, 1, { written: { sts: [18] } });
     expect(body).toMatchObject({ text: '(sc, inc) ×6', written: { sts: [18] } });
   });
 
   test('typed into the text later, it is no longer stored beside it', async () => {
     const { line } = await aLine({ text: '(sc, inc) ×6', written: { sts: [18] } });
-    const { body } = await patch(house.creator, `lines/${line.id}`, 1, { text: '(sc, inc) ×6 (20)' });
+    const { body } = await patch(home.house.creator, `lines/${line.id}`, 1, { text: '(sc, inc) ×6 (20)' });
     expect(body).toMatchObject({ text: '(sc, inc) ×6 (20)', written: null });
   });
 
   test('taken out of the field, it goes from the text', async () => {
     const { line } = await aLine({ text: '(sc, inc) ×6 (12)' });
-    const { body } = await patch(house.creator, `lines/${line.id}`, 1, { written: null });
+    const { body } = await patch(home.house.creator, `lines/${line.id}`, 1, { written: null });
     expect(body).toMatchObject({ text: '(sc, inc) ×6', written: null });
   });
 });
@@ -225,15 +224,15 @@ describe('where a written total lives', () => {
 describe('marks', () => {
   test('a line has one main mark: the newer takes its place', async () => {
     const { pattern, line } = await aLine();
-    const recording = await buildRecording(server.db, { pattern_id: pattern.id });
+    const recording = await buildRecording(home.server.db, { pattern_id: pattern.id });
     const at = { pattern_id: pattern.id, recording_id: recording.id };
-    const old = await buildMark(server.db, { ...at, line_id: line.id, start_ms: 1_000 });
+    const old = await buildMark(home.server.db, { ...at, line_id: line.id, start_ms: 1_000 });
     const body = { recordingId: recording.id, lineId: line.id, startMs: 4_200 };
-    const beside = await post(house.creator, `patterns/${pattern.id}/marks`, body);
+    const beside = await post(home.house.creator, `patterns/${pattern.id}/marks`, body);
     expect(beside.body).toMatchObject({ main: false, madeBy: 'person' });
-    const saved = await patch(house.creator, `marks/${beside.body.id as string}`, 1, { main: true });
+    const saved = await patch(home.house.creator, `marks/${beside.body.id as string}`, 1, { main: true });
     expect(saved.body.main).toBe(true);
-    expect((await server.db('marks').where({ id: old.id }).first<{ main: boolean }>()).main).toBe(false);
+    expect((await home.server.db('marks').where({ id: old.id }).first<{ main: boolean }>()).main).toBe(false);
   });
 
   test.each([
@@ -241,16 +240,16 @@ describe('marks', () => {
     ['an end before its start', () => ({ recordingId: randomUUID(), startMs: 900, endMs: 800 })],
   ])('%s is refused', async (_what, body) => {
     const { pattern } = await aPiece();
-    const elsewhere = await buildRecording(server.db, { studio_id: house.studio.id });
-    expect((await post(house.creator, `patterns/${pattern.id}/marks`, body(elsewhere.id))).status).toBe(422);
+    const elsewhere = await buildRecording(home.server.db, { studio_id: home.house.studio.id });
+    expect((await post(home.house.creator, `patterns/${pattern.id}/marks`, body(elsewhere.id))).status).toBe(422);
   });
 
   test('moved behind its end it is refused', async () => {
     const { pattern } = await aPiece();
-    const recording = await buildRecording(server.db, { pattern_id: pattern.id });
+    const recording = await buildRecording(home.server.db, { pattern_id: pattern.id });
     const at = { pattern_id: pattern.id, recording_id: recording.id };
-    const mark = await buildMark(server.db, { ...at, start_ms: 100, end_ms: 200 });
-    expect((await patch(house.creator, `marks/${mark.id}`, 1, { startMs: 300 })).status).toBe(422);
+    const mark = await buildMark(home.server.db, { ...at, start_ms: 100, end_ms: 200 });
+    expect((await patch(home.house.creator, `marks/${mark.id}`, 1, { startMs: 300 })).status).toBe(422);
   });
 });
 
@@ -258,23 +257,23 @@ describe('deeds', () => {
   test('writes under one Deed-Id are one deed, and the answer names it', async () => {
     const { pattern, piece, line } = await aLine();
     const deed = randomUUID();
-    const saved = await patch(house.creator, `lines/${line.id}`, 1, { text: 'sc around' }, deed);
-    await patch(house.creator, `pieces/${piece.id}`, 1, { name: 'Body' }, deed);
+    const saved = await patch(home.house.creator, `lines/${line.id}`, 1, { text: 'sc around' }, deed);
+    await patch(home.house.creator, `pieces/${piece.id}`, 1, { name: 'Body' }, deed);
     expect(saved.headers['deed-id']).toBe(deed);
-    expect(await server.db('changes').where({ pattern_id: pattern.id }).pluck('deed_id')).toEqual([deed, deed]);
+    expect(await home.server.db('changes').where({ pattern_id: pattern.id }).pluck('deed_id')).toEqual([deed, deed]);
   });
 
   test('somebody else’s deed cannot be added to', async () => {
     const { pattern, line } = await aLine();
     const deed = randomUUID();
-    await patch(house.creator, `lines/${line.id}`, 1, { text: 'sc around' }, deed);
-    expect((await patch(house.editor, `lines/${line.id}`, 2, { text: 'x' }, deed)).status).toBe(409);
+    await patch(home.house.creator, `lines/${line.id}`, 1, { text: 'sc around' }, deed);
+    expect((await patch(home.house.editor, `lines/${line.id}`, 2, { text: 'x' }, deed)).status).toBe(409);
     expect(await changesOf(pattern.id)).toHaveLength(1);
   });
 
   test('a save that changes nothing leaves no trace', async () => {
     const { pattern, line } = await aLine();
-    const saved = await patch(house.creator, `lines/${line.id}`, 1, { text: line.text });
+    const saved = await patch(home.house.creator, `lines/${line.id}`, 1, { text: line.text });
     expect(saved.body.version).toBe(1);
     expect(await changesOf(pattern.id)).toEqual([]);
   });

@@ -1,29 +1,13 @@
 import request from 'supertest';
-import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import { describe, expect, test } from 'vitest';
 import type { HeldAgainst, NewCut } from '#contract/held';
 import type { Pattern } from '#contract/patterns';
-import { buildApp, type TestApp } from '../../support/app.ts';
-import {
-  buildHouse,
-  buildLine,
-  buildMark,
-  buildPattern,
-  buildPiece,
-  buildRecording,
-  type Household,
-} from '../../support/builders.ts';
-import { talkTo } from './talk.ts';
+import { buildLine, buildMark, buildPattern, buildPiece, buildRecording } from '../../support/builders.ts';
+import { settleIn } from './at-home.ts';
 
-let server: TestApp;
-let house: Household;
+const home = settleIn();
+const { call } = home;
 
-beforeAll(async () => {
-  server = await buildApp();
-  house = await buildHouse(server.db);
-});
-afterAll(() => server.close());
-
-const call = (...args: Parameters<ReturnType<typeof talkTo>>) => talkTo(server)(...args);
 const clock = (ms: number) => new Date(ms).toISOString().slice(11, 23);
 const vtt = (cues: readonly (readonly [startMs: number, text: string])[]) =>
   `WEBVTT\n\n${cues.map(([at, text]) => `${clock(at)} --> ${clock(at + 5_000)}\n${text}\n`).join('\n')}`;
@@ -38,19 +22,19 @@ const TALK = [
 ] as const;
 
 async function send(recordingId: string, cues: readonly (readonly [number, string])[]) {
-  const sent = await request(server.app)
+  const sent = await request(home.server.app)
     .post(`/api/recordings/${recordingId}/transcripts`)
-    .set(await server.as(house.creator))
+    .set(await home.server.as(home.house.creator))
     .attach('file', Buffer.from(vtt(cues)), { filename: 'bell.vtt', contentType: 'text/vtt' });
   expect(sent.status).toBe(201);
-  await server.workAll();
+  await home.server.workAll();
   return (sent.body as { id: string }).id;
 }
 
 /** A bell that was written before it was filmed. */
 async function aBell() {
-  const pattern = await buildPattern(server.db, { studio_id: house.studio.id });
-  const piece = await buildPiece(server.db, { pattern_id: pattern.id, name: 'Bell' });
+  const pattern = await buildPattern(home.server.db, { studio_id: home.house.studio.id });
+  const piece = await buildPiece(home.server.db, { pattern_id: pattern.id, name: 'Bell' });
   const texts = [
     '6 sc in magic ring (6)',
     'inc × 6 (12)',
@@ -59,14 +43,14 @@ async function aBell() {
     '(2 sc, inc) × 6 (24)',
   ];
   const lines: string[] = [];
-  for (const text of texts) lines.push((await buildLine(server.db, { piece_id: piece.id, text })).id);
-  const recording = await buildRecording(server.db, { pattern_id: pattern.id });
+  for (const text of texts) lines.push((await buildLine(home.server.db, { piece_id: piece.id, text })).id);
+  const recording = await buildRecording(home.server.db, { pattern_id: pattern.id });
   const at = `patterns/${pattern.id}/recordings/${recording.id}`;
   return { patternId: pattern.id, recordingId: recording.id, lines, at };
 }
-const look = async (id: string) => (await call(house.creator, 'get', `patterns/${id}`)).body as Pattern;
-const heldAt = async (at: string) => (await call(house.creator, 'get', `${at}/held`)).body as HeldAgainst;
-const cutAt = async (at: string) => (await call(house.creator, 'get', `${at}/cut`)).body as NewCut;
+const look = async (id: string) => (await call(home.house.creator, 'get', `patterns/${id}`)).body as Pattern;
+const heldAt = async (at: string) => (await call(home.house.creator, 'get', `${at}/held`)).body as HeldAgainst;
+const cutAt = async (at: string) => (await call(home.house.creator, 'get', `${at}/cut`)).body as NewCut;
 
 describe('a pattern that was written before its recording came', () => {
   test('is held against it both ways: as written, said otherwise, never said, not written', async () => {
@@ -95,7 +79,7 @@ describe('a pattern that was written before its recording came', () => {
     const bell = await aBell();
     await send(bell.recordingId, TALK);
     const { lastChange } = await heldAt(bell.at);
-    const taken = await call(house.editor, 'post', `${bell.at}/held`, { body: { lastChange } });
+    const taken = await call(home.house.editor, 'post', `${bell.at}/held`, { body: { lastChange } });
     expect([taken.status, taken.body.taken]).toEqual([200, 4]);
     const after = await look(bell.patternId);
     expect(after.lines.map(({ text, said }) => [text, said?.sts?.[0] ?? null])).toEqual([
@@ -111,7 +95,7 @@ describe('a pattern that was written before its recording came', () => {
     expect(new Set(after.evidence.map(({ lineId }) => lineId)).size).toBe(4);
     expect((await heldAt(bell.at)).pieces[0]!.lines.filter(({ isTaken }) => isTaken)).toHaveLength(4);
 
-    expect((await call(house.editor, 'post', `patterns/${bell.patternId}/undo`)).status).toBe(200);
+    expect((await call(home.house.editor, 'post', `patterns/${bell.patternId}/undo`)).status).toBe(200);
     const before = await look(bell.patternId);
     expect([before.marks, before.evidence]).toEqual([[], []]);
     expect(before.lines.every(({ said }) => said === null)).toBe(true);
@@ -122,16 +106,19 @@ describe('a pattern that was written before its recording came', () => {
     await send(bell.recordingId, TALK);
     const { lastChange } = await heldAt(bell.at);
     const body = { lastChange, lineIds: [bell.lines[1]!] };
-    expect((await call(house.creator, 'post', `${bell.at}/held`, { body })).body.taken).toBe(1);
+    expect((await call(home.house.creator, 'post', `${bell.at}/held`, { body })).body.taken).toBe(1);
     expect((await look(bell.patternId)).marks.map(({ lineId }) => lineId)).toEqual([bell.lines[1]]);
-    expect((await call(house.creator, 'post', `${bell.at}/held`, { body })).status).toBe(412);
+    expect((await call(home.house.creator, 'post', `${bell.at}/held`, { body })).status).toBe(412);
   });
 
   test('a line that is not to be filmed is not missed', async () => {
     const bell = await aBell();
     await send(bell.recordingId, TALK);
     const [last] = (await heldAt(bell.at)).pieces[0]!.lines.slice(-1);
-    await call(house.creator, 'patch', `lines/${last!.lineId!}`, { version: last!.version, body: { filmed: false } });
+    await call(home.house.creator, 'patch', `lines/${last!.lineId!}`, {
+      version: last!.version,
+      body: { filmed: false },
+    });
     expect((await heldAt(bell.at)).pieces[0]!.lines.at(-1)!.state).toBe('not-filmed');
   });
 });
@@ -144,7 +131,7 @@ describe('a new cut of a recording', () => {
     await send(bell.recordingId, TALK);
     for (const [i, startMs] of [10_000, 20_000, 30_000, 40_000].entries()) {
       const of = { pattern_id: bell.patternId, recording_id: bell.recordingId, line_id: bell.lines[i] };
-      marks.push((await buildMark(server.db, { ...of, start_ms: startMs })).id);
+      marks.push((await buildMark(home.server.db, { ...of, start_ms: startMs })).id);
     }
     const newer = [
       [3_000, TALK[1][1]],
@@ -169,11 +156,11 @@ describe('a new cut of a recording', () => {
       ['R4', 40_000, null],
     ]);
     const body = { how: 'words', lastChange: cut.lastChange, removeCutOut: true };
-    const taken = await call(house.creator, 'post', `${bell.at}/cut`, { body });
+    const taken = await call(home.house.creator, 'post', `${bell.at}/cut`, { body });
     expect([taken.status, taken.body.taken]).toEqual([200, 4]);
     expect(await momentsOf(bell.patternId)).toEqual([3_000, 13_000, 40_000]);
     expect((await cutAt(bell.at)).parts).toEqual([]);
-    await call(house.creator, 'post', `patterns/${bell.patternId}/undo`);
+    await call(home.house.creator, 'post', `patterns/${bell.patternId}/undo`);
     expect(await momentsOf(bell.patternId)).toEqual([10_000, 20_000, 30_000, 40_000]);
     expect((await cutAt(bell.at)).parts).toHaveLength(1);
   });
@@ -182,17 +169,17 @@ describe('a new cut of a recording', () => {
     const bell = await cutAnew();
     const { lastChange } = await cutAt(bell.at);
     const body = { how: 'hand', lastChange, byMs: -12_500, fromMs: 15_000 };
-    expect((await call(house.creator, 'post', `${bell.at}/cut`, { body })).body.taken).toBe(3);
+    expect((await call(home.house.creator, 'post', `${bell.at}/cut`, { body })).body.taken).toBe(3);
     expect(await momentsOf(bell.patternId)).toEqual([7_500, 10_000, 17_500, 27_500]);
     const again = { how: 'hand', lastChange: (await cutAt(bell.at)).lastChange, byMs: -8_000, fromMs: 0 };
-    await call(house.creator, 'post', `${bell.at}/cut`, { body: again });
+    await call(home.house.creator, 'post', `${bell.at}/cut`, { body: again });
     expect((await momentsOf(bell.patternId))[0]).toBe(0);
   });
 
   test('is not told again once somebody says that the moments stand right', async () => {
     const bell = await cutAnew();
     const body = { how: 'stand', lastChange: (await cutAt(bell.at)).lastChange };
-    expect((await call(house.creator, 'post', `${bell.at}/cut`, { body })).body.taken).toBe(4);
+    expect((await call(home.house.creator, 'post', `${bell.at}/cut`, { body })).body.taken).toBe(4);
     expect(await momentsOf(bell.patternId)).toEqual([10_000, 20_000, 30_000, 40_000]);
     expect((await cutAt(bell.at)).parts).toEqual([]);
   });
@@ -200,12 +187,12 @@ describe('a new cut of a recording', () => {
   test('part two only adds: the moments of part one stay its own', async () => {
     const bell = await aBell();
     await send(bell.recordingId, TALK.slice(0, 3));
-    const two = await buildRecording(server.db, { pattern_id: bell.patternId });
+    const two = await buildRecording(home.server.db, { pattern_id: bell.patternId });
     await send(two.id, TALK.slice(3));
     for (const id of [bell.recordingId, two.id]) {
       const at = `patterns/${bell.patternId}/recordings/${id}`;
       const { lastChange } = await heldAt(at);
-      await call(house.creator, 'post', `${at}/held`, { body: { lastChange } });
+      await call(home.house.creator, 'post', `${at}/held`, { body: { lastChange } });
     }
     const { marks } = await look(bell.patternId);
     const of = (lineId: string | undefined) => marks.filter((mark) => mark.lineId === lineId).map((m) => m.recordingId);

@@ -1,6 +1,5 @@
 import { randomUUID } from 'node:crypto';
-import { afterAll, beforeAll, describe, expect, test } from 'vitest';
-import { buildApp, type TestApp } from '../../support/app.ts';
+import { describe, expect, test } from 'vitest';
 import {
   buildHouse,
   buildLine,
@@ -9,30 +8,23 @@ import {
   buildPerson,
   buildPiece,
   buildRecording,
-  type Household,
 } from '../../support/builders.ts';
 import type { Shelf } from '../../../api/contract/shelf.ts';
-import { talkTo } from './talk.ts';
+import { settleIn } from './at-home.ts';
 
-let server: TestApp;
-let house: Household;
-beforeAll(async () => {
-  server = await buildApp();
-  house = await buildHouse(server.db);
-});
-afterAll(() => server.close());
+const home = settleIn();
+const { call } = home;
 
 interface Who {
   readonly id: string;
 }
-const call = (...args: Parameters<ReturnType<typeof talkTo>>) => talkTo(server)(...args);
 const shelf = async (who: Who, part: string, studioId: string) =>
   (await call(who, 'get', `patterns?studioId=${studioId}&part=${part}`)).body as Shelf;
 
 describe('a new pattern', () => {
   test('is made with a code that is short, plain and its own', async () => {
-    const made = await call(house.creator, 'post', 'patterns', {
-      body: { studioId: house.studio.id, title: '  Harvest mouse ' },
+    const made = await call(home.house.creator, 'post', 'patterns', {
+      body: { studioId: home.house.studio.id, title: '  Harvest mouse ' },
     });
     expect(made.status).toBe(201);
     expect(made.body).toMatchObject({ title: 'Harvest mouse', state: 'drafting', visibility: 'private', version: 1 });
@@ -42,35 +34,35 @@ describe('a new pattern', () => {
 
   test('sent twice it is made once, by its id or by an Idempotency-Key', async () => {
     const id = randomUUID();
-    const body = { id, studioId: house.studio.id, title: 'Kettle holder' };
-    await call(house.creator, 'post', 'patterns', { body });
-    const again = await call(house.creator, 'post', 'patterns', { body });
+    const body = { id, studioId: home.house.studio.id, title: 'Kettle holder' };
+    await call(home.house.creator, 'post', 'patterns', { body });
+    const again = await call(home.house.creator, 'post', 'patterns', { body });
     expect(again.body.id).toBe(id);
     const headers = { 'Idempotency-Key': randomUUID() };
-    const flat = { studioId: house.studio.id, title: 'Flat scarf' };
-    const first = await call(house.creator, 'post', 'patterns', { body: flat, headers });
-    const second = await call(house.creator, 'post', 'patterns', { body: flat, headers });
+    const flat = { studioId: home.house.studio.id, title: 'Flat scarf' };
+    const first = await call(home.house.creator, 'post', 'patterns', { body: flat, headers });
+    const second = await call(home.house.creator, 'post', 'patterns', { body: flat, headers });
     expect(second.body).toEqual(first.body);
-    expect(await server.db('patterns').where({ title: 'Flat scarf' })).toHaveLength(1);
+    expect(await home.server.db('patterns').where({ title: 'Flat scarf' })).toHaveLength(1);
   });
 
   test('is for creators and owners: an editor may not, a stranger finds no studio', async () => {
-    const body = { studioId: house.studio.id, title: 'Oval basket' };
-    expect((await call(house.editor, 'post', 'patterns', { body })).status).toBe(403);
-    expect((await call(await buildPerson(server.db), 'post', 'patterns', { body })).status).toBe(404);
-    expect((await call(house.owner, 'post', 'patterns', { body: { ...body, code: 'mine' } })).status).toBe(422);
-    expect((await call(house.owner, 'post', 'patterns', { body: { ...body, title: ' ' } })).status).toBe(422);
+    const body = { studioId: home.house.studio.id, title: 'Oval basket' };
+    expect((await call(home.house.editor, 'post', 'patterns', { body })).status).toBe(403);
+    expect((await call(await buildPerson(home.server.db), 'post', 'patterns', { body })).status).toBe(404);
+    expect((await call(home.house.owner, 'post', 'patterns', { body: { ...body, code: 'mine' } })).status).toBe(422);
+    expect((await call(home.house.owner, 'post', 'patterns', { body: { ...body, title: ' ' } })).status).toBe(422);
   });
 });
 
 describe('what a pattern says of itself', () => {
   test('details are changed part by part', async () => {
-    const { id } = await buildPattern(server.db, { studio_id: house.studio.id });
-    const one = await call(house.editor, 'patch', `patterns/${id}`, {
+    const { id } = await buildPattern(home.server.db, { studio_id: home.house.studio.id });
+    const one = await call(home.house.editor, 'patch', `patterns/${id}`, {
       version: 1,
       body: { details: { care: 'By hand.' } },
     });
-    const two = await call(house.creator, 'patch', `patterns/${id}`, {
+    const two = await call(home.house.creator, 'patch', `patterns/${id}`, {
       version: 2,
       body: { details: { gauge: '20 sts' } },
     });
@@ -79,57 +71,63 @@ describe('what a pattern says of itself', () => {
   });
 
   test('who sees it is the creator’s to say, and a stale save shows the present', async () => {
-    const { id } = await buildPattern(server.db, { studio_id: house.studio.id });
+    const { id } = await buildPattern(home.server.db, { studio_id: home.house.studio.id });
     const body = { visibility: 'listed' };
-    expect((await call(house.editor, 'patch', `patterns/${id}`, { version: 1, body })).status).toBe(403);
-    expect((await call(house.creator, 'patch', `patterns/${id}`, { version: 1, body })).status).toBe(200);
-    const stale = await call(house.editor, 'patch', `patterns/${id}`, { version: 1, body: { title: 'Other' } });
+    expect((await call(home.house.editor, 'patch', `patterns/${id}`, { version: 1, body })).status).toBe(403);
+    expect((await call(home.house.creator, 'patch', `patterns/${id}`, { version: 1, body })).status).toBe(200);
+    const stale = await call(home.house.editor, 'patch', `patterns/${id}`, { version: 1, body: { title: 'Other' } });
     expect(stale.status).toBe(412);
     expect(stale.body.present).toMatchObject({ id, visibility: 'listed', version: 2 });
-    expect((await call(house.editor, 'patch', `patterns/${id}`, { body: { title: 'Other' } })).status).toBe(428);
+    expect((await call(home.house.editor, 'patch', `patterns/${id}`, { body: { title: 'Other' } })).status).toBe(428);
   });
 });
 
 describe('its life', () => {
   test('into the bin it cannot be written to, and comes back whole', async () => {
-    const { id } = await buildPattern(server.db, { studio_id: house.studio.id });
-    const piece = await buildPiece(server.db, { pattern_id: id });
-    const line = await buildLine(server.db, { piece_id: piece.id });
-    const binned = await call(house.creator, 'post', `patterns/${id}/bin`, { version: 1 });
+    const { id } = await buildPattern(home.server.db, { studio_id: home.house.studio.id });
+    const piece = await buildPiece(home.server.db, { pattern_id: id });
+    const line = await buildLine(home.server.db, { piece_id: piece.id });
+    const binned = await call(home.house.creator, 'post', `patterns/${id}/bin`, { version: 1 });
     expect(binned.body.binnedAt).not.toBeNull();
-    const refused = await call(house.creator, 'patch', `lines/${line.id}`, { version: 1, body: { text: 'x' } });
+    const refused = await call(home.house.creator, 'patch', `lines/${line.id}`, { version: 1, body: { text: 'x' } });
     expect(refused.status).toBe(410);
     expect(refused.body.detail).toContain('bin');
-    expect((await call(house.creator, 'get', `patterns/${id}`)).body.mayEdit).toBe(false);
-    const back = await call(house.creator, 'post', `patterns/${id}/restore`, { version: 2 });
+    expect((await call(home.house.creator, 'get', `patterns/${id}`)).body.mayEdit).toBe(false);
+    const back = await call(home.house.creator, 'post', `patterns/${id}/restore`, { version: 2 });
     expect(back.body).toMatchObject({ binnedAt: null, version: 3 });
-    expect((await call(house.creator, 'get', `patterns/${id}`)).body.lines).toHaveLength(1);
+    expect((await call(home.house.creator, 'get', `patterns/${id}`)).body.lines).toHaveLength(1);
   });
 
   test('an editor sends it to proof and back, but does not bin it', async () => {
-    const { id } = await buildPattern(server.db, { studio_id: house.studio.id });
-    const sent = await call(house.editor, 'post', `patterns/${id}/state`, { version: 1, body: { state: 'in-proof' } });
+    const { id } = await buildPattern(home.server.db, { studio_id: home.house.studio.id });
+    const sent = await call(home.house.editor, 'post', `patterns/${id}/state`, {
+      version: 1,
+      body: { state: 'in-proof' },
+    });
     expect(sent.body.state).toBe('in-proof');
-    expect((await call(house.editor, 'post', `patterns/${id}/bin`, { version: 2 })).status).toBe(403);
+    expect((await call(home.house.editor, 'post', `patterns/${id}/bin`, { version: 2 })).status).toBe(403);
     const body = { state: 'published' };
-    expect((await call(house.owner, 'post', `patterns/${id}/state`, { version: 2, body })).status).toBe(422);
-    const back = await call(house.editor, 'post', `patterns/${id}/state`, { version: 2, body: { state: 'drafting' } });
+    expect((await call(home.house.owner, 'post', `patterns/${id}/state`, { version: 2, body })).status).toBe(422);
+    const back = await call(home.house.editor, 'post', `patterns/${id}/state`, {
+      version: 2,
+      body: { state: 'drafting' },
+    });
     expect(back.body.state).toBe('drafting');
   });
 
   test('a copy has its own code, ids and log; short ids, marks and recordings go along', async () => {
-    const { id } = await buildPattern(server.db, { studio_id: house.studio.id, title: 'Teasel' });
-    const piece = await buildPiece(server.db, { pattern_id: id });
-    const line = await buildLine(server.db, { piece_id: piece.id });
-    const recording = await buildRecording(server.db, { pattern_id: id });
-    await buildMark(server.db, { pattern_id: id, recording_id: recording.id, line_id: line.id, start_ms: 5_000 });
-    await server.db('pieces').where({ id: piece.id }).update({ starts_on_line_id: line.id });
+    const { id } = await buildPattern(home.server.db, { studio_id: home.house.studio.id, title: 'Teasel' });
+    const piece = await buildPiece(home.server.db, { pattern_id: id });
+    const line = await buildLine(home.server.db, { piece_id: piece.id });
+    const recording = await buildRecording(home.server.db, { pattern_id: id });
+    await buildMark(home.server.db, { pattern_id: id, recording_id: recording.id, line_id: line.id, start_ms: 5_000 });
+    await home.server.db('pieces').where({ id: piece.id }).update({ starts_on_line_id: line.id });
 
-    const copy = await call(house.creator, 'post', `patterns/${id}/duplicate`);
+    const copy = await call(home.house.creator, 'post', `patterns/${id}/duplicate`);
     expect(copy.status).toBe(201);
-    const doc = (await call(house.creator, 'get', `patterns/${copy.body.id as string}`)).body;
+    const doc = (await call(home.house.creator, 'get', `patterns/${copy.body.id as string}`)).body;
     expect(doc.title).toBe('Teasel, copy');
-    expect(doc.code).not.toBe((await server.db('patterns').where({ id }).first()).code);
+    expect(doc.code).not.toBe((await home.server.db('patterns').where({ id }).first()).code);
     expect(doc.lines).toMatchObject([{ shortId: line.short_id, pieceId: doc.pieces[0].id }]);
     expect(doc.lines[0].id).not.toBe(line.id);
     expect(doc.pieces[0].startsOnLineId).toBe(doc.lines[0].id);
@@ -141,11 +139,11 @@ describe('its life', () => {
 
 describe('the shelf', () => {
   test('shows what a count finds, in groups, with stitches and what wants a look', async () => {
-    const { studio, creator, editor } = await buildHouse(server.db);
-    const { id } = await buildPattern(server.db, { studio_id: studio.id });
-    const piece = await buildPiece(server.db, { pattern_id: id, name: 'Body', make: 2 });
+    const { studio, creator, editor } = await buildHouse(home.server.db);
+    const { id } = await buildPattern(home.server.db, { studio_id: studio.id });
+    const piece = await buildPiece(home.server.db, { pattern_id: id, name: 'Body', make: 2 });
     const texts = ['6 sc in a magic ring (6)', '(inc) ×6 (12)', '(sc, inc) ×6 (20)', 'sc around'];
-    for (const text of texts) await buildLine(server.db, { piece_id: piece.id, text });
+    for (const text of texts) await buildLine(home.server.db, { piece_id: piece.id, text });
     const seen = (await shelf(creator, 'shelf', studio.id)).patterns;
     expect(seen).toMatchObject([
       {
@@ -165,21 +163,21 @@ describe('the shelf', () => {
   });
 
   test('tells after which line no moment is marked, where there is a recording', async () => {
-    const { studio, creator } = await buildHouse(server.db);
-    const { id } = await buildPattern(server.db, { studio_id: studio.id });
-    const piece = await buildPiece(server.db, { pattern_id: id });
-    const first = await buildLine(server.db, { piece_id: piece.id });
-    await buildLine(server.db, { piece_id: piece.id, text: 'inc around (12)' });
+    const { studio, creator } = await buildHouse(home.server.db);
+    const { id } = await buildPattern(home.server.db, { studio_id: studio.id });
+    const piece = await buildPiece(home.server.db, { pattern_id: id });
+    const first = await buildLine(home.server.db, { piece_id: piece.id });
+    await buildLine(home.server.db, { piece_id: piece.id, text: 'inc around (12)' });
     expect((await shelf(creator, 'shelf', studio.id)).patterns[0]).toMatchObject({ unmarked: 0, lastMarked: null });
-    const recording = await buildRecording(server.db, { pattern_id: id });
-    await buildMark(server.db, { pattern_id: id, recording_id: recording.id, line_id: first.id, start_ms: 10 });
+    const recording = await buildRecording(home.server.db, { pattern_id: id });
+    await buildMark(home.server.db, { pattern_id: id, recording_id: recording.id, line_id: first.id, start_ms: 10 });
     expect((await shelf(creator, 'shelf', studio.id)).patterns[0]).toMatchObject({ unmarked: 1, lastMarked: 'Rnd 1' });
   });
 
   test('keeps archive and bin apart, and counts them', async () => {
-    const { studio, owner } = await buildHouse(server.db);
+    const { studio, owner } = await buildHouse(home.server.db);
     const ids = [];
-    for (let i = 0; i < 3; i += 1) ids.push((await buildPattern(server.db, { studio_id: studio.id })).id);
+    for (let i = 0; i < 3; i += 1) ids.push((await buildPattern(home.server.db, { studio_id: studio.id })).id);
     await call(owner, 'post', `patterns/${ids[0]!}/archive`, { version: 1 });
     await call(owner, 'post', `patterns/${ids[1]!}/bin`, { version: 1 });
     const titlesOf = async (part: string) => (await shelf(owner, part, studio.id)).patterns.map(({ id }) => id);
@@ -192,53 +190,56 @@ describe('the shelf', () => {
   });
 
   test('is not for others, and refuses what it does not know', async () => {
-    const stranger = await buildPerson(server.db);
-    expect((await call(stranger, 'get', `patterns?studioId=${house.studio.id}`)).status).toBe(404);
-    expect((await call(house.owner, 'get', `patterns?studioId=${house.studio.id}&who=me`)).status).toBe(422);
-    expect((await call(house.owner, 'get', 'patterns')).status).toBe(422);
+    const stranger = await buildPerson(home.server.db);
+    expect((await call(stranger, 'get', `patterns?studioId=${home.house.studio.id}`)).status).toBe(404);
+    expect((await call(home.house.owner, 'get', `patterns?studioId=${home.house.studio.id}&who=me`)).status).toBe(422);
+    expect((await call(home.house.owner, 'get', 'patterns')).status).toBe(422);
   });
 });
 
 describe('cautions', () => {
   const cautionsOf = async (id: string) =>
-    (await call(house.creator, 'get', `patterns/${id}`)).body.cautions as Record<string, unknown>[];
+    (await call(home.house.creator, 'get', `patterns/${id}`)).body.cautions as Record<string, unknown>[];
   const addMaterial = async (id: string, name: string) =>
-    (await call(house.creator, 'post', `patterns/${id}/materials`, { body: { kind: 'notion', name } })).body as {
+    (await call(home.house.creator, 'post', `patterns/${id}/materials`, { body: { kind: 'notion', name } })).body as {
       id: string;
     };
 
   test('a material brings one, which goes when the material goes', async () => {
-    const { id } = await buildPattern(server.db, { studio_id: house.studio.id });
+    const { id } = await buildPattern(home.server.db, { studio_id: home.house.studio.id });
     const eyes = await addMaterial(id, 'Safety eyes, 9 mm');
     expect(await cautionsOf(id)).toMatchObject([{ id: null, kind: 'small-parts', broughtBy: ['Safety eyes, 9 mm'] }]);
-    await call(house.creator, 'delete', `materials/${eyes.id}`, { version: 1 });
+    await call(home.house.creator, 'delete', `materials/${eyes.id}`, { version: 1 });
     expect(await cautionsOf(id)).toEqual([]);
   });
 
   test('it can be put in other words, but not taken away', async () => {
-    const { id } = await buildPattern(server.db, { studio_id: house.studio.id });
+    const { id } = await buildPattern(home.server.db, { studio_id: home.house.studio.id });
     await addMaterial(id, 'Two buttons');
     const text = 'The buttons come off: not for a child under three.';
-    const worded = await call(house.creator, 'post', `patterns/${id}/cautions`, {
+    const worded = await call(home.house.creator, 'post', `patterns/${id}/cautions`, {
       body: { kind: 'small-parts', text },
     });
     expect(worded.status).toBe(201);
     expect(await cautionsOf(id)).toMatchObject([{ id: worded.body.id, text, broughtBy: ['Two buttons'] }]);
-    const remove = async () => call(house.creator, 'delete', `cautions/${worded.body.id as string}`, { version: 1 });
+    const remove = async () =>
+      call(home.house.creator, 'delete', `cautions/${worded.body.id as string}`, { version: 1 });
     const refused = await remove();
     expect(refused.status).toBe(403);
     expect(refused.body.detail).toContain('Two buttons');
     const empty = { version: 1, body: { text: ' ' } };
-    expect((await call(house.creator, 'patch', `cautions/${worded.body.id as string}`, empty)).status).toBe(422);
+    expect((await call(home.house.creator, 'patch', `cautions/${worded.body.id as string}`, empty)).status).toBe(422);
     const twice = { body: { kind: 'small-parts', text: 'Other words.' } };
-    expect((await call(house.creator, 'post', `patterns/${id}/cautions`, twice)).status).toBe(422);
+    expect((await call(home.house.creator, 'post', `patterns/${id}/cautions`, twice)).status).toBe(422);
   });
 
   test('one of the creator’s own is theirs to remove', async () => {
-    const { id } = await buildPattern(server.db, { studio_id: house.studio.id });
-    const own = await call(house.creator, 'post', `patterns/${id}/cautions`, { body: { text: 'Wash before use.' } });
+    const { id } = await buildPattern(home.server.db, { studio_id: home.house.studio.id });
+    const own = await call(home.house.creator, 'post', `patterns/${id}/cautions`, {
+      body: { text: 'Wash before use.' },
+    });
     expect(await cautionsOf(id)).toMatchObject([{ kind: 'own', broughtBy: [] }]);
-    const gone = await call(house.creator, 'delete', `cautions/${own.body.id as string}`, { version: 1 });
+    const gone = await call(home.house.creator, 'delete', `cautions/${own.body.id as string}`, { version: 1 });
     expect(gone.status).toBe(204);
     expect(await cautionsOf(id)).toEqual([]);
   });

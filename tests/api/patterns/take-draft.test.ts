@@ -1,21 +1,13 @@
 import { randomUUID } from 'node:crypto';
-import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import { describe, expect, test } from 'vitest';
 import type { Draft, DraftLine, DraftPiece } from '#crochet';
 import type { Pattern } from '#contract/patterns';
 import { takeDraft } from '../../../api/features/patterns/take-draft.service.ts';
-import { buildApp, type TestApp } from '../../support/app.ts';
-import { buildHouse, buildPattern, buildRecording, type Household } from '../../support/builders.ts';
-import { talkTo } from './talk.ts';
+import { buildPattern, buildRecording } from '../../support/builders.ts';
+import { settleIn } from './at-home.ts';
 
-let server: TestApp;
-let house: Household;
-beforeAll(async () => {
-  server = await buildApp();
-  house = await buildHouse(server.db);
-});
-afterAll(() => server.close());
-
-const call = (...args: Parameters<ReturnType<typeof talkTo>>) => talkTo(server)(...args);
+const home = settleIn();
+const { call } = home;
 
 const round = (n: number, text: string, said: number | null, startMs = n * 10_000): DraftLine => ({
   kind: 'round',
@@ -68,9 +60,9 @@ async function read(
   draft: Draft,
   recordingId?: string,
 ): Promise<{ readingId: string; recordingId: string }> {
-  const recording = recordingId ?? (await buildRecording(server.db, { pattern_id: patternId })).id;
-  const numbers = await server.db('transcripts').where({ recording_id: recording }).pluck('number');
-  const [transcript] = await server
+  const recording = recordingId ?? (await buildRecording(home.server.db, { pattern_id: patternId })).id;
+  const numbers = await home.server.db('transcripts').where({ recording_id: recording }).pluck('number');
+  const [transcript] = await home.server
     .db('transcripts')
     .insert({
       recording_id: recording,
@@ -81,18 +73,19 @@ async function read(
       format: 'srt',
     })
     .returning<{ id: string }[]>('id');
-  const [reading] = await server
+  const [reading] = await home.server
     .db('readings')
     .insert({ transcript_id: transcript!.id, engine_version: '1', terms: draft.terms, terms_reason: '', draft })
     .returning<{ id: string }[]>('id');
   return { readingId: reading!.id, recordingId: recording };
 }
 const take = (patternId: string, readingId: string, draft: Draft, personId: string | null = null) =>
-  server.db.transaction((trx) =>
-    takeDraft(trx, { id: randomUUID(), patternId, personId, at: server.clock.now() }, readingId, draft),
+  home.server.db.transaction((trx) =>
+    takeDraft(trx, { id: randomUUID(), patternId, personId, at: home.server.clock.now() }, readingId, draft),
   );
-const aPattern = async (over = {}) => (await buildPattern(server.db, { studio_id: house.studio.id, ...over })).id;
-const look = async (id: string) => (await call(house.creator, 'get', `patterns/${id}`)).body as Pattern;
+const aPattern = async (over = {}) =>
+  (await buildPattern(home.server.db, { studio_id: home.house.studio.id, ...over })).id;
+const look = async (id: string) => (await call(home.house.creator, 'get', `patterns/${id}`)).body as Pattern;
 
 describe('a first reading', () => {
   test('makes pieces and lines with their moments and the words they were heard in', async () => {
@@ -153,8 +146,8 @@ describe('a first reading', () => {
     const id = await aPattern();
     const draft = draftOf([body(round(1, '6 sc in a magic ring', 6))]);
     await take(id, (await read(id, draft)).readingId, draft);
-    expect((await call(house.creator, 'post', `patterns/${id}/undo`)).status).toBe(409);
-    const { changes } = (await call(house.creator, 'get', `patterns/${id}/changes`)).body as {
+    expect((await call(home.house.creator, 'post', `patterns/${id}/undo`)).status).toBe(409);
+    const { changes } = (await call(home.house.creator, 'get', `patterns/${id}/changes`)).body as {
       changes: { person: unknown }[];
     };
     expect(new Set(changes.map(({ person }) => person))).toEqual(new Set([null]));
@@ -169,7 +162,7 @@ describe('a second reading of the same recording', () => {
     await take(id, readingId, first);
     const before = await look(id);
     const [one] = before.lines;
-    await call(house.creator, 'patch', `lines/${one!.id}`, { version: 1, body: { text: '6 sc in ring (6)' } });
+    await call(home.house.creator, 'patch', `lines/${one!.id}`, { version: 1, body: { text: '6 sc in ring (6)' } });
 
     const second = draftOf([body(round(1, '7 sc in a magic ring', 7, 11_000), round(2, '(sc, inc) ×3', 12, 22_000))]);
     const again = await read(id, second, recordingId);
@@ -190,7 +183,7 @@ describe('a second reading of the same recording', () => {
     const { readingId, recordingId } = await read(id, first);
     await take(id, readingId, first);
     const { lines } = await look(id);
-    await call(house.creator, 'delete', `lines/${lines[1]!.id}`, { version: 1 });
+    await call(home.house.creator, 'delete', `lines/${lines[1]!.id}`, { version: 1 });
 
     const second = draftOf([body(r1, r2, r3, r4)]);
     const again = await read(id, second, recordingId);
@@ -204,7 +197,10 @@ describe('a second reading of the same recording', () => {
     const { readingId, recordingId } = await read(id, draft);
     await take(id, readingId, draft);
     const [mark] = (await look(id)).marks;
-    const moved = await call(house.creator, 'patch', `marks/${mark!.id}`, { version: 1, body: { startMs: 12_340 } });
+    const moved = await call(home.house.creator, 'patch', `marks/${mark!.id}`, {
+      version: 1,
+      body: { startMs: 12_340 },
+    });
     expect(moved.body.madeBy).toBe('person');
     const again = await read(id, draft, recordingId);
     await take(id, again.readingId, draft);

@@ -1,24 +1,17 @@
 import { randomUUID } from 'node:crypto';
-import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import { describe, expect, test } from 'vitest';
 import type { Pattern } from '#contract/patterns';
-import { buildApp, type TestApp } from '../../support/app.ts';
-import { buildHouse, type Household } from '../../support/builders.ts';
-import { talkTo } from './talk.ts';
+import { buildHouse } from '../../support/builders.ts';
+import { settleIn } from './at-home.ts';
 
-let server: TestApp;
-let house: Household;
-beforeAll(async () => {
-  server = await buildApp();
-  house = await buildHouse(server.db);
-});
-afterAll(() => server.close());
+const home = settleIn();
+const { call } = home;
 
-const call = (...args: Parameters<ReturnType<typeof talkTo>>) => talkTo(server)(...args);
 const round = (n: number, text: string) => ({ kind: 'round', label: `R${n}`, from: n, to: n, text });
 
 const kettleHolder = () => ({
   id: randomUUID(),
-  studioId: house.studio.id,
+  studioId: home.house.studio.id,
   title: 'Kettle holder',
   terms: 'UK',
   sizes: [],
@@ -39,8 +32,8 @@ const kettleHolder = () => ({
   notes: ['Work tightly.'],
   specialStitches: [{ name: 'Shell', abbreviation: 'sh', text: '5 tr in one st' }],
 });
-const send = (body: object, who = house.creator) => call(who, 'post', 'patterns/written', { body });
-const read = async (id: string) => (await call(house.creator, 'get', `patterns/${id}`)).body as Pattern;
+const send = (body: object, who = home.house.creator) => call(who, 'post', 'patterns/written', { body });
+const read = async (id: string) => (await call(home.house.creator, 'get', `patterns/${id}`)).body as Pattern;
 
 describe('a written pattern that comes in', () => {
   test('is a pattern like any other: pieces, lines, steps and all else in the order of the text', async () => {
@@ -67,11 +60,11 @@ describe('a written pattern that comes in', () => {
   test('goes back in one undo and comes again in one redo', async () => {
     const asked = kettleHolder();
     await send(asked);
-    expect((await call(house.creator, 'post', `patterns/${asked.id}/undo`)).status).toBe(200);
+    expect((await call(home.house.creator, 'post', `patterns/${asked.id}/undo`)).status).toBe(200);
     const empty = await read(asked.id);
     expect([empty.pieces, empty.lines, empty.materials, empty.notes, empty.specialStitches].flat()).toEqual([]);
     expect(empty.mayUndo).toBe(false);
-    expect((await call(house.creator, 'post', `patterns/${asked.id}/redo`)).status).toBe(200);
+    expect((await call(home.house.creator, 'post', `patterns/${asked.id}/redo`)).status).toBe(200);
     expect((await read(asked.id)).lines).toHaveLength(3);
   });
 
@@ -86,7 +79,7 @@ describe('a written pattern that comes in', () => {
   });
 
   test('of another studio is refused, and an id that stands elsewhere is a conflict', async () => {
-    const other = await buildHouse(server.db);
+    const other = await buildHouse(home.server.db);
     expect((await send(kettleHolder(), other.creator)).status).toBe(404);
     const asked = kettleHolder();
     await send(asked);
@@ -108,7 +101,7 @@ describe('a written pattern that comes in', () => {
       const answer = await send(body);
       expect(answer.status).toBe(422);
       expect((answer.body as { errors: unknown[] }).errors.length).toBeGreaterThan(0);
-      expect((await call(house.creator, 'get', `patterns/${body.id}`)).status).toBe(404);
+      expect((await call(home.house.creator, 'get', `patterns/${body.id}`)).status).toBe(404);
     }
   });
 });
